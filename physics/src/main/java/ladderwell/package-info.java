@@ -1,0 +1,7 @@
+/**
+ * The words a theorist types: oscillators, states, runs and what is read from them.
+ */
+@NullMarked
+package ladderwell;
+
+import org.jspecify.annotations.NullMarked;
