@@ -51,7 +51,8 @@ public final class Digits {
             throw new IllegalArgumentException("a double has 1 to 17 significant digits, not " + digits);
         }
         BigDecimal rounded = exact.round(new MathContext(digits, mode));
-        return write(rounded.stripTrailingZeros(), "", rounded.compareTo(exact) == 0);
+        boolean zerosAreTrue = rounded.scale() >= 0 || rounded.compareTo(exact) == 0;
+        return write(rounded.stripTrailingZeros(), "", zerosAreTrue);
     }
 
     /**

@@ -184,6 +184,11 @@ final class Symbols {
         if (named != null) {
             return Optional.of(named);
         }
+        for (String symbol : everyUsual()) {
+            if (symbol.equalsIgnoreCase(text)) {
+                return Optional.of(symbol);
+            }
+        }
         String best = "";
         double least = Math.min(2, 0.5 * text.length()) + 1e-9;
         for (String symbol : everyUsual()) {

@@ -39,7 +39,8 @@ public record Unit(String symbol, Kind kind, double coefficient, int exponent) {
         return toSi(1);
     }
 
-    /** A number of this unit in SI. @accuracy correctly rounded for a plain prefix, otherwise two units in the last place */
+    /** A number of this unit in SI. @accuracy correctly rounded for a prefix up to 10^±22 on an SI unit, otherwise two
+     * units in the last place */
     public double toSi(double value) {
         return timesPowerOfTen(value * coefficient, exponent);
     }
