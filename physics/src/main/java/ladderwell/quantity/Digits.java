@@ -109,7 +109,10 @@ public final class Digits {
     /** Two digits of a standard uncertainty in the last places, as in tables of constants: 9.1093837139(28)e-31. */
     static String withStandardUncertainty(double value, double uncertainty) {
         BigDecimal two = new BigDecimal(uncertainty).round(new MathContext(2, RoundingMode.HALF_EVEN));
-        return write(new BigDecimal(value).setScale(two.scale(), RoundingMode.HALF_EVEN), "(" + two.unscaledValue() + ")", false);
+        return write(
+                new BigDecimal(value).setScale(two.scale(), RoundingMode.HALF_EVEN),
+                "(" + two.unscaledValue() + ")",
+                false);
     }
 
     /** A number written by this class for people: minus sign −, and ×10ⁿ for the exponent. */

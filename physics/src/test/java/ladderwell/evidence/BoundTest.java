@@ -15,11 +15,19 @@ class BoundTest {
 
     @Test
     void sumsTakeTheWeakestCertainty() {
-        assertEquals(Certainty.GUARANTEED, Bound.guaranteed(1).plus(Bound.guaranteed(1)).kind());
-        assertEquals(Certainty.ESTIMATED, Bound.guaranteed(1).plus(Bound.estimated(1)).kind());
-        assertEquals(Certainty.STATISTICAL, Bound.statistical(1).plus(Bound.estimated(1)).kind());
+        assertEquals(
+                Certainty.GUARANTEED,
+                Bound.guaranteed(1).plus(Bound.guaranteed(1)).kind());
+        assertEquals(
+                Certainty.ESTIMATED,
+                Bound.guaranteed(1).plus(Bound.estimated(1)).kind());
+        assertEquals(
+                Certainty.STATISTICAL,
+                Bound.statistical(1).plus(Bound.estimated(1)).kind());
         assertEquals(Certainty.ESTIMATED, Bound.exact().plus(Bound.estimated(0)).kind());
-        assertEquals(Certainty.STATISTICAL, Bound.estimated(2).widest(Bound.statistical(1)).kind());
+        assertEquals(
+                Certainty.STATISTICAL,
+                Bound.estimated(2).widest(Bound.statistical(1)).kind());
         assertEquals(2.0, Bound.estimated(2).widest(Bound.statistical(1)).size());
     }
 
@@ -58,15 +66,21 @@ class BoundTest {
         assertFalse(unknown.isKnown());
         assertFalse(unknown.times(0).isKnown());
         assertFalse(unknown.plus(Bound.exact()).isKnown());
-        assertFalse(Bound.guaranteed(Double.MAX_VALUE).plus(Bound.guaranteed(Double.MAX_VALUE)).isKnown());
+        assertFalse(Bound.guaranteed(Double.MAX_VALUE)
+                .plus(Bound.guaranteed(Double.MAX_VALUE))
+                .isKnown());
         assertEquals("unknown guaranteed", unknown.toString());
         assertEquals("0.158(?)", unknown.beside(0.15821138830084));
     }
 
     @Test
     void certaintyIsNeverPromoted() {
-        assertEquals(Certainty.ESTIMATED, Bound.guaranteed(1).atMost(Certainty.ESTIMATED).kind());
-        assertEquals(Certainty.STATISTICAL, Bound.statistical(1).atMost(Certainty.GUARANTEED).kind());
+        assertEquals(
+                Certainty.ESTIMATED,
+                Bound.guaranteed(1).atMost(Certainty.ESTIMATED).kind());
+        assertEquals(
+                Certainty.STATISTICAL,
+                Bound.statistical(1).atMost(Certainty.GUARANTEED).kind());
     }
 
     @ParameterizedTest

@@ -24,12 +24,22 @@ class PhysicsExceptionTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"12, 12 bytes", "1500, 1.5 kB", "95e9, 95 GB", "999.6e6, 1.0 GB", "9.96e6, 10 MB", "1e30, 1e12 EB", "1e300, 1e282 EB"})
+    @CsvSource({
+        "12, 12 bytes",
+        "1500, 1.5 kB",
+        "95e9, 95 GB",
+        "999.6e6, 1.0 GB",
+        "9.96e6, 10 MB",
+        "1e30, 1e12 EB",
+        "1e300, 1e282 EB"
+    })
     void sizesReadLikeSizes(double bytes, String text) {
         Locale before = Locale.getDefault();
         try {
             Locale.setDefault(Locale.GERMANY);
-            assertTrue(new PhysicsException.TooLarge("x", bytes, 1, "y").getMessage().startsWith("x (" + text + ", "));
+            assertTrue(new PhysicsException.TooLarge("x", bytes, 1, "y")
+                    .getMessage()
+                    .startsWith("x (" + text + ", "));
         } finally {
             Locale.setDefault(before);
         }

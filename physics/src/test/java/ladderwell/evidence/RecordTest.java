@@ -29,10 +29,12 @@ class RecordTest {
 
     private static Record.Builder ion() {
         return Record.builder()
-                .asked("oscillator", Map.of(
-                        "kind", "harmonic",
-                        "mass", Quantity.of(40, Units.ATOMIC_MASS),
-                        "frequency", Quantity.of(1.2, Units.MEGAHERTZ)))
+                .asked(
+                        "oscillator",
+                        Map.of(
+                                "kind", "harmonic",
+                                "mass", Quantity.of(40, Units.ATOMIC_MASS),
+                                "frequency", Quantity.of(1.2, Units.MEGAHERTZ)))
                 .asked("state", Map.of("kind", "coherent", "mean", 9.5, "phase", Quantity.of(30, Units.DEGREE)))
                 .asked("frames", 120)
                 .asked("tolerance", Tolerance.STATE)
@@ -55,9 +57,12 @@ class RecordTest {
                         + "\"bounds\":{\"position\":{\"kind\":\"e\",\"size\":\"unknown\"},\"state\":{\"kind\":\"g\",\"size\":7.3e-10}},"
                         + "\"method\":{\"closed form\":true,\"name\":\"exact phases on levels\"},"
                         + "\"sizes\":{\"levels\":41,\"step\":{\"unit\":\"us\",\"value\":0.5}},"
-                        + "\"versions\":{\"constants\":\"CODATA 2022\",\"ladderwell\":\"" + version + "\",\"record\":1}}",
+                        + "\"versions\":{\"constants\":\"CODATA 2022\",\"ladderwell\":\"" + version
+                        + "\",\"record\":1}}",
                 ion().build().json());
-        assertEquals(new JsonCanonicalizer(ion().build().json()).getEncodedString(), ion().build().json());
+        assertEquals(
+                new JsonCanonicalizer(ion().build().json()).getEncodedString(),
+                ion().build().json());
     }
 
     /** SHA-256 of the asked part above, from coreutils' sha256sum: the same on every Java and machine. */
@@ -88,7 +93,8 @@ class RecordTest {
     @Test
     void theOrderOfCallsDoesNotMatter() {
         Record one = Record.builder().asked("a", 1).asked("b", "x").size("n", 3).build();
-        Record other = Record.builder().size("n", 3).asked("b", "x").asked("a", 1.0).build();
+        Record other =
+                Record.builder().size("n", 3).asked("b", "x").asked("a", 1.0).build();
         assertEquals(one, other);
         assertEquals(one.hashCode(), other.hashCode());
         assertArrayEquals(one.bytes(), other.bytes());
@@ -130,15 +136,29 @@ class RecordTest {
     /** RFC 8785, appendix B: IEEE 754 bits and their text. */
     @ParameterizedTest
     @CsvSource({
-        "0000000000000000, 0", "8000000000000000, 0", "0000000000000001, 5e-324", "8000000000000001, -5e-324",
-        "7fefffffffffffff, 1.7976931348623157e+308", "ffefffffffffffff, -1.7976931348623157e+308",
-        "4340000000000000, 9007199254740992", "c340000000000000, -9007199254740992",
-        "4430000000000000, 295147905179352830000", "44b52d02c7e14af5, 9.999999999999997e+22",
-        "44b52d02c7e14af6, 1e+23", "44b52d02c7e14af7, 1.0000000000000001e+23", "444b1ae4d6e2ef4e, 999999999999999700000",
-        "444b1ae4d6e2ef4f, 999999999999999900000", "444b1ae4d6e2ef50, 1e+21", "3eb0c6f7a0b5ed8c, 9.999999999999997e-7",
-        "3eb0c6f7a0b5ed8d, 0.000001", "41b3de4355555553, 333333333.3333332", "41b3de4355555554, 333333333.33333325",
-        "41b3de4355555555, 333333333.3333333", "41b3de4355555556, 333333333.3333334",
-        "41b3de4355555557, 333333333.33333343", "becbf647612f3696, -0.0000033333333333333333",
+        "0000000000000000, 0",
+        "8000000000000000, 0",
+        "0000000000000001, 5e-324",
+        "8000000000000001, -5e-324",
+        "7fefffffffffffff, 1.7976931348623157e+308",
+        "ffefffffffffffff, -1.7976931348623157e+308",
+        "4340000000000000, 9007199254740992",
+        "c340000000000000, -9007199254740992",
+        "4430000000000000, 295147905179352830000",
+        "44b52d02c7e14af5, 9.999999999999997e+22",
+        "44b52d02c7e14af6, 1e+23",
+        "44b52d02c7e14af7, 1.0000000000000001e+23",
+        "444b1ae4d6e2ef4e, 999999999999999700000",
+        "444b1ae4d6e2ef4f, 999999999999999900000",
+        "444b1ae4d6e2ef50, 1e+21",
+        "3eb0c6f7a0b5ed8c, 9.999999999999997e-7",
+        "3eb0c6f7a0b5ed8d, 0.000001",
+        "41b3de4355555553, 333333333.3333332",
+        "41b3de4355555554, 333333333.33333325",
+        "41b3de4355555555, 333333333.3333333",
+        "41b3de4355555556, 333333333.3333334",
+        "41b3de4355555557, 333333333.33333343",
+        "becbf647612f3696, -0.0000033333333333333333",
         "43143ff3c1cb0959, 1424953923781206.2"
     })
     void numbersAreWrittenAsTheStandardSays(String bits, String text) {
@@ -152,7 +172,9 @@ class RecordTest {
     void numbersAreTheShortestThatReadBackOnEveryJava() {
         Random random = new Random(8785);
         for (int i = 0; i < 20_000; i++) {
-            double value = i % 2 == 0 ? Double.longBitsToDouble(random.nextLong()) : random.nextInt(1000) * Math.pow(10, i % 40 - 20);
+            double value = i % 2 == 0
+                    ? Double.longBitsToDouble(random.nextLong())
+                    : random.nextInt(1000) * Math.pow(10, i % 40 - 20);
             if (Double.isFinite(value)) {
                 String written = CanonicalJson.write(value);
                 assertEquals(value, Double.parseDouble(written), 0);
@@ -168,11 +190,14 @@ class RecordTest {
         for (int i = 0; i < 500; i++) {
             Map<String, Object> map = new HashMap<>();
             for (int j = 0; j < 8; j++) {
-                map.put(text(random), List.of(text(random), random.nextGaussian(), random.nextBoolean(), Map.of(text(random), 1)));
+                map.put(
+                        text(random),
+                        List.of(text(random), random.nextGaussian(), random.nextBoolean(), Map.of(text(random), 1)));
             }
             String json = Record.builder().asked("m", map).build().json();
             assertEquals(new JsonCanonicalizer(json).getEncodedString(), json);
-            assertArrayEquals(json.getBytes(StandardCharsets.UTF_8), Record.parse(json).bytes());
+            assertArrayEquals(
+                    json.getBytes(StandardCharsets.UTF_8), Record.parse(json).bytes());
         }
     }
 
@@ -181,7 +206,11 @@ class RecordTest {
         for (int i = random.nextInt(6); i >= 0; i--) {
             int kind = random.nextInt(4);
             text.appendCodePoint(
-                    kind == 0 ? random.nextInt(32) : kind == 1 ? 32 + random.nextInt(96) : kind == 2 ? 0xa0 + random.nextInt(0x3000) : 0x1f300 + random.nextInt(256));
+                    kind == 0
+                            ? random.nextInt(32)
+                            : kind == 1
+                                    ? 32 + random.nextInt(96)
+                                    : kind == 2 ? 0xa0 + random.nextInt(0x3000) : 0x1f300 + random.nextInt(256));
         }
         return text.toString();
     }
@@ -189,7 +218,13 @@ class RecordTest {
     @Test
     void keysSortByTheirUtf16Units() {
         // RFC 8785, 3.2.3: an astral character's surrogates come before U+FB33.
-        String json = Record.builder().asked("\ufb33", 1).asked("\ud83d\ude02", 2).asked("\u20ac", 3).asked("1", 4).build().json();
+        String json = Record.builder()
+                .asked("\ufb33", 1)
+                .asked("\ud83d\ude02", 2)
+                .asked("\u20ac", 3)
+                .asked("1", 4)
+                .build()
+                .json();
         assertTrue(json.startsWith("{\"asked\":{\"1\":4,\"\u20ac\":3,\"\ud83d\ude02\":2,\"\ufb33\":1}"), json);
     }
 
@@ -197,19 +232,27 @@ class RecordTest {
     void refusesWhatNoRecordCanHold() {
         refused("'asked.x' is NaN; a record holds finite numbers only", Double.NaN);
         refused("'asked.x' is Infinity; a record holds finite numbers only", Double.POSITIVE_INFINITY);
-        refused("'asked.x' is 9007199254740993; a record holds whole numbers up to 2^53, give it as a text", (1L << 53) + 1);
-        refused("'asked.x[1].y' is null; a record holds texts, booleans, numbers, quantities, bounds, tolerances, lists"
-                + " and maps", Arrays.asList(1, new HashMap<>() {
-            {
-                put("y", null);
-            }
-        }));
-        refused("'asked.x' is a Locale; a record holds texts, booleans, numbers, quantities, bounds, tolerances, lists and"
-                + " maps", Locale.ROOT);
+        refused(
+                "'asked.x' is 9007199254740993; a record holds whole numbers up to 2^53, give it as a text",
+                (1L << 53) + 1);
+        refused(
+                "'asked.x[1].y' is null; a record holds texts, booleans, numbers, quantities, bounds, tolerances, lists"
+                        + " and maps",
+                Arrays.asList(1, new HashMap<>() {
+                    {
+                        put("y", null);
+                    }
+                }));
+        refused(
+                "'asked.x' is a Locale; a record holds texts, booleans, numbers, quantities, bounds, tolerances, lists and"
+                        + " maps",
+                Locale.ROOT);
         refused("'asked.x' has the key 1; keys are texts", Map.of(1, 2));
         refused("'asked.x' holds half a surrogate pair, which no text has", "a\ud83d");
         refused("'asked.x' holds half a surrogate pair, which no text has", "\ude02b");
-        String twice = assertThrows(IllegalArgumentException.class, () -> Record.builder().asked("x", 1).asked("x", 1))
+        String twice = assertThrows(
+                        IllegalArgumentException.class,
+                        () -> Record.builder().asked("x", 1).asked("x", 1))
                 .getMessage();
         assertEquals("'asked.x' is already in the record", twice);
     }
@@ -217,21 +260,31 @@ class RecordTest {
     private static void refused(String message, Object value) {
         assertEquals(
                 message,
-                assertThrows(IllegalArgumentException.class, () -> Record.builder().asked("x", value)).getMessage());
+                assertThrows(
+                                IllegalArgumentException.class,
+                                () -> Record.builder().asked("x", value))
+                        .getMessage());
     }
 
     @ParameterizedTest
     @ValueSource(
             strings = {
-                "", "{", "[]", "null", "{}", "1", "{\"asked\":{}}", "{\"asked\":1,\"bounds\":{},\"method\":{},\"sizes\":{},\"versions\":{}}",
+                "",
+                "{",
+                "[]",
+                "null",
+                "{}",
+                "1",
+                "{\"asked\":{}}",
+                "{\"asked\":1,\"bounds\":{},\"method\":{},\"sizes\":{},\"versions\":{}}",
                 "{\"asked\":{},\"bounds\":{},\"method\":{},\"sizes\":{},\"versions\":{}}",
                 "{\"asked\":{},\"bounds\":{},\"method\":{},\"sizes\":{},\"versions\":{\"record\":2}}",
                 "{\"asked\":{},\"bounds\":{},\"method\":{},\"sizes\":{},\"versions\":{\"record\":\"1\"}}",
                 "{\"asked\":{},\"bounds\":{},\"method\":{},\"sizes\":{},\"versions\":{\"record\":1},\"more\":{}}"
             })
     void refusesTextsThatAreNoRecord(String json) {
-        String message =
-                assertThrows(IllegalArgumentException.class, () -> Record.parse(json)).getMessage();
+        String message = assertThrows(IllegalArgumentException.class, () -> Record.parse(json))
+                .getMessage();
         assertTrue(message.contains("record") || message.startsWith("JSON at character "), message);
     }
 
@@ -255,7 +308,8 @@ class RecordTest {
     void brokenJsonIsPlacedAndExplained(String json, String message) {
         assertEquals(
                 message,
-                assertThrows(IllegalArgumentException.class, () -> CanonicalJson.read(json)).getMessage());
+                assertThrows(IllegalArgumentException.class, () -> CanonicalJson.read(json))
+                        .getMessage());
     }
 
     @Test
@@ -268,7 +322,9 @@ class RecordTest {
 
     @Test
     void theVersionIsThatOfTheBuild() {
-        assertTrue(Version.current().number().matches("[0-9]+\\.[0-9]+\\.[0-9]+.*"), Version.current().number());
+        assertTrue(
+                Version.current().number().matches("[0-9]+\\.[0-9]+\\.[0-9]+.*"),
+                Version.current().number());
         assertEquals(Version.current().number(), ion().build().versions().get("ladderwell"));
         assertThrows(IllegalArgumentException.class, () -> new Version(" "));
     }

@@ -31,8 +31,12 @@ class ToleranceTest {
 
     @Test
     void printsItsNameMeasureAndUnit() {
-        assertEquals("level tolerance 1e-13 relative", Tolerance.relative("level", 1e-13).toString());
-        assertEquals("edge tolerance 0.5 nm", Tolerance.absolute("edge", 0.5, Units.NANOMETRE).toString());
+        assertEquals(
+                "level tolerance 1e-13 relative",
+                Tolerance.relative("level", 1e-13).toString());
+        assertEquals(
+                "edge tolerance 0.5 nm",
+                Tolerance.absolute("edge", 0.5, Units.NANOMETRE).toString());
     }
 
     @ParameterizedTest

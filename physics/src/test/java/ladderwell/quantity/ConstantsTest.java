@@ -13,6 +13,7 @@ class ConstantsTest {
     void hbarIsExactToSixteenDigits() {
         assertEquals(1.054571817646156e-34, Constants.HBAR, 5e-50);
         assertEquals(Constants.PLANCK / (2 * Math.PI), Constants.HBAR, Math.ulp(Constants.HBAR));
+        assertEquals(Double.parseDouble("1.05457181764615639126242800330228e-34"), Constants.HBAR);
     }
 
     @Test
@@ -52,6 +53,7 @@ class ConstantsTest {
         assertTrue(printed.contains("electron mass m_e = 9.1093837139(28)e-31 kg"), printed.toString());
         assertTrue(printed.contains("Planck constant h = 6.62607015e-34 J s (exact)"), printed.toString());
         assertTrue(printed.contains("speed of light c = 2.99792458e8 m/s (exact)"), printed.toString());
-        assertEquals(5, Constants.all().stream().filter(Constants.Constant::isExact).count());
+        assertEquals(
+                5, Constants.all().stream().filter(Constants.Constant::isExact).count());
     }
 }

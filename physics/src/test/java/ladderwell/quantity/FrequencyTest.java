@@ -10,8 +10,13 @@ class FrequencyTest {
 
     @Test
     void hertzTakeTwoPiAndRatesDoNot() {
-        assertEquals(2 * Math.PI * 1.2e6, Frequency.of(Quantity.of(1.2, Units.MEGAHERTZ)).omega());
-        assertEquals(7.5e6, Frequency.of(Quantity.of(7.5, Units.parse("Mrad/s").orElseThrow())).omega());
+        assertEquals(
+                2 * Math.PI * 1.2e6,
+                Frequency.of(Quantity.of(1.2, Units.MEGAHERTZ)).omega());
+        assertEquals(
+                7.5e6,
+                Frequency.of(Quantity.of(7.5, Units.parse("Mrad/s").orElseThrow()))
+                        .omega());
         assertEquals(3e3, Frequency.of(Quantity.of(3, Units.PER_MILLISECOND)).omega());
     }
 
@@ -39,11 +44,14 @@ class FrequencyTest {
     @Test
     void bothFacesArePrinted() {
         assertEquals("ν = 1.2 MHz, ω = 7.5398 Mrad/s", Frequency.ofNu(1.2e6).both());
-        assertEquals("nu = 1.2 MHz, omega = 7.5398 Mrad/s", Frequency.ofNu(1.2e6).bothPlain());
+        assertEquals(
+                "nu = 1.2 MHz, omega = 7.5398 Mrad/s", Frequency.ofNu(1.2e6).bothPlain());
         assertEquals("ν = 1.1937 MHz, ω = 7.5 Mrad/s", new Frequency(7.5e6).both());
         assertEquals("ν = −210 kHz, ω = −1.3195 Mrad/s", Frequency.ofNu(-210e3).both());
         assertEquals("ν = 0 Hz, ω = 0 rad/s", new Frequency(0).both());
-        assertEquals("ν = 1.2345678 GHz, ω = 7.757 Grad/s", Frequency.ofNu(1.2345678e9).both());
+        assertEquals(
+                "ν = 1.2345678 GHz, ω = 7.757 Grad/s",
+                Frequency.ofNu(1.2345678e9).both());
         assertEquals("ν = 999 kHz, ω = 6.2769 Mrad/s", Frequency.ofNu(999e3).both());
         assertEquals("ν = 3 µHz, ω = 18.85 µrad/s", Frequency.ofNu(3e-6).both());
     }

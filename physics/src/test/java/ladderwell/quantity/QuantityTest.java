@@ -30,7 +30,9 @@ class QuantityTest {
         assertEquals(1.0, Quantity.of(1000, Units.NANOMETRE).in(Units.MICROMETRE));
         assertEquals(833.0, Quantity.of(0.833, Units.MICROSECOND).in(Units.NANOSECOND));
         assertEquals(10.0, Quantity.of(1, Units.NANOMETRE).in(Units.ANGSTROM));
-        assertEquals("0.3 eV", Quantity.of(300, Units.MILLIELECTRONVOLT).to(Units.ELECTRONVOLT).toString());
+        assertEquals(
+                "0.3 eV",
+                Quantity.of(300, Units.MILLIELECTRONVOLT).to(Units.ELECTRONVOLT).toString());
         assertEquals(Kind.ENERGY, Quantity.of(1, Units.JOULE).kind());
         assertEquals(Math.PI / 6, Quantity.of(30, Units.DEGREE).si(), Math.ulp(0.5));
         assertEquals(1 / 1.602176634e-19, Quantity.of(1, Units.JOULE).in(Units.ELECTRONVOLT), 2e3);
@@ -38,8 +40,9 @@ class QuantityTest {
 
     @Test
     void cycleAndAngularFrequencyAreNotMixedSilently() {
-        String message = assertThrows(IllegalArgumentException.class, () -> Quantity.of(1.2, Units.MEGAHERTZ)
-                        .in(Units.RADIAN_PER_SECOND))
+        String message = assertThrows(
+                        IllegalArgumentException.class,
+                        () -> Quantity.of(1.2, Units.MEGAHERTZ).in(Units.RADIAN_PER_SECOND))
                 .getMessage();
         assertEquals(
                 "'1.2 MHz' is a frequency and cannot be given in 'rad/s', the unit of an angular frequency or rate",

@@ -14,7 +14,8 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 class ScaleTest {
 
-    private static final Scale ION = Scale.harmonic(Units.ATOMIC_MASS.toSi(40), Frequency.ofNu(1.2e6).omega());
+    private static final Scale ION =
+            Scale.harmonic(Units.ATOMIC_MASS.toSi(40), Frequency.ofNu(1.2e6).omega());
 
     @Test
     void harmonicScaleHasTheOscillatorsTimeAndQuantum() {
@@ -31,7 +32,8 @@ class ScaleTest {
     void scalesKeepTheirRelationsWhateverTheirSize() {
         Random random = new Random(7);
         for (int i = 0; i < 1000; i++) {
-            Scale scale = Scale.of(Math.pow(10, -32 + 30 * random.nextDouble()), Math.pow(10, -15 + 12 * random.nextDouble()));
+            Scale scale = Scale.of(
+                    Math.pow(10, -32 + 30 * random.nextDouble()), Math.pow(10, -15 + 12 * random.nextDouble()));
             assertEquals(1, scale.momentum() * scale.momentum() / scale.mass() / scale.energy(), 2e-15);
             assertEquals(1, scale.energy() * scale.time() / Constants.HBAR, 2e-15);
             assertEquals(1, scale.angularFrequency() * scale.time(), 2e-15);
@@ -52,13 +54,36 @@ class ScaleTest {
 
     @ParameterizedTest
     @CsvSource({
-        "TIME, 8.3e-7, ns", "LENGTH, 11e-9, nm", "LENGTH, 0.9e-9, pm", "LENGTH, 1.5e-6, µm", "LENGTH, 2, m",
-        "LENGTH, 5e4, km", "TIME, 1e-3, ms", "TIME, 7200, s", "TIME, 2.5e-17, as", "ENERGY, 8e-28, neV",
-        "ENERGY, 4.8e-20, meV", "ENERGY, 1.7e-19, eV", "TEMPERATURE, 5.8e-5, µK", "TEMPERATURE, 3000, K",
-        "CYCLE_FREQUENCY, 1.2e6, MHz", "CYCLE_FREQUENCY, 999, Hz", "CYCLE_FREQUENCY, 1000, kHz",
-        "CYCLE_FREQUENCY, 0.02, mHz", "ANGULAR_FREQUENCY, 7.54e6, Mrad/s", "WAVENUMBER, 299095, /cm",
-        "ANGLE, 1, rad", "SQUEEZING, 6, dB", "PERIODS, 3, periods", "NUMBER, 1e8, ''", "MASS, 6.1e-32, me",
-        "MASS, 6.6e-26, u", "MASS, 1e-12, ng", "MASS, 3, kg", "MOMENTUM, 2e-25, ħ/nm", "MOMENTUM, 9e-27, ħ/µm",
+        "TIME, 8.3e-7, ns",
+        "LENGTH, 11e-9, nm",
+        "LENGTH, 0.9e-9, pm",
+        "LENGTH, 1.5e-6, µm",
+        "LENGTH, 2, m",
+        "LENGTH, 5e4, km",
+        "TIME, 1e-3, ms",
+        "TIME, 7200, s",
+        "TIME, 2.5e-17, as",
+        "ENERGY, 8e-28, neV",
+        "ENERGY, 4.8e-20, meV",
+        "ENERGY, 1.7e-19, eV",
+        "TEMPERATURE, 5.8e-5, µK",
+        "TEMPERATURE, 3000, K",
+        "CYCLE_FREQUENCY, 1.2e6, MHz",
+        "CYCLE_FREQUENCY, 999, Hz",
+        "CYCLE_FREQUENCY, 1000, kHz",
+        "CYCLE_FREQUENCY, 0.02, mHz",
+        "ANGULAR_FREQUENCY, 7.54e6, Mrad/s",
+        "WAVENUMBER, 299095, /cm",
+        "ANGLE, 1, rad",
+        "SQUEEZING, 6, dB",
+        "PERIODS, 3, periods",
+        "NUMBER, 1e8, ''",
+        "MASS, 6.1e-32, me",
+        "MASS, 6.6e-26, u",
+        "MASS, 1e-12, ng",
+        "MASS, 3, kg",
+        "MOMENTUM, 2e-25, ħ/nm",
+        "MOMENTUM, 9e-27, ħ/µm",
         "MOMENTUM, 1e-3, ħ/ym"
     })
     void displayUnitMakesTheMagnitudeReadable(Kind kind, double magnitude, String symbol) {
@@ -75,7 +100,9 @@ class ScaleTest {
             double magnitude = centre * Math.pow(10, -6 + 8 * random.nextDouble());
             double shown = ION.display(kind, magnitude).fromSi(magnitude);
             boolean capped = kind == Kind.TIME || kind == Kind.TEMPERATURE;
-            assertTrue(shown >= 1 && (shown < 1000 || capped && magnitude >= 1000), kind + " " + magnitude + " as " + shown);
+            assertTrue(
+                    shown >= 1 && (shown < 1000 || capped && magnitude >= 1000),
+                    kind + " " + magnitude + " as " + shown);
         }
     }
 

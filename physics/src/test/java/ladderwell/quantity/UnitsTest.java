@@ -52,7 +52,8 @@ class UnitsTest {
     static Stream<Unit> everyUnit() throws IllegalAccessException {
         List<Unit> units = new ArrayList<>(constants().toList());
         usualSymbols().map(symbol -> Units.parse(symbol).orElseThrow()).forEach(units::add);
-        for (String prefix : List.of("y", "z", "a", "f", "p", "n", "µ", "m", "", "k", "M", "G", "T", "P", "E", "Z", "Y")) {
+        for (String prefix :
+                List.of("y", "z", "a", "f", "p", "n", "µ", "m", "", "k", "M", "G", "T", "P", "E", "Z", "Y")) {
             for (String base : List.of("Hz", "eV", "g", "m", "s", "J", "K", "rad/s")) {
                 units.add(Units.parse(prefix + base).orElseThrow(() -> new AssertionError(prefix + base)));
             }
@@ -94,7 +95,9 @@ class UnitsTest {
     void examplesOfKindsCanBeTyped(Kind kind) {
         String[] parts = kind.example().split(" ");
         assertTrue(Double.parseDouble(parts[0]) > 0);
-        assertEquals(kind, Units.parse(parts.length > 1 ? parts[1] : "").orElseThrow().kind());
+        assertEquals(
+                kind,
+                Units.parse(parts.length > 1 ? parts[1] : "").orElseThrow().kind());
         assertTrue(kind.word().startsWith("a ") || kind.word().startsWith("an "));
     }
 
@@ -142,11 +145,34 @@ class UnitsTest {
 
     @ParameterizedTest
     @CsvSource({
-        "u, MASS", "um, LENGTH", "us, TIME", "uHz, CYCLE_FREQUENCY", "m, LENGTH", "mm, LENGTH", "Mm, LENGTH",
-        "ms, TIME", "Ms, TIME", "me, MASS", "meV, ENERGY", "MeV, ENERGY", "as, TIME", "mK, TEMPERATURE",
-        "rad, ANGLE", "rad/s, ANGULAR_FREQUENCY", "/s, ANGULAR_FREQUENCY", "/cm, WAVENUMBER", "/m, WAVENUMBER",
-        "/ms, ANGULAR_FREQUENCY", "Pm, LENGTH", "PHz, CYCLE_FREQUENCY", "g, MASS", "Gs, TIME", "K, TEMPERATURE",
-        "dB, SQUEEZING", "cm, LENGTH", "J, ENERGY"
+        "u, MASS",
+        "um, LENGTH",
+        "us, TIME",
+        "uHz, CYCLE_FREQUENCY",
+        "m, LENGTH",
+        "mm, LENGTH",
+        "Mm, LENGTH",
+        "ms, TIME",
+        "Ms, TIME",
+        "me, MASS",
+        "meV, ENERGY",
+        "MeV, ENERGY",
+        "as, TIME",
+        "mK, TEMPERATURE",
+        "rad, ANGLE",
+        "rad/s, ANGULAR_FREQUENCY",
+        "/s, ANGULAR_FREQUENCY",
+        "/cm, WAVENUMBER",
+        "/m, WAVENUMBER",
+        "/ms, ANGULAR_FREQUENCY",
+        "Pm, LENGTH",
+        "PHz, CYCLE_FREQUENCY",
+        "g, MASS",
+        "Gs, TIME",
+        "K, TEMPERATURE",
+        "dB, SQUEEZING",
+        "cm, LENGTH",
+        "J, ENERGY"
     })
     void prefixesAndUnitsOfOneLetterDoNotMix(String symbol, Kind kind) {
         assertEquals(kind, Units.parse(symbol).orElseThrow().kind());
@@ -161,10 +187,30 @@ class UnitsTest {
 
     @ParameterizedTest
     @CsvSource({
-        "1/s, /s", "s^-1, /s", "s⁻¹, /s", "s-1, /s", "s^−1, /s", "1/ms, /ms", "ms^-1, /ms", "us^-1, /µs",
-        "cm^-1, /cm", "1/cm, /cm", "cm⁻¹, /cm", "cm-1, /cm", "angstrom, Å", "period, periods", "°, deg",
-        "degrees, deg", "radians, rad", "kg m/s, kg·m/s", "kg*m/s, kg·m/s", "hbar/nm, ħ/nm", "ℏ/um, ħ/µm",
-        "hbar/angstrom, ħ/Å", "urad/s, µrad/s", "m_e, me"
+        "1/s, /s",
+        "s^-1, /s",
+        "s⁻¹, /s",
+        "s-1, /s",
+        "s^−1, /s",
+        "1/ms, /ms",
+        "ms^-1, /ms",
+        "us^-1, /µs",
+        "cm^-1, /cm",
+        "1/cm, /cm",
+        "cm⁻¹, /cm",
+        "cm-1, /cm",
+        "angstrom, Å",
+        "period, periods",
+        "°, deg",
+        "degrees, deg",
+        "radians, rad",
+        "kg m/s, kg·m/s",
+        "kg*m/s, kg·m/s",
+        "hbar/nm, ħ/nm",
+        "ℏ/um, ħ/µm",
+        "hbar/angstrom, ħ/Å",
+        "urad/s, µrad/s",
+        "m_e, me"
     })
     void otherSpellingsGiveTheSameUnit(String typed, String symbol) {
         Unit unit = Units.parse(typed).orElseThrow(() -> new AssertionError(typed));
@@ -185,9 +231,49 @@ class UnitsTest {
     @ParameterizedTest
     @ValueSource(
             strings = {
-                "A", "Mhz", "mhz", "hz", "ku", "kme", "kdB", "kdeg", "kperiods", "parsec", "ev", "EV", "k", "M", "/",
-                "1/", "^-1", "//s", "/kg", "/nm", "1/Hz", "Hz/s", "rad/m", "rad/", "/s/s", "s^-2", "mmm", "uu", "kkHz",
-                "qs", "Rs", "dm", "hbar", "hbar/s", "hbar omega", "1 MHz", "NaN", "-1", "grad", "Grad", "µ", "s^-1^-1", "1/s^-1"
+                "A",
+                "Mhz",
+                "mhz",
+                "hz",
+                "ku",
+                "kme",
+                "kdB",
+                "kdeg",
+                "kperiods",
+                "parsec",
+                "ev",
+                "EV",
+                "k",
+                "M",
+                "/",
+                "1/",
+                "^-1",
+                "//s",
+                "/kg",
+                "/nm",
+                "1/Hz",
+                "Hz/s",
+                "rad/m",
+                "rad/",
+                "/s/s",
+                "s^-2",
+                "mmm",
+                "uu",
+                "kkHz",
+                "qs",
+                "Rs",
+                "dm",
+                "hbar",
+                "hbar/s",
+                "hbar omega",
+                "1 MHz",
+                "NaN",
+                "-1",
+                "grad",
+                "Grad",
+                "µ",
+                "s^-1^-1",
+                "1/s^-1"
             })
     void unknownSymbolsAreNoUnit(String typed) {
         assertEquals(Optional.empty(), Units.parse(typed));
@@ -195,10 +281,35 @@ class UnitsTest {
 
     @ParameterizedTest
     @CsvSource({
-        "Mhz, MHz", "MHZ, MHz", "mhz, MHz", "hz, Hz", "GHZ, GHz", "khz, kHz", "ev, eV", "EV, eV", "mev, meV", "A, angstrom",
-        "Angstrom, angstrom", "angstroem, angstrom", "amu, u", "dalton, u", "micron, um", "microns, um", "seconds, s",
-        "hertz, Hz", "db, dB", "DB, dB", "k, K", "degs, deg", "rads/s, rad/s", "Mrads/s, Mrad/s", "perids, periods",
-        "cycles, periods", "kelvin, K", "nanometers, nm", "/Cm, /cm"
+        "Mhz, MHz",
+        "MHZ, MHz",
+        "mhz, MHz",
+        "hz, Hz",
+        "GHZ, GHz",
+        "khz, kHz",
+        "ev, eV",
+        "EV, eV",
+        "mev, meV",
+        "A, angstrom",
+        "Angstrom, angstrom",
+        "angstroem, angstrom",
+        "amu, u",
+        "dalton, u",
+        "micron, um",
+        "microns, um",
+        "seconds, s",
+        "hertz, Hz",
+        "db, dB",
+        "DB, dB",
+        "k, K",
+        "degs, deg",
+        "rads/s, rad/s",
+        "Mrads/s, Mrad/s",
+        "perids, periods",
+        "cycles, periods",
+        "kelvin, K",
+        "nanometers, nm",
+        "/Cm, /cm"
     })
     void nearestIsWhatWasMeant(String typed, String meant) {
         assertEquals(Optional.of(meant), Units.nearest(typed));
@@ -231,8 +342,7 @@ class UnitsTest {
     @Test
     void aUnitWithoutASizeIsRefused() {
         for (double bad : new double[] {0, -1, Double.NaN, Double.POSITIVE_INFINITY}) {
-            String message = assertThrows(
-                            IllegalArgumentException.class, () -> new Unit("x", Kind.LENGTH, bad, 0))
+            String message = assertThrows(IllegalArgumentException.class, () -> new Unit("x", Kind.LENGTH, bad, 0))
                     .getMessage();
             assertTrue(message.contains("'x'") && message.contains(String.valueOf(bad)), message);
         }
@@ -245,7 +355,8 @@ class UnitsTest {
         java.util.Random random = new java.util.Random(20_250_002);
         for (int i = 0; i < 2000; i++) {
             double value = random.nextDouble() * 1000;
-            for (Unit unit : List.of(Units.MEGAHERTZ, Units.NANOMETRE, Units.FEMTOSECOND, Units.GRAM, Units.PER_CENTIMETRE)) {
+            for (Unit unit :
+                    List.of(Units.MEGAHERTZ, Units.NANOMETRE, Units.FEMTOSECOND, Units.GRAM, Units.PER_CENTIMETRE)) {
                 double expected = new BigDecimal(value)
                         .scaleByPowerOfTen(unit.exponent())
                         .round(new MathContext(60))
