@@ -183,6 +183,17 @@ class RecordTest {
         }
     }
 
+    @Test
+    void powersOfTwoAreWrittenShortestToo() {
+        for (int exponent = Double.MIN_EXPONENT - 52; exponent <= Double.MAX_EXPONENT; exponent++) {
+            double power = Math.scalb(1.0, exponent);
+            for (double value : new double[] {Math.nextDown(power), power, Math.nextUp(power)}) {
+                BigDecimal written = new BigDecimal(CanonicalJson.write(value));
+                assertEquals(0, written.compareTo(new BigDecimal(Digits.shortest(value))), written.toString());
+            }
+        }
+    }
+
     /** The JCS reference implementation, as a second route to the same text. */
     @Test
     void textsAreEscapedAndSortedAsTheStandardSays() throws IOException {
