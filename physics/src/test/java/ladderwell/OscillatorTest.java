@@ -49,8 +49,9 @@ class OscillatorTest {
 
     @Test
     void theCardShowsBothFrequenciesAndTheZeroPointLength() {
-        // S-CON-09: 40Ca+ at 1 MHz, mass 39.962590863 u (AME), zero-point length 11.2456552 nm; CODATA 2022 constants
-        Harmonic trap = Oscillator.harmonic().mass(39.962590863, ATOMIC_MASS).frequency(1, MEGAHERTZ);
+        // S-CON-09: 40Ca+ at 1 MHz, atom of 39.962590863 u (AME) less one electron, 11.2456552 nm; CODATA 2022 constants
+        double electron = Constants.ELECTRON_REST_MASS / Constants.ATOMIC_MASS_CONSTANT;
+        Harmonic trap = Oscillator.harmonic().mass(39.962590863 - electron, ATOMIC_MASS).frequency(1, MEGAHERTZ);
         Fact length = fact(trap.facts(), "zero-point length");
         assertEquals("nm", length.value().unit().symbol());
         assertEquals(11.2456552, length.value().value(), 5e-8);
