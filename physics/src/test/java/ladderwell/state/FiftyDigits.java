@@ -5,21 +5,21 @@ import java.math.BigInteger;
 import java.math.MathContext;
 import java.math.RoundingMode;
 
-/** Reference arithmetic for the tests of this package: 60 digits carried, 50 meant. */
-final class FiftyDigits {
-    static final MathContext DIGITS = new MathContext(60);
+/** Reference arithmetic for the tests of levels and states: 60 digits carried, 50 meant. */
+public final class FiftyDigits {
+    public static final MathContext DIGITS = new MathContext(60);
 
     // OEIS A000796 and A002162.
-    static final BigDecimal PI = new BigDecimal("3.14159265358979323846264338327950288419716939937510582097494459230781640628620899");
-    static final BigDecimal LN2 = new BigDecimal("0.69314718055994530941723212145817656807550013436025525412068000949339362196969471");
+    public static final BigDecimal PI = new BigDecimal("3.14159265358979323846264338327950288419716939937510582097494459230781640628620899");
+    public static final BigDecimal LN2 = new BigDecimal("0.69314718055994530941723212145817656807550013436025525412068000949339362196969471");
 
     private FiftyDigits() {}
 
-    static BigDecimal of(double x) {
+    public static BigDecimal of(double x) {
         return new BigDecimal(x);
     }
 
-    static BigDecimal exp(BigDecimal x) {
+    public static BigDecimal exp(BigDecimal x) {
         BigInteger twos = x.divide(LN2, DIGITS).setScale(0, RoundingMode.HALF_EVEN).toBigInteger();
         // Guard digits for the reduction of a large argument.
         BigDecimal r = x.subtract(LN2.multiply(new BigDecimal(twos)), new MathContext(80));
@@ -38,7 +38,7 @@ final class FiftyDigits {
         return power >= 0 ? sum.multiply(scale, DIGITS) : sum.divide(scale, DIGITS);
     }
 
-    static BigDecimal ln(BigDecimal x) {
+    public static BigDecimal ln(BigDecimal x) {
         int exponent = (int) Math.round(Math.log(x.round(MathContext.DECIMAL32).doubleValue()) / Math.log(2));
         BigDecimal scale = new BigDecimal(BigInteger.TWO.pow(Math.abs(exponent)));
         BigDecimal m = exponent >= 0 ? x.divide(scale, DIGITS) : x.multiply(scale, DIGITS);
@@ -52,7 +52,7 @@ final class FiftyDigits {
     }
 
     /** ln n!, by the product below 200 and by Stirling's series (14 terms) above. */
-    static BigDecimal lnFactorial(long n) {
+    public static BigDecimal lnFactorial(long n) {
         if (n < 200) {
             BigInteger product = BigInteger.ONE;
             for (long k = 2; k <= n; k++) {
@@ -82,7 +82,7 @@ final class FiftyDigits {
     }
 
     /** Poisson weight e^{−μ} μ^n / n!. */
-    static BigDecimal poisson(double mean, long n) {
+    public static BigDecimal poisson(double mean, long n) {
         BigDecimal mu = of(mean);
         MathContext wide = new MathContext(75);
         BigDecimal log = ln(mu).multiply(BigDecimal.valueOf(n), wide).subtract(mu, wide).subtract(lnFactorial(n), wide);
@@ -90,7 +90,7 @@ final class FiftyDigits {
     }
 
     /** {cos x, sin x}. */
-    static BigDecimal[] cosSin(BigDecimal x) {
+    public static BigDecimal[] cosSin(BigDecimal x) {
         BigDecimal half = PI.divide(BigDecimal.valueOf(2));
         BigInteger quarter = x.divide(half, new MathContext(80)).setScale(0, RoundingMode.HALF_EVEN).toBigInteger();
         BigDecimal r = x.subtract(half.multiply(new BigDecimal(quarter)));
@@ -112,5 +112,19 @@ final class FiftyDigits {
             case 2 -> new BigDecimal[] {c.negate(), s.negate()};
             default -> new BigDecimal[] {s, c.negate()};
         };
+    }
+
+    /** asin y for 0 ≤ y ≤ 1, by Newton's iteration on sine (and cosine near 1). */
+    public static BigDecimal asin(BigDecimal y) {
+        if (y.compareTo(new BigDecimal("0.75")) > 0) {
+            BigDecimal rest = BigDecimal.ONE.subtract(y).multiply(BigDecimal.ONE.add(y));
+            return PI.divide(BigDecimal.valueOf(2)).subtract(asin(rest.sqrt(DIGITS)), DIGITS);
+        }
+        BigDecimal x = BigDecimal.valueOf(Math.asin(y.doubleValue()));
+        for (int i = 0; i < 3; i++) {
+            BigDecimal[] turn = cosSin(x);
+            x = x.subtract(turn[1].subtract(y).divide(turn[0], DIGITS), DIGITS);
+        }
+        return x;
     }
 }
