@@ -62,7 +62,7 @@ function paint(traces, ink) {
       return;
     }
     if (t.line) t.line.color = c;
-    if (t.marker) { t.marker.color = c; if (t.marker.line) t.marker.line.color = c; }
+    if (t.marker) { t.marker.symbol = 'circle-open'; t.marker.color = c; if (t.marker.line) t.marker.line.color = c; }
     if (t.fill) t.fillcolor = ink.fill;
   });
 }
