@@ -1,6 +1,5 @@
 package ladderwell.kernel.sentence;
 
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import ladderwell.kernel.sentence.Outline.Clause;
@@ -104,15 +103,17 @@ final class ItemList {
         List<Piece> words = Pieces.of(name, 0, name.length()).stream()
                 .map(word -> new Piece(word.sort(), word.text(), piece.place()))
                 .toList();
-        if (words.isEmpty()) {
+        Optional<Item> item = named(name);
+        if (item.isPresent()) {
+            return List.of(item.get().words());
+        }
+        if (words.isEmpty() || !words.stream().allMatch(word -> word.is(Sort.WORD))) {
             throw new MisreadSentence(
-                    "{" + Words.shown(piece.text()) + "} gives no text; expected the name of an observable, such as "
-                            + noun.items().get(0).words(),
+                    Words.quoted("{" + piece.text().strip() + "}") + " gives no text; expected the name of an observable,"
+                            + " such as " + noun.items().get(0).words(),
                     piece.place());
         }
-        return named(name).map(item -> List.of(item.words())).orElse(null) instanceof List<String> found
-                ? found
-                : one(words);
+        return one(words);
     }
 
     private Optional<Item> named(String name) {
