@@ -142,17 +142,14 @@ public final class Declarations implements Sentences {
         Optional<Magic.Promise> promise = magic.promise(sentence);
         if (promise.isPresent()) {
             try {
-                declare(names, sentence.noun().word(), promise.get(), outcome.kept());
+                Magic.Promise kept = promise.get();
+                declare(names, sentence.noun().word(), kept.name(), kept.type(), outcome.kept());
             } catch (IllegalArgumentException e) {
                 throw new MisreadSentence(
                         String.valueOf(e.getMessage()), promise.get().place(), e);
             }
         }
         context.emit(outcome.shown());
-    }
-
-    private static void declare(Names names, String noun, Magic.Promise promise, Object value) {
-        declare(names, noun, promise.name(), promise.type(), value);
     }
 
     private static <T> void declare(Names names, String noun, String name, Class<T> type, Object value) {

@@ -118,7 +118,7 @@ public record Grammar(List<Noun> nouns) {
                     "gaussian",
                     "Gaussian packet",
                     "a packet thrown into a box or a well; what the bound levels cannot carry is refused",
-                    "ψ ∝ exp(−(x − x₀)²/4Δx² + ip₀x/ħ),  ΔxΔp = ħ/2")
+                    "ψ ∝ exp(−(x − x₀)²/4Δx² + ip₀(x − x₀)/ħ),  ΔxΔp = ħ/2")
             .homes("box", "finite well")
             .keys(
                     Key.quantity("position", "mean position x₀, measured from the middle", LENGTH)
