@@ -8,7 +8,8 @@
  * without it plain loops give the same numbers within rounding. The number of threads never changes a bit of a result.
  *
  * <p>Reading order: {@link ladderwell.numeric.ExactPhases}, {@link ladderwell.numeric.LadderSums},
- * {@link ladderwell.numeric.MatrixProduct}, {@link ladderwell.numeric.DensityFrames}, {@link ladderwell.numeric.Workers}.
+ * {@link ladderwell.numeric.MatrixProduct}, {@link ladderwell.numeric.DensityFrames}, {@link ladderwell.numeric.Workers},
+ * {@link ladderwell.numeric.HermiteFunctions} (wave functions of any index), {@link ladderwell.numeric.DoubleDouble}.
  */
 @NullMarked
 package ladderwell.numeric;
