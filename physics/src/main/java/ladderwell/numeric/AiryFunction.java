@@ -44,6 +44,35 @@ final class AiryFunction {
         return Math.fma(odd, h, even);
     }
 
+    /** Phase of Ai(-z) less 2/3 z^(3/2) - pi/4, for t = 1/(2/3 z^(3/2)). */
+    static double phaseCorrection(double t) {
+        double tt = t * t;
+        double sum = 0.0;
+        for (int k = 15; k >= 1; k -= 2) {
+            sum = LOGARITHM[k] - tt * sum;
+        }
+        return -t * sum;
+    }
+
+    /** Logarithm of the modulus of Ai(-z), over its leading term 1/(sqrt(pi) z^(1/4)). */
+    static double logModulus(double t) {
+        double tt = t * t;
+        double sum = 0.0;
+        for (int k = 14; k >= 2; k -= 2) {
+            sum = LOGARITHM[k] - tt * sum;
+        }
+        return -tt * sum;
+    }
+
+    /** Logarithm of Ai(z) over its leading term exp(-1/t)/(2 sqrt(pi) z^(1/4)). */
+    static double logDecay(double t) {
+        double sum = 0.0;
+        for (int k = 15; k >= 1; k--) {
+            sum = -t * (sum + LOGARITHM[k]);
+        }
+        return sum;
+    }
+
     private static double[][] series() {
         int half = (int) (RANGE * PER_UNIT);
         double[][] series = new double[2 * half + 1][];

@@ -17,7 +17,7 @@ class DoubleDoubleTest {
     @Test
     void arithmeticIsRightToThirtyOneDigits() {
         Random random = new Random(1);
-        for (int i = 0; i < 3_000; i++) {
+        for (int i = 0; i < 1_000; i++) {
             DoubleDouble a = any(random);
             DoubleDouble b = any(random);
             BigDecimal x = exact(a);
@@ -42,7 +42,7 @@ class DoubleDoubleTest {
     @Test
     void sumsAndProductsOfTwoDoublesAreExact() {
         Random random = new Random(2);
-        for (int i = 0; i < 3_000; i++) {
+        for (int i = 0; i < 1_000; i++) {
             double a = any(random).hi();
             double b = any(random).hi();
             assertEquals(
