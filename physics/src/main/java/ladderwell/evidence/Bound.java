@@ -67,7 +67,11 @@ public record Bound(Certainty kind, double size) {
         return new Bound(kind.weaker(other.kind), sum);
     }
 
-    /** Adds an error of the same certainty, such as an allowance for rounding. @param more at least 0 */
+    /**
+     * Adds an error of the same certainty, such as an allowance for rounding.
+     *
+     * @param more at least 0
+     */
     public Bound plus(double more) {
         return plus(new Bound(kind, more));
     }

@@ -14,7 +14,7 @@ import org.jspecify.annotations.Nullable;
  * Trees of texts, Doubles, Booleans, lists and maps, and their canonical text.
  *
  * <p>Writing follows RFC 8785: keys in the order of their UTF-16 units, no white space, shortest escapes, numbers as
- * ECMAScript writes them. Double.toString would not do: up to Java 18 it sometimes writes a digit too many.
+ * ECMAScript writes them. Double.toString would not do: before Java 19 it sometimes writes a digit too many.
  */
 final class CanonicalJson {
 
@@ -23,7 +23,7 @@ final class CanonicalJson {
 
     private CanonicalJson() {}
 
-    /** An unmodifiable tree of a value, checked. @param path where the value stands, for messages */
+    /** An unmodifiable tree of a value, checked; the path says in messages where the value stands. */
     static Object freeze(String path, @Nullable Object value) {
         if (value instanceof String text) {
             return text(path, text);
@@ -42,7 +42,8 @@ final class CanonicalJson {
         if (value instanceof Double || value instanceof Float) {
             double number = ((Number) value).doubleValue();
             if (!Double.isFinite(number)) {
-                throw new IllegalArgumentException("'" + path + "' is " + number + "; a record holds finite numbers only");
+                throw new IllegalArgumentException(
+                        "'" + path + "' is " + number + "; a record holds finite numbers only");
             }
             return number;
         }
@@ -50,8 +51,7 @@ final class CanonicalJson {
             return Map.of("value", quantity.value(), "unit", quantity.unit().plain());
         }
         if (value instanceof Bound bound) {
-            return Map.of(
-                    "kind", bound.kind().letter(), "size", bound.isKnown() ? (Object) bound.size() : "unknown");
+            return Map.of("kind", bound.kind().letter(), "size", bound.isKnown() ? (Object) bound.size() : "unknown");
         }
         if (value instanceof Tolerance tolerance) {
             return Map.of(
@@ -155,7 +155,9 @@ final class CanonicalJson {
                 case '\r' -> out.append("\\r");
                 default -> {
                     if (c < ' ') {
-                        out.append("\\u00").append(Character.forDigit(c >> 4, 16)).append(Character.forDigit(c & 15, 16));
+                        out.append("\\u00")
+                                .append(Character.forDigit(c >> 4, 16))
+                                .append(Character.forDigit(c & 15, 16));
                     } else {
                         out.append(c);
                     }

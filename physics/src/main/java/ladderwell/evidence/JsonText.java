@@ -173,7 +173,8 @@ final class JsonText {
     }
 
     private IllegalArgumentException wrong(String expected) {
-        String found = at < json.length() ? "'" + json.substring(at, Math.min(json.length(), at + 12)) + "'" : "the end";
+        String found =
+                at < json.length() ? "'" + json.substring(at, Math.min(json.length(), at + 12)) + "'" : "the end";
         return new IllegalArgumentException("JSON at character " + at + ": found " + found + ", expected " + expected);
     }
 }

@@ -166,7 +166,9 @@ public abstract sealed class PhysicsException extends RuntimeException {
             size /= 1000;
             unit++;
         }
-        return (size < 1e6 ? String.format(Locale.ROOT, size < 9.95 && unit > 0 ? "%.1f" : "%.0f", size) : Digits.significant(size, 2))
+        return (size < 1e6
+                        ? String.format(Locale.ROOT, size < 9.95 && unit > 0 ? "%.1f" : "%.0f", size)
+                        : Digits.significant(size, 2))
                 + " " + units[unit];
     }
 }

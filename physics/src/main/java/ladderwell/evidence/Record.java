@@ -21,6 +21,7 @@ import ladderwell.quantity.Quantity;
  * {@link Tolerance}, and lists and string-keyed maps of these. A quantity reads {"unit":"MHz","value":1.2}, a bound
  * {"kind":"g","size":1e-9} (size "unknown" if infinite), a tolerance {"kind":"absolute","name":"state","unit":"","value":1e-9}.
  */
+@SuppressWarnings("JavaLangClash") // the trade's word; java.lang.Record is never named in this code base
 public final class Record {
 
     private static final long FORMAT = 1;
@@ -53,19 +54,21 @@ public final class Record {
         Map<String, Object> sections = new TreeMap<>();
         for (String name : SECTIONS) {
             if (!(root.get(name) instanceof Map<?, ?> section)) {
-                throw new IllegalArgumentException("a record has the sections " + SECTIONS + "; '" + name + "' is missing");
+                throw new IllegalArgumentException(
+                        "a record has the sections " + SECTIONS + "; '" + name + "' is missing");
             }
             sections.put(name, section);
         }
         for (Object name : root.keySet()) {
             if (!sections.containsKey(String.valueOf(name))) {
-                throw new IllegalArgumentException("a record has the sections " + SECTIONS + ", and not '" + name + "'");
+                throw new IllegalArgumentException(
+                        "a record has the sections " + SECTIONS + ", and not '" + name + "'");
             }
         }
         Object format = root.get("versions") instanceof Map<?, ?> versions ? versions.get("record") : null;
         if (!(format instanceof Double number) || number != FORMAT) {
-            throw new IllegalArgumentException(
-                    "this record is of format " + format + "; version " + Version.current() + " reads format " + FORMAT);
+            throw new IllegalArgumentException("this record is of format " + format + "; version " + Version.current()
+                    + " reads format " + FORMAT);
         }
         return new Record(Map.copyOf(sections));
     }
@@ -182,12 +185,20 @@ public final class Record {
             put("versions", "record", FORMAT);
         }
 
-        /** One item of what was asked. @throws IllegalArgumentException for a value no record can hold */
+        /**
+         * One item of what was asked.
+         *
+         * @throws IllegalArgumentException for a value no record can hold, or a key that is there already
+         */
         public Builder asked(String key, Object value) {
             return put("asked", key, value);
         }
 
-        /** One item about the method. @throws IllegalArgumentException for a value no record can hold */
+        /**
+         * One item about the method.
+         *
+         * @throws IllegalArgumentException for a value no record can hold, or a key that is there already
+         */
         public Builder method(String key, Object value) {
             return put("method", key, value);
         }

@@ -16,8 +16,8 @@ public final class Constants {
     /** Planck constant h, J s (exact). */
     public static final double PLANCK = 6.62607015e-34;
 
-    /** Reduced Planck constant ħ = h/2π, J s (exact, nearest double). */
-    public static final double HBAR = 1.0545718176461563912624280033022807e-34;
+    /** Reduced Planck constant ħ = h/2π = 1.05457181764615639126…e-34 J s (exact, nearest double). */
+    public static final double HBAR = 1.0545718176461564e-34;
 
     /** Elementary charge e, C (exact); also one electronvolt in J. */
     public static final double ELEMENTARY_CHARGE = 1.602176634e-19;
@@ -61,9 +61,8 @@ public final class Constants {
         /** For instance "electron mass m_e = 9.1093837139(28)e-31 kg". */
         @Override
         public String toString() {
-            String number = isExact()
-                    ? Digits.shortest(value)
-                    : Digits.withStandardUncertainty(value, standardUncertainty);
+            String number =
+                    isExact() ? Digits.shortest(value) : Digits.withStandardUncertainty(value, standardUncertainty);
             return name + " " + symbol + " = " + number + " " + unit + (isExact() ? " (exact)" : "");
         }
     }
@@ -74,8 +73,7 @@ public final class Constants {
             new Constant("elementary charge", "e", ELEMENTARY_CHARGE, 0, "C"),
             new Constant("Boltzmann constant", "k", BOLTZMANN, 0, "J/K"),
             new Constant("speed of light", "c", LIGHT_SPEED, 0, "m/s"),
-            new Constant(
-                    "atomic mass constant", "m_u", ATOMIC_MASS_CONSTANT, ATOMIC_MASS_CONSTANT_UNCERTAINTY, "kg"),
+            new Constant("atomic mass constant", "m_u", ATOMIC_MASS_CONSTANT, ATOMIC_MASS_CONSTANT_UNCERTAINTY, "kg"),
             new Constant("electron mass", "m_e", ELECTRON_REST_MASS, ELECTRON_REST_MASS_UNCERTAINTY, "kg"));
 
     private Constants() {}

@@ -4,6 +4,7 @@ import java.math.BigDecimal;
 import java.math.BigInteger;
 import java.math.MathContext;
 import java.math.RoundingMode;
+import java.util.List;
 
 /**
  * Numbers as text: the same text in every locale and on every Java, in ASCII; {@link #pretty} turns it into −1.2×10⁻⁹.
@@ -26,10 +27,16 @@ public final class Digits {
             return "0";
         }
         BigDecimal exact = new BigDecimal(value);
-        for (int digits = 1; digits < 17; digits++) {
-            BigDecimal rounded = exact.round(new MathContext(digits, RoundingMode.HALF_EVEN));
-            if (rounded.doubleValue() == value) {
-                return write(rounded.stripTrailingZeros(), "", true);
+        // A normal double that some decimal of up to 15 digits stands for is that decimal when rounded to 15 digits.
+        int first = Math.abs(value) >= Double.MIN_NORMAL ? 15 : 1;
+        for (int digits = first; digits < 17; digits++) {
+            // Above a power of two doubles lie twice as far apart as below it, so there the decimal above may serve
+            // where the nearest one, below, does not.
+            for (RoundingMode mode : List.of(RoundingMode.HALF_EVEN, RoundingMode.UP)) {
+                BigDecimal rounded = exact.round(new MathContext(digits, mode));
+                if (rounded.doubleValue() == value) {
+                    return write(rounded.stripTrailingZeros(), "", true);
+                }
             }
         }
         return write(exact.round(new MathContext(17, RoundingMode.HALF_EVEN)).stripTrailingZeros(), "", true);
@@ -51,7 +58,8 @@ public final class Digits {
             throw new IllegalArgumentException("a double has 1 to 17 significant digits, not " + digits);
         }
         BigDecimal rounded = exact.round(new MathContext(digits, mode));
-        return write(rounded.stripTrailingZeros(), "", rounded.compareTo(exact) == 0);
+        boolean zerosAreTrue = rounded.scale() >= 0 || rounded.compareTo(exact) == 0;
+        return write(rounded.stripTrailingZeros(), "", zerosAreTrue);
     }
 
     /**
@@ -108,7 +116,10 @@ public final class Digits {
     /** Two digits of a standard uncertainty in the last places, as in tables of constants: 9.1093837139(28)e-31. */
     static String withStandardUncertainty(double value, double uncertainty) {
         BigDecimal two = new BigDecimal(uncertainty).round(new MathContext(2, RoundingMode.HALF_EVEN));
-        return write(new BigDecimal(value).setScale(two.scale(), RoundingMode.HALF_EVEN), "(" + two.unscaledValue() + ")", false);
+        return write(
+                new BigDecimal(value).setScale(two.scale(), RoundingMode.HALF_EVEN),
+                "(" + two.unscaledValue() + ")",
+                false);
     }
 
     /** A number written by this class for people: minus sign −, and ×10ⁿ for the exponent. */

@@ -15,7 +15,11 @@ public record Frequency(double omega) {
         }
     }
 
-    /** ω = 2πν. @param nu cycle frequency ν, Hz */
+    /**
+     * ω = 2πν.
+     *
+     * @param nu cycle frequency ν, Hz
+     */
     public static Frequency ofNu(double nu) {
         return new Frequency(2 * Math.PI * nu);
     }
@@ -33,10 +37,11 @@ public record Frequency(double omega) {
             case ANGULAR_FREQUENCY -> new Frequency(si);
             case WAVENUMBER -> ofNu(Constants.LIGHT_SPEED * si);
             case ENERGY -> new Frequency(si / Constants.HBAR);
-            default -> throw new IllegalArgumentException("'" + quantity + "' is "
-                    + quantity.kind().word()
-                    + " and fixes no frequency; expected a frequency (1.2 MHz), an angular frequency or rate"
-                    + " (7.5 Mrad/s), a wavenumber (2991 /cm) or an energy (0.3 eV)");
+            default ->
+                throw new IllegalArgumentException("'" + quantity + "' is "
+                        + quantity.kind().word()
+                        + " and fixes no frequency; expected a frequency (1.2 MHz), an angular frequency or rate"
+                        + " (7.5 Mrad/s), a wavenumber (2991 /cm) or an energy (0.3 eV)");
         };
     }
 
@@ -72,8 +77,8 @@ public record Frequency(double omega) {
     public String bothPlain() {
         Unit cycles = Prefixes.readable(Units.HERTZ, nu());
         Unit radians = Prefixes.readable(Units.RADIAN_PER_SECOND, omega);
-        return "nu = " + ended(cycles.fromSi(nu())) + " " + cycles.plain() + ", omega = "
-                + ended(radians.fromSi(omega)) + " " + radians.plain();
+        return "nu = " + ended(cycles.fromSi(nu())) + " " + cycles.plain() + ", omega = " + ended(radians.fromSi(omega))
+                + " " + radians.plain();
     }
 
     /** A number that ends within nine digits is shown to its end (it was typed), any other to five digits. */

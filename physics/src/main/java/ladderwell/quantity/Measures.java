@@ -25,13 +25,12 @@ final class Measures {
             case MASS -> tech.units.indriya.unit.Units.KILOGRAM;
             case LENGTH -> tech.units.indriya.unit.Units.METRE;
             case TIME -> tech.units.indriya.unit.Units.SECOND;
-            case MOMENTUM -> tech.units.indriya.unit.Units.KILOGRAM.multiply(
-                    tech.units.indriya.unit.Units.METRE_PER_SECOND);
+            case MOMENTUM ->
+                tech.units.indriya.unit.Units.KILOGRAM.multiply(tech.units.indriya.unit.Units.METRE_PER_SECOND);
             case ENERGY -> tech.units.indriya.unit.Units.JOULE;
             case TEMPERATURE -> tech.units.indriya.unit.Units.KELVIN;
             case CYCLE_FREQUENCY -> tech.units.indriya.unit.Units.HERTZ;
-            case ANGULAR_FREQUENCY -> tech.units.indriya.unit.Units.RADIAN.divide(
-                    tech.units.indriya.unit.Units.SECOND);
+            case ANGULAR_FREQUENCY -> tech.units.indriya.unit.Units.RADIAN.divide(tech.units.indriya.unit.Units.SECOND);
             case WAVENUMBER -> tech.units.indriya.unit.Units.METRE.inverse();
             case ANGLE -> tech.units.indriya.unit.Units.RADIAN;
             case SQUEEZING, PERIODS, NUMBER -> AbstractUnit.ONE;

@@ -52,7 +52,8 @@ final class Prefixes {
     static Unit prefixed(int exponent, Unit base) {
         return exponent == 0
                 ? base
-                : new Unit(symbol(exponent) + base.symbol(), base.kind(), base.coefficient(), base.exponent() + exponent);
+                : new Unit(
+                        symbol(exponent) + base.symbol(), base.kind(), base.coefficient(), base.exponent() + exponent);
     }
 
     /** ħ over a prefixed metre. */

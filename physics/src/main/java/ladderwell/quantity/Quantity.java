@@ -14,17 +14,21 @@ public record Quantity(double value, Unit unit) {
     public Quantity {
         requireNonNull(unit, "unit");
         if (!Double.isFinite(value)) {
-            throw new IllegalArgumentException(
-                    unit.kind().word() + " must be a finite number, not " + value + "; for example "
-                            + unit.kind().example());
+            throw new IllegalArgumentException(unit.kind().word() + " must be a finite number, not " + value
+                    + "; for example " + unit.kind().example());
         }
         if (!Double.isFinite(unit.toSi(value))) {
             throw new IllegalArgumentException(unit.kind().word() + " of " + Digits.shortest(value) + " " + unit.plain()
-                    + " is too large to compute with; for example " + unit.kind().example());
+                    + " is too large to compute with; for example "
+                    + unit.kind().example());
         }
     }
 
-    /** {@code value} of {@code unit}. @throws IllegalArgumentException if the value is not finite */
+    /**
+     * {@code value} of {@code unit}.
+     *
+     * @throws IllegalArgumentException if the value is not finite, or is not in SI
+     */
     public static Quantity of(double value, Unit unit) {
         return new Quantity(value, unit);
     }
@@ -52,8 +56,9 @@ public record Quantity(double value, Unit unit) {
      */
     public double in(Unit other) {
         if (other.kind() != unit.kind()) {
-            throw new IllegalArgumentException("'" + this + "' is " + unit.kind().word() + " and cannot be given in '"
-                    + other.symbol() + "', the unit of " + other.kind().word());
+            throw new IllegalArgumentException(
+                    "'" + this + "' is " + unit.kind().word() + " and cannot be given in '" + other.symbol()
+                            + "', the unit of " + other.kind().word());
         }
         return other.coefficient() == unit.coefficient()
                 ? Unit.timesPowerOfTen(value, unit.exponent() - other.exponent())

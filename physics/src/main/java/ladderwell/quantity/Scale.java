@@ -33,7 +33,12 @@ public record Scale(double mass, double length, double hbar) {
         }
     }
 
-    /** Lab scale. @param mass kg @param length m */
+    /**
+     * Lab scale.
+     *
+     * @param mass kg
+     * @param length m
+     */
     public static Scale of(double mass, double length) {
         return new Scale(mass, length, Constants.HBAR);
     }

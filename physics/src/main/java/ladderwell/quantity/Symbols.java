@@ -46,7 +46,8 @@ final class Symbols {
             Map.entry(Kind.ENERGY, List.of("eV", "meV", "ueV", "neV", "keV", "J")),
             Map.entry(Kind.TEMPERATURE, List.of("K", "mK", "uK", "nK")),
             Map.entry(Kind.CYCLE_FREQUENCY, List.of("MHz", "kHz", "GHz", "Hz", "THz", "mHz")),
-            Map.entry(Kind.ANGULAR_FREQUENCY, List.of("rad/s", "/s", "Mrad/s", "krad/s", "Grad/s", "/ms", "/us", "/ns")),
+            Map.entry(
+                    Kind.ANGULAR_FREQUENCY, List.of("rad/s", "/s", "Mrad/s", "krad/s", "Grad/s", "/ms", "/us", "/ns")),
             Map.entry(Kind.WAVENUMBER, List.of("/cm", "/m")),
             Map.entry(Kind.ANGLE, List.of("deg", "rad", "mrad")),
             Map.entry(Kind.SQUEEZING, List.of("dB")),
@@ -183,6 +184,11 @@ final class Symbols {
         String named = NAMES.getOrDefault(lower, NAMES.get(singular));
         if (named != null) {
             return Optional.of(named);
+        }
+        for (String symbol : everyUsual()) {
+            if (symbol.equalsIgnoreCase(text)) {
+                return Optional.of(symbol);
+            }
         }
         String best = "";
         double least = Math.min(2, 0.5 * text.length()) + 1e-9;

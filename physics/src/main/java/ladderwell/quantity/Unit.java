@@ -25,8 +25,8 @@ public record Unit(String symbol, Kind kind, double coefficient, int exponent) {
         requireNonNull(symbol, "symbol");
         requireNonNull(kind, "kind");
         if (!(coefficient > 0) || Double.isInfinite(coefficient)) {
-            throw new IllegalArgumentException(
-                    "the coefficient of unit '" + symbol + "' is " + coefficient + "; expected a finite positive number");
+            throw new IllegalArgumentException("the coefficient of unit '" + symbol + "' is " + coefficient
+                    + "; expected a finite positive number");
         }
         if (Math.abs(exponent) > 60) {
             throw new IllegalArgumentException(
@@ -39,12 +39,20 @@ public record Unit(String symbol, Kind kind, double coefficient, int exponent) {
         return toSi(1);
     }
 
-    /** A number of this unit in SI. @accuracy correctly rounded for a plain prefix, otherwise two units in the last place */
+    /**
+     * A number of this unit in SI.
+     *
+     * @accuracy correctly rounded for a prefix up to 10^±22 on an SI unit, otherwise two units in the last place
+     */
     public double toSi(double value) {
         return timesPowerOfTen(value * coefficient, exponent);
     }
 
-    /** An SI value as a number of this unit. @accuracy as {@link #toSi} */
+    /**
+     * An SI value as a number of this unit.
+     *
+     * @accuracy as {@link #toSi}
+     */
     public double fromSi(double si) {
         return timesPowerOfTen(si, -exponent) / coefficient;
     }
