@@ -66,7 +66,7 @@ public record Box(Optional<Quantity> mass, Optional<Quantity> width) implements 
 
     @Override
     public Scale scale() {
-        return mass.map(m -> new Scale(m.si(), width.orElseThrow().si())).orElseGet(Scale::natural);
+        return mass.map(m -> Scale.of(m.si(), width.orElseThrow().si())).orElseGet(Scale::natural);
     }
 
     @Override

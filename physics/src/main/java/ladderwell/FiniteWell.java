@@ -66,7 +66,7 @@ public record FiniteWell(Optional<Quantity> mass, Optional<Quantity> width, Quan
     }
 
     private static Scale scale(Optional<Quantity> mass, Optional<Quantity> width) {
-        return mass.map(m -> new Scale(m.si(), width.orElseThrow().si())).orElseGet(Scale::natural);
+        return mass.map(m -> Scale.of(m.si(), width.orElseThrow().si())).orElseGet(Scale::natural);
     }
 
     @Override
@@ -163,7 +163,7 @@ public record FiniteWell(Optional<Quantity> mass, Optional<Quantity> width, Quan
         double si = levels.energyHigh(n) * scale.energy();
         double error = levels.energyError(n) * scale.energy() + 4 * Math.ulp(si);
         Unit unit = scale.display(Kind.ENERGY, si);
-        double inUnit = Quantity.ofSi(si, unit).value();
+        double inUnit = unit.fromSi(si);
         double factor = si == 0 ? 1 : inUnit / si;
         Bound bound = uncertainty == 0
                 ? Bound.guaranteed(error * factor)

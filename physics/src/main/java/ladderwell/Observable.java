@@ -64,8 +64,7 @@ public record Observable(String name, String symbol, Kind kind, String meaning, 
                 MANDEL_Q,
                 RETURN_PROBABILITY,
                 RETURN_AMPLITUDE_REAL,
-                RETURN_AMPLITUDE_IMAGINARY,
-                NORM)) {
+                RETURN_AMPLITUDE_IMAGINARY)) {
             NAMED.put(o.name.toLowerCase(Locale.ROOT), o);
         }
     }

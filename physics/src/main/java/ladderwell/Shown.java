@@ -10,7 +10,7 @@ record Shown(Scale scale) {
 
     Fact fact(String name, String symbol, Kind kind, double si, double relativeUncertainty) {
         Unit unit = scale.display(kind, Math.abs(si));
-        return Fact.closedForm(name, symbol, Quantity.ofSi(si, unit).value(), unit, relativeUncertainty);
+        return Fact.closedForm(name, symbol, unit.fromSi(si), unit, relativeUncertainty);
     }
 
     /** A scaled energy of the oscillator, with its mass's uncertainty where the scale depends on the mass. */
