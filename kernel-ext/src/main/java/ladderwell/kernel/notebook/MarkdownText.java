@@ -19,6 +19,7 @@ import org.commonmark.node.SoftLineBreak;
 import org.commonmark.node.Text;
 import org.commonmark.parser.Parser;
 import org.commonmark.renderer.NodeRenderer;
+import org.commonmark.renderer.html.DefaultUrlSanitizer;
 import org.commonmark.renderer.html.HtmlNodeRendererContext;
 import org.commonmark.renderer.html.HtmlRenderer;
 import org.commonmark.renderer.html.HtmlWriter;
@@ -44,6 +45,7 @@ final class MarkdownText {
         renderer = HtmlRenderer.builder()
                 .extensions(List.<Extension>of(TablesExtension.create()))
                 .sanitizeUrls(true)
+                .urlSanitizer(new DefaultUrlSanitizer(List.of("http", "https", "mailto")))
                 .escapeHtml(true)
                 .attributeProviderFactory(context -> (node, tag, attributes) -> {
                     if (tag.equals("a")) {

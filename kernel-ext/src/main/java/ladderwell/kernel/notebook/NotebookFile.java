@@ -5,7 +5,6 @@ import com.google.gson.JsonParseException;
 import com.google.gson.JsonParser;
 import com.google.gson.Strictness;
 import com.google.gson.stream.JsonReader;
-import com.google.gson.stream.JsonToken;
 import java.io.IOException;
 import java.io.StringReader;
 import java.nio.ByteBuffer;
@@ -61,9 +60,8 @@ final class NotebookFile {
             if (!(JsonParser.parseReader(reader) instanceof JsonObject object)) {
                 throw new NotebookException(name + " holds JSON but no notebook; expected an object with cells");
             }
-            if (reader.peek() != JsonToken.END_DOCUMENT) {
-                throw new NotebookException(name + " goes on after the end of its JSON");
-            }
+            // Strict reading fails here on anything that follows.
+            reader.peek();
             return object;
         } catch (JsonParseException | IOException e) {
             Matcher place = PLACE.matcher(String.valueOf(e.getMessage()));

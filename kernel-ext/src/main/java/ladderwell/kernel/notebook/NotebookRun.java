@@ -42,8 +42,9 @@ public final class NotebookRun {
             }
             progress.starts(cell, count, cells.size());
             long start = System.nanoTime();
-            CellEnd end = runner.run(cell.source(), count, store.of(cell));
-            store.end(cell, count, end);
+            OutputStore.OfCell output = store.of(cell);
+            CellEnd end = runner.run(cell.source(), count, output);
+            output.end(count, end);
             progress.ended(cell, count, cells.size(), end, Duration.ofNanos(System.nanoTime() - start));
             if (end instanceof CellEnd.Interrupted) {
                 return new RunEnd.Stopped(count);

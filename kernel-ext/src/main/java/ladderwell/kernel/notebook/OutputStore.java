@@ -31,24 +31,9 @@ final class OutputStore {
         this.notebook = notebook;
     }
 
-    CellOutput of(Cell cell) {
-        return new Of(cell);
-    }
-
-    /** Stores the end of a cell. */
-    void end(Cell cell, int count, CellEnd end) {
-        Of output = new Of(cell);
-        if (end instanceof CellEnd.Done done) {
-            done.result().ifPresent(bundle -> {
-                JsonObject result = output(bundle, "execute_result");
-                result.addProperty("execution_count", count);
-                output.add(result);
-            });
-        } else if (end instanceof CellEnd.Failed failed) {
-            output.add(error(failed.name(), failed.message(), failed.traceback()));
-        } else if (end instanceof CellEnd.Interrupted interrupted) {
-            output.add(error("Interrupted", "the cell was interrupted", interrupted.traceback()));
-        }
+    /** Where one cell says what it has to say. */
+    OfCell of(Cell cell) {
+        return new OfCell(cell);
     }
 
     private static JsonObject error(String name, String message, List<String> traceback) {
@@ -85,11 +70,11 @@ final class OutputStore {
     }
 
     /** The output of one cell. */
-    private final class Of implements CellOutput {
+    final class OfCell implements CellOutput {
         private final Cell cell;
         private boolean clearWaits;
 
-        Of(Cell cell) {
+        private OfCell(Cell cell) {
             this.cell = cell;
         }
 
@@ -154,7 +139,22 @@ final class OutputStore {
             }
         }
 
-        void add(JsonObject output) {
+        /** Stores how the cell ended. */
+        void end(int count, CellEnd end) {
+            if (end instanceof CellEnd.Done done) {
+                done.result().ifPresent(bundle -> {
+                    JsonObject result = output(bundle, "execute_result");
+                    result.addProperty("execution_count", count);
+                    add(result);
+                });
+            } else if (end instanceof CellEnd.Failed failed) {
+                add(error(failed.name(), failed.message(), failed.traceback()));
+            } else if (end instanceof CellEnd.Interrupted interrupted) {
+                add(error("Interrupted", "the cell was interrupted", interrupted.traceback()));
+            }
+        }
+
+        private void add(JsonObject output) {
             synchronized (notebook) {
                 clearIfWaiting();
                 cell.outputs().add(output);
