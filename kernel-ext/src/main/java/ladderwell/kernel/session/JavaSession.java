@@ -77,7 +77,6 @@ public final class JavaSession implements AutoCloseable {
      * @param firstLine the line of the cell at which the text begins
      */
     public synchronized JavaEnd run(String text, int cell, int firstLine) {
-        control.ready();
         SourceCodeAnalysis analysis = shell.sourceCodeAnalysis();
         List<Piece> pieces = Pieces.of(text, analysis);
         for (Piece piece : pieces) {
@@ -179,9 +178,17 @@ public final class JavaSession implements AutoCloseable {
         return shell.unresolvedDependencies(snippet).collect(Collectors.joining(", "));
     }
 
-    /** Stops the running text within a fraction of a second; without effect when none runs. */
+    /**
+     * Stops the running text within a fraction of a second, or the next one if none runs: a stop that comes just before
+     * a text starts must not be lost. It stands until {@link #ready}.
+     */
     public void stop() {
         control.stop();
+    }
+
+    /** Forgets an earlier {@link #stop}. */
+    public void ready() {
+        control.ready();
     }
 
     /** The variable of that name. */

@@ -155,6 +155,7 @@ public class JavaSessionTest {
         // Before Java 20 a loop that catches everything may catch every stop; then it is left behind.
         boolean mayStay = text.contains("Throwable") && Runtime.version().feature() < 20;
         assertTrue(end.equals(new JavaEnd.Stopped(false)) || mayStay && end.equals(new JavaEnd.Stopped(true)), end.toString());
+        session.ready();
         assertEquals(2, value("1+1"));
     }
 
@@ -164,6 +165,7 @@ public class JavaSessionTest {
         Thread.sleep(700);
         session.stop();
         assertInstanceOf(JavaEnd.Stopped.class, running.get(20, TimeUnit.SECONDS));
+        session.ready();
         assertEquals(2, value("1+1"));
         end = true;
     }

@@ -1,0 +1,56 @@
+package ladderwell.kernel.cell;
+
+import java.util.Optional;
+import java.util.concurrent.atomic.AtomicReference;
+
+/**
+ * What a Java cell may call to show values before its end. Every notebook imports these methods by name. They speak to
+ * the running cell, from whatever thread they are called.
+ */
+public final class Show {
+    private static final AtomicReference<Optional<CellRun>> RUNNING = new AtomicReference<>(Optional.empty());
+
+    private Show() {}
+
+    static void during(CellRun run) {
+        RUNNING.set(Optional.of(run));
+    }
+
+    static void ended() {
+        RUNNING.set(Optional.empty());
+    }
+
+    private static CellRun cell() {
+        return RUNNING.get().orElseThrow(() -> new IllegalStateException("nothing can be shown: no cell is running"));
+    }
+
+    /** Shows a value below the cell. */
+    public static void display(Object value) {
+        CellRun cell = cell();
+        MimeBundle bundle = cell.render(value);
+        cell.say(output -> output.display(bundle, Optional.empty()));
+    }
+
+    /** Shows a value below the cell under a name, to be replaced later by {@link #updateDisplay}. */
+    public static void display(Object value, String displayId) {
+        CellRun cell = cell();
+        MimeBundle bundle = cell.render(value);
+        cell.say(output -> output.display(bundle, Optional.of(displayId)));
+    }
+
+    /** Replaces what was shown under a name, in this cell or an earlier one. */
+    public static void updateDisplay(Object value, String displayId) {
+        CellRun cell = cell();
+        MimeBundle bundle = cell.render(value);
+        cell.say(output -> output.update(bundle, displayId));
+    }
+
+    /**
+     * Removes what the cell has shown so far.
+     *
+     * @param wait whether to wait with it until the next output comes
+     */
+    public static void clearOutput(boolean wait) {
+        cell().say(output -> output.clear(wait));
+    }
+}
