@@ -2,6 +2,7 @@ package ladderwell.level;
 
 import java.util.Locale;
 import ladderwell.numeric.DoubleDouble;
+import org.jspecify.annotations.Nullable;
 
 /** Levels of the finite well, solved one at a time when asked for. */
 final class WellLevels implements Levels {
@@ -13,15 +14,17 @@ final class WellLevels implements Levels {
     private final double depth;
     private final WellEquation equation;
 
-    /** The level asked for last: callers read energy, error and decay of one level in turn. */
-    private volatile Solved last;
+    /** Solved levels kept, a power of two; level n has place n modulo this and is solved again when another took it. */
+    private static final int REMEMBERED = 1024;
+
+    /** Solved levels; racing writers only repeat work, since the records are immutable. */
+    private final @Nullable Solved[] recent = new Solved[REMEMBERED];
 
     private record Solved(long n, WellLevel level) {}
 
     WellLevels(double depth) {
         this.depth = depth;
         equation = new WellEquation(depth);
-        last = new Solved(0, equation.solve(0));
     }
 
     @Override
@@ -34,12 +37,13 @@ final class WellLevels implements Levels {
             throw new IllegalArgumentException(
                     "the finite well has no level " + n + ": its bound levels are 0 to " + (count() - 1));
         }
-        Solved known = last;
-        if (known.n == n) {
+        int place = (int) (n & (REMEMBERED - 1));
+        Solved known = recent[place];
+        if (known != null && known.n == n) {
             return known.level;
         }
         WellLevel solved = equation.solve(n);
-        last = new Solved(n, solved);
+        recent[place] = new Solved(n, solved);
         return solved;
     }
 
