@@ -14,6 +14,11 @@ final class BoxLevels implements Levels {
     private static final double WAVE_ERROR = 8 * 0x1p-53;
 
     @Override
+    public Kind kind() {
+        return Kind.BOX;
+    }
+
+    @Override
     public long count() {
         return Long.MAX_VALUE;
     }
@@ -78,7 +83,7 @@ final class BoxLevels implements Levels {
             StandingWave wave = new StandingWave(first + row, (first + row + 1) / 2.0, 0);
             double[] values = table[row];
             for (int i = 0; i < x.length; i++) {
-                values[i] = Math.abs(x[i]) < 0.5 ? amplitude * wave.at(x[i]) : 0;
+                values[i] = Math.abs(x[i]) < 0.5 ? amplitude * wave.sine(x[i]) : 0;
             }
         }
         return table;

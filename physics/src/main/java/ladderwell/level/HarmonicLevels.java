@@ -15,6 +15,11 @@ final class HarmonicLevels implements Levels {
     private static final double CRAMER = 0.8161;
 
     @Override
+    public Kind kind() {
+        return Kind.HARMONIC;
+    }
+
+    @Override
     public long count() {
         return Long.MAX_VALUE;
     }

@@ -26,6 +26,19 @@ public sealed interface Levels permits HarmonicLevels, BoxLevels, WellLevels {
         return new WellLevels(depth);
     }
 
+    /** The potential the levels belong to. */
+    enum Kind {
+        /** x² / 2. */
+        HARMONIC,
+        /** 0 between hard walls. */
+        BOX,
+        /** 0 between steps of finite height. */
+        FINITE_WELL
+    }
+
+    /** The potential the levels belong to. */
+    Kind kind();
+
     /** How many bound levels there are; {@code Long.MAX_VALUE} where there is no last one. */
     long count();
 
@@ -61,7 +74,10 @@ public sealed interface Levels permits HarmonicLevels, BoxLevels, WellLevels {
      */
     double[][] waveFunctions(long first, int count, double[] x);
 
-    /** Largest absolute error of any value in a table of wave functions up to level {@code last}. */
+    /**
+     * Largest absolute error of any value in a table of wave functions up to level {@code last}: guaranteed for box and well, estimated
+     * for the harmonic oscillator.
+     */
     double waveFunctionError(long last);
 
     /** A distance beyond which |φ_n| stays below {@code drop} on both sides. */

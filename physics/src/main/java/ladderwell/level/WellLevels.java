@@ -1,15 +1,12 @@
 package ladderwell.level;
 
 import java.util.Locale;
-import ladderwell.numeric.DoubleDouble;
 import org.jspecify.annotations.Nullable;
 
 /** Levels of the finite well, solved one at a time when asked for. */
 final class WellLevels implements Levels {
     /** An eighth of a turn reduced (1.9 ulp), the sine (1), the amplitude (4) and the product, times √2. */
     private static final double WAVE_ERROR = 14 * 0x1p-53;
-
-    private static final DoubleDouble TURN = DoubleDouble.QUARTER_TURN.times(4);
 
     private final double depth;
     private final WellEquation equation;
@@ -25,6 +22,11 @@ final class WellLevels implements Levels {
     WellLevels(double depth) {
         this.depth = depth;
         equation = new WellEquation(depth);
+    }
+
+    @Override
+    public Kind kind() {
+        return Kind.FINITE_WELL;
     }
 
     @Override
@@ -91,14 +93,13 @@ final class WellLevels implements Levels {
             WellLevel level = level(first + row);
             double amplitude = level.amplitude();
             double edge = amplitude * level.wallSine();
-            DoubleDouble turns = level.waveNumber().dividedBy(TURN);
-            StandingWave wave = new StandingWave(first + row, turns.hi(), turns.lo());
+            StandingWave wave = new StandingWave(first + row, level.waveNumber());
             double leftEdge = wave.even() ? edge : -edge;
             double[] values = table[row];
             for (int i = 0; i < x.length; i++) {
                 double out = Math.abs(x[i]) - 0.5;
                 if (out <= 0) {
-                    values[i] = amplitude * wave.at(x[i]);
+                    values[i] = amplitude * wave.sine(x[i]);
                 } else {
                     values[i] = (x[i] > 0 ? edge : leftEdge) * Math.exp(-level.decay() * out);
                 }

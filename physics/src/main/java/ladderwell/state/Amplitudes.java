@@ -140,7 +140,14 @@ public final class Amplitudes {
      */
     public static Amplitudes packet(
             Levels levels, double position, double momentum, double width, double tolerance) {
-        throw new UnsupportedOperationException();
+        checkTolerance(tolerance);
+        PacketState state = new PacketState(levels, new GaussianPacket(position, momentum, width), tolerance);
+        return switch (levels.kind()) {
+            case HARMONIC -> throw new IllegalArgumentException(
+                    "a packet is expanded in the levels of a box or a finite well, not in harmonic levels");
+            case BOX -> state.inBox();
+            case FINITE_WELL -> state.inWell();
+        };
     }
 
     static void checkTolerance(double tolerance) {
