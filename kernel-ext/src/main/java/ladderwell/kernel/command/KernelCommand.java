@@ -2,7 +2,6 @@ package ladderwell.kernel.command;
 
 import java.nio.file.Path;
 import java.util.concurrent.Callable;
-import ladderwell.kernel.host.KernelMain;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Parameters;
 
@@ -14,7 +13,7 @@ final class KernelCommand implements Callable<Integer> {
     private Path connectionFile;
 
     @Override
-    public Integer call() {
-        return KernelMain.serve(connectionFile);
+    public Integer call() throws CommandException {
+        throw new CommandException(Ladderwell.serve(connectionFile));
     }
 }

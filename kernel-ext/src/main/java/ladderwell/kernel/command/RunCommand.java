@@ -9,12 +9,14 @@ import java.util.Objects;
 import java.util.Optional;
 import java.util.concurrent.Callable;
 import ladderwell.kernel.cell.Workbench;
+import ladderwell.kernel.magic.Declarations;
 import ladderwell.kernel.notebook.CellRunner;
 import ladderwell.kernel.notebook.Notebook;
 import ladderwell.kernel.notebook.NotebookException;
 import ladderwell.kernel.notebook.NotebookRun;
 import ladderwell.kernel.notebook.Report;
 import ladderwell.kernel.notebook.RunEnd;
+import ladderwell.kernel.render.Renderings;
 import org.jspecify.annotations.Nullable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Option;
@@ -57,7 +59,7 @@ final class RunCommand implements Callable<Integer> {
         if (executed.toAbsolutePath().normalize().equals(page.toAbsolutePath().normalize())) {
             throw new CommandException("the notebook and the page would be the same file " + page);
         }
-        try (Workbench bench = Benches.open()) {
+        try (Workbench bench = new Workbench(new Declarations(), new Renderings())) {
             NotebookRun run = new NotebookRun(read, CellRunner.on(bench), new ProgressLines(say));
             Writing writing = () -> {
                 read.write(executed);

@@ -5,7 +5,7 @@ import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
 
 /**
- * Starts a kernel in this process, works with it over its sockets as a client would, and shuts it down; {@code install}
+ * Starts a kernel in this process, works with it over its sockets as a client would; {@code install}
  * runs this to learn which classes a start needs.
  */
 @Command(name = "train", hidden = true, description = "Start a kernel once and let it work; install does this.")

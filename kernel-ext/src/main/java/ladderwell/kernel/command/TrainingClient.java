@@ -16,7 +16,6 @@ import java.util.List;
 import java.util.UUID;
 import javax.crypto.Mac;
 import javax.crypto.spec.SecretKeySpec;
-import ladderwell.kernel.host.KernelMain;
 import org.zeromq.SocketType;
 import org.zeromq.ZContext;
 import org.zeromq.ZMQ;
@@ -29,7 +28,6 @@ final class TrainingClient implements AutoCloseable {
             List.of("shell_port", "iopub_port", "stdin_port", "control_port", "hb_port");
 
     private final ZContext context = new ZContext();
-    private final Thread kernel;
     private final Path connectionFile;
     private final ZMQ.Socket shell;
     private final ZMQ.Socket published;
@@ -41,7 +39,7 @@ final class TrainingClient implements AutoCloseable {
         connection.addProperty("key", key);
         connectionFile = Files.createTempFile("ladderwell-train", ".json");
         Files.writeString(connectionFile, connection.toString());
-        kernel = new Thread(() -> KernelMain.serve(connectionFile), "kernel");
+        Thread kernel = new Thread(() -> Ladderwell.serve(connectionFile), "kernel");
         kernel.setDaemon(true);
         kernel.start();
         shell = socket(SocketType.DEALER, connection, "shell_port");
@@ -148,13 +146,9 @@ final class TrainingClient implements AutoCloseable {
         }
     }
 
-    /** Shuts the kernel down and waits until it has gone. */
+    /** Leaves; the kernel goes with the process. */
     @Override
-    public void close() throws IOException, InterruptedException {
-        JsonObject content = new JsonObject();
-        content.addProperty("restart", false);
-        request("shutdown_request", content);
-        kernel.join(TIMEOUT_MILLIS);
+    public void close() throws IOException {
         context.close();
         Files.deleteIfExists(connectionFile);
     }
