@@ -26,7 +26,8 @@ final class DensityReading {
         if (points < 2) {
             throw new IllegalArgumentException("a density needs at least 2 points, not " + points);
         }
-        double levels = run.amplitudes().levels();
+        boolean closed = run.state() instanceof Coherent coherent && coherent.mean() > CLOSED_FORM_ABOVE;
+        double levels = closed ? 0 : run.amplitudes().levels();
         Memory.require(
                 "a density of " + run.times() + " times and " + points + " points",
                 Double.BYTES * (run.times() * (points + 2 * levels) + levels * points),
@@ -36,10 +37,7 @@ final class DensityReading {
         for (int i = 0; i < points; i++) {
             x[i] = half * (2 * i - (points - 1)) / (points - 1);
         }
-        if (run.state() instanceof Coherent coherent && coherent.mean() > CLOSED_FORM_ABOVE) {
-            return closedForm(run, coherent, x);
-        }
-        return sumOverLevels(run, x);
+        return closed ? closedForm(run, (Coherent) run.state(), x) : sumOverLevels(run, x);
     }
 
     private static double halfWidth(Run run) {
@@ -90,7 +88,7 @@ final class DensityReading {
         double sumError;
         if (amplitudes.segments() == 1) {
             double[][] functions = levels.waveFunctions(amplitudes.first(0), amplitudes.length(0), x);
-            DensityFrames frames = DensityFrames.alternating(functions, amplitudes.first(0) % 2 == 0);
+            DensityFrames frames = DensityFrames.alternating(functions);
             values = frames.of(state.phases(0), workers());
             sumError = frames.errorBound(coefficientError, functionError, 1 + coefficientError);
         } else {

@@ -34,19 +34,26 @@ public final class Means {
     /** Means for equally spaced levels n + ½, from a, a² and a†a. */
     public static Means onLadder(PhasedState state, Workers workers) {
         Amplitudes amplitudes = state.amplitudes();
-        int segments = amplitudes.segments();
-        LadderSums[] sums = new LadderSums[segments];
-        double sumError = 0;
-        for (int s = 0; s < segments; s++) {
+        LadderSums[] sums = new LadderSums[amplitudes.segments()];
+        for (int s = 0; s < sums.length; s++) {
             sums[s] = LadderSums.of(state.phases(s), Math.toIntExact(amplitudes.first(s)), workers);
-            sumError += sums[s].amplitudeError();
         }
-        // ‖aδψ‖ and ‖a†δψ‖: at most √(last+1)·δ on the kept levels, √(Σ (n+1)P_n) on the discarded ones.
-        double delta = state.error();
+        // The sums are those of the normalised kept state, which is at most 2δ away from ψ. ‖aδψ‖ and ‖a†δψ‖ are at most
+        // √(last+2)·2δ on the kept levels and √(Σ (n+1)P_n) on the discarded ones.
+        double delta = 2 * state.error();
         double top = Math.sqrt(state.lastLevel() + 2.0);
         double tail = Math.sqrt(amplitudes.tailMoment(1));
         double push = top * delta + tail;
-        double amplitudeError = sumError + push * (1 + top + tail);
+        double rounding = 0;
+        for (int j = 0; j < state.times(); j++) {
+            double error = 0;
+            for (LadderSums sum : sums) {
+                error += sum.amplitudeError(j);
+            }
+            rounding = Math.max(rounding, error);
+        }
+        // ⟨ψ|a|ψ⟩ − ⟨ψ̃|a|ψ̃⟩ = ⟨δψ|aψ⟩ + ⟨ψ̃|aδψ⟩
+        double amplitudeError = rounding * (1 + 1e-9) + push + delta * (top + tail);
         Means means = new Means(
                 state.times(), Math.sqrt(2) * amplitudeError, Math.sqrt(2) * amplitudeError, Certainty.GUARANTEED);
         for (int j = 0; j < state.times(); j++) {
@@ -56,47 +63,41 @@ public final class Means {
     }
 
     private void ladderRow(int j, LadderSums[] sums, double push, double delta, double amplitudeError) {
+        double norm = 0;
+        for (LadderSums sum : sums) {
+            norm += sum.norm(j);
+        }
         double re = 0;
         double im = 0;
-        double norm = 0;
+        for (LadderSums sum : sums) {
+            re += sum.norm(j) / norm * sum.amplitudeRe(j);
+            im += sum.norm(j) / norm * sum.amplitudeIm(j);
+        }
+        // ⟨b†b⟩ and ⟨b²⟩, b = a − ⟨a⟩: segments never couple, so each adds its own fluctuation and its offset, squared.
         double fluctuation = 0;
         double squeezing = 0;
         double rounding = 0;
-        double offCentre = 0;
         for (LadderSums sum : sums) {
-            double ar = sum.amplitudeRe(j);
-            double ai = sum.amplitudeIm(j);
-            re += ar;
-            im += ai;
-            norm += sum.norm(j);
-            fluctuation += sum.fluctuation(j);
-            squeezing += sum.squeezingRe(j);
-            rounding += sum.fluctuationError(j);
-            if (sums.length > 1) {
-                // each segment was summed about its own A_s: undo it, ⟨a†a⟩_s = F_s + (2 − N_s)|A_s|², and likewise for a²
-                fluctuation += (2 - sum.norm(j)) * (ar * ar + ai * ai);
-                squeezing += (2 - sum.norm(j)) * (ar * ar - ai * ai);
-                offCentre += ar * ar + ai * ai;
-            }
-        }
-        if (sums.length > 1) {
-            fluctuation -= (2 - norm) * (re * re + im * im);
-            squeezing -= (2 - norm) * (re * re - im * im);
-            offCentre += re * re + im * im;
+            double weight = sum.norm(j) / norm;
+            double offRe = sum.amplitudeRe(j) - re;
+            double offIm = sum.amplitudeIm(j) - im;
+            fluctuation += weight * (sum.fluctuation(j) + offRe * offRe + offIm * offIm);
+            squeezing += weight * (sum.squeezingRe(j) + offRe * offRe - offIm * offIm);
+            rounding += sum.fluctuationError(j) + 2 * Math.hypot(offRe, offIm) * sum.amplitudeError(j);
         }
         position[j] = Math.sqrt(2) * re;
         momentum[j] = Math.sqrt(2) * im;
         positionVariance[j] = 0.5 + fluctuation + squeezing;
         momentumVariance[j] = 0.5 + fluctuation - squeezing;
-        // With b = a − ⟨a⟩~: ‖bδψ‖, ‖b†δψ‖ ≤ drift, ‖bψ̃‖² = ⟨b†b⟩, ‖b†ψ̃‖² ≤ ⟨b†b⟩ + 1; then the mean's own error, squared.
+        // ‖bδψ‖, ‖b†δψ‖ ≤ drift, ‖bψ̃‖² = ⟨b†b⟩, ‖b†ψ̃‖² = ⟨b†b⟩ + 1; then the mean's own error, squared.
         double drift = push + Math.hypot(re, im) * delta;
-        double lowered = Math.sqrt(Math.max(fluctuation, 0));
-        double raised = Math.sqrt(Math.max(fluctuation, 0) + 1);
+        double lowered = Math.sqrt(fluctuation);
+        double raised = Math.sqrt(fluctuation + 1);
         double error = drift * (2 * lowered + drift)
                 + drift * (lowered + raised + drift)
                 + 2 * amplitudeError * amplitudeError
                 + 2 * rounding
-                + 0x1p-50 * (1 + Math.abs(fluctuation) + 16 * offCentre);
+                + 0x1p-48 * (1 + fluctuation);
         positionVarianceError[j] = error;
         momentumVarianceError[j] = error;
     }
