@@ -5,8 +5,6 @@ import java.util.List;
 import ladderwell.level.Levels;
 import ladderwell.level.StandingWave;
 import ladderwell.numeric.DoubleDouble;
-import org.apache.commons.math3.analysis.integration.gauss.GaussIntegrator;
-import org.apache.commons.math3.analysis.integration.gauss.GaussIntegratorFactory;
 
 /**
  * Overlaps ∫ g φ_n of a packet with well levels by Gauss–Legendre panels, the walls between panels and the exponential tails included.
@@ -59,10 +57,10 @@ final class LeakingOverlaps {
                     + " leaks through the walls of a well with " + levels.count()
                     + " levels: its overlaps are too many to integrate; move it off the walls or loosen the tolerance");
         }
-        GaussIntegrator rule = new GaussIntegratorFactory().legendreHighPrecision(NODES);
+        double[][] rule = LegendreRule.of(NODES);
         for (int j = 0; j < NODES; j++) {
-            offset[j] = half * rule.getPoint(j);
-            weight[j] = half * rule.getWeight(j);
+            offset[j] = half * rule[0][j];
+            weight[j] = half * rule[1][j];
         }
         long from = (long) Math.floor((packet.position() - reach) / (2 * half));
         long to = (long) Math.ceil((packet.position() + reach) / (2 * half));
