@@ -113,7 +113,7 @@ final class Traceback {
             if (!problem.isError()) {
                 continue;
             }
-            String message = problem.getMessage(Locale.ROOT).strip().replaceAll("\\s*\\R\\s*", "; ");
+            String message = oneLine(problem.getMessage(Locale.ROOT));
             int at = (int) Math.min(text.length(), offset + Math.max(0, problem.getPosition()));
             int start = (int) Math.min(text.length(), offset + Math.max(0, problem.getStartPosition()));
             int end = (int) Math.min(text.length(), offset + Math.max(0, problem.getEndPosition()));
@@ -132,6 +132,14 @@ final class Traceback {
             lines.add(headline(place(cell, firstLine), first));
         }
         return new JavaEnd.Failed("CompilationError", first, lines);
+    }
+
+    /** The compiler speaks in several lines, one of which names a class that the user never wrote. */
+    private static String oneLine(String message) {
+        return message.strip()
+                .replaceAll("\\s*\\R\\s*location: class\\s*$", "")
+                .replaceAll("\\s*\\R\\s*symbol:\\s*", ": ")
+                .replaceAll("\\s*\\R\\s*", "; ");
     }
 
     private static String blanksLike(String text) {

@@ -212,6 +212,12 @@ public class JavaSessionTest {
     }
 
     @Test
+    void exitDoesNotEndTheProcess() {
+        assertTrue(failure("long big = 1L << 40; double half = 0.5; System.exit(7);").message().startsWith("System.exit(7) "));
+        assertTrue(failure("java.util.stream.IntStream.of(8).forEach(System::exit)").message().startsWith("System.exit(8) "));
+    }
+
+    @Test
     void completionKnowsTheSessionAndTheLinesAbove() {
         value("int nbarOfTrap = 3; 1");
         assertEquals(List.of("nbarOfTrap"), texts(session.suggestions("nbarOfT", 7)));
