@@ -71,12 +71,16 @@ final class Drawing {
     static ScatterTrace.ScatterBuilder line(String name, double width) {
         return named(ScatterTrace.builder(LATER, LATER), name)
                 .mode(ScatterTrace.Mode.LINE)
-                .line(Line.builder().width(width).build());
+                .line(Line.builder().width(width).simplify(false).build());
     }
 
     static ScatterTrace.ScatterBuilder dashes(String name, double width) {
         return line(name, width)
-                .line(Line.builder().width(width).dash(Line.Dash.DASH).build());
+                .line(Line.builder()
+                        .width(width)
+                        .dash(Line.Dash.DASH)
+                        .simplify(false)
+                        .build());
     }
 
     static ScatterTrace.ScatterBuilder ring(String name) {
@@ -131,9 +135,33 @@ final class Drawing {
     }
 
     static JsonObject figure(Layout layout, JsonArray traces) {
+        JsonObject axes = JavascriptLiteral.object(layout.asJavascript());
+        for (String name : axes.keySet()) {
+            if (name.matches("[xy]axis\\d*")) {
+                complete(axes.getAsJsonObject(name));
+            }
+        }
         JsonObject figure = new JsonObject();
-        figure.add("layout", JavascriptLiteral.object(layout.asJavascript()));
+        figure.add("layout", axes);
         figure.add("traces", traces);
         return figure;
+    }
+
+    /** What the builder leaves out or writes as text: it drops settings that equal its own defaults, not the library's. */
+    private static void complete(JsonObject axis) {
+        boolean right = axis.has("overlaying");
+        boolean labels = axis.get("showticklabels").getAsBoolean();
+        axis.addProperty("tickmode", axis.has("tickvals") ? "array" : "auto");
+        axis.addProperty("ticks", right || !labels ? "" : "outside");
+        axis.addProperty("showline", !right);
+        axis.addProperty("zeroline", false);
+        axis.addProperty("fixedrange", true);
+        axis.remove("autorange");
+        if (axis.has("nticks")) {
+            axis.addProperty("nticks", axis.get("nticks").getAsInt());
+        }
+        JsonArray range = new JsonArray();
+        axis.getAsJsonArray("range").forEach(end -> range.add(end.getAsDouble()));
+        axis.add("range", range);
     }
 }

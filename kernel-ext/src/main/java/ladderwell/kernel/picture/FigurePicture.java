@@ -33,7 +33,14 @@ public final class FigurePicture {
         try {
             Layout layout = figure.getLayout() == null ? Layout.builder().build() : figure.getLayout();
             JsonObject drawing = new JsonObject();
-            drawing.add("layout", JavascriptLiteral.object(layout.asJavascript()));
+            JsonObject page = JavascriptLiteral.object(layout.asJavascript());
+            for (String name : page.keySet()) {
+                // The builder asks for evenly stepped ticks without a step, which the library takes as one tick per unit.
+                if (page.get(name) instanceof JsonObject axis && axis.has("tickmode") && !axis.has("dtick")) {
+                    axis.addProperty("tickmode", axis.has("tickvals") ? "array" : "auto");
+                }
+            }
+            drawing.add("layout", page);
             JsonArray all = new JsonArray();
             Optional<String> obstacle = Optional.empty();
             for (int i = 0; i < traces.length; i++) {

@@ -81,10 +81,9 @@ final class LevelDiagram {
     }
 
     private static double half(Oscillator oscillator, Levels levels, long last) {
-        double reach = levels.reach(last, DROP);
-        double turn = oscillator.orbit(0, 1, levels.energyHigh(last)).turningPoint();
-        double wall = Math.max(turn, Double.isInfinite(levels.threshold()) && oscillator.potential(reach) == Double.POSITIVE_INFINITY ? reach : turn);
-        return Math.max(1.12 * wall, Math.min(reach, 2.2 * Math.max(wall, 1e-300)));
+        double energy = levels.energyHigh(last);
+        double turn = oscillator.orbit(0, Math.sqrt(2 * energy), energy).turningPoint();
+        return Math.max(1.12 * turn, Math.min(levels.reach(last, DROP), 2.2 * turn));
     }
 
     String name() {

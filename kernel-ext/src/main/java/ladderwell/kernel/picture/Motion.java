@@ -181,7 +181,7 @@ final class Motion {
         if (periods > MOST_PERIODS_OF_LINE) {
             return new double[0];
         }
-        int points = Math.max(121, Math.min(1601, 40 * (int) Math.ceil(periods) + 1));
+        int points = Math.max(401, Math.min(2001, 200 * (int) Math.ceil(periods) + 1));
         double end = scaledTime(frames() - 1);
         double[] line = new double[points];
         for (int i = 0; i < points; i++) {

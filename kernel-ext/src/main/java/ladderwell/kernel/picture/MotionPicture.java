@@ -14,7 +14,7 @@ import tech.tablesaw.plotly.traces.ScatterTrace;
  */
 public final class MotionPicture {
     /** Strip of the axis below zero where the mean position and the turning points are marked, as a part of the scale. */
-    private static final double RAIL = 0.07;
+    private static final double RAIL = 0.085;
 
     private static final double HEADROOM = 1.06;
     private static final int MILLISECONDS_PER_FRAME = 45;
@@ -189,9 +189,9 @@ public final class MotionPicture {
         double end = motion.periods(motion.frames() - 1).orElse(motion.labTime(motion.frames() - 1));
         String time = motion.periods(0).isPresent() ? "time / periods" : Written.axis("time", motion.timeUnit());
         Layout layout = Layout.builder()
-                .height(214)
+                .height(220)
                 .width(780)
-                .margin(Drawing.margin(4, 42))
+                .margin(Drawing.margin(10, 42))
                 .showLegend(false)
                 .hoverMode(Layout.HoverMode.CLOSEST)
                 .xAxis(Drawing.axis(

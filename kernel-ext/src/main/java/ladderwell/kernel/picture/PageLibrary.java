@@ -67,10 +67,10 @@ public final class PageLibrary {
     /** Read and joined when the first picture needs it. */
     private static final class Program {
         // Handing the library a `module` of its own makes it return itself instead of looking for a loader or a global.
-        static final String TEXT = "(function(w){'use strict';if(w.ladderwellPlayer)return;"
+        static final String TEXT = "(function(w){if(w.ladderwellPlayer)return;"
                 + "var module={exports:{}};(function(module,exports,define){"
                 + guarded(Resource.read("plotly-cartesian.min.js"))
-                + "\n}).call(w,module,module.exports);(function(w,Plotly){"
+                + "\n}).call(w,module,module.exports);(function(w,Plotly){'use strict';"
                 + guarded(Resource.read("player.js"))
                 + "\n})(w,module.exports);})(window);";
 

@@ -15,7 +15,7 @@ import tech.tablesaw.api.Table;
  */
 final class RoundedColumn {
     /** Significant digits where nothing says how many are meant. */
-    private static final int PLAIN_DIGITS = 7;
+    private static final int PLAIN_DIGITS = 6;
 
     /** Most significant digits that are shown at all. */
     private static final int MOST = SupportedDigits.MOST;
@@ -62,7 +62,7 @@ final class RoundedColumn {
         return cells;
     }
 
-    /** Rounded to seven digits, and as many behind the point in every row where that is possible. */
+    /** Rounded to six digits, and as many behind the point in every row where that is possible. */
     private static String[] plain(NumericColumn<?> numbers, int rows) {
         double largest = 0;
         int behind = 0;

@@ -22,7 +22,7 @@ record SupportedDigits(double value, Bound bound, String unit) {
         if (!Double.isFinite(value)) {
             return String.valueOf(value);
         }
-        if (bound.isExact()) {
+        if (bound.isExact() || bound.size() < Double.MIN_NORMAL) {
             return Digits.pretty(Digits.shortest(value));
         }
         // A wider bound is still a bound; this one drops the digits beyond the tenth.

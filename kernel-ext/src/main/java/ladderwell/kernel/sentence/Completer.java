@@ -217,15 +217,13 @@ final class Completer {
         private boolean isNatural() {
             boolean flagged = whole.clauses().stream()
                     .anyMatch(clause -> clause.key().map(Key::word).equals(Optional.of("natural")));
-            List<Piece> spoken = new ArrayList<>(whole.head());
+            List<String> spoken = new ArrayList<>();
+            whole.head().forEach(piece -> spoken.add(piece.text()));
             whole.clauses().stream()
                     .filter(clause -> clause.key().map(Key::form).equals(Optional.of(Form.REFERENCE)))
-                    .forEach(clause -> spoken.addAll(clause.value()));
+                    .forEach(clause -> clause.value().forEach(piece -> spoken.add(piece.text())));
             return flagged
-                    || spoken.stream().anyMatch(piece -> surroundings
-                            .find(piece.text())
-                            .map(Known::natural)
-                            .orElse(false));
+                    || surroundings.all().stream().anyMatch(known -> known.natural() && spoken.contains(known.name()));
         }
 
         private Offers names(String noun, List<String> homes) {

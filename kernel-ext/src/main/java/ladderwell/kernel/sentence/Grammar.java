@@ -118,7 +118,7 @@ public record Grammar(List<Noun> nouns) {
                     "gaussian",
                     "Gaussian packet",
                     "a packet thrown into a box or a well; what the bound levels cannot carry is refused",
-                    "ψ ∝ exp(−(x − x₀)²/4Δx² + ip₀x/ħ),  ΔxΔp = ħ/2")
+                    "ψ ∝ exp(−(x − x₀)²/4Δx² + ip₀(x − x₀)/ħ),  ΔxΔp = ħ/2")
             .homes("box", "finite well")
             .keys(
                     Key.quantity("position", "mean position x₀, measured from the middle", LENGTH)
@@ -206,7 +206,11 @@ public record Grammar(List<Noun> nouns) {
 
     /** How messages call a thing that a noun declares: "an oscillator", "a state", "a run". */
     static String thing(String noun) {
-        return noun.equals("evolve") ? "a run" : Words.article(noun);
+        return switch (noun) {
+            case "evolve" -> "a run";
+            case "java" -> "a Java value of another type";
+            default -> Words.article(noun);
+        };
     }
 
     /**
@@ -231,6 +235,13 @@ public record Grammar(List<Noun> nouns) {
     /** What could stand at the cursor. */
     public Offers complete(SentenceText text, int cursor, Surroundings surroundings) {
         return new Completer(this, surroundings).at(text, cursor);
+    }
+
+    /** The word at the cursor, if there is one. */
+    public Optional<String> wordAt(SentenceText text, int cursor) {
+        Place place = text.at(cursor);
+        return Inspector.wordAt(Pieces.of(text.text(), place.start(), place.end()), cursor)
+                .map(Piece::text);
     }
 
     /** What the word at the cursor means, if it is a word of the language; declared names are the caller's business. */

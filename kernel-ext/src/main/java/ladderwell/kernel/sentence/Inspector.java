@@ -45,7 +45,7 @@ final class Inspector {
             if (clause.value().contains(piece)) {
                 return clause.key().isPresent()
                         ? clause.key().filter(key -> key.form() == Form.QUANTITY).flatMap(key -> unit(piece))
-                        : item(outline, clause, cursor);
+                        : item(outline, clause);
             }
         }
         return Optional.empty();
@@ -162,7 +162,7 @@ final class Inspector {
     }
 
     /** An item; one whose name holds a comma is found from either of its parts. */
-    private static Optional<Explanation> item(Outline outline, Clause clause, int cursor) {
+    private static Optional<Explanation> item(Outline outline, Clause clause) {
         if (outline.noun().isEmpty()) {
             return Optional.empty();
         }

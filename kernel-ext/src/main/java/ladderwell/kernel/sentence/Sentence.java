@@ -152,11 +152,11 @@ public final class Sentence {
      * the one number it names; the whole sentence where no key is named.
      */
     public Place placeSpokenOf(String message) {
-        String padded = " " + message.replaceAll("[^\\p{L}\\p{N}.+−-]", " ") + " ";
+        String padded = " " + separated(message) + " ";
         int first = Integer.MAX_VALUE;
         Place found = place;
         for (Map.Entry<String, Value> entry : values.entrySet()) {
-            String word = entry.getKey();
+            String word = separated(entry.getKey());
             int at = padded.indexOf(" " + word + " ");
             if (at < 0 && word.endsWith("s")) {
                 at = padded.indexOf(" " + word.substring(0, word.length() - 1) + " ");
@@ -176,5 +176,9 @@ public final class Sentence {
             }
         }
         return found;
+    }
+
+    private static String separated(String text) {
+        return text.replaceAll("[^\\p{L}\\p{N}.+−-]+", " ");
     }
 }

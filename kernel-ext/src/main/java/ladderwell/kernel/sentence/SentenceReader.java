@@ -186,7 +186,7 @@ final class SentenceReader {
 
     private void checkClauses(Noun noun) throws MisreadSentence {
         Map<String, Clause> seen = new LinkedHashMap<>();
-        Clause before = null;
+        Optional<Clause> before = Optional.empty();
         for (Clause clause : outline.clauses()) {
             if (clause.key().isPresent()) {
                 Key key = clause.key().get();
@@ -201,11 +201,11 @@ final class SentenceReader {
             } else if (noun.head() != Head.ITEMS || clause.value().isEmpty()) {
                 throw noKey(noun, clause, before);
             }
-            before = clause;
+            before = Optional.of(clause);
         }
     }
 
-    private MisreadSentence noKey(Noun noun, Clause clause, @org.jspecify.annotations.Nullable Clause before) {
+    private MisreadSentence noKey(Noun noun, Clause clause, Optional<Clause> before) {
         List<String> keys = keys(noun).stream().map(Key::word).toList();
         if (clause.value().isEmpty()) {
             Place at = clause.comma()
@@ -230,13 +230,11 @@ final class SentenceReader {
                     first.place());
         }
         boolean digits = Character.isDigit(first.text().isEmpty() ? ' ' : first.text().charAt(0));
-        boolean afterDigits = before != null
-                && !before.value().isEmpty()
-                && before.value()
-                        .get(before.value().size() - 1)
-                        .text()
-                        .chars()
-                        .allMatch(c -> c >= '0' && c <= '9');
+        boolean afterDigits = before.map(Clause::value)
+                .filter(value -> !value.isEmpty())
+                .map(value -> value.get(value.size() - 1).text())
+                .filter(text -> text.chars().allMatch(c -> c >= '0' && c <= '9'))
+                .isPresent();
         if (digits && afterDigits) {
             return new MisreadSentence(
                     "expected a key after the comma, not " + Words.quoted(first.text())
@@ -346,8 +344,17 @@ final class SentenceReader {
             Clause clause = clauses.get(i);
             if (clause.key().isEmpty()) {
                 ItemList.Found found = new ItemList(noun, expressions).read(clauses.subList(i, clauses.size()));
-                items.addAll(found.items());
                 i += found.clauses() - 1;
+                Clause end = clauses.get(i);
+                Place at = clause.place()
+                        .map(start -> end.place().map(start::to).orElse(start))
+                        .orElse(place);
+                for (String item : found.items()) {
+                    if (values.put(item, new Value(item, List.of(), at)) != null) {
+                        throw new MisreadSentence("'" + item + "' is listed twice; once is enough", at);
+                    }
+                    items.add(item);
+                }
             } else if (clause.key().get().form() != Form.REFERENCE) {
                 Key key = clause.key().get();
                 values.put(key.word(), value(key, clause));

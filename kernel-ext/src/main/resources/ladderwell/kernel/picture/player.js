@@ -43,7 +43,7 @@ function axes(layout, ink) {
     var axis = layout[name], own = name === 'yaxis2' ? ink.grey : ink.ink;
     axis.color = own;
     axis.tickcolor = axis.linecolor = ink.faint;
-    if (axis.title && axis.title.font) axis.title.font.color = own;
+    axis.title = {text: axis.title.text || axis.title, font: {size: 12.5, color: own}, standoff: 6};
   });
   layout.font = {family: ink.font, size: 12.5, color: ink.ink};
   layout.paper_bgcolor = layout.plot_bgcolor = 'rgba(0,0,0,0)';
@@ -151,10 +151,10 @@ function motion(root, p) {
     top.layout.annotations = [
       word(m.words.energy, ink.ochre, Object.assign({y: m.energy}, e)),
       word(m.words.potential, ink.grey, {xref: 'paper', x: 1, xanchor: 'left', yref: 'paper', y: 1, yanchor: 'top', xshift: 5, align: 'left'}),
-      word('\u27e8x\u27e9', ink.teal, {xref: 'paper', x: 0, xanchor: 'right', xshift: -6, yref: 'y', y: -rail / 2})
+      word('\u27e8x\u27e9', ink.teal, {xref: 'paper', x: 0, xanchor: 'left', xshift: 3, yref: 'y', y: -rail / 2})
     ];
     below.layout.annotations = [word(below.traces[1] ? '\u25cb\u2009\u2014<br>classical' : '\u25cb classical', ink.red,
-      {xref: 'paper', x: 1, xanchor: 'left', xshift: 5, yref: 'paper', y: 1, yanchor: 'top', align: 'left'})];
+      {xref: 'paper', x: 1, xanchor: 'left', xshift: 12, yref: 'paper', y: 1, yanchor: 'top', align: 'left'})];
     top.layout.width = below.layout.width = width(root);
   }
   function place() {
