@@ -8,8 +8,10 @@ import java.nio.file.Path;
 import java.util.Objects;
 import java.util.Optional;
 import java.util.concurrent.Callable;
+import ladderwell.kernel.cell.CellText;
 import ladderwell.kernel.cell.Workbench;
 import ladderwell.kernel.magic.Declarations;
+import ladderwell.kernel.notebook.Cell;
 import ladderwell.kernel.notebook.CellRunner;
 import ladderwell.kernel.notebook.Notebook;
 import ladderwell.kernel.notebook.NotebookException;
@@ -60,6 +62,9 @@ final class RunCommand implements Callable<Integer> {
             throw new CommandException("the notebook and the page would be the same file " + page);
         }
         try (Workbench bench = new Workbench(new Declarations(), new Renderings())) {
+            if (read.cells().stream().anyMatch(RunCommand::needsJava)) {
+                bench.startJava();
+            }
             NotebookRun run = new NotebookRun(read, CellRunner.on(bench), new ProgressLines(say));
             Writing writing = () -> {
                 read.write(executed);
@@ -85,6 +90,10 @@ final class RunCommand implements Callable<Integer> {
         } catch (NotebookException e) {
             throw new CommandException(String.valueOf(e.getMessage()), e);
         }
+    }
+
+    private static boolean needsJava(Cell cell) {
+        return cell.kind() == Cell.Kind.CODE && CellText.of(cell.source()).hasJava();
     }
 
     private static Path besides(Path executed) {
