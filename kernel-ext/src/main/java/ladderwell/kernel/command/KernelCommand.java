@@ -13,7 +13,7 @@ final class KernelCommand implements Callable<Integer> {
     private Path connectionFile;
 
     @Override
-    public Integer call() throws CommandException {
-        throw new CommandException(Ladderwell.serve(connectionFile));
+    public Integer call() {
+        return Ladderwell.serve(connectionFile);
     }
 }

@@ -12,14 +12,13 @@ public final class Ladderwell {
     /** Runs a command and exits with its code. */
     public static void main(String[] arguments) {
         if (arguments.length == 2 && arguments[0].equals("kernel") && !arguments[1].startsWith("-")) {
-            System.err.println("ladderwell: " + serve(Path.of(arguments[1])));
-            System.exit(2);
+            System.exit(serve(Path.of(arguments[1])));
         }
         System.exit(CommandTable.run(arguments));
     }
 
-    /** Serves a kernel until the process ends; what comes back says why it could not be started. */
-    static String serve(Path connectionFile) {
+    /** Serves a kernel until it is shut down; why it could not be started is said on standard error. */
+    static int serve(Path connectionFile) {
         return KernelMain.serve(connectionFile, new Declarations(), new Renderings());
     }
 }
