@@ -49,13 +49,13 @@ class DensityTest {
     @Test
     void probabilityIsOneInEveryOscillator() {
         Box box = Oscillator.box().natural();
-        FiniteWell well = Oscillator.finiteWell().natural(400);
+        FiniteWell well = Oscillator.finiteWell().natural(4000);
         State[] states = {
             mode.superposition(0, 1, 17),
             mode.number(40),
             box.superposition(0, 1, 2, 7),
             well.superposition(0, 2, 5),
-            well.gaussian(Quantity.of(-0.1, ONE), Quantity.of(8, ONE), Quantity.of(0.09, ONE))
+            well.gaussian(Quantity.of(-0.1, ONE), Quantity.of(8, ONE), Quantity.of(0.06, ONE))
         };
         for (State state : states) {
             Density density = state.evolve(0.7, PERIOD).frames(5).tolerance(1e-3).run().density(2001);

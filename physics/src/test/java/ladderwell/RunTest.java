@@ -183,7 +183,7 @@ class RunTest {
     @Test
     void heisenbergsBoundHoldsForEveryKindOfState() {
         Box box = Oscillator.box().natural();
-        FiniteWell well = Oscillator.finiteWell().natural(400);
+        FiniteWell well = Oscillator.finiteWell().natural(4000);
         Stream<State> states = Stream.of(
                 mode.number(3),
                 mode.superposition(2, 3, 9),
@@ -191,7 +191,7 @@ class RunTest {
                 box.superposition(0, 1, 2),
                 well.number(0),
                 well.superposition(1, 4),
-                well.gaussian(Quantity.of(0.05, ONE), Quantity.of(6, ONE), Quantity.of(0.1, ONE)));
+                well.gaussian(Quantity.of(0.05, ONE), Quantity.of(6, ONE), Quantity.of(0.06, ONE)));
         for (State state : states.toList()) {
             Run run = state.evolve(1.7, PERIOD).frames(50).tolerance(1e-3).run();
             Series product = run.series(UNCERTAINTY_PRODUCT);

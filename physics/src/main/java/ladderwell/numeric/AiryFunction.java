@@ -44,6 +44,35 @@ final class AiryFunction {
         return Math.fma(odd, h, even);
     }
 
+    /** Phase of Ai(-z) less 2/3 z^(3/2) - pi/4, for t = 1/(2/3 z^(3/2)). */
+    static double phaseCorrection(double t) {
+        double tt = t * t;
+        double sum = 0.0;
+        for (int k = 15; k >= 1; k -= 2) {
+            sum = LOGARITHM[k] - tt * sum;
+        }
+        return -t * sum;
+    }
+
+    /** Logarithm of the modulus of Ai(-z), over its leading term 1/(sqrt(pi) z^(1/4)). */
+    static double logModulus(double t) {
+        double tt = t * t;
+        double sum = 0.0;
+        for (int k = 14; k >= 2; k -= 2) {
+            sum = LOGARITHM[k] - tt * sum;
+        }
+        return -tt * sum;
+    }
+
+    /** Logarithm of Ai(z) over its leading term exp(-1/t)/(2 sqrt(pi) z^(1/4)). */
+    static double logDecay(double t) {
+        double sum = 0.0;
+        for (int k = 15; k >= 1; k--) {
+            sum = -t * (sum + LOGARITHM[k]);
+        }
+        return sum;
+    }
+
     private static double[][] series() {
         int half = (int) (RANGE * PER_UNIT);
         double[][] series = new double[2 * half + 1][];
@@ -52,7 +81,8 @@ final class AiryFunction {
             series[half + c] = coefficients((double) c / PER_UNIT, state);
             state = stepped((double) c / PER_UNIT, -1.0 / PER_UNIT, state);
         }
-        // Downwards from z = 15 Ai is the growing solution. The slope it starts with is right to 1e-16; the part of the other solution
+        // Downwards from z = 15 Ai is the growing solution. The slope it starts with is right to 1e-16; the part of the
+        // other solution
         // this lets in has died to 1e-16 exp(-2 (38.7 - 29.5)) = 1e-24 by z = 12.5.
         int top = half + 10;
         DoubleDouble[][] states = new DoubleDouble[top + 1][];

@@ -5,8 +5,6 @@ import java.util.List;
 import ladderwell.level.Levels;
 import ladderwell.level.StandingWave;
 import ladderwell.numeric.DoubleDouble;
-import org.apache.commons.math3.analysis.integration.gauss.GaussIntegrator;
-import org.apache.commons.math3.analysis.integration.gauss.GaussIntegratorFactory;
 
 /**
  * Overlaps ∫ g φ_n of a packet with well levels by Gauss–Legendre panels, the walls between panels and the exponential tails included.
@@ -55,14 +53,15 @@ final class LeakingOverlaps {
         double reach = EXTENT * packet.width();
         double panels = reach / half + 2;
         if (panels * NODES * count > LARGEST_WORK) {
-            throw new IllegalArgumentException("a packet of spread " + packet.width() + " and momentum " + packet.momentum()
-                    + " leaks through the walls of a well with " + levels.count()
-                    + " levels: its overlaps are too many to integrate; move it off the walls or loosen the tolerance");
+            throw new IllegalArgumentException(
+                    "a packet of spread " + packet.width() + " and momentum " + packet.momentum()
+                            + " leaks through the walls of a well with " + levels.count()
+                            + " levels: its overlaps are too many to integrate; move it off the walls or loosen the tolerance");
         }
-        GaussIntegrator rule = new GaussIntegratorFactory().legendreHighPrecision(NODES);
+        double[][] rule = LegendreRule.of(NODES);
         for (int j = 0; j < NODES; j++) {
-            offset[j] = half * rule.getPoint(j);
-            weight[j] = half * rule.getWeight(j);
+            offset[j] = half * rule[0][j];
+            weight[j] = half * rule[1][j];
         }
         long from = (long) Math.floor((packet.position() - reach) / (2 * half));
         long to = (long) Math.ceil((packet.position() + reach) / (2 * half));
@@ -102,8 +101,9 @@ final class LeakingOverlaps {
     }
 
     private void integrate(List<Panel> panels, long n, int row) {
-        DoubleDouble waveNumber =
-                new DoubleDouble(levels.energyHigh(n), levels.energyLow(n)).times(2).sqrt();
+        DoubleDouble waveNumber = new DoubleDouble(levels.energyHigh(n), levels.energyLow(n))
+                .times(2)
+                .sqrt();
         double k = waveNumber.hi();
         double decay = levels.decay(n);
         double amplitude = Math.sqrt(2 / (1 + 2 / decay));

@@ -14,7 +14,9 @@ final class MomentumWindow {
 
     private final double sigma;
     private final double momentum;
-    private final double size;
+
+    /** 2 G². */
+    private final double weight;
 
     /** k_n ≥ nπ + offset. */
     private final double offset;
@@ -33,9 +35,9 @@ final class MomentumWindow {
         sigma = packet.width();
         momentum = Math.abs(packet.momentum());
         double reach = packet.reach();
-        size = 2 * reach * reach;
+        weight = 2 * reach * reach;
         this.offset = offset;
-        double spread = Math.sqrt(Math.log(size / Math.min(weightAllowed, size / 4)) / 2) / sigma;
+        double spread = Math.sqrt(Math.log(weight / Math.min(weightAllowed, weight / 4)) / 2) / sigma;
         if (2 * spread / Math.PI > LARGEST) {
             throw new IllegalArgumentException("a packet of spread " + sigma + " needs about "
                     + Math.round(2 * spread / Math.PI) + " levels, at most 20000000 are carried");
@@ -52,12 +54,25 @@ final class MomentumWindow {
         }
     }
 
-    long first() {
-        return first;
+    private MomentumWindow(long levels) {
+        sigma = 0;
+        momentum = 0;
+        weight = 0;
+        offset = 0;
+        last = levels - 1;
     }
 
-    long last() {
-        return last;
+    /** All levels there are. */
+    static MomentumWindow all(long levels) {
+        return new MomentumWindow(levels);
+    }
+
+    int size() {
+        return Math.toIntExact(last - first + 1);
+    }
+
+    long first() {
+        return first;
     }
 
     /** Bounds of Σ (n+1)^j |c_n|² over the levels outside. */
@@ -79,11 +94,11 @@ final class MomentumWindow {
         }
         double fall = 2 * sigma * sigma * Math.PI * (2 * distance + Math.PI);
         double growth = Math.log1p(1.0 / (n + 1));
-        double term = size * Math.exp(-2 * sigma * sigma * distance * distance);
+        double term = weight * Math.exp(-2 * sigma * sigma * distance * distance);
         if (term > -Math.expm1(-fall) * allowed || 4 * growth > fall / 2) {
             return false;
         }
-        double half = Math.sqrt(size) * Math.exp(-sigma * sigma * distance * distance) / -Math.expm1(-fall / 2);
+        double half = Math.sqrt(weight) * Math.exp(-sigma * sigma * distance * distance) / -Math.expm1(-fall / 2);
         for (int j = 0; j < moments.length; j++) {
             moments[j] += term / -Math.expm1(j * growth - fall) * OUTWARD + Double.MIN_NORMAL;
             term *= n + 1;
@@ -100,15 +115,15 @@ final class MomentumWindow {
             return false;
         }
         double fall = 2 * sigma * sigma * Math.PI * (2 * distance + Math.PI);
-        double weight = size * Math.exp(-2 * sigma * sigma * distance * distance) / -Math.expm1(-fall);
-        if (weight > allowed) {
+        double moment = weight * Math.exp(-2 * sigma * sigma * distance * distance) / -Math.expm1(-fall);
+        if (moment > allowed) {
             return false;
         }
         for (int j = 0; j < moments.length; j++) {
-            moments[j] += weight * OUTWARD + Double.MIN_NORMAL;
-            weight *= n + 1;
+            moments[j] += moment * OUTWARD + Double.MIN_NORMAL;
+            moment *= n + 1;
         }
-        sum += Math.sqrt(size) * Math.exp(-sigma * sigma * distance * distance) / -Math.expm1(-fall / 2) * OUTWARD
+        sum += Math.sqrt(weight) * Math.exp(-sigma * sigma * distance * distance) / -Math.expm1(-fall / 2) * OUTWARD
                 + Double.MIN_NORMAL;
         return true;
     }

@@ -162,7 +162,8 @@ public record Grammar(List<Noun> nouns) {
                                         "for",
                                         "how long; a period is the classical one at the mean energy of the state",
                                         PERIODS,
-                                        TIME))
+                                        TIME)
+                                .called("duration"))
                         .keys(
                                 Key.count("frames", 1, Long.MAX_VALUE, "120", "number of equal time steps to look at")
                                         .standard("120"),

@@ -17,6 +17,7 @@ import ladderwell.quantity.Kind;
  * @param meaning one line that says what it is
  * @param formula how it enters; may be empty
  * @param standard what holds where it is not given; empty where it must be given or nothing holds
+ * @param called how messages of physics call the value; mostly the word itself
  */
 public record Key(
         String word,
@@ -28,7 +29,8 @@ public record Key(
         String example,
         String meaning,
         String formula,
-        String standard) {
+        String standard,
+        String called) {
 
     /** Copies the kinds. */
     public Key {
@@ -37,27 +39,31 @@ public record Key(
 
     static Key quantity(String word, String meaning, Kind... kinds) {
         List<Kind> all = List.of(kinds);
-        return new Key(word, Form.QUANTITY, all, "", 0, 0, all.get(0).example(), meaning, "", "");
+        return new Key(word, Form.QUANTITY, all, "", 0, 0, all.get(0).example(), meaning, "", "", word);
     }
 
     static Key of(String word, Form form, String example, String meaning) {
-        return new Key(word, form, List.of(), "", 0, Long.MAX_VALUE, example, meaning, "", "");
+        return new Key(word, form, List.of(), "", 0, Long.MAX_VALUE, example, meaning, "", "", word);
     }
 
     static Key count(String word, long least, long most, String example, String meaning) {
-        return new Key(word, Form.COUNT, List.of(), "", least, most, example, meaning, "", "");
+        return new Key(word, Form.COUNT, List.of(), "", least, most, example, meaning, "", "", word);
     }
 
     static Key reference(String word, String noun, String example, String meaning) {
-        return new Key(word, Form.REFERENCE, List.of(), noun, 0, 0, example, meaning, "", "");
+        return new Key(word, Form.REFERENCE, List.of(), noun, 0, 0, example, meaning, "", "", word);
     }
 
     Key formula(String text) {
-        return new Key(word, form, kinds, noun, least, most, example, meaning, text, standard);
+        return new Key(word, form, kinds, noun, least, most, example, meaning, text, standard, called);
     }
 
     Key standard(String text) {
-        return new Key(word, form, kinds, noun, least, most, example, meaning, formula, text);
+        return new Key(word, form, kinds, noun, least, most, example, meaning, formula, text, called);
+    }
+
+    Key called(String text) {
+        return new Key(word, form, kinds, noun, least, most, example, meaning, formula, standard, text);
     }
 
     /** The key with a value, as one would type it: "mass 40 u". */

@@ -156,23 +156,40 @@ public final class Sentence {
         int first = Integer.MAX_VALUE;
         Place found = place;
         for (Map.Entry<String, Value> entry : values.entrySet()) {
-            String word = separated(entry.getKey());
-            int at = padded.indexOf(" " + word + " ");
-            if (at < 0 && word.endsWith("s")) {
-                at = padded.indexOf(" " + word.substring(0, word.length() - 1) + " ");
-            }
-            if (at < 0 && !word.endsWith("s")) {
-                at = padded.indexOf(" " + word + "s ");
-            }
+            int at = spokenOf(padded, separated(called(entry.getKey())));
             if (at >= 0 && at < first) {
                 first = at;
-                found = entry.getValue().terms().size() < 2
-                        ? entry.getValue().place()
-                        : entry.getValue().terms().stream()
-                                .filter(term -> padded.contains(" " + term.text() + " "))
-                                .findFirst()
-                                .map(Term::place)
-                                .orElse(entry.getValue().place());
+                found = part(entry.getValue(), padded, at);
+            }
+        }
+        return found;
+    }
+
+    private String called(String key) {
+        return noun.keys(kind).stream()
+                .filter(known -> known.word().equals(key))
+                .map(Key::called)
+                .findFirst()
+                .orElse(key);
+    }
+
+    /** Where the message has the word, in the singular or the plural; −1 if nowhere. */
+    private static int spokenOf(String padded, String word) {
+        String other = word.endsWith("s") ? word.substring(0, word.length() - 1) : word + "s";
+        int at = padded.indexOf(" " + word + " ");
+        int otherAt = padded.indexOf(" " + other + " ");
+        return at < 0 || (otherAt >= 0 && otherAt < at) ? otherAt : at;
+    }
+
+    /** The part of a value that the message names first, behind the word of the key. */
+    private static Place part(Value value, String padded, int from) {
+        int first = Integer.MAX_VALUE;
+        Place found = value.place();
+        for (Term term : value.terms()) {
+            int at = padded.indexOf(" " + term.text() + " ", from);
+            if (value.terms().size() > 1 && at >= 0 && at < first) {
+                first = at;
+                found = term.place();
             }
         }
         return found;

@@ -275,12 +275,12 @@ final class SentenceReader {
             }
             Key key = clause.key().get();
             if (key.form() == Form.REFERENCE) {
-                Term term = one(key, clause);
-                Known known = refer(key.noun(), new Piece(Sort.WORD, term.text(), term.place()), key.word());
-                checkHome(key, known, term.place());
-                values.put(key.word(), new Value(known.name(), List.of(term), term.place()));
+                Piece spoken = one(key, clause);
+                Known known = refer(key.noun(), spoken, key.word());
+                checkHome(key, known, spoken.place());
+                values.put(key.word(), new Value(known.name(), List.of(), spoken.place()));
             } else if (key.form() == Form.FLAG && key.word().equals("natural")) {
-                natural = Optional.of(name.text());
+                natural = Optional.of(Words.quoted(name.text()));
             }
         }
     }
@@ -310,7 +310,7 @@ final class SentenceReader {
                     piece.place());
         }
         if (known.natural()) {
-            natural = Optional.of(name);
+            natural = Optional.of(Words.quoted(name));
         }
         return known;
     }
@@ -367,16 +367,14 @@ final class SentenceReader {
         Place keyPlace = Outline.placeOf(clause.keyPieces()).orElse(place);
         if (key.form() == Form.FLAG) {
             if (!clause.value().isEmpty()) {
-                Term more = Term.of(clause.value().subList(0, 1), (e, p) -> UNNAMED).get(0);
-                throw after(more, key.word());
+                throw after(Term.word(clause.value().get(0)), key.word());
             }
             return new Value(Boolean.TRUE, List.of(), keyPlace);
         }
         if (key.form() == Form.NEW_NAME) {
-            Term term = one(key, clause);
-            Piece name = new Piece(Sort.WORD, term.text(), term.place());
+            Piece name = one(key, clause);
             checkIdentifier(name);
-            return new Value(term.text(), List.of(term), term.place());
+            return new Value(name.text(), List.of(), name.place());
         }
         List<Term> terms = terms(key, clause);
         Values reading = new Values(key, terms, new Values.Beyond() {
@@ -403,15 +401,16 @@ final class SentenceReader {
         return new Value(object, terms, Outline.placeOf(clause.value()).orElse(keyPlace));
     }
 
-    /** Stands for an expression whose value does not matter. */
-    private static final Object UNNAMED = new Object();
-
-    private List<Term> terms(Key key, Clause clause) throws MisreadSentence {
+    private void refuseNoValue(Key key, Clause clause) throws MisreadSentence {
         if (clause.value().isEmpty()) {
             throw new MisreadSentence(
                     "a value is missing after '" + key.word() + "'; expected " + key.expected(),
                     Outline.placeOf(clause.keyPieces()).orElse(place).behind());
         }
+    }
+
+    private List<Term> terms(Key key, Clause clause) throws MisreadSentence {
+        refuseNoValue(key, clause);
         List<Term> terms = Term.of(clause.value(), expressions);
         if (terms.isEmpty()) {
             throw new MisreadSentence(
@@ -421,16 +420,18 @@ final class SentenceReader {
         return terms;
     }
 
-    /** The one word of a name. */
-    private Term one(Key key, Clause clause) throws MisreadSentence {
-        List<Term> terms = terms(key, clause);
-        Term first = terms.get(0);
-        if (!first.word()) {
+    /** The one word of a name; a name is no value and does not come from an expression. */
+    private Piece one(Key key, Clause clause) throws MisreadSentence {
+        refuseNoValue(key, clause);
+        Piece first = clause.value().get(0);
+        if (!first.is(Sort.WORD)) {
             throw new MisreadSentence(
-                    key.word() + " takes " + key.expected() + ", not " + Words.quoted(first.text()), first.place());
+                    key.word() + " takes " + key.expected() + ", not "
+                            + Words.quoted(first.is(Sort.JAVA) ? "{" + first.text() + "}" : first.text()),
+                    first.place());
         }
-        if (terms.size() > 1) {
-            throw after(terms.get(1), first.text());
+        if (clause.value().size() > 1) {
+            throw after(Term.word(clause.value().get(1)), first.text());
         }
         return first;
     }

@@ -8,8 +8,8 @@ import java.util.Optional;
  * A text of sentences and where in it each sentence stands.
  *
  * <p>A text whose first line that is not blank starts with {@code %%} is a cell: one sentence a line, with or without a
- * {@code %}; a line indented deeper than the one on which a sentence began goes on with it, until a blank line. In any other
- * text each line is a sentence of its own. Lines of comment alone are passed over.
+ * {@code %}; a line indented deeper than the one on which a sentence began goes on with it, until a blank line or a line that
+ * reads {@code NOUN NAME:}. In any other text each line is a sentence of its own. Lines of comment alone are passed over.
  *
  * @param text the whole text
  * @param opening what stands behind the {@code %%} of a cell; empty in a text of lines
@@ -40,7 +40,7 @@ public record SentenceText(String text, Optional<Place> opening, List<Place> sen
                 opening = Optional.of(new Place(start + 2, end));
             } else if (text.charAt(start) != '#') {
                 boolean percent = text.charAt(start) == '%';
-                if (open && opening.isPresent() && indent > openIndent && !percent) {
+                if (open && opening.isPresent() && indent > openIndent && !percent && !opensSentence(text, start, end)) {
                     int last = sentences.size() - 1;
                     sentences.set(last, new Place(sentences.get(last).start(), end));
                 } else {
@@ -53,6 +53,22 @@ public record SentenceText(String text, Optional<Place> opening, List<Place> sen
             line = end + 1;
         }
         return new SentenceText(text, opening, sentences);
+    }
+
+    /** Whether a line starts with two words and a colon: then it is no continuation, however it is indented. */
+    private static boolean opensSentence(String text, int start, int end) {
+        int at = start;
+        for (int word = 0; word < 2; word++) {
+            int wordStart = at;
+            while (at < end && Character.isJavaIdentifierPart(text.charAt(at))) {
+                at++;
+            }
+            if (at == wordStart) {
+                return false;
+            }
+            at = afterBlanks(text, at, end);
+        }
+        return at < end && text.charAt(at) == ':';
     }
 
     private static int afterBlanks(String text, int from, int end) {

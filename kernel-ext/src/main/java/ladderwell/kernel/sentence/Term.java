@@ -21,7 +21,7 @@ record Term(String text, Place place, Optional<Object> result, boolean word) {
         List<Term> terms = new ArrayList<>();
         for (Piece piece : pieces) {
             if (!piece.is(Sort.JAVA)) {
-                terms.add(new Term(piece.text(), piece.place(), Optional.empty(), piece.is(Sort.WORD)));
+                terms.add(word(piece));
                 continue;
             }
             if (piece.text().isBlank()) {
@@ -52,6 +52,11 @@ record Term(String text, Place place, Optional<Object> result, boolean word) {
             }
         }
         return terms;
+    }
+
+    /** A piece that is no expression. */
+    static Term word(Piece piece) {
+        return new Term(piece.text(), piece.place(), Optional.empty(), piece.is(Sort.WORD));
     }
 
     boolean isUnknown() {

@@ -7,7 +7,8 @@
  *
  * <p>Where sentences stand (see {@link ladderwell.kernel.sentence.SentenceText}): on a line that starts with {@code %},
  * or in a cell that starts with {@code %%declare}, one a line, without the {@code %}. In such a cell a sentence goes on in
- * the next line when that line is indented deeper than the one on which the sentence began, and ends at a blank line.
+ * the next line when that line is indented deeper than the one on which the sentence began; it ends at a blank line, and
+ * where the next line reads {@code NOUN NAME:}, however that is indented.
  * {@code #} starts a comment anywhere outside braces and quotes. {@code {…}} holds a Java expression, wherever a value can
  * stand; braces nest, and those in Java strings do not count.
  *
