@@ -1,6 +1,6 @@
 package ladderwell.numeric;
 
-import java.util.Arrays;
+import java.util.Optional;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -47,6 +47,7 @@ public final class ExactPhases {
     private final double[] im;
     private final double[] times;
     private final double largestPhase;
+    private final double phaseError;
     private final Grid grid;
     private final Table[] kept;
 
@@ -80,39 +81,77 @@ public final class ExactPhases {
      * @throws IllegalArgumentException if lengths differ, a number is not finite, or some |E t| exceeds {@link #LARGEST_PHASE}
      */
     public static ExactPhases of(double[] energyHigh, double[] energyLow, double[] re, double[] im, double[] times) {
-        return new ExactPhases(energyHigh, energyLow, re, im, times);
-    }
-
-    private ExactPhases(double[] energyHigh, double[] energyLow, double[] re, double[] im, double[] times) {
         int levels = energyHigh.length;
         requireLength(energyLow, levels, "low parts of energies");
         requireLength(re, levels, "real parts");
         requireLength(im, levels, "imaginary parts");
-        this.energyHigh = new double[levels];
-        this.energyLow = new double[levels];
-        double largestEnergy = 0;
+        double[] high = new double[levels];
+        double[] low = new double[levels];
         for (int k = 0; k < levels; k++) {
-            double high = requireFinite(energyHigh[k] + requireFinite(energyLow[k], "energy", k), "energy", k);
-            this.energyHigh[k] = high;
-            this.energyLow[k] = PhaseFactors.sumError(energyHigh[k], energyLow[k], high);
-            largestEnergy = Math.max(largestEnergy, Math.abs(high));
+            high[k] = requireFinite(energyHigh[k] + requireFinite(energyLow[k], "energy", k), "energy", k);
+            low[k] = PhaseFactors.sumError(energyHigh[k], energyLow[k], high[k]);
             requireFinite(re[k], "coefficient", k);
             requireFinite(im[k], "coefficient", k);
         }
-        double largestTime = 0;
         for (int j = 0; j < times.length; j++) {
-            largestTime = Math.max(largestTime, Math.abs(requireFinite(times[j], "time", j)));
+            requireFinite(times[j], "time", j);
         }
-        requireReducible(largestEnergy * largestTime);
-        this.re = re.clone();
-        this.im = im.clone();
-        this.times = times.clone();
+        requireReducible(largest(high) * largest(times));
+        return new ExactPhases(high, low, re.clone(), im.clone(), times.clone(), levels <= KEPT_LEVELS, 0);
+    }
+
+    private ExactPhases(
+            double[] energyHigh,
+            double[] energyLow,
+            double[] re,
+            double[] im,
+            double[] times,
+            boolean keepTables,
+            double energyError) {
+        this.energyHigh = energyHigh;
+        this.energyLow = energyLow;
+        this.re = re;
+        this.im = im;
+        this.times = times;
+        double largestEnergy = largest(energyHigh);
+        double largestTime = largest(times);
         largestPhase = largestEnergy * largestTime;
-        grid = Grid.through(this.times, largestEnergy, largestTime, largestPhase);
-        kept = new Table[grid.uniform() && levels <= KEPT_LEVELS ? (levels + LEVEL_BLOCK - 1) / LEVEL_BLOCK : 0];
+        phaseError = energyError * largestTime;
+        grid = Grid.through(times, largestEnergy, largestTime, largestPhase);
+        int levels = energyHigh.length;
+        kept = new Table[grid.uniform() && keepTables ? (levels + LEVEL_BLOCK - 1) / LEVEL_BLOCK : 0];
         for (int i = 0; i < kept.length; i++) {
             kept[i] = new Table(i * LEVEL_BLOCK, Math.min(levels, (i + 1) * LEVEL_BLOCK));
         }
+    }
+
+    /**
+     * The same coefficients in a frame that turns with the ladder, c_k e^{i(E_m + (k - m)Ω)t}: what is left of the energies is their
+     * curvature about level m. Errors of the new energies enter {@link #errorBound}. Empty when that does not make phases smaller.
+     *
+     * @param rate Ω, taken as an exact number
+     */
+    Optional<ExactPhases> turning(int m, double rate) {
+        int levels = levels();
+        double[] high = new double[levels];
+        double[] low = new double[levels];
+        for (int k = 0; k < levels; k++) {
+            double difference = energyHigh[k] - energyHigh[m];
+            double lowPart = PhaseFactors.sumError(energyHigh[k], -energyHigh[m], difference)
+                    + (energyLow[k] - energyLow[m]);
+            double turned = (k - m) * rate;
+            double rest = difference - turned;
+            lowPart += PhaseFactors.sumError(difference, -turned, rest) - Math.fma(k - m, rate, -turned);
+            high[k] = rest + lowPart;
+            low[k] = PhaseFactors.sumError(rest, lowPart, high[k]);
+        }
+        double largest = largest(energyHigh);
+        if (!(largest(high) <= largest)) {
+            return Optional.empty();
+        }
+        // Every rounding above is of a number below 2^-51 (2 largest + levels Ω).
+        double error = 0x1p-102 * (largest + levels * Math.abs(rate));
+        return Optional.of(new ExactPhases(high, low, re, im, times, false, error));
     }
 
     /** The number of levels. */
@@ -163,14 +202,13 @@ public final class ExactPhases {
      * numbers, for coefficients of at least 1e-290 in size (below, the absolute error is at most 1e-305).
      */
     public double errorBound() {
-        double one = PhaseFactors.ERROR + PRODUCT_ERROR;
+        double one = PhaseFactors.ERROR + PRODUCT_ERROR + 0.01 * U + phaseError;
         if (!grid.uniform()) {
-            return one + 0.01 * U;
+            return one;
         }
-        double product = one + PhaseFactors.ERROR + PRODUCT_ERROR;
         // First order: one rounding per part and the remainder 2^-57. Third order: series, remainder and a complex product.
         double shift = grid.firstOrder() ? 1.1 * U : 2 * U + PRODUCT_ERROR;
-        return product + shift + 0.01 * U;
+        return one + PhaseFactors.ERROR + PRODUCT_ERROR + shift;
     }
 
     double initialRe(int level) {
@@ -181,16 +219,19 @@ public final class ExactPhases {
         return im[level];
     }
 
+    double energy(int level) {
+        return energyHigh[level];
+    }
+
     /**
-     * e^{-i(E_upper - E_lower)t} at times fromTime … fromTime+count-1, to about 1e-15: a reference, not a result.
+     * Writes e^{-i rate t} at all times.
+     *
+     * @accuracy {@link PhaseFactors#ERROR}, the rate taken as an exact number
      */
-    void writeDifference(int lower, int upper, int fromTime, int count, double[] re, double[] im) {
-        double high = energyHigh[upper] - energyHigh[lower];
-        double low = PhaseFactors.sumError(energyHigh[upper], -energyHigh[lower], high)
-                + (energyLow[upper] - energyLow[lower]);
+    void writeTurns(double rate, double[] toRe, double[] toIm) {
         // E t is symmetric: here the times stand where levels stand elsewhere, so that one energy serves many times.
-        double[] at = Arrays.copyOfRange(times, fromTime, fromTime + count);
-        new PhaseFactors(count).write(at, new double[count], count, high, low, 2 * largestPhase, re, im);
+        double phase = Math.abs(rate) * largest(times);
+        new PhaseFactors(times.length).write(times, new double[times.length], times.length, rate, 0, phase, toRe, toIm);
     }
 
     /**
@@ -441,6 +482,14 @@ public final class ExactPhases {
             return new Grid(
                     true, angle <= FIRST_ORDER, period, coarseHighs, coarseLows, fineHighs, fineLows, shifts);
         }
+    }
+
+    private static double largest(double[] numbers) {
+        double largest = 0;
+        for (double number : numbers) {
+            largest = Math.max(largest, Math.abs(number));
+        }
+        return largest;
     }
 
     private static void requireReducible(double phase) {
