@@ -11,7 +11,7 @@ import org.jspecify.annotations.Nullable;
  * grid to rounding, t_j = T_q + T_r + δ_j with j = qB + r, most sines and cosines are saved: the factor is the product of one entry for
  * T_q and one for T_r (both double-double), and e^{-iEδ_j}, which carries the rounding of the stored time, by its Taylor series.
  *
- * <p>Objects are immutable; all methods may be called from several threads.
+ * <p>Objects do not change; all methods may be called from several threads.
  *
  * @units E t is an angle in rad: energies in any unit, times in its inverse (ħ = 1)
  */
@@ -49,7 +49,7 @@ public final class ExactPhases {
     private final double largestPhase;
     private final double phaseError;
     private final Grid grid;
-    private final Table[] kept;
+    private Table @Nullable [] kept; // guarded by this
 
     /**
      * E t mod 2π in [-π, π] (to rounding).
@@ -97,7 +97,7 @@ public final class ExactPhases {
             requireFinite(times[j], "time", j);
         }
         requireReducible(largest(high) * largest(times));
-        return new ExactPhases(high, low, re.clone(), im.clone(), times.clone(), levels <= KEPT_LEVELS, 0);
+        return new ExactPhases(high, low, re.clone(), im.clone(), times.clone(), 0);
     }
 
     private ExactPhases(
@@ -106,7 +106,6 @@ public final class ExactPhases {
             double[] re,
             double[] im,
             double[] times,
-            boolean keepTables,
             double energyError) {
         this.energyHigh = energyHigh;
         this.energyLow = energyLow;
@@ -118,11 +117,19 @@ public final class ExactPhases {
         largestPhase = largestEnergy * largestTime;
         phaseError = energyError * largestTime;
         grid = Grid.through(times, largestEnergy, largestTime, largestPhase);
-        int levels = energyHigh.length;
-        kept = new Table[grid.uniform() && keepTables ? (levels + LEVEL_BLOCK - 1) / LEVEL_BLOCK : 0];
-        for (int i = 0; i < kept.length; i++) {
-            kept[i] = new Table(i * LEVEL_BLOCK, Math.min(levels, (i + 1) * LEVEL_BLOCK));
+    }
+
+    /** The tables of T_r for each block of levels, made at the first call; none for irregular times or too many levels. */
+    private synchronized Table[] kept() {
+        if (kept == null) {
+            int levels = levels();
+            boolean keep = grid.uniform() && levels <= KEPT_LEVELS;
+            kept = new Table[keep ? (levels + LEVEL_BLOCK - 1) / LEVEL_BLOCK : 0];
+            for (int i = 0; i < kept.length; i++) {
+                kept[i] = new Table(i * LEVEL_BLOCK, Math.min(levels, (i + 1) * LEVEL_BLOCK));
+            }
         }
+        return kept;
     }
 
     /**
@@ -151,7 +158,7 @@ public final class ExactPhases {
         }
         // Every rounding above is of a number below 2^-51 (2 largest + levels Ω).
         double error = 0x1p-102 * (largest + levels * Math.abs(rate));
-        return Optional.of(new ExactPhases(high, low, re, im, times, false, error));
+        return Optional.of(new ExactPhases(high, low, re, im, times, error));
     }
 
     /** The number of levels. */
@@ -186,10 +193,11 @@ public final class ExactPhases {
                     "times " + fromTime + " to " + toTime + ", expected a range within 0 to " + times.length);
         }
         int rows = toTime - fromTime;
+        Table[] tables = kept();
         for (int level = 0; level < levels(); level += LEVEL_BLOCK) {
             int to = Math.min(levels(), level + LEVEL_BLOCK);
             Block block =
-                    kept.length > 0 ? new Block(level, to, kept[level / LEVEL_BLOCK]) : block(level, to, rows);
+                    tables.length > 0 ? new Block(level, to, tables[level / LEVEL_BLOCK]) : block(level, to, rows);
             for (int j = 0; j < rows; j++) {
                 Interruption.check();
                 block.write(fromTime + j, re[j], im[j], level);
