@@ -52,7 +52,8 @@ final class AiryFunction {
             series[half + c] = coefficients((double) c / PER_UNIT, state);
             state = stepped((double) c / PER_UNIT, -1.0 / PER_UNIT, state);
         }
-        // Downwards from z = 15 Ai is the growing solution. The slope it starts with is right to 1e-16; the part of the other solution
+        // Downwards from z = 15 Ai is the growing solution. The slope it starts with is right to 1e-16; the part of the
+        // other solution
         // this lets in has died to 1e-16 exp(-2 (38.7 - 29.5)) = 1e-24 by z = 12.5.
         int top = half + 10;
         DoubleDouble[][] states = new DoubleDouble[top + 1][];

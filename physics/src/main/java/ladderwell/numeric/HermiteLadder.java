@@ -26,28 +26,29 @@ final class HermiteLadder {
 
     private HermiteLadder() {}
 
-    /** Makes and fills rows of the given length for levels first .. first+rows.length-1. */
-    static void fill(double[][] rows, int rowLength, int first, double[] x) {
+    /** Fills the first x.length columns of every row; row 0 is level first. */
+    static void fill(double[][] rows, int first, double[] x) {
         int last = first + rows.length - 1;
         int start = first < PhaseFunction.FIRST_INDEX ? 0 : first;
         while (start <= last) {
             int end = Math.min(last, start + STAGE - 1);
             if (start == 0) {
-                fromGround(rows, rowLength, first, end, x);
+                fromGround(rows, first, end, x);
             } else {
-                fromPhase(rows, rowLength, first, start, end, x);
+                fromPhase(rows, first, start, end, x);
             }
             start = end + 1;
         }
     }
 
-    private static void fromGround(double[][] rows, int rowLength, int first, int end, double[] x) {
+    private static void fromGround(double[][] rows, int first, int end, double[] x) {
         double[] below = new double[x.length];
-        double[] ground = first == 0 ? row(rows, 0, rowLength) : new double[x.length];
+        double[] ground = first == 0 ? rows[0] : new double[x.length];
         Tail tail = new Tail(x);
         double reach = reach(end);
         for (int j = 0; j < x.length; j++) {
             double distance = Math.abs(x[j]);
+            ground[j] = 0.0;
             if (distance >= reach) {
                 continue;
             }
@@ -57,17 +58,18 @@ final class HermiteLadder {
                 ground[j] = GROUND_AMPLITUDE * (Math.exp(-half) * (1.0 - halfLo));
             } else {
                 double powers = Math.rint(half / DoubleDouble.LN_2.hi());
-                double rest = Math.fma(-powers, DoubleDouble.LN_2.hi(), half) + Math.fma(-powers, DoubleDouble.LN_2.lo(), halfLo);
+                double rest = Math.fma(-powers, DoubleDouble.LN_2.hi(), half)
+                        + Math.fma(-powers, DoubleDouble.LN_2.lo(), halfLo);
                 tail.add(j, 0.0, GROUND_AMPLITUDE * Math.exp(-rest), (int) -powers);
             }
         }
-        climb(rows, rowLength, first, 0, end, below, ground, x);
+        climb(rows, first, 0, end, below, ground, x);
         tail.climb(rows, first, 0, end);
     }
 
-    private static void fromPhase(double[][] rows, int rowLength, int first, int start, int end, double[] x) {
+    private static void fromPhase(double[][] rows, int first, int start, int end, double[] x) {
         PhaseFunction lower = new PhaseFunction(start);
-        double[] a = row(rows, start - first, rowLength);
+        double[] a = rows[start - first];
         double reach = reach(end);
         if (start == end) {
             for (int j = 0; j < x.length; j++) {
@@ -76,9 +78,11 @@ final class HermiteLadder {
             return;
         }
         PhaseFunction upper = new PhaseFunction(start + 1);
-        double[] b = row(rows, start + 1 - first, rowLength);
+        double[] b = rows[start + 1 - first];
         Tail tail = new Tail(x);
         for (int j = 0; j < x.length; j++) {
+            a[j] = 0.0;
+            b[j] = 0.0;
             if (Math.abs(x[j]) >= reach) {
                 continue;
             }
@@ -90,7 +94,7 @@ final class HermiteLadder {
                 tail.add(j, lower.scaled(x[j], shift), upper.scaled(x[j], shift), -shift);
             }
         }
-        climb(rows, rowLength, first, start + 1, end, a, b, x);
+        climb(rows, first, start + 1, end, a, b, x);
         tail.climb(rows, first, start + 1, end);
     }
 
@@ -99,33 +103,62 @@ final class HermiteLadder {
         return Math.sqrt(2.0 * n + 1.0) + 40.0;
     }
 
-    private static double[] row(double[][] rows, int index, int rowLength) {
-        rows[index] = new double[rowLength];
-        return rows[index];
-    }
-
     /** From level (values in current, those of level-1 in previous) to end; levels of the window are stored, lower ones pass through. */
     private static void climb(
-            double[][] rows, int rowLength, int first, int level, int end, double[] previous, double[] current, double[] x) {
-        for (int n = Math.max(level + 1, first); n <= end; n++) {
-            row(rows, n - first, rowLength);
-        }
+            double[][] rows, int first, int level, int end, double[] previous, double[] current, double[] x) {
         for (int from = 0; from < x.length; from += BLOCK) {
             int to = Math.min(from + BLOCK, x.length);
             double[] a = previous;
             double[] b = current;
-            for (int n = level + 1; n <= end; n++) {
+            int n = level + 1;
+            while (n < end) {
                 double[] next = n < first ? a : rows[n - first];
-                step(next, b, a, x, from, to, Math.sqrt(2.0 / n), Math.sqrt((n - 1.0) / n));
-                a = b;
-                b = next;
+                double[] afterNext = n + 1 < first ? b : rows[n + 1 - first];
+                twoSteps(next, afterNext, b, a, x, from, to, up(n), down(n), up(n + 1), down(n + 1));
+                a = next;
+                b = afterNext;
+                n += 2;
+            }
+            if (n == end) {
+                step(n < first ? a : rows[n - first], b, a, x, from, to, up(n), down(n));
             }
         }
     }
 
-    private static void step(double[] next, double[] current, double[] previous, double[] x, int from, int to, double up, double down) {
+    private static double up(int n) {
+        return Math.sqrt(2.0 / n);
+    }
+
+    private static double down(int n) {
+        return -Math.sqrt((n - 1.0) / n);
+    }
+
+    private static void step(
+            double[] next, double[] current, double[] previous, double[] x, int from, int to, double up, double down) {
         for (int j = from; j < to; j++) {
-            next[j] = Math.fma(up * x[j], current[j], -(down * previous[j]));
+            next[j] = Math.fma(up * x[j], current[j], down * previous[j]);
+        }
+    }
+
+    // Two levels a pass: the loads of x and of the lower levels serve both. Each target may be the array it follows by
+    // two levels.
+    private static void twoSteps(
+            double[] next,
+            double[] afterNext,
+            double[] current,
+            double[] previous,
+            double[] x,
+            int from,
+            int to,
+            double up,
+            double down,
+            double secondUp,
+            double secondDown) {
+        for (int j = from; j < to; j++) {
+            double middle = current[j];
+            double above = Math.fma(up * x[j], middle, down * previous[j]);
+            next[j] = above;
+            afterNext[j] = Math.fma(secondUp * x[j], above, secondDown * middle);
         }
     }
 
@@ -137,7 +170,10 @@ final class HermiteLadder {
         private double[] position = new double[0];
         private double[] previous = new double[0];
         private double[] current = new double[0];
+        // 2^exponent as two factors: a mantissa of 2^300 may belong to a value that 2^exponent alone would already
+        // lose.
         private double[] scale = new double[0];
+        private double[] secondScale = new double[0];
         private int[] exponent = new int[0];
 
         Tail(double[] x) {
@@ -152,6 +188,7 @@ final class HermiteLadder {
                 previous = Arrays.copyOf(previous, larger);
                 current = Arrays.copyOf(current, larger);
                 scale = Arrays.copyOf(scale, larger);
+                secondScale = Arrays.copyOf(secondScale, larger);
                 exponent = Arrays.copyOf(exponent, larger);
             }
             column[size] = j;
@@ -167,7 +204,7 @@ final class HermiteLadder {
                 return;
             }
             for (int i = 0; i < size; i++) {
-                scale[i] = Math.scalb(1.0, exponent[i]);
+                rescale(i);
             }
             if (level - 1 >= first) {
                 store(rows[level - 1 - first], previous);
@@ -178,7 +215,7 @@ final class HermiteLadder {
             double[] a = previous;
             double[] b = current;
             for (int n = level + 1; n <= end; n++) {
-                step(a, b, a, position, 0, size, Math.sqrt(2.0 / n), Math.sqrt((n - 1.0) / n));
+                step(a, b, a, position, 0, size, up(n), down(n));
                 double[] next = a;
                 a = b;
                 b = next;
@@ -197,14 +234,20 @@ final class HermiteLadder {
                     a[i] *= DOWN;
                     b[i] *= DOWN;
                     exponent[i] += GUARD;
-                    scale[i] = Math.scalb(1.0, exponent[i]);
+                    rescale(i);
                 }
             }
         }
 
+        private void rescale(int i) {
+            int half = exponent[i] / 2;
+            scale[i] = Math.scalb(1.0, half);
+            secondScale[i] = Math.scalb(1.0, exponent[i] - half);
+        }
+
         private void store(double[] row, double[] mantissa) {
             for (int i = 0; i < size; i++) {
-                row[column[i]] = mantissa[i] * scale[i];
+                row[column[i]] = mantissa[i] * scale[i] * secondScale[i];
             }
         }
     }

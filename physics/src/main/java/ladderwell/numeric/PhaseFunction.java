@@ -67,7 +67,12 @@ final class PhaseFunction {
     };
     private static final double[] W1_SLOPE = slope(W1);
     private static final double[] W2 = {
-        737.0 / 65000, 3922909.0 / 382016250, 0.009654554468992244, 0.008427826261840498, 0.0068632094095046805, 0.0052810223480935494
+        737.0 / 65000,
+        3922909.0 / 382016250,
+        0.009654554468992244,
+        0.008427826261840498,
+        0.0068632094095046805,
+        0.0052810223480935494
     };
     private static final double[] W2_SLOPE = slope(W2);
 
@@ -87,7 +92,8 @@ final class PhaseFunction {
 
     PhaseFunction(int n) {
         if (n < FIRST_INDEX) {
-            throw new IllegalArgumentException("index " + n + " is below " + FIRST_INDEX + ", where the phase function starts");
+            throw new IllegalArgumentException(
+                    "index " + n + " is below " + FIRST_INDEX + ", where the phase function starts");
         }
         this.n = n;
         square = 2.0 * n + 1.0;
@@ -112,6 +118,9 @@ final class PhaseFunction {
 
     /** phi_n(x) times 2^shift, computed without underflow on the way; x finite. */
     double scaled(double x, int shift) {
+        if (x == 0.0 && (n & 1) != 0) {
+            return 0.0;
+        }
         double distance = Math.abs(x);
         double value;
         if (distance > mu + seamDistance) {
@@ -182,18 +191,39 @@ final class PhaseFunction {
         double zz = z * z;
         double first = w * t * firstOrder(tt) + g[1] * z;
         double shift = first - w * ww * t * thirdOrder(tt) - zz * (g[3] * z + g[1] * first);
-        double steepness = -ww * (secondOrder(tt) - ww * fourthOrder(tt)) + zz * (g[2] - zz * g[4] - 2.0 * g[2] * z * first);
+        double steepness =
+                -ww * (secondOrder(tt) - ww * fourthOrder(tt)) + zz * (g[2] - zz * g[4] - 2.0 * g[2] * z * first);
         z = 1.0 / (xi + shift);
         zz = z * z;
         double correction = shift
-                - z * (g[1] - zz * (g[3] - zz * (g[5] - zz * (g[7] - zz * (g[9] - zz * (g[11] - zz * (g[13] - zz * g[15])))))));
+                - z
+                        * (g[1]
+                                - zz
+                                        * (g[3]
+                                                - zz
+                                                        * (g[5]
+                                                                - zz
+                                                                        * (g[7]
+                                                                                - zz
+                                                                                        * (g[9]
+                                                                                                - zz
+                                                                                                        * (g[11]
+                                                                                                                - zz
+                                                                                                                        * (g[
+                                                                                                                                        13]
+                                                                                                                                - zz
+                                                                                                                                        * g[
+                                                                                                                                                15])))))));
         double logAmplitude = steepness
                 - zz * (g[2] - zz * (g[4] - zz * (g[6] - zz * (g[8] - zz * (g[10] - zz * (g[12] - zz * g[14]))))));
-        double amplitude = ROOT_2_OVER_PI / Math.sqrt(root) * (1.0 + logAmplitude * (1.0 + logAmplitude * (0.5 + logAmplitude / 6.0)));
+        double amplitude = ROOT_2_OVER_PI
+                / Math.sqrt(root)
+                * (1.0 + logAmplitude * (1.0 + logAmplitude * (0.5 + logAmplitude / 6.0)));
 
         // phi = amplitude cos(n pi/2 - Phi + correction)
         double quarters = Math.rint(phase * (1.0 / PI_OVER_2_HI));
-        double rest = Math.fma(-quarters, PI_OVER_2_HI, phase) + (Math.fma(-quarters, PI_OVER_2_LO, phaseLo) - correction);
+        double rest =
+                Math.fma(-quarters, PI_OVER_2_HI, phase) + (Math.fma(-quarters, PI_OVER_2_LO, phaseLo) - correction);
         int quadrant = (n - (int) quarters) & 3;
         double wave = (quadrant & 1) == 0 ? Math.cos(rest) : Math.sin(rest);
         return quadrant < 2 ? amplitude * wave : -amplitude * wave;
@@ -211,7 +241,7 @@ final class PhaseFunction {
 
         int i = (int) Math.rint(PER_UNIT * Math.log((x + root) * inverseMu));
         if (i > ANGLES) {
-            // Farther than 3.7 mu: xi is above 5 M, and exp(-5000) times any 2^shift in use is 0.
+            // Farther than 3.7 mu, where xi is above 5 M: phi is below exp(-5000).
             return 0.0;
         }
         double cosh = HYPERBOLIC[0][i];
@@ -246,7 +276,8 @@ final class PhaseFunction {
         double zz = z * z;
         double first = -w * t * firstOrder(tt) - g[1] * z;
         double farther = first - w * ww * t * thirdOrder(tt) - zz * (g[3] * z - g[1] * first);
-        double steepness = ww * (secondOrder(tt) + ww * fourthOrder(tt)) - zz * (g[2] + zz * g[4] - 2.0 * g[2] * z * first);
+        double steepness =
+                ww * (secondOrder(tt) + ww * fourthOrder(tt)) - zz * (g[2] + zz * g[4] - 2.0 * g[2] * z * first);
         z = 1.0 / (xi + farther);
         double series = 0.0;
         for (int k = 15; k >= 1; k--) {
@@ -259,7 +290,8 @@ final class PhaseFunction {
     }
 
     private double aroundTurningPoint(double x) {
-        // Z = -r (mu - x) (f(d) + ...) with r = (2 mu)^(1/3). The phase turns by |Z|^(1/2) dZ, so Z is kept to more than a double: the
+        // Z = -r (mu - x) (f(d) + ...) with r = (2 mu)^(1/3). The phase turns by |Z|^(1/2) dZ, so Z is kept to more
+        // than a double: the
         // product r (mu - x) exactly, and only what the small rest of f adds is rounded.
         double gap = mu - x;
         double y = gap * inverseLength;
