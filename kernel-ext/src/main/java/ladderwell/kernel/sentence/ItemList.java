@@ -127,7 +127,7 @@ final class ItemList {
         for (int n = pieces.size() - 1; n > 0; n--) {
             if (n < 6 && named(Outline.text(pieces.subList(0, n))).isPresent()) {
                 return new MisreadSentence(
-                        "a comma is missing before " + Words.quoted(pieces.get(n).text()), pieces.get(n).place());
+                        "a comma is missing before " + Words.quoted(pieces.get(n).typed()), pieces.get(n).place());
             }
         }
         String typed = Outline.text(pieces);

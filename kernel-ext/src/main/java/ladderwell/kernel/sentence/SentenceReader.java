@@ -86,7 +86,7 @@ final class SentenceReader {
         if (outline.noun().isEmpty()) {
             Optional<String> near = Words.nearest(piece.text(), nouns);
             throw new MisreadSentence(
-                    Words.quoted(piece.text()) + " is no noun; a sentence starts with " + Words.either(nouns)
+                    Words.quoted(piece.typed()) + " is no noun; a sentence starts with " + Words.either(nouns)
                             + Words.didYouMean(near),
                     piece.place());
         }
@@ -105,7 +105,7 @@ final class SentenceReader {
         Piece name = subject.get(0);
         if (!name.is(Sort.WORD)) {
             throw new MisreadSentence(
-                    "expected " + wanted + " after '" + noun.word() + "', not " + Words.quoted(name.text()), name.place());
+                    "expected " + wanted + " after '" + noun.word() + "', not " + Words.quoted(name.typed()), name.place());
         }
         checkColon(noun, name);
         if (noun.declares()) {
@@ -116,7 +116,7 @@ final class SentenceReader {
 
     private void checkColon(Noun noun, Piece name) throws MisreadSentence {
         List<Piece> subject = outline.subject();
-        String after = Words.quoted(name.text());
+        String after = Words.quoted(name.typed());
         if (noun.head() == Head.NONE) {
             if (outline.colon().isPresent()) {
                 throw new MisreadSentence(
@@ -225,7 +225,7 @@ final class SentenceReader {
                     .map(key -> " or '" + key.typed() + "'")
                     .orElse("");
             return new MisreadSentence(
-                    Words.quoted(first.text()) + " is too much here; expected a comma" + lead
+                    Words.quoted(first.typed()) + " is too much here; expected a comma" + lead
                             + Words.didYouMean(Words.nearest(first.text(), keys)),
                     first.place());
         }
@@ -237,19 +237,19 @@ final class SentenceReader {
                 .isPresent();
         if (digits && afterDigits) {
             return new MisreadSentence(
-                    "expected a key after the comma, not " + Words.quoted(first.text())
+                    "expected a key after the comma, not " + Words.quoted(first.typed())
                             + "; decimals are written with a point, as in 9.5",
                     first.place());
         }
         String of = outline.kind().map(kind -> Words.article(kind.phrase())).orElse("'" + noun.word() + "'");
         return new MisreadSentence(
-                Words.quoted(first.text()) + " is no key of " + of + "; expected " + Words.either(keys)
+                Words.quoted(first.typed()) + " is no key of " + of + "; expected " + Words.either(keys)
                         + Words.didYouMean(Words.nearest(first.text(), keys)),
                 first.place());
     }
 
     private static MisreadSentence commaMissing(Piece piece) {
-        return new MisreadSentence("a comma is missing before " + Words.quoted(piece.text()), piece.place());
+        return new MisreadSentence("a comma is missing before " + Words.quoted(piece.typed()), piece.place());
     }
 
     // ------------------------------------------------------------------ names spoken of
@@ -263,7 +263,7 @@ final class SentenceReader {
             if (!head.is(Sort.WORD)) {
                 throw new MisreadSentence(
                         "expected the name of " + Grammar.thing(noun.headNoun()) + " after the colon, not "
-                                + Words.quoted(head.text()),
+                                + Words.quoted(head.typed()),
                         head.place());
             }
             Known known = refer(noun.headNoun(), head, noun.word());
@@ -280,7 +280,7 @@ final class SentenceReader {
                 checkHome(key, known, spoken.place());
                 values.put(key.word(), new Value(known.name(), List.of(), spoken.place()));
             } else if (key.form() == Form.FLAG && key.word().equals("natural")) {
-                natural = Optional.of(Words.quoted(name.text()));
+                natural = Optional.of(Words.quoted(name.typed()));
             }
         }
     }
@@ -427,7 +427,7 @@ final class SentenceReader {
         if (!first.is(Sort.WORD)) {
             throw new MisreadSentence(
                     key.word() + " takes " + key.expected() + ", not "
-                            + Words.quoted(first.is(Sort.JAVA) ? "{" + first.text() + "}" : first.text()),
+                            + Words.quoted(first.typed()),
                     first.place());
         }
         if (clause.value().size() > 1) {
