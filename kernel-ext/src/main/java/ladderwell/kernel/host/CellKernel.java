@@ -319,8 +319,13 @@ final class CellKernel extends BaseKernel {
         end.run();
     }
 
-    /** Waits a moment for messages still to be sent. */
+    /** Waits a moment for messages still to be sent, then another for the sockets' own threads. */
     void drain() {
         publisher().drain(500);
+        try {
+            Thread.sleep(50);
+        } catch (InterruptedException e) {
+            Thread.currentThread().interrupt();
+        }
     }
 }

@@ -28,18 +28,22 @@ public final class KernelMain {
 
     private KernelMain() {}
 
+    /** What the process ends with when the kernel could not be started. */
+    private static final int NOT_STARTED = 2;
+
     /**
-     * Serves a kernel until a client shuts it down or the process that started it ends. Returns only when the kernel
-     * could not be started.
+     * Serves a kernel until a client shuts it down or the process that started it ends. Why a kernel could not be
+     * started is said in one line on standard error.
      *
      * @param connectionFile the file that names ports and key, as a Jupyter client writes it
-     * @return one line that says why the kernel could not be started; the caller prints it and exits with a code other
-     *     than 0
+     * @param sentences the declarations language
+     * @param renderer shows what cells return
+     * @return the exit code for the process; threads of cells may still be there, so exit with it
      */
-    public static String serve(Path connectionFile, Sentences sentences, Renderer renderer) {
+    static int serve(Path connectionFile, Sentences sentences, Renderer renderer) {
         Optional<String> unfit = unfitJava();
         if (unfit.isPresent()) {
-            return unfit.get();
+            return refuse(unfit.get());
         }
         // The base library logs every message; nothing of it may reach a cell's streams.
         Logger.getLogger("").setLevel(Level.OFF);
@@ -47,7 +51,7 @@ public final class KernelMain {
         try {
             connection = new JupyterConnection(read(connectionFile));
         } catch (IllegalArgumentException | GeneralSecurityException e) {
-            return "connection file " + connectionFile + ": " + e.getMessage();
+            return refuse("connection file " + connectionFile + ": " + e.getMessage());
         }
         Workbench workbench = new Workbench(sentences, renderer);
         CountDownLatch ended = new CountDownLatch(1);
@@ -59,7 +63,8 @@ public final class KernelMain {
             surviveBadMessages(connection);
         } catch (ZMQException | ReflectiveOperationException e) {
             workbench.close();
-            return "connection file " + connectionFile + ": its ports cannot be opened (" + e.getMessage() + ")";
+            return refuse(
+                    "connection file " + connectionFile + ": its ports cannot be opened (" + e.getMessage() + ")");
         }
         workbench.startJava();
         endWithParent(ended);
@@ -69,10 +74,14 @@ public final class KernelMain {
         } catch (InterruptedException e) {
             Thread.currentThread().interrupt();
         }
+        // The sockets stay open: a cell that heeds no interrupt may still hold them, and the process ends anyway.
         kernel.drain();
-        // Not exit: hooks and threads that a cell left behind must not keep the process.
-        Runtime.getRuntime().halt(0);
-        return "";
+        return 0;
+    }
+
+    private static int refuse(String why) {
+        System.err.println(why);
+        return NOT_STARTED;
     }
 
     /** Why this Java cannot run cells, if it cannot. */
