@@ -22,12 +22,12 @@ def blas():
 
 
 def sample(work, least=0.08, most=25):
-    """Median time of work() in ms over at least `least` seconds or three runs."""
-    times = []
+    """Median time of work() in ms over at least `least` seconds or three runs. The last result is kept, as a notebook keeps it."""
+    times, result = [], None
     start = time.perf_counter()
     while len(times) < 3 or (time.perf_counter() - start < least and len(times) < most):
         before = time.perf_counter()
-        work()
+        result = work()  # noqa: F841
         times.append(time.perf_counter() - before)
     return statistics.median(times) * 1e3
 

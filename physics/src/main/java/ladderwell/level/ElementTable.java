@@ -49,7 +49,7 @@ final class ElementTable {
             relative * largest(momentum),
             Math.max(relative * largest(momentumSquared), diagonal[1])
         };
-        return new Elements(levels, position, positionSquared, momentum, momentumSquared, errors, true);
+        return new Elements(levels, position, positionSquared, momentum, momentumSquared, errors);
     }
 
     private static double largest(double[][] matrix) {

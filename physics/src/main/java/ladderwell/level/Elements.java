@@ -1,5 +1,7 @@
 package ladderwell.level;
 
+import ladderwell.evidence.Bound;
+
 /**
  * Transition elements between a list of levels, as real matrices [i][j] over the list.
  *
@@ -14,11 +16,10 @@ public final class Elements {
     private final double[][] positionSquared;
     private final double[][] momentum;
     private final double[][] momentumSquared;
-    private final double positionError;
-    private final double positionSquaredError;
-    private final double momentumError;
-    private final double momentumSquaredError;
-    private final boolean proved;
+    private final Bound positionBound;
+    private final Bound positionSquaredBound;
+    private final Bound momentumBound;
+    private final Bound momentumSquaredBound;
 
     Elements(
             long[] levels,
@@ -26,18 +27,16 @@ public final class Elements {
             double[][] positionSquared,
             double[][] momentum,
             double[][] momentumSquared,
-            double[] errors,
-            boolean proved) {
+            double[] errors) {
         this.levels = levels.clone();
         this.position = position;
         this.positionSquared = positionSquared;
         this.momentum = momentum;
         this.momentumSquared = momentumSquared;
-        this.positionError = errors[0];
-        this.positionSquaredError = errors[1];
-        this.momentumError = errors[2];
-        this.momentumSquaredError = errors[3];
-        this.proved = proved;
+        positionBound = Bound.guaranteed(errors[0]);
+        positionSquaredBound = Bound.guaranteed(errors[1]);
+        momentumBound = Bound.guaranteed(errors[2]);
+        momentumSquaredBound = Bound.guaranteed(errors[3]);
     }
 
     /** Number of levels in the list. */
@@ -90,28 +89,51 @@ public final class Elements {
         return momentumSquared;
     }
 
-    /** Largest absolute error of any ⟨i|x|j⟩. */
+    /** How far any ⟨i|x|j⟩ can be off. */
+    public Bound positionBound() {
+        return positionBound;
+    }
+
+    /** How far any ⟨i|x²|j⟩ can be off. */
+    public Bound positionSquaredBound() {
+        return positionSquaredBound;
+    }
+
+    /** How far any ⟨i|p|j⟩ can be off. */
+    public Bound momentumBound() {
+        return momentumBound;
+    }
+
+    /** How far any ⟨i|p²|j⟩ can be off. */
+    public Bound momentumSquaredBound() {
+        return momentumSquaredBound;
+    }
+
+    /** Size of {@link #positionBound}. */
     public double positionError() {
-        return positionError;
+        return positionBound.size();
     }
 
-    /** Largest absolute error of any ⟨i|x²|j⟩. */
+    /** Size of {@link #positionSquaredBound}. */
     public double positionSquaredError() {
-        return positionSquaredError;
+        return positionSquaredBound.size();
     }
 
-    /** Largest absolute error of any ⟨i|p|j⟩. */
+    /** Size of {@link #momentumBound}. */
     public double momentumError() {
-        return momentumError;
+        return momentumBound.size();
     }
 
-    /** Largest absolute error of any ⟨i|p²|j⟩. */
+    /** Size of {@link #momentumSquaredBound}. */
     public double momentumSquaredError() {
-        return momentumSquaredError;
+        return momentumSquaredBound.size();
     }
 
-    /** Whether the four errors are guaranteed (true) or estimated (false). */
+    /** Whether all four bounds are guaranteed. */
     public boolean proved() {
-        return proved;
+        return positionBound.isGuaranteed()
+                && positionSquaredBound.isGuaranteed()
+                && momentumBound.isGuaranteed()
+                && momentumSquaredBound.isGuaranteed();
     }
 }

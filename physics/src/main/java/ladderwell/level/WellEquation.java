@@ -42,8 +42,8 @@ final class WellEquation {
 
     WellEquation(double depth) {
         if (!(depth >= LEAST_DEPTH && depth <= LARGEST_DEPTH)) {
-            throw new IllegalArgumentException("the depth of a finite well must be between 1e-100 and 1e24 ħ²/(m L²), got "
-                    + depth);
+            throw new IllegalArgumentException(
+                    "the depth of a finite well must be between 1e-100 and 1e24 ħ²/(m L²), got " + depth);
         }
         this.depth = depth;
         rim = DoubleDouble.of(depth / 2).sqrt();
@@ -75,7 +75,11 @@ final class WellEquation {
     WellLevel solve(long n) {
         DoubleDouble room = room(n);
         double slack = n == count - 1 ? 4 * TERM * room.hi() : 4 * TERM * rim.hi();
-        boolean nearRim = EIGHTH_TURN.plus(rim.times(SmallAngle.versine(EIGHTH_TURN))).minus(room).hi() >= 0;
+        boolean nearRim = EIGHTH_TURN
+                        .plus(rim.times(SmallAngle.versine(EIGHTH_TURN)))
+                        .minus(room)
+                        .hi()
+                >= 0;
         return nearRim ? nearRim(n, room, slack) : deep(n);
     }
 
@@ -155,7 +159,8 @@ final class WellEquation {
         }
     }
 
-    private WellLevel level(DoubleDouble wallSine, DoubleDouble wallCosine, double relativeEnergy, double relativeDecay) {
+    private WellLevel level(
+            DoubleDouble wallSine, DoubleDouble wallCosine, double relativeEnergy, double relativeDecay) {
         DoubleDouble waveNumber = rim.times(2).times(wallSine);
         DoubleDouble energy = waveNumber.times(waveNumber).times(0.5);
         DoubleDouble decay = rim.times(2).times(wallCosine);

@@ -6,7 +6,8 @@
  *
  * <p>Sign of the wave functions: φ_n is real, has parity (−1)^n, and is positive beyond its outermost zero towards +x.
  *
- * <p>Read {@link ladderwell.level.Levels} first, then {@link ladderwell.level.Elements}, then the three kinds of levels.
+ * <p>Read {@link ladderwell.level.Levels} first, then {@link ladderwell.level.Elements}, then the three kinds of
+ * levels; {@code WellEquation} holds the one equation that has to be solved.
  */
 @NullMarked
 package ladderwell.level;

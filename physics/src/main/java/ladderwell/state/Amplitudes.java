@@ -50,8 +50,7 @@ public final class Amplitudes {
         if (n < 0) {
             throw new IllegalArgumentException("level " + n + " does not exist: levels count from 0");
         }
-        return new Amplitudes(
-                new long[] {n}, new double[][] {{1}}, new double[][] {{0}}, 0, new double[MOMENTS], 0, 0);
+        return new Amplitudes(new long[] {n}, new double[][] {{1}}, new double[][] {{0}}, 0, new double[MOMENTS], 0, 0);
     }
 
     /**
@@ -126,9 +125,12 @@ public final class Amplitudes {
      * The Gaussian packet of spread Δx = width about a position, with a mean momentum, on the levels of a box or a finite
      * well.
      *
-     * <p>The packet is g(x) = (2π Δx²)^{−1/4} e^{−(x−x₀)²/4Δx² + i p₀ (x−x₀)} on the whole line. What the bound levels do not
-     * carry (tails beyond the walls of a box, energy above the rim of a well) is missing weight; it is never scaled away.
-     * {@link #normError} is the distance from g. Moments and sums of the tail count discarded bound levels only.
+     * <p>The packet is g(x) = (2π Δx²)^{−1/4} e^{−(x−x₀)²/4Δx² + i p₀ (x−x₀)} on the whole line, and {@link #normError} is the distance
+     * from it. What the levels do not carry is missing weight; it is never scaled away, so the norm is below 1 by that much.
+     *
+     * <p>In a box the amplitudes are those of g with its tails folded back at the walls (method of images), a smooth state of the
+     * box: moments of the tail belong to it, while g cut off at a wall would have infinite energy. In a well moments and sums of the
+     * tail count bound levels only; what lies above the rim enters normError and missingWeight.
      *
      * @param levels box or finite well
      * @param position x₀, inside the walls
@@ -136,15 +138,17 @@ public final class Amplitudes {
      * @param width Δx
      * @param tolerance norm error allowed, 1e-14 … 0.1
      * @units scaled: lengths in the full width L, momentum in ħ/L
-     * @throws IllegalArgumentException if an argument is outside its range or the levels are harmonic
+     * @throws IllegalArgumentException if an argument is outside its range, the levels are harmonic, or too much of the packet lies
+     *     beyond the walls of a box
+     * @throws ladderwell.evidence.PhysicsException.NotCarried if the bound levels of a well miss more than the tolerance
      */
-    public static Amplitudes packet(
-            Levels levels, double position, double momentum, double width, double tolerance) {
+    public static Amplitudes packet(Levels levels, double position, double momentum, double width, double tolerance) {
         checkTolerance(tolerance);
         PacketState state = new PacketState(levels, new GaussianPacket(position, momentum, width), tolerance);
         return switch (levels.kind()) {
-            case HARMONIC -> throw new IllegalArgumentException(
-                    "a packet is expanded in the levels of a box or a finite well, not in harmonic levels");
+            case HARMONIC ->
+                throw new IllegalArgumentException(
+                        "a packet is expanded in the levels of a box or a finite well, not in harmonic levels");
             case BOX -> state.inBox();
             case FINITE_WELL -> state.inWell();
         };
@@ -152,8 +156,7 @@ public final class Amplitudes {
 
     static void checkTolerance(double tolerance) {
         if (!(tolerance >= 1e-14 && tolerance <= 0.1)) {
-            throw new IllegalArgumentException(
-                    "the tolerance is a norm error between 1e-14 and 0.1, got " + tolerance);
+            throw new IllegalArgumentException("the tolerance is a norm error between 1e-14 and 0.1, got " + tolerance);
         }
     }
 

@@ -21,7 +21,8 @@ record GaussianPacket(double position, double momentum, double width) {
                     "the position of a packet must lie between the walls at -0.5 and 0.5 widths, got " + position);
         }
         if (!(Math.abs(momentum) <= LARGEST_MOMENTUM)) {
-            throw new IllegalArgumentException("the momentum of a packet must be between -1e9 and 1e9 ħ/L, got " + momentum);
+            throw new IllegalArgumentException(
+                    "the momentum of a packet must be between -1e9 and 1e9 ħ/L, got " + momentum);
         }
         if (!(width >= LEAST_WIDTH && width <= LARGEST_WIDTH)) {
             throw new IllegalArgumentException(
@@ -47,7 +48,9 @@ record GaussianPacket(double position, double momentum, double width) {
     /** Upper bound of ∫ |g| beyond the walls. */
     double integralBeyond() {
         double scale = reach() / 2;
-        return scale * (erfcAbove((0.5 - position) / (2 * width)) + erfcAbove((0.5 + position) / (2 * width))) * OUTWARD;
+        return scale
+                * (erfcAbove((0.5 - position) / (2 * width)) + erfcAbove((0.5 + position) / (2 * width)))
+                * OUTWARD;
     }
 
     /**

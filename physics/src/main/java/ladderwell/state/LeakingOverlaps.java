@@ -53,9 +53,10 @@ final class LeakingOverlaps {
         double reach = EXTENT * packet.width();
         double panels = reach / half + 2;
         if (panels * NODES * count > LARGEST_WORK) {
-            throw new IllegalArgumentException("a packet of spread " + packet.width() + " and momentum " + packet.momentum()
-                    + " leaks through the walls of a well with " + levels.count()
-                    + " levels: its overlaps are too many to integrate; move it off the walls or loosen the tolerance");
+            throw new IllegalArgumentException(
+                    "a packet of spread " + packet.width() + " and momentum " + packet.momentum()
+                            + " leaks through the walls of a well with " + levels.count()
+                            + " levels: its overlaps are too many to integrate; move it off the walls or loosen the tolerance");
         }
         double[][] rule = LegendreRule.of(NODES);
         for (int j = 0; j < NODES; j++) {
@@ -100,8 +101,9 @@ final class LeakingOverlaps {
     }
 
     private void integrate(List<Panel> panels, long n, int row) {
-        DoubleDouble waveNumber =
-                new DoubleDouble(levels.energyHigh(n), levels.energyLow(n)).times(2).sqrt();
+        DoubleDouble waveNumber = new DoubleDouble(levels.energyHigh(n), levels.energyLow(n))
+                .times(2)
+                .sqrt();
         double k = waveNumber.hi();
         double decay = levels.decay(n);
         double amplitude = Math.sqrt(2 / (1 + 2 / decay));

@@ -21,13 +21,18 @@ final class LegendreRule {
                 DoubleDouble before = DoubleDouble.ONE;
                 DoubleDouble value = x;
                 for (int k = 2; k <= n; k++) {
-                    DoubleDouble next =
-                            x.times(value).times(2 * k - 1).minus(before.times(k - 1)).dividedBy(k);
+                    DoubleDouble next = x.times(value)
+                            .times(2 * k - 1)
+                            .minus(before.times(k - 1))
+                            .dividedBy(k);
                     before = value;
                     value = next;
                 }
                 // (x² − 1) P_n′ = n (x P_n − P_{n−1})
-                slope = x.times(value).minus(before).times(n).dividedBy(x.times(x).minus(DoubleDouble.ONE));
+                slope = x.times(value)
+                        .minus(before)
+                        .times(n)
+                        .dividedBy(x.times(x).minus(DoubleDouble.ONE));
                 x = x.minus(value.dividedBy(slope));
             }
             DoubleDouble weight = DoubleDouble.of(2)

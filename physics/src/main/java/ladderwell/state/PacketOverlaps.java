@@ -34,8 +34,9 @@ final class PacketOverlaps {
         double squares = 0;
         for (int i = 0; i < count; i++) {
             long n = first + i;
-            DoubleDouble waveNumber =
-                    new DoubleDouble(levels.energyHigh(n), levels.energyLow(n)).times(2).sqrt();
+            DoubleDouble waveNumber = new DoubleDouble(levels.energyHigh(n), levels.energyLow(n))
+                    .times(2)
+                    .sqrt();
             double decay = levels.decay(n);
             double amplitude = Math.sqrt(2 / (1 + 2 / decay));
             StandingWave wave = new StandingWave(n, waveNumber);

@@ -22,7 +22,8 @@ final class PacketState {
     /** All of it must lie between the walls; the tails are folded back (see {@link PacketOverlaps}). */
     Amplitudes inBox() {
         double beyond = packet.weightBeyond();
-        double distance = beyond > tolerance * tolerance ? Math.sqrt(beyond) : Math.hypot(Math.sqrt(beyond), packet.foldedNorm());
+        double distance =
+                beyond > tolerance * tolerance ? Math.sqrt(beyond) : Math.hypot(Math.sqrt(beyond), packet.foldedNorm());
         if (distance > tolerance / 2) {
             throw new IllegalArgumentException(String.format(
                     Locale.ROOT,
@@ -70,7 +71,7 @@ final class PacketState {
      * outside amplitude inside, so that for k₀ &gt; |p| the packet's transform gives (G²/π) ∫ e^{−2σ²(k−|p|)²} dq, and with k − k₀ ≥ q²/(2k₀ + q) an
      * elementary bound. What lies beyond the walls adds its own transform and its own norm.
      */
-    private double aboveRim() {
+    double aboveRim() {
         double rim = Math.sqrt(2 * levels.threshold());
         double distance = rim - Math.abs(packet.momentum()) - 4e-16 * (rim + Math.abs(packet.momentum()));
         if (distance <= 0) {
@@ -82,7 +83,8 @@ final class PacketState {
         double inside = reach * reach / Math.PI * Math.exp(-2 * sigma * sigma * distance * distance) * integral;
         double beyond = packet.weightBeyond();
         double length = packet.integralBeyond();
-        // Transform of what lies beyond: below q by its largest value, above by its norm times dq/dk = k/q; best of two q.
+        // Transform of what lies beyond: below q by its largest value, above by its norm times dq/dk = k/q; best of two
+        // q.
         double plain = 2 * length * length / Math.PI;
         double outside = Math.min(plain + Math.sqrt(1 + rim * rim) * beyond, plain * rim + Math.sqrt(2) * beyond);
         return (Math.sqrt(inside) + Math.sqrt(outside) + Math.sqrt(beyond)) * (1 + 1e-9);
@@ -106,7 +108,8 @@ final class PacketState {
      * @param outside proved bound of the norm of all that is not kept
      * @param each bound of what the closed form errs by in one level
      */
-    private Amplitudes kept(MomentumWindow window, double[] re, double[] im, double inside, double outside, double each) {
+    private Amplitudes kept(
+            MomentumWindow window, double[] re, double[] im, double inside, double outside, double each) {
         double measured = missingAtMost(re, im, inside);
         double missing = Math.min(measured, outside * outside * (1 + 1e-9));
         double error = (Math.sqrt(missing) + inside) * (1 + 1e-9);
@@ -117,7 +120,8 @@ final class PacketState {
         double[] moments = new double[Amplitudes.MOMENTS];
         double sum = 0;
         if (window.size() < count) {
-            // |c|² ≤ 2 (Gaussian part)² + 2 each², and no moment exceeds the top level's power times the missing weight.
+            // |c|² ≤ 2 (Gaussian part)² + 2 each², and no moment exceeds the top level's power times the missing
+            // weight.
             double power = 1;
             for (int j = 0; j < moments.length; j++) {
                 double termwise = 2 * window.moments()[j] + 2 * power * count * each * each + Double.MIN_NORMAL;

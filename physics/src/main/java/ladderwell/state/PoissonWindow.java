@@ -84,8 +84,7 @@ final class PoissonWindow {
         double inverse = 1.0 / n;
         double square = inverse * inverse;
         // Stirling's series, n ≥ 64: the first term left out, 1/(1188 n^9), is below 1e-19.
-        double stirling =
-                inverse * (1.0 / 12 - square * (1.0 / 360 - square * (1.0 / 1260 - square * (1.0 / 1680))));
+        double stirling = inverse * (1.0 / 12 - square * (1.0 / 360 - square * (1.0 / 1260 - square * (1.0 / 1680))));
         return Math.exp(-(stirling + deviance)) / Math.sqrt(2 * Math.PI * n);
     }
 

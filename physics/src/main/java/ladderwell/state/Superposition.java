@@ -17,8 +17,9 @@ final class Superposition {
 
     static Amplitudes of(long[] levels, double[] re, double[] im) {
         if (levels.length != re.length || levels.length != im.length) {
-            throw new IllegalArgumentException("a superposition needs one real and one imaginary weight for each level, got "
-                    + levels.length + " levels, " + re.length + " real and " + im.length + " imaginary parts");
+            throw new IllegalArgumentException(
+                    "a superposition needs one real and one imaginary weight for each level, got " + levels.length
+                            + " levels, " + re.length + " real and " + im.length + " imaginary parts");
         }
         if (levels.length == 0) {
             throw new IllegalArgumentException("a superposition needs at least one level");
@@ -66,8 +67,7 @@ final class Superposition {
         return high + low;
     }
 
-    private static Amplitudes joined(
-            long[] levels, double[] re, double[] im, Integer[] order, int down, double norm) {
+    private static Amplitudes joined(long[] levels, double[] re, double[] im, Integer[] order, int down, double norm) {
         List<Integer> starts = new ArrayList<>();
         for (int i = 0; i < order.length; i++) {
             if (i == 0 || levels[order[i]] - levels[order[i - 1]] >= GAP) {
@@ -92,7 +92,6 @@ final class Superposition {
             }
         }
         boolean exact = order.length == 1 && (re[0] == 0 || im[0] == 0);
-        return new Amplitudes(
-                firsts, reals, imaginaries, exact ? 0 : NORM_ERROR, new double[Amplitudes.MOMENTS], 0, 0);
+        return new Amplitudes(firsts, reals, imaginaries, exact ? 0 : NORM_ERROR, new double[Amplitudes.MOMENTS], 0, 0);
     }
 }

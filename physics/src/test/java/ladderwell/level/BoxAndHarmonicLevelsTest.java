@@ -46,8 +46,11 @@ class BoxAndHarmonicLevelsTest {
             long n = (long) Math.pow(10, 14 * random.nextDouble()) - 1;
             double x = random.nextDouble() - 0.5;
             double value = box.waveFunctions(n, 1, new double[] {x})[0][0];
-            BigDecimal angle = FiftyDigits.PI.multiply(BigDecimal.valueOf(n + 1)).multiply(new BigDecimal(0.5).subtract(new BigDecimal(x)));
-            BigDecimal exact = FiftyDigits.cosSin(angle)[1].multiply(BigDecimal.valueOf(2).sqrt(FiftyDigits.DIGITS));
+            BigDecimal angle = FiftyDigits.PI
+                    .multiply(BigDecimal.valueOf(n + 1))
+                    .multiply(new BigDecimal(0.5).subtract(new BigDecimal(x)));
+            BigDecimal exact =
+                    FiftyDigits.cosSin(angle)[1].multiply(BigDecimal.valueOf(2).sqrt(FiftyDigits.DIGITS));
             double off = exact.subtract(new BigDecimal(value)).abs().doubleValue();
             assertTrue(off <= box.waveFunctionError(n), "level " + n + ", x " + x + ": off " + off);
         }
@@ -81,9 +84,11 @@ class BoxAndHarmonicLevelsTest {
                 double reach = harmonic.reach(n, drop);
                 double[] beyond = {reach, 1.001 * reach, -reach, 1.1 * reach};
                 for (double value : harmonic.waveFunctions(n, 1, beyond)[0]) {
-                    assertTrue(Math.abs(value) <= drop + harmonic.waveFunctionError(n), "level " + n + ", drop " + drop);
+                    assertTrue(
+                            Math.abs(value) <= drop + harmonic.waveFunctionError(n), "level " + n + ", drop " + drop);
                 }
-                // Of use: an Airy tail of 1e-12 ends within 9 n^(−1/6) of the turning point, the ground state's within 8.
+                // Of use: an Airy tail of 1e-12 ends within 9 n^(−1/6) of the turning point, the ground state's within
+                // 8.
                 assertTrue(reach <= Math.sqrt(2 * n + 1) + 9, "level " + n + " reaches " + reach);
             }
         }

@@ -24,7 +24,8 @@ class ElementsTest {
 
     @Test
     void wellElementsAreTheIntegralsOverTheWaveFunctions() {
-        for (double depth : new double[] {0.03, 2, 40, 500, 5.001 * Math.PI * Math.PI / 2, 4.0001 * Math.PI * Math.PI / 2}) {
+        for (double depth :
+                new double[] {0.03, 2, 40, 500, 5.001 * Math.PI * Math.PI / 2, 4.0001 * Math.PI * Math.PI / 2}) {
             Levels well = Levels.finiteWell(depth);
             int count = (int) well.count();
             Elements elements = well.elements(firstLevels(count));
@@ -42,17 +43,26 @@ class ElementsTest {
         DoubleUnaryOperator leftSlope = x -> slope(well, m, x);
         DoubleUnaryOperator rightSlope = x -> slope(well, n, x);
         double decay = well.decay(m) + well.decay(n);
-        // Panels of 30 nodes resolve a tenth of the width and 4 decay lengths to rounding; rounding 1e-13 of the integral of sizes.
+        // Panels of 30 nodes resolve a tenth of the width and 4 decay lengths to rounding; rounding 1e-13 of the
+        // integral of sizes.
         double scale = 1 + 8 / (decay * decay) + well.energyHigh(Math.max(m, n));
         double tolerance = 1e-13 * scale;
         assertEquals(m == n ? 1 : 0, integral(decay, x -> left.applyAsDouble(x) * right.applyAsDouble(x)), 1e-13, at);
-        assertEquals(integral(decay, x -> left.applyAsDouble(x) * x * right.applyAsDouble(x)), elements.position(m, n), tolerance, at);
+        assertEquals(
+                integral(decay, x -> left.applyAsDouble(x) * x * right.applyAsDouble(x)),
+                elements.position(m, n),
+                tolerance,
+                at);
         assertEquals(
                 integral(decay, x -> left.applyAsDouble(x) * x * x * right.applyAsDouble(x)),
                 elements.positionSquared(m, n),
                 tolerance,
                 at);
-        assertEquals(-integral(decay, x -> left.applyAsDouble(x) * rightSlope.applyAsDouble(x)), elements.momentum(m, n), tolerance, at);
+        assertEquals(
+                -integral(decay, x -> left.applyAsDouble(x) * rightSlope.applyAsDouble(x)),
+                elements.momentum(m, n),
+                tolerance,
+                at);
         assertEquals(
                 integral(decay, x -> leftSlope.applyAsDouble(x) * rightSlope.applyAsDouble(x)),
                 elements.momentumSquared(m, n),
@@ -111,13 +121,20 @@ class ElementsTest {
                 assertEquals(0, elements.momentumSquared(0, j));
             } else if (!same) {
                 BigDecimal tails = BigDecimal.valueOf(4).divide(decays, DIGITS);
-                BigDecimal xx = TWO.multiply(w).multiply(BigDecimal.ONE.add(tails)).divide(gap, DIGITS).divide(gap, DIGITS);
+                BigDecimal xx = TWO.multiply(w)
+                        .multiply(BigDecimal.ONE.add(tails))
+                        .divide(gap, DIGITS)
+                        .divide(gap, DIGITS);
                 within(xx, elements.positionSquared(0, j), elements.positionSquaredError(), at);
                 within(w.multiply(tails).negate(), elements.momentumSquared(0, j), elements.momentumSquaredError(), at);
                 assertEquals(0, elements.position(0, j));
                 assertEquals(0, elements.momentum(0, j));
             } else {
-                within(squaredWidth(depth, well, n), elements.positionSquared(0, 0), elements.positionSquaredError(), at);
+                within(
+                        squaredWidth(depth, well, n),
+                        elements.positionSquared(0, 0),
+                        elements.positionSquaredError(),
+                        at);
             }
         }
     }
@@ -153,11 +170,13 @@ class ElementsTest {
         BigDecimal wave = full[1].divide(k.multiply(BigDecimal.valueOf(4)), DIGITS)
                 .add(full[0].divide(k.pow(2).multiply(TWO), DIGITS))
                 .subtract(full[1].divide(k.pow(3).multiply(TWO), DIGITS));
-        BigDecimal inside = BigDecimal.ONE.divide(BigDecimal.valueOf(24), DIGITS)
+        BigDecimal inside = BigDecimal.ONE
+                .divide(BigDecimal.valueOf(24), DIGITS)
                 .add(parity.multiply(wave).divide(TWO))
                 .multiply(square);
         BigDecimal half = FiftyDigits.cosSin(k.divide(TWO))[n % 2 == 0 ? 0 : 1];
-        BigDecimal tail = BigDecimal.ONE.divide(kappa.multiply(BigDecimal.valueOf(4)), DIGITS)
+        BigDecimal tail = BigDecimal.ONE
+                .divide(kappa.multiply(BigDecimal.valueOf(4)), DIGITS)
                 .add(BigDecimal.ONE.divide(kappa.pow(2).multiply(TWO), DIGITS))
                 .add(BigDecimal.ONE.divide(kappa.pow(3).multiply(TWO), DIGITS));
         return inside.add(square.multiply(half.pow(2)).multiply(tail));
@@ -165,7 +184,8 @@ class ElementsTest {
 
     @Test
     void dipoleStrengthsOfTheBoxSumToOneHalf() {
-        // Thomas, Reiche, Kuhn: Σ |x_mn|² (E_m − E_n) = ħ²/2m. The terms fall as m^−4: the rest after 2000 levels is below 1e-8/3.
+        // Thomas, Reiche, Kuhn: Σ |x_mn|² (E_m − E_n) = ħ²/2m. The terms fall as m^−4: the rest after 2000 levels is
+        // below 1e-8/3.
         Levels box = Levels.box();
         Elements elements = box.elements(firstLevels(2000));
         for (int n = 0; n < 20; n++) {
@@ -195,7 +215,8 @@ class ElementsTest {
                 for (int n = 0; n < 12; n++) {
                     double gap = levels.energyHigh(m) - levels.energyHigh(n);
                     // A few ulp of energies up to 900.
-                    assertEquals(gap * elements.position(m, n), elements.momentum(m, n), 1e-13, levels + " " + m + ", " + n);
+                    assertEquals(
+                            gap * elements.position(m, n), elements.momentum(m, n), 1e-13, levels + " " + m + ", " + n);
                     assertEquals(0, elements.momentum(m, n) + elements.momentum(n, m));
                     assertEquals(0, elements.positionSquared(m, n) - elements.positionSquared(n, m));
                 }
@@ -251,7 +272,7 @@ class ElementsTest {
         assertEquals(-Math.sqrt(20) / 2, elements.momentumSquared(3, 1), 6e-16);
         assertEquals(0, elements.position(0, 1));
         assertEquals(5e11 + 0.75, elements.positionSquared(4, 5), elements.positionSquaredError());
-        assertTrue(elements.proved());
+        assertTrue(elements.positionBound().isGuaranteed());
     }
 
     @Test

@@ -103,7 +103,8 @@ class CoherentTest {
 
     @Test
     void weightsAreThePublishedPoissonWeights() {
-        // Reference rows S-COH-01 and S-COH-02: Poisson distribution; Glauber, Phys. Rev. 131 (1963) 2766. The rows carry 16 digits.
+        // Reference rows S-COH-01 and S-COH-02: Poisson distribution; Glauber, Phys. Rev. 131 (1963) 2766. The rows
+        // carry 16 digits.
         assertEquals(0.1953668148131646, weight(Amplitudes.coherent(4, 0.3, 1e-12), 4), 4e-16);
         assertEquals(0.3678794411714423, weight(Amplitudes.coherent(1, 0, 1e-12), 0), 8e-16);
     }
@@ -139,7 +140,9 @@ class CoherentTest {
         long hundred = Amplitudes.coherent(1e2, 0, 1e-10).levels();
         long hundredMillion = Amplitudes.coherent(1e8, 0, 1e-10).levels();
         // √(1e8 / 1e2) = 1000; skewness moves the edges of the small window by a level or two of 188.
-        assertTrue(Math.abs(hundredMillion - 1000 * hundred) <= 20 * hundred, hundredMillion + " levels against " + hundred);
+        assertTrue(
+                Math.abs(hundredMillion - 1000 * hundred) <= 20 * hundred,
+                hundredMillion + " levels against " + hundred);
     }
 
     @Test

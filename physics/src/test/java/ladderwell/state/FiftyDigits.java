@@ -10,8 +10,10 @@ public final class FiftyDigits {
     public static final MathContext DIGITS = new MathContext(60);
 
     // OEIS A000796 and A002162.
-    public static final BigDecimal PI = new BigDecimal("3.14159265358979323846264338327950288419716939937510582097494459230781640628620899");
-    public static final BigDecimal LN2 = new BigDecimal("0.69314718055994530941723212145817656807550013436025525412068000949339362196969471");
+    public static final BigDecimal PI =
+            new BigDecimal("3.14159265358979323846264338327950288419716939937510582097494459230781640628620899");
+    public static final BigDecimal LN2 =
+            new BigDecimal("0.69314718055994530941723212145817656807550013436025525412068000949339362196969471");
 
     private FiftyDigits() {}
 
@@ -20,7 +22,8 @@ public final class FiftyDigits {
     }
 
     public static BigDecimal exp(BigDecimal x) {
-        BigInteger twos = x.divide(LN2, DIGITS).setScale(0, RoundingMode.HALF_EVEN).toBigInteger();
+        BigInteger twos =
+                x.divide(LN2, DIGITS).setScale(0, RoundingMode.HALF_EVEN).toBigInteger();
         // Guard digits for the reduction of a large argument.
         BigDecimal r = x.subtract(LN2.multiply(new BigDecimal(twos)), new MathContext(80));
         r = r.divide(BigDecimal.valueOf(256), DIGITS);
@@ -65,16 +68,31 @@ public final class FiftyDigits {
         }
         BigDecimal big = BigDecimal.valueOf(n);
         MathContext wide = new MathContext(75);
-        BigDecimal sum = big.add(new BigDecimal("0.5")).multiply(ln(big), wide).subtract(big, wide)
+        BigDecimal sum = big.add(new BigDecimal("0.5"))
+                .multiply(ln(big), wide)
+                .subtract(big, wide)
                 .add(ln(PI.multiply(BigDecimal.valueOf(2), DIGITS)).divide(BigDecimal.valueOf(2), DIGITS), wide);
         // B_2k / (2k (2k − 1) n^(2k − 1)); Bernoulli numbers B_2 … B_28.
         long[][] bernoulli = {
-            {1, 6}, {-1, 30}, {1, 42}, {-1, 30}, {5, 66}, {-691, 2730}, {7, 6}, {-3617, 510}, {43867, 798},
-            {-174611, 330}, {854513, 138}, {-236364091, 2730}, {8553103, 6}, {-23749461029L, 870}
+            {1, 6},
+            {-1, 30},
+            {1, 42},
+            {-1, 30},
+            {5, 66},
+            {-691, 2730},
+            {7, 6},
+            {-3617, 510},
+            {43867, 798},
+            {-174611, 330},
+            {854513, 138},
+            {-236364091, 2730},
+            {8553103, 6},
+            {-23749461029L, 870}
         };
         for (int k = 1; k <= bernoulli.length; k++) {
             BigDecimal numerator = BigDecimal.valueOf(bernoulli[k - 1][0]);
-            BigDecimal denominator = BigDecimal.valueOf(bernoulli[k - 1][1]).multiply(BigDecimal.valueOf(2L * k * (2 * k - 1)))
+            BigDecimal denominator = BigDecimal.valueOf(bernoulli[k - 1][1])
+                    .multiply(BigDecimal.valueOf(2L * k * (2 * k - 1)))
                     .multiply(big.pow(2 * k - 1));
             sum = sum.add(numerator.divide(denominator, DIGITS), wide);
         }
@@ -85,14 +103,17 @@ public final class FiftyDigits {
     public static BigDecimal poisson(double mean, long n) {
         BigDecimal mu = of(mean);
         MathContext wide = new MathContext(75);
-        BigDecimal log = ln(mu).multiply(BigDecimal.valueOf(n), wide).subtract(mu, wide).subtract(lnFactorial(n), wide);
+        BigDecimal log =
+                ln(mu).multiply(BigDecimal.valueOf(n), wide).subtract(mu, wide).subtract(lnFactorial(n), wide);
         return exp(log);
     }
 
     /** {cos x, sin x}. */
     public static BigDecimal[] cosSin(BigDecimal x) {
         BigDecimal half = PI.divide(BigDecimal.valueOf(2));
-        BigInteger quarter = x.divide(half, new MathContext(80)).setScale(0, RoundingMode.HALF_EVEN).toBigInteger();
+        BigInteger quarter = x.divide(half, new MathContext(80))
+                .setScale(0, RoundingMode.HALF_EVEN)
+                .toBigInteger();
         BigDecimal r = x.subtract(half.multiply(new BigDecimal(quarter)));
         BigDecimal c = BigDecimal.ZERO;
         BigDecimal s = BigDecimal.ZERO;

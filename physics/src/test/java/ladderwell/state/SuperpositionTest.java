@@ -11,8 +11,8 @@ import org.junit.jupiter.api.Test;
 class SuperpositionTest {
     @Test
     void levelsThreeApartMakeTwoSegmentsAndTwoApartMakeOne() {
-        Amplitudes state =
-                Amplitudes.superposition(new long[] {10, 0, 2, 7}, new double[] {1, 1, 0, 2}, new double[] {0, 0, 1, 0});
+        Amplitudes state = Amplitudes.superposition(
+                new long[] {10, 0, 2, 7}, new double[] {1, 1, 0, 2}, new double[] {0, 0, 1, 0});
         assertEquals(3, state.segments());
         assertEquals(0, state.first(0));
         assertEquals(3, state.length(0));
@@ -76,13 +76,20 @@ class SuperpositionTest {
 
     @Test
     void badSuperpositionsAreNamed() {
-        says("level 4 appears twice", () -> Amplitudes.superposition(new long[] {4, 4}, new double[2], new double[] {1, 1}));
-        says("all weights of the superposition are zero", () -> Amplitudes.superposition(new long[] {4}, new double[1], new double[1]));
-        says("level -2 does not exist", () -> Amplitudes.superposition(new long[] {-2}, new double[] {1}, new double[1]));
+        says(
+                "level 4 appears twice",
+                () -> Amplitudes.superposition(new long[] {4, 4}, new double[2], new double[] {1, 1}));
+        says(
+                "all weights of the superposition are zero",
+                () -> Amplitudes.superposition(new long[] {4}, new double[1], new double[1]));
+        says(
+                "level -2 does not exist",
+                () -> Amplitudes.superposition(new long[] {-2}, new double[] {1}, new double[1]));
         says("level -1 does not exist", () -> Amplitudes.level(-1));
         says("got 2 levels, 1 real", () -> Amplitudes.superposition(new long[] {1, 2}, new double[1], new double[2]));
         says("at least one level", () -> Amplitudes.superposition(new long[0], new double[0], new double[0]));
-        says("weight of level 1 is not a finite number", () ->
-                Amplitudes.superposition(new long[] {1}, new double[] {Double.NaN}, new double[1]));
+        says(
+                "weight of level 1 is not a finite number",
+                () -> Amplitudes.superposition(new long[] {1}, new double[] {Double.NaN}, new double[1]));
     }
 }
