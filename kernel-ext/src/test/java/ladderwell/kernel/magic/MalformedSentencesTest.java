@@ -37,9 +37,53 @@ class MalformedSentencesTest {
             "%%declare\noscillator x: box,\n   mass 1 u, # comment\n   width 3 nm\n\nstate y: number in x, level 2");
 
     private static final List<String> SCRAPS = List.of(
-            ",", ":", "{", "}", "\"", "'", "#", "%", "\n", "\r", "\t", " ", "\u00a0", "\u0000", "\u001b", "\ud800", "\udc00",
-            "−", "NaN", "Infinity", "1e999", "-1", "1e-400", "/", "^", "i", "+", "..", "{{}", "\\", "for", "in", "mass", "u",
-            "m", "levels", "natural", "ψ", "\u202e", "\ud83c\udf0a", "٣", "e", "1_0", "=", "(", "kg m/s", "%%");
+            ",",
+            ":",
+            "{",
+            "}",
+            "\"",
+            "'",
+            "#",
+            "%",
+            "\n",
+            "\r",
+            "\t",
+            " ",
+            "\u00a0",
+            "\u0000",
+            "\u001b",
+            "\ud800",
+            "\udc00",
+            "−",
+            "NaN",
+            "Infinity",
+            "1e999",
+            "-1",
+            "1e-400",
+            "/",
+            "^",
+            "i",
+            "+",
+            "..",
+            "{{}",
+            "\\",
+            "for",
+            "in",
+            "mass",
+            "u",
+            "m",
+            "levels",
+            "natural",
+            "ψ",
+            "\u202e",
+            "\ud83c\udf0a",
+            "٣",
+            "e",
+            "1_0",
+            "=",
+            "(",
+            "kg m/s",
+            "%%");
 
     private static String mutated(Random random) {
         StringBuilder text = new StringBuilder(GOOD.get(random.nextInt(GOOD.size())));
@@ -115,7 +159,9 @@ class MalformedSentencesTest {
                 String text = before + much;
                 try {
                     bench.run(text);
-                    assertTrue(much.isBlank() || scrap.equals("\u00a0") || scrap.equals("#"), () -> "accepted much of " + scrap);
+                    assertTrue(
+                            much.isBlank() || scrap.equals("\u00a0") || scrap.equals("#"),
+                            () -> "accepted much of " + scrap);
                 } catch (SentenceFailure failure) {
                     assertTrue(failure.message().length() < 200, failure.message());
                 }
