@@ -310,13 +310,14 @@ class Screenshots(unittest.TestCase):
     """Kept for people to look at."""
 
     def test_light_and_dark(self):
-        browser = Browser(size="830,700")
+        browser = Browser(size="830,1400")
         try:
             for page in ("light", "dark"):
                 driver = browser.open(page + ".html")
                 drawn(driver, 5)
                 root = driver.find_elements(By.CSS_SELECTOR, ".lw")[0]
-                driver.execute_script("arguments[0].ladderwell.show(52)", root)
+                driver.execute_script("arguments[0].ladderwell.show(52);window.scrollTo(0,0);"
+                                      "window.scrollTo(0,arguments[0].getBoundingClientRect().top-20)", root)
                 time.sleep(0.3)
                 path = os.path.join(PICTURES, "animation-" + page + ".png")
                 self.assertTrue(root.screenshot(path))

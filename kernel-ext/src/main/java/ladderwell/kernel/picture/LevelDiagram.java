@@ -20,6 +20,7 @@ final class LevelDiagram {
     private final String name;
     private final Oscillator oscillator;
     private final long[] levels;
+    private final int asked;
     private final double[] energies;
     private final double[][] waves;
     private final double[] x;
@@ -35,6 +36,7 @@ final class LevelDiagram {
         this.name = name;
         this.oscillator = oscillator;
         long[] sorted = Arrays.stream(asked).sorted().distinct().toArray();
+        this.asked = sorted.length;
         this.levels = Arrays.copyOf(sorted, Math.min(sorted.length, MOST_LEVELS));
         if (levels.length == 0) {
             throw new IllegalArgumentException("a picture of levels needs at least one level");
@@ -172,7 +174,8 @@ final class LevelDiagram {
 
     String description() {
         String which = count() == 1 ? "Level " + levels[0] : "Levels " + levels[0] + " to " + levels[count() - 1];
-        return which + " of " + name + " (" + oscillator.kind() + ") with " + (count() == 1 ? "its wave function" : "their wave functions")
+        String part = asked > count() ? ", the lowest " + count() + " of " + asked + "," : "";
+        return which + " of " + name + " (" + oscillator.kind() + ")" + part + " with " + (count() == 1 ? "its wave function" : "their wave functions")
                 + ", in the potential; energies from " + Written.number(energy(0), 4) + " to "
                 + Written.number(energy(count() - 1), 4) + Written.behind(energyUnit()) + ".";
     }

@@ -101,6 +101,11 @@ final class Motion {
         return stride;
     }
 
+    /** How many positions of the grid one shown position stands for. */
+    int pointStride() {
+        return pointStride;
+    }
+
     /** Number of positions shown. */
     int points() {
         return (density.points() - 1) / pointStride + 1;

@@ -44,7 +44,7 @@ public final class MotionPicture {
     public String html(Easel easel) {
         Run run = motion.run();
         String verdict = "<b>" + Markup.text(motion.name()) + "</b> " + Markup.text(run.verdict());
-        String thinned = motion.stride() == 1 ? "" : " · every " + ordinal(motion.stride()) + " frame is shown";
+        String thinned = thinned(motion.stride(), "frame") + thinned(motion.pointStride(), "position");
         return easel.picture(
                 "motion",
                 motion.name(),
@@ -54,7 +54,10 @@ public final class MotionPicture {
                 Markup.text(run.errorLine() + thinned));
     }
 
-    /** Frames shown, sampled down from the run's own, as the error line says it. */
+    private static String thinned(int stride, String what) {
+        return stride == 1 ? "" : " · every " + ordinal(stride) + " " + what + " is shown";
+    }
+
     private static String ordinal(int n) {
         String ending = n % 100 >= 11 && n % 100 <= 13
                 ? "th"

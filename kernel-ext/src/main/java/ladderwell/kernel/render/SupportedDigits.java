@@ -1,5 +1,9 @@
 package ladderwell.kernel.render;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.math.RoundingMode;
+import java.util.Optional;
 import ladderwell.evidence.Bound;
 import ladderwell.kernel.picture.Markup;
 import ladderwell.quantity.Digits;
@@ -25,9 +29,26 @@ record SupportedDigits(double value, Bound bound, String unit) {
         if (bound.isExact() || bound.size() < Double.MIN_NORMAL) {
             return Digits.pretty(Digits.shortest(value));
         }
-        // A wider bound is still a bound; this one drops the digits beyond the tenth.
-        double least = Math.abs(value) * 0.5 * Math.pow(10, 1 - MOST);
-        return Digits.pretty(Digits.withBound(value, Math.max(bound.size(), least)));
+        return Digits.pretty(withinMost().orElseGet(() -> Digits.withBound(value, bound.size())));
+    }
+
+    /** Rounded to the most digits shown, if the bound supports more: off by less than 1 in the last of them. */
+    private Optional<String> withinMost() {
+        if (value == 0) {
+            return Optional.empty();
+        }
+        BigDecimal exact = new BigDecimal(value);
+        BigDecimal rounded = exact.round(new MathContext(MOST, RoundingMode.HALF_EVEN));
+        rounded = rounded.setScale(rounded.scale() + MOST - rounded.precision());
+        BigDecimal unit = BigDecimal.ONE.scaleByPowerOfTen(-rounded.scale());
+        if (!bound.isKnown() || new BigDecimal(bound.size()).add(exact.subtract(rounded).abs()).compareTo(unit) > 0) {
+            return Optional.empty();
+        }
+        int top = MOST - 1 - rounded.scale();
+        if (top >= -4 && top < 7) {
+            return Optional.of(rounded.toPlainString() + "(1)");
+        }
+        return Optional.of(rounded.scaleByPowerOfTen(-top).toPlainString() + "(1)e" + top);
     }
 
     private String behind() {
