@@ -108,7 +108,17 @@ public final class SideBySide {
                 tuned == plain ? "" : shown(ratios(ours, tuned)),
                 String.format(Locale.ROOT, "%.1e %.1e", error, plain.error()),
                 String.format(Locale.ROOT, "%.3g %s", task.goal(), met ? "met" : "MISSED"));
+        StringBuilder times = new StringBuilder("shortest runs in ms, " + task.name() + ", threads " + task.threads());
+        times.append(String.format(Locale.ROOT, ": ours %.3g", median(ours)));
+        others.forEach((name, of) -> times.append(String.format(Locale.ROOT, "; %s %.3g", name, median(of))));
+        note(times.toString());
         return met;
+    }
+
+    private static double median(double[] values) {
+        double[] sorted = values.clone();
+        Arrays.sort(sorted);
+        return sorted[sorted.length / 2];
     }
 
     private void note(String text) {
@@ -133,8 +143,7 @@ public final class SideBySide {
     }
 
     private static double median(Times times) {
-        double[] sorted = times.milliseconds().stream().mapToDouble(t -> t).sorted().toArray();
-        return sorted[sorted.length / 2];
+        return median(times.milliseconds().stream().mapToDouble(t -> t).toArray());
     }
 
     /** The ratios of each round, sorted. */
@@ -161,11 +170,11 @@ public final class SideBySide {
         }
     }
 
-    /** Shortest time of one run in a sample of at least 80 ms or three runs, as in partner.py: what the machine can do undisturbed. */
+    /** Shortest time of one run in a sample of at least 300 ms or three runs, as in partner.py: what the machine can do undisturbed. */
     private static double milliseconds(Runnable run) {
         double shortest = Double.POSITIVE_INFINITY;
         long start = System.nanoTime();
-        for (int i = 0; i < 3 || System.nanoTime() - start < 80_000_000L; i++) {
+        for (int i = 0; i < 3 || System.nanoTime() - start < 300_000_000L; i++) {
             long before = System.nanoTime();
             run.run();
             shortest = Math.min(shortest, (System.nanoTime() - before) * 1e-6);
