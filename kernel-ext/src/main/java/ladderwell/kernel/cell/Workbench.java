@@ -56,6 +56,8 @@ public final class Workbench implements AutoCloseable {
     public static List<String> standardImports() {
         return List.of(
                 "ladderwell.*",
+                "ladderwell.Observable",
+                "static ladderwell.Observable.*",
                 "static ladderwell.quantity.Units.*",
                 "static ladderwell.kernel.cell.Show.*",
                 "tech.tablesaw.api.*",

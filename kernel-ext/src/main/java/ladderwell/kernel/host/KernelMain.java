@@ -40,7 +40,7 @@ public final class KernelMain {
      * @param renderer shows what cells return
      * @return the exit code for the process; threads of cells may still be there, so exit with it
      */
-    static int serve(Path connectionFile, Sentences sentences, Renderer renderer) {
+    public static int serve(Path connectionFile, Sentences sentences, Renderer renderer) {
         Optional<String> unfit = unfitJava();
         if (unfit.isPresent()) {
             return refuse(unfit.get());

@@ -1,0 +1,31 @@
+package ladderwell.kernel.magic;
+
+import java.util.Optional;
+import ladderwell.Evolution;
+import ladderwell.Run;
+import ladderwell.kernel.sentence.Sentence;
+import ladderwell.quantity.Quantity;
+
+/** {@code evolve run: psi for 3 periods, frames 120, tolerance 1e-9}. */
+final class EvolveMagic implements Magic {
+
+    @Override
+    public Optional<Promise> promise(Sentence sentence) {
+        return Optional.of(new Promise(sentence.name(), Run.class, sentence.namePlace()));
+    }
+
+    @Override
+    public Outcome carryOut(Sentence sentence, Things things) {
+        Quantity duration = sentence.quantity("for");
+        Evolution evolution =
+                things.state(sentence.reference("state")).evolve(duration.value(), duration.unit());
+        if (sentence.has("frames")) {
+            evolution = evolution.frames(sentence.count("frames"));
+        }
+        if (sentence.has("tolerance")) {
+            evolution = evolution.tolerance(sentence.number("tolerance"));
+        }
+        Run run = evolution.run();
+        return new Outcome(new Declared(sentence.name(), "evolve", run), run);
+    }
+}

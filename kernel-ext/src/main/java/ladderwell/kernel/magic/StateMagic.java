@@ -1,0 +1,100 @@
+package ladderwell.kernel.magic;
+
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import ladderwell.Box;
+import ladderwell.Coherent;
+import ladderwell.FiniteWell;
+import ladderwell.Harmonic;
+import ladderwell.NumberState;
+import ladderwell.Oscillator;
+import ladderwell.Packet;
+import ladderwell.State;
+import ladderwell.Superposition;
+import ladderwell.kernel.sentence.Complex;
+import ladderwell.kernel.sentence.MisreadSentence;
+import ladderwell.kernel.sentence.Sentence;
+import ladderwell.quantity.Quantity;
+import ladderwell.quantity.Unit;
+import ladderwell.quantity.Units;
+
+/** {@code state psi: coherent in trap, mean 9.5, phase 30 deg}. */
+final class StateMagic implements Magic {
+    private static final Map<String, Class<?>> TYPES = Map.of(
+            "number", NumberState.class,
+            "coherent", Coherent.class,
+            "superposition", Superposition.class,
+            "gaussian", Packet.class);
+
+    @Override
+    public Optional<Promise> promise(Sentence sentence) {
+        return Optional.of(
+                new Promise(sentence.name(), TYPES.getOrDefault(sentence.kind(), State.class), sentence.namePlace()));
+    }
+
+    @Override
+    public Outcome carryOut(Sentence sentence, Things things) throws MisreadSentence {
+        Oscillator oscillator = things.oscillator(sentence.reference("in"));
+        State state =
+                switch (sentence.kind()) {
+                    case "number" -> oscillator.number(sentence.count("level"));
+                    case "coherent" -> coherent(sentence, (Harmonic) oscillator);
+                    case "superposition" -> superposition(sentence, oscillator);
+                    case "gaussian" -> gaussian(sentence, oscillator);
+                    default -> throw new IllegalStateException("no state is made of kind " + sentence.kind());
+                };
+        return new Outcome(new Declared(sentence.name(), "state", state), state);
+    }
+
+    private static Coherent coherent(Sentence sentence, Harmonic oscillator) {
+        if (sentence.has("mean")) {
+            Coherent state = oscillator.coherent(sentence.number("mean"));
+            if (sentence.has("phase")) {
+                Quantity phase = sentence.quantity("phase");
+                return state.phase(phase.value(), phase.unit());
+            }
+            return state;
+        }
+        if (sentence.has("alpha")) {
+            Complex alpha = sentence.complex("alpha");
+            return oscillator.coherentAlpha(alpha.re(), alpha.im());
+        }
+        return oscillator.coherentAt(
+                orZero(sentence, "displacement", Units.METRE),
+                orZero(sentence, "momentum", Units.KILOGRAM_METRE_PER_SECOND));
+    }
+
+    private static Quantity orZero(Sentence sentence, String key, Unit unit) {
+        return sentence.has(key) ? sentence.quantity(key) : Quantity.of(0, sentence.natural() ? Units.ONE : unit);
+    }
+
+    private static Superposition superposition(Sentence sentence, Oscillator oscillator) throws MisreadSentence {
+        List<Long> levels = sentence.counts("levels");
+        Superposition equal = (Superposition)
+                oscillator.superposition(levels.stream().mapToLong(Long::longValue).toArray());
+        if (!sentence.has("weights")) {
+            return equal;
+        }
+        List<Complex> weights = sentence.complexes("weights");
+        if (weights.size() != levels.size()) {
+            throw new MisreadSentence(
+                    "there are " + levels.size() + " levels but " + weights.size()
+                            + " weights; expected one weight for each level, in the same order",
+                    sentence.placeOf("weights"));
+        }
+        return equal.weights(
+                weights.stream().mapToDouble(Complex::re).toArray(),
+                weights.stream().mapToDouble(Complex::im).toArray());
+    }
+
+    private static Packet gaussian(Sentence sentence, Oscillator oscillator) {
+        Quantity position = orZero(sentence, "position", Units.METRE);
+        Quantity momentum = orZero(sentence, "momentum", Units.KILOGRAM_METRE_PER_SECOND);
+        Quantity spread = sentence.quantity("spread");
+        if (oscillator instanceof Box box) {
+            return box.gaussian(position, momentum, spread);
+        }
+        return ((FiniteWell) oscillator).gaussian(position, momentum, spread);
+    }
+}

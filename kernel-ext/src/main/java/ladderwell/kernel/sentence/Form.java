@@ -1,0 +1,23 @@
+package ladderwell.kernel.sentence;
+
+/** What the value of a key looks like. */
+public enum Form {
+    /** The key alone, without a value. */
+    FLAG,
+    /** A number with a unit; a plain number in natural units. */
+    QUANTITY,
+    /** A real number without a unit. */
+    NUMBER,
+    /** A whole number. */
+    COUNT,
+    /** A complex number such as 1.5+0.5i. */
+    COMPLEX,
+    /** Whole numbers, parted by blanks. */
+    COUNTS,
+    /** Complex numbers, parted by blanks. */
+    COMPLEXES,
+    /** The name of something declared before. */
+    REFERENCE,
+    /** A new name. */
+    NEW_NAME
+}

@@ -1,0 +1,70 @@
+package ladderwell;
+
+import java.util.ArrayList;
+import java.util.List;
+import ladderwell.quantity.Kind;
+import ladderwell.quantity.Quantity;
+import ladderwell.quantity.Scale;
+import ladderwell.state.Amplitudes;
+
+/**
+ * A Gaussian packet in a box or a finite well: mean position and momentum, and the spread Δx; Δx Δp = ħ/2 at time 0.
+ *
+ * @param oscillator a box or a finite well
+ * @param position mean position, measured from the middle
+ * @param momentum mean momentum
+ * @param spread Δx
+ */
+public record Packet(Oscillator oscillator, Quantity position, Quantity momentum, Quantity spread) implements State {
+
+    public Packet {
+        boolean natural = oscillator.scale().isNatural();
+        Checks.kind("position", position, natural ? Kind.NUMBER : Kind.LENGTH);
+        Checks.kind("momentum", momentum, natural ? Kind.NUMBER : Kind.MOMENTUM);
+        Checks.positive("spread", spread, natural ? Kind.NUMBER : Kind.LENGTH);
+    }
+
+    @Override
+    public String kind() {
+        return "gaussian";
+    }
+
+    @Override
+    public Amplitudes amplitudes(double tolerance) {
+        Scale scale = oscillator.scale();
+        return Amplitudes.packet(
+                oscillator.levels(),
+                position.si() / scale.length(),
+                momentum.si() / scale.momentum(),
+                spread.si() / scale.length(),
+                tolerance);
+    }
+
+    /** ⟨p²⟩/2m of the free packet; the walls change it only through what leaks into them. */
+    @Override
+    public double meanEnergy() {
+        Scale scale = oscillator.scale();
+        double p = momentum.si() / scale.momentum();
+        double dp = 0.5 / (spread.si() / scale.length());
+        return (p * p + dp * dp) / 2;
+    }
+
+    @Override
+    public List<Fact> facts() {
+        Scale scale = oscillator.scale();
+        Shown shown = new Shown(scale);
+        List<Fact> facts = new ArrayList<>(given());
+        facts.add(shown.fact(
+                "spread of momentum", "Δp = ħ/2Δx", Kind.MOMENTUM, 0.5 * scale.length() / spread.si() * scale.momentum(), 0));
+        facts.add(shown.energy("mean energy", "⟨p²⟩/2m", meanEnergy(), oscillator));
+        return List.copyOf(facts);
+    }
+
+    @Override
+    public List<Fact> given() {
+        return List.of(
+                Fact.exact("position", "⟨x⟩", position),
+                Fact.exact("momentum", "⟨p⟩", momentum),
+                Fact.exact("spread", "Δx", spread));
+    }
+}

@@ -1,0 +1,73 @@
+package ladderwell.classical;
+
+/** The orbit of a classical particle of mass 1: its position and momentum at any time, in closed form. */
+public interface ClassicalOrbit {
+
+    /** Position at time t. */
+    double position(double time);
+
+    /** Momentum at time t. */
+    double momentum(double time);
+
+    /** The outermost position on the +x side. */
+    double turningPoint();
+
+    /** The harmonic orbit (H = (p² + x²)/2) through the given point. */
+    static ClassicalOrbit harmonic(double position, double momentum) {
+        return new Harmonic(position, momentum);
+    }
+
+    /**
+     * Free flight between hard walls at ±half, at the given energy, starting at the position in the direction of the
+     * momentum's sign (to the right where that is 0).
+     */
+    static ClassicalOrbit bouncing(double position, double momentum, double energy, double half) {
+        double start = Math.max(-half, Math.min(half, position));
+        double speed = Math.sqrt(2 * energy);
+        return new Bouncing(start, momentum < 0 ? -speed : speed, half);
+    }
+
+    /** x = x₀ cos t + p₀ sin t. */
+    record Harmonic(double startPosition, double startMomentum) implements ClassicalOrbit {
+        @Override
+        public double position(double time) {
+            return startPosition * Math.cos(time) + startMomentum * Math.sin(time);
+        }
+
+        @Override
+        public double momentum(double time) {
+            return startMomentum * Math.cos(time) - startPosition * Math.sin(time);
+        }
+
+        @Override
+        public double turningPoint() {
+            return Math.hypot(startPosition, startMomentum);
+        }
+    }
+
+    /** Uniform motion, folded at the walls. */
+    record Bouncing(double startPosition, double startVelocity, double half) implements ClassicalOrbit {
+        /** Distance from the left wall on the unfolded line, modulo a round trip of 4·half. */
+        private double unfolded(double time) {
+            double trip = 4 * half;
+            double s = (startPosition + half + startVelocity * time) % trip;
+            return s < 0 ? s + trip : s;
+        }
+
+        @Override
+        public double position(double time) {
+            double s = unfolded(time);
+            return s <= 2 * half ? s - half : 3 * half - s;
+        }
+
+        @Override
+        public double momentum(double time) {
+            return unfolded(time) <= 2 * half ? startVelocity : -startVelocity;
+        }
+
+        @Override
+        public double turningPoint() {
+            return half;
+        }
+    }
+}

@@ -1,0 +1,57 @@
+package ladderwell.numeric;
+
+/**
+ * The inner loops that the compiler does not make fast by itself: sums along rows and the innermost block of a matrix product. They come
+ * in two kinds, plain and with the Vector API; which one runs is chosen once.
+ */
+interface Loops {
+    /** Rows of the left factor that {@link #product} takes together. */
+    int ROWS = 4;
+
+    /** Sums that {@link #ladder} adds to: Re, Im of Σ c* b; Σ|b|²; Re, Im of Σ g* b. */
+    int LADDER_SUMS = 5;
+
+    /** The loops of this machine: with the Vector API where its module is present. */
+    static Loops chosen() {
+        return Chosen.LOOPS;
+    }
+
+    /** Columns of the right factor that {@link #product} takes together. */
+    int columns();
+
+    /**
+     * The product of a panel of {@link #ROWS} rows and a panel of {@link #columns} columns:
+     * c[r][j] (+)= Σ_l a[l][r] b[l][j], summed in ascending order of l.
+     *
+     * @shape a is [depth][ROWS] from aAt, b is [depth][columns] from bAt, c is rows of {@code stride} from cAt
+     * @param add whether c is added to (true) or overwritten
+     */
+    void product(
+            double[] a, int aAt, double[] b, int bAt, int depth, boolean add, double[] c, int cAt, int stride);
+
+    /**
+     * Sums over levels n for b_n = √(n+1) c_{n+1} - α c_n and g_n = √n c_{n-1} - α* c_n, which are (a - α)c and (a - α)†c:
+     * adds Σ c* b, Σ |b|², Σ g* b to sums.
+     *
+     * @shape re, im hold c_{n-1} for the first n at entry 0, thus [count + 2]; up, down hold √(n+1), √n, [count] from weightAt;
+     *     sums is [LADDER_SUMS] from sumAt
+     */
+    void ladder(
+            double[] re,
+            double[] im,
+            double[] up,
+            double[] down,
+            int weightAt,
+            int count,
+            double alphaRe,
+            double alphaIm,
+            double[] sums,
+            int sumAt);
+
+    /** Holds the choice, made when first asked for. */
+    final class Chosen {
+        private static final Loops LOOPS = VectorSupport.available() ? new VectorLoops() : new PlainLoops();
+
+        private Chosen() {}
+    }
+}

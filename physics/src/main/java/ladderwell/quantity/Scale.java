@@ -1,0 +1,129 @@
+package ladderwell.quantity;
+
+/**
+ * What 1 means inside the library for one oscillator: a mass and a length; with ħ they fix momentum, energy and time.
+ *
+ * <p>Lab scales carry ħ of the SI; the natural scale has mass = length = ħ = 1, and its units have no symbols.
+ *
+ * @param mass kg, or 1 when natural; positive
+ * @param length m, or 1 when natural; positive
+ * @param hbar J s, or 1 when natural; positive
+ */
+public record Scale(double mass, double length, double hbar) {
+
+    private static final Scale NATURAL = new Scale(1, 1, 1);
+
+    /** Refuses what is not finite and positive, and scales whose energy or time would leave the range of doubles. */
+    public Scale {
+        require("mass", mass);
+        require("length", length);
+        require("hbar", hbar);
+        double energy = hbar / mass * (hbar / length) / length;
+        double time = mass / hbar * length * length;
+        if (!(energy > 0 && energy < Double.POSITIVE_INFINITY && time > 0 && time < Double.POSITIVE_INFINITY)) {
+            throw new IllegalArgumentException("a mass of " + Digits.significant(mass, 3) + " kg and a length of "
+                    + Digits.significant(length, 3) + " m give an energy or time outside the range of numbers");
+        }
+    }
+
+    private static void require(String what, double value) {
+        if (!(value > 0) || Double.isInfinite(value)) {
+            throw new IllegalArgumentException(
+                    "the " + what + " of a scale must be finite and above 0, not " + Digits.text(value));
+        }
+    }
+
+    /**
+     * Lab scale.
+     *
+     * @param mass kg
+     * @param length m
+     */
+    public static Scale of(double mass, double length) {
+        return new Scale(mass, length, Constants.HBAR);
+    }
+
+    /** ħ = m = length = 1; symbols are empty. */
+    public static Scale natural() {
+        return NATURAL;
+    }
+
+    /**
+     * Scale of a harmonic oscillator, ℓ = √(ħ/(mω)); its time is 1/ω and its energy ħω. The root mean square position in
+     * the ground state, √(ħ/(2mω)), is ℓ/√2.
+     *
+     * @param mass kg
+     * @param omega rad/s
+     */
+    public static Scale harmonic(double mass, double omega) {
+        require("mass", mass);
+        if (!(omega > 0) || Double.isInfinite(omega)) {
+            throw new IllegalArgumentException(
+                    "the angular frequency of a scale must be finite and above 0, not " + Digits.text(omega));
+        }
+        return of(mass, Math.sqrt(Constants.HBAR / mass / omega));
+    }
+
+    /** True for {@link #natural()}. */
+    public boolean isNatural() {
+        return hbar == 1;
+    }
+
+    /** ħ/ℓ, kg m/s. */
+    public double momentum() {
+        return hbar / length;
+    }
+
+    /** ħ²/(mℓ²), J. */
+    public double energy() {
+        return hbar / mass * (hbar / length) / length;
+    }
+
+    /** mℓ²/ħ, s. */
+    public double time() {
+        return mass / hbar * length * length;
+    }
+
+    /** ħ/(mℓ²), rad/s. */
+    public double angularFrequency() {
+        return hbar / mass / length / length;
+    }
+
+    /** SI value (or natural value) of one scaled unit of a kind; 1 for kinds that a scale does not touch. */
+    public double of(Kind kind) {
+        return switch (kind) {
+            case MASS -> mass;
+            case LENGTH -> length;
+            case TIME -> time();
+            case MOMENTUM -> momentum();
+            case ENERGY -> energy();
+            case ANGULAR_FREQUENCY -> angularFrequency();
+            case CYCLE_FREQUENCY -> isNatural() ? 1 : angularFrequency();
+            default -> 1;
+        };
+    }
+
+    /**
+     * The unit to print a whole column in, chosen so that its largest magnitude reads between 1 and 1000.
+     *
+     * <p>Energies print in prefixed electronvolts, masses in electron masses, u or kg, wavenumbers in /cm, and momenta in
+     * ħ over a prefixed metre: beside positions in that length, Δx Δp ≥ ħ/2 can be read off the table. In the natural
+     * scale the symbols are empty.
+     *
+     * @param magnitude largest absolute value in the column, SI; for 0 the scale's own size of the kind is taken
+     * @throws IllegalArgumentException if the magnitude is not finite
+     */
+    public Unit display(Kind kind, double magnitude) {
+        if (!Double.isFinite(magnitude)) {
+            throw new IllegalArgumentException(
+                    "no unit can be chosen for " + kind.word() + " of size " + Digits.text(magnitude));
+        }
+        if (isNatural()) {
+            return switch (kind) {
+                case ANGLE, SQUEEZING, PERIODS, NUMBER -> Units.si(kind);
+                default -> Units.natural(kind);
+            };
+        }
+        return Prefixes.display(kind, magnitude == 0 ? of(kind) : Math.abs(magnitude));
+    }
+}

@@ -1,0 +1,13 @@
+/**
+ * States as amplitudes on levels.
+ *
+ * <p>A <em>window</em> is a run of consecutive kept levels; a state keeps one or more of them ({@code segments}).
+ * What is left out is always measured and carried as a guaranteed error.
+ *
+ * <p>Read {@link ladderwell.state.Amplitudes} first; then {@code PoissonWindow} and {@code ExactTurns} for coherent states, and {@code
+ * PacketState} with {@code PacketOverlaps} (closed forms) and {@code LeakingOverlaps} (quadrature) for Gaussian packets.
+ */
+@NullMarked
+package ladderwell.state;
+
+import org.jspecify.annotations.NullMarked;
