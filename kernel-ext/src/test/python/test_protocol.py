@@ -132,7 +132,7 @@ class ProtocolTests(unittest.TestCase):
         self.km.interrupt_kernel()
         # It travels on a channel of its own: only one that has arrived says anything about the cell after it.
         while True:
-            message = self.kc.get_iopub_msg(timeout=60)
+            message = self.kc.get_iopub_msg(timeout=PATIENCE)
             if message["parent_header"].get("msg_type") == "interrupt_request":
                 if message["content"].get("execution_state") == "idle":
                     break
