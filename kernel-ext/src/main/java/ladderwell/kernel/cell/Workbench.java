@@ -9,6 +9,7 @@ import java.util.function.Consumer;
 import ladderwell.kernel.session.JavaEnd;
 import ladderwell.kernel.session.JavaSession;
 import ladderwell.kernel.session.Suggestions;
+import ladderwell.kernel.session.WarmUp;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -55,6 +56,8 @@ public final class Workbench implements AutoCloseable {
     public static List<String> standardImports() {
         return List.of(
                 "ladderwell.*",
+                "ladderwell.Observable",
+                "static ladderwell.Observable.*",
                 "static ladderwell.quantity.Units.*",
                 "static ladderwell.kernel.cell.Show.*",
                 "tech.tablesaw.api.*",
@@ -67,9 +70,30 @@ public final class Workbench implements AutoCloseable {
                 "static java.lang.Math.*");
     }
 
-    /** Starts the Java session in the background, unless it has been started already. */
+    /**
+     * Starts the Java session in the background, unless it has been started already, and makes it quick while no cell
+     * runs. For notebooks that people type in; without it the session starts when it is first needed.
+     */
     public void startJava() {
-        CompletableFuture<JavaSession> unused = java();
+        CompletableFuture<Void> unused = java().thenRun(() -> {
+            Thread thread = new Thread(this::practise, "java practice");
+            thread.setDaemon(true);
+            thread.start();
+        });
+    }
+
+    private void practise() {
+        try {
+            WarmUp.practise(imports, () -> {
+                synchronized (phaseLock) {
+                    return runner == null;
+                }
+            });
+        } catch (InterruptedException e) {
+            Thread.currentThread().interrupt();
+        } catch (RuntimeException | LinkageError e) {
+            // Cells will be slower for a while, that is all.
+        }
     }
 
     private CompletableFuture<JavaSession> java() {

@@ -19,6 +19,7 @@ public final class Ladderwell {
 
     /** Serves a kernel until it is shut down; why it could not be started is said on standard error. */
     static int serve(Path connectionFile) {
+        Practice.startInBackground();
         return KernelMain.serve(connectionFile, new Declarations(), new Renderings());
     }
 }

@@ -21,6 +21,9 @@ import ladderwell.quantity.Units;
 
 /** {@code state psi: coherent in trap, mean 9.5, phase 30 deg}. */
 final class StateMagic implements Magic {
+    /** The loosest tolerance that an evolution takes. */
+    private static final double LOOSEST_TOLERANCE = 0.1;
+
     private static final Map<String, Class<?>> TYPES = Map.of(
             "number", NumberState.class,
             "coherent", Coherent.class,
@@ -36,14 +39,13 @@ final class StateMagic implements Magic {
     @Override
     public Outcome carryOut(Sentence sentence, Things things) throws MisreadSentence {
         Oscillator oscillator = things.oscillator(sentence.reference("in"));
-        State state =
-                switch (sentence.kind()) {
-                    case "number" -> oscillator.number(sentence.count("level"));
-                    case "coherent" -> coherent(sentence, (Harmonic) oscillator);
-                    case "superposition" -> superposition(sentence, oscillator);
-                    case "gaussian" -> gaussian(sentence, oscillator);
-                    default -> throw new IllegalStateException("no state is made of kind " + sentence.kind());
-                };
+        State state = switch (sentence.kind()) {
+            case "number" -> oscillator.number(sentence.count("level"));
+            case "coherent" -> coherent(sentence, (Harmonic) oscillator);
+            case "superposition" -> superposition(sentence, oscillator);
+            case "gaussian" -> gaussian(sentence, oscillator);
+            default -> throw new IllegalStateException("no state is made of kind " + sentence.kind());
+        };
         return new Outcome(new Declared(sentence.name(), "state", state), state);
     }
 
@@ -71,8 +73,8 @@ final class StateMagic implements Magic {
 
     private static Superposition superposition(Sentence sentence, Oscillator oscillator) throws MisreadSentence {
         List<Long> levels = sentence.counts("levels");
-        Superposition equal = (Superposition)
-                oscillator.superposition(levels.stream().mapToLong(Long::longValue).toArray());
+        Superposition equal = (Superposition) oscillator.superposition(
+                levels.stream().mapToLong(Long::longValue).toArray());
         if (!sentence.has("weights")) {
             return equal;
         }
@@ -92,9 +94,11 @@ final class StateMagic implements Magic {
         Quantity position = orZero(sentence, "position", Units.METRE);
         Quantity momentum = orZero(sentence, "momentum", Units.KILOGRAM_METRE_PER_SECOND);
         Quantity spread = sentence.quantity("spread");
-        if (oscillator instanceof Box box) {
-            return box.gaussian(position, momentum, spread);
-        }
-        return ((FiniteWell) oscillator).gaussian(position, momentum, spread);
+        Packet packet = oscillator instanceof Box box
+                ? box.gaussian(position, momentum, spread)
+                : ((FiniteWell) oscillator).gaussian(position, momentum, spread);
+        // What the bound levels cannot carry even loosely is refused here; what they cannot carry closely, by the run.
+        packet.amplitudes(LOOSEST_TOLERANCE);
+        return packet;
     }
 }

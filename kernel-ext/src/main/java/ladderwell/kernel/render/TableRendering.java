@@ -42,8 +42,9 @@ final class TableRendering {
         }
         html.append("<table class=\"lw-table\"><thead><tr>");
         for (int c = 0; c < columns; c++) {
-            html.append("<th scope=\"col\"").append(look(table.column(c))).append(">")
-                    .append(Markup.text(cut(table.column(c).name()))).append("</th>");
+            html.append("<th scope=\"col\"").append(look(table.column(c))).append(" title=\"")
+                    .append(Markup.text(cut(table.column(c).name()))).append("\">")
+                    .append(Markup.text(cut(head(table, c)))).append("</th>");
         }
         html.append("</tr></thead><tbody>\n");
         for (int r = 0; r < rows; r++) {
@@ -64,6 +65,16 @@ final class TableRendering {
         return html.append("</div>").toString();
     }
 
+    /** The heading; an error column right of its value is just "± guaranteed", since name and unit stand beside it. */
+    private static String head(Table table, int c) {
+        String name = table.column(c).name();
+        if (c == 0 || !RoundedColumn.isError(table.column(c)) || !name.endsWith(")")) {
+            return name;
+        }
+        String of = "± " + table.column(c - 1).name() + " (";
+        return name.startsWith(of) ? "± " + name.substring(of.length(), name.length() - 1) : name;
+    }
+
     private static String look(Column<?> column) {
         String names = (RoundedColumn.isNumber(column) ? "lw-number" : "") + (RoundedColumn.isError(column) ? " lw-pm" : "");
         return names.isEmpty() ? "" : " class=\"" + names.strip() + "\"";
@@ -77,7 +88,7 @@ final class TableRendering {
         String[] heads = new String[columns];
         for (int c = 0; c < columns; c++) {
             right[c] = RoundedColumn.isNumber(table.column(c));
-            heads[c] = cut(table.column(c).name());
+            heads[c] = cut(head(table, c));
         }
         PlainTable plain = new PlainTable(right);
         plain.row(heads);

@@ -24,6 +24,9 @@ public record Grammar(List<Noun> nouns) {
     /** The first line of a cell of sentences, without the two percent signs. */
     public static final String CELL = "declare";
 
+    /** Most characters of a sentence, so that every text is answered in bounded time. */
+    public static final int LONGEST_SENTENCE = 100_000;
+
     private static final Key MASS_KEY = Key.quantity("mass", "mass of the particle", MASS);
     private static final Key NATURAL =
             Key.of("natural", Form.FLAG, "", "natural units: values are plain numbers, without units");
@@ -44,7 +47,8 @@ public record Grammar(List<Noun> nouns) {
                             .formula("ω = 2πν for ν in Hz; a rate in rad/s or /s is ω as it stands"),
                     Key.quantity("wavenumber", "wavenumber ν̃ = 1/λ of the transition between neighbours", WAVENUMBER)
                             .formula("ω = 2πcν̃"),
-                    Key.quantity("spacing", "spacing of the levels as an energy", ENERGY).formula("ω = E/ħ"),
+                    Key.quantity("spacing", "spacing of the levels as an energy", ENERGY)
+                            .formula("ω = E/ħ"),
                     NATURAL.formula("ħ = m = ω = 1"))
             .ways(
                     Way.of("mass", "frequency"),
@@ -74,7 +78,10 @@ public record Grammar(List<Noun> nouns) {
             .ways(Way.of("mass", "width", "depth"), Way.of("natural", "depth"));
 
     private static final NounKind NUMBER = NounKind.of(
-                    "number", "number state", "one level of the oscillator, the Fock state |n⟩ of a harmonic one", "|n⟩")
+                    "number",
+                    "number state",
+                    "one level of the oscillator, the Fock state |n⟩ of a harmonic one",
+                    "|n⟩")
             .alias("fock")
             .keys(Key.count("level", 0, Long.MAX_VALUE, "3", "the level n, counted from 0"))
             .ways(Way.of("level"));
@@ -86,8 +93,12 @@ public record Grammar(List<Noun> nouns) {
                     "|α⟩, α = √n̄ e^{iφ},  a|α⟩ = α|α⟩")
             .homes("harmonic")
             .keys(
-                    Key.of("mean", Form.NUMBER, "9.5", "mean quanta n̄, any real number from 0").formula("n̄ = |α|²"),
-                    Key.quantity("phase", "phase φ of α at time 0; 0 starts at the turning point on the +x side", Kind.ANGLE)
+                    Key.of("mean", Form.NUMBER, "9.5", "mean quanta n̄, any real number from 0")
+                            .formula("n̄ = |α|²"),
+                    Key.quantity(
+                                    "phase",
+                                    "phase φ of α at time 0; 0 starts at the turning point on the +x side",
+                                    Kind.ANGLE)
                             .standard("0 deg"),
                     Key.of("alpha", Form.COMPLEX, "1.5+0.5i", "the amplitude α").formula("n̄ = |α|²"),
                     Key.quantity("displacement", "mean position at time 0", LENGTH)
@@ -151,7 +162,8 @@ public record Grammar(List<Noun> nouns) {
                                 "state psi: coherent in trap, mean 9.5, phase 30 deg",
                                 "prepares a state: what the motion starts in")
                         .kinds(COHERENT, NUMBER, SUPERPOSITION, GAUSSIAN)
-                        .lead(Key.reference("in", "oscillator", "trap", "the oscillator that the state is prepared in")),
+                        .lead(Key.reference(
+                                "in", "oscillator", "trap", "the oscillator that the state is prepared in")),
                 Noun.of(
                                 "evolve",
                                 "evolve NAME: STATE for DURATION, KEY VALUE, …",
@@ -167,7 +179,11 @@ public record Grammar(List<Noun> nouns) {
                         .keys(
                                 Key.count("frames", 1, Long.MAX_VALUE, "120", "number of equal time steps to look at")
                                         .standard("120"),
-                                Key.of("tolerance", Form.NUMBER, "1e-9", "largest error of the state, between 1e-13 and 0.1")
+                                Key.of(
+                                                "tolerance",
+                                                Form.NUMBER,
+                                                "1e-9",
+                                                "largest error of the state, between 1e-13 and 0.1")
                                         .formula("‖ψ − ψ̃‖ at every time")
                                         .standard("1e-9")),
                 Noun.of(
@@ -178,7 +194,12 @@ public record Grammar(List<Noun> nouns) {
                         .about("evolve")
                         .items(observables)
                         .keys(
-                                Key.count("every", 1, Long.MAX_VALUE, "10", "keeps the first row and every N-th after it")
+                                Key.count(
+                                                "every",
+                                                1,
+                                                Long.MAX_VALUE,
+                                                "10",
+                                                "keeps the first row and every N-th after it")
                                         .standard("1, every row"),
                                 Key.of("as", Form.NEW_NAME, "motion", "keeps the table under a name, for Java cells")),
                 Noun.of(
@@ -222,6 +243,13 @@ public record Grammar(List<Noun> nouns) {
      */
     public Sentence read(String text, Place sentence, Surroundings surroundings, Expressions expressions)
             throws MisreadSentence {
+        if (isTooLong(sentence)) {
+            throw new MisreadSentence(
+                    "a sentence has at most " + LONGEST_SENTENCE + " characters, not "
+                            + (sentence.end() - sentence.start()) + "; a long list can be given as a Java expression in"
+                            + " braces",
+                    new Place(sentence.start(), sentence.start()));
+        }
         return new SentenceReader(this, text, sentence, surroundings, expressions).read();
     }
 
@@ -233,20 +261,29 @@ public record Grammar(List<Noun> nouns) {
         return read(text, sentence, surroundings, (expression, place) -> Values.UNKNOWN);
     }
 
+    private static boolean isTooLong(Place sentence) {
+        return sentence.end() - sentence.start() > LONGEST_SENTENCE;
+    }
+
     /** What could stand at the cursor. */
     public Offers complete(SentenceText text, int cursor, Surroundings surroundings) {
-        return new Completer(this, surroundings).at(text, cursor);
+        return isTooLong(text.at(cursor))
+                ? Offers.none(Math.max(0, cursor))
+                : new Completer(this, surroundings).at(text, cursor);
     }
 
     /** The word at the cursor, if there is one. */
     public Optional<String> wordAt(SentenceText text, int cursor) {
         Place place = text.at(cursor);
+        if (isTooLong(place)) {
+            return Optional.empty();
+        }
         return Inspector.wordAt(Pieces.of(text.text(), place.start(), place.end()), cursor)
                 .map(Piece::text);
     }
 
     /** What the word at the cursor means, if it is a word of the language; declared names are the caller's business. */
     public Optional<Explanation> explain(SentenceText text, int cursor) {
-        return new Inspector(this).at(text, cursor);
+        return isTooLong(text.at(cursor)) ? Optional.empty() : new Inspector(this).at(text, cursor);
     }
 }

@@ -40,7 +40,11 @@ public record SentenceText(String text, Optional<Place> opening, List<Place> sen
                 opening = Optional.of(new Place(start + 2, end));
             } else if (text.charAt(start) != '#') {
                 boolean percent = text.charAt(start) == '%';
-                if (open && opening.isPresent() && indent > openIndent && !percent && !opensSentence(text, start, end)) {
+                if (open
+                        && opening.isPresent()
+                        && indent > openIndent
+                        && !percent
+                        && !opensSentence(text, start, end)) {
                     int last = sentences.size() - 1;
                     sentences.set(last, new Place(sentences.get(last).start(), end));
                 } else {
@@ -89,7 +93,9 @@ public record SentenceText(String text, Optional<Place> opening, List<Place> sen
             return;
         }
         Place place = opening.get();
-        List<Piece> pieces = Pieces.of(text, place.start(), place.end()).stream()
+        // What stands beyond so many characters is too much anyway.
+        int end = Math.min(place.end(), place.start() + Grammar.LONGEST_SENTENCE);
+        List<Piece> pieces = Pieces.of(text, place.start(), end).stream()
                 .filter(piece -> !piece.is(Piece.Sort.COMMENT))
                 .toList();
         if (pieces.isEmpty()) {
@@ -97,8 +103,8 @@ public record SentenceText(String text, Optional<Place> opening, List<Place> sen
         }
         if (!pieces.get(0).isWord(Grammar.CELL)) {
             throw new MisreadSentence(
-                    "'%%" + Words.quoted(pieces.get(0).text()).substring(1) + " is unknown; a cell of sentences starts with"
-                            + " %%declare",
+                    "'%%" + Words.quoted(pieces.get(0).text()).substring(1)
+                            + " is unknown; a cell of sentences starts with" + " %%declare",
                     pieces.get(0).place());
         }
         if (pieces.size() > 1) {

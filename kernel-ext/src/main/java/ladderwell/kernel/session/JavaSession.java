@@ -26,10 +26,15 @@ import ladderwell.kernel.session.Pieces.Piece;
  * takes a good part of a second, so start it in the background.
  */
 public final class JavaSession implements AutoCloseable {
+    private static final String CALL = "{ladderwell.kernel.session.Result.of(";
+    /** On a line of its own, behind whatever remark ends the expression. */
+    private static final String CALL_END = "\n);}";
+
     private final SnippetControl control = new SnippetControl();
     private final JShell shell;
     private final Variables variables;
     private final CodeReading reading;
+    private final Imports imports;
     private SnippetId place = new SnippetId(0, 1, 0);
 
     /**
@@ -46,7 +51,15 @@ public final class JavaSession implements AutoCloseable {
                 .build();
         variables = new Variables(shell, control);
         reading = new CodeReading(shell);
-        for (String name : imports) {
+        this.imports = new Imports(imports);
+        // The compiler's own start takes most of a session's start.
+        shell.eval(CALL + "0" + CALL_END);
+        control.forget();
+    }
+
+    private void bringIn(List<String> names) {
+        place = new SnippetId(0, 1, place.count());
+        for (String name : names) {
             shell.eval("import " + name + ";");
         }
     }
@@ -77,6 +90,7 @@ public final class JavaSession implements AutoCloseable {
      * @param firstLine the line of the cell at which the text begins
      */
     public synchronized JavaEnd run(String text, int cell, int firstLine) {
+        bringIn(imports.neededBy(text));
         SourceCodeAnalysis analysis = shell.sourceCodeAnalysis();
         List<Piece> pieces = Pieces.of(text, analysis);
         for (Piece piece : pieces) {
@@ -99,7 +113,8 @@ public final class JavaSession implements AutoCloseable {
                 break;
             }
             place = new SnippetId(cell, firstLine + piece.line(), place.count());
-            List<SnippetEvent> events = shell.eval(piece.source());
+            boolean wanted = i == pieces.size() - 1 && piece.openEnded();
+            List<SnippetEvent> events = wanted ? evaluate(piece) : shell.eval(piece.source());
             Optional<JavaEnd> end = judge(events, text, piece, cell, firstLine);
             if (end.isPresent()) {
                 control.forget();
@@ -107,7 +122,7 @@ public final class JavaSession implements AutoCloseable {
             }
             events.forEach(event -> defined.add(event.snippet()));
             value = control.value();
-            gaveValue = piece.openEnded() && events.stream().anyMatch(JavaSession::isExpression);
+            gaveValue = wanted && events.stream().anyMatch(JavaSession::gaveValue);
             control.forget();
         }
         for (Snippet snippet : defined) {
@@ -135,10 +150,20 @@ public final class JavaSession implements AutoCloseable {
         return piece.openEnded() && variables.find(name(piece)).isPresent();
     }
 
-    private static boolean isExpression(SnippetEvent event) {
-        return event.causeSnippet() == null
-                && (event.snippet().kind() == Snippet.Kind.EXPRESSION
-                        || event.snippet().subKind() == Snippet.SubKind.TEMP_VAR_EXPRESSION_SUBKIND);
+    /**
+     * Evaluates what may be an expression whose value is wanted. JShell by itself would make a variable of it, which
+     * costs twice the time, slows every later snippet and keeps the value for ever; as the argument of a call it is an
+     * ordinary statement. What cannot be an argument, such as a declaration or a call without a value, is refused by the
+     * compiler before anything runs, and is then taken as it stands.
+     */
+    private List<SnippetEvent> evaluate(Piece piece) {
+        List<SnippetEvent> events = shell.eval(CALL + piece.written() + CALL_END);
+        boolean refused = events.stream().anyMatch(event -> event.status() == Status.REJECTED);
+        return refused && !control.stopRequested() ? shell.eval(piece.source()) : events;
+    }
+
+    private static boolean gaveValue(SnippetEvent event) {
+        return event.causeSnippet() == null && event.snippet().source().startsWith(CALL);
     }
 
     /** What ended the text at this snippet, if anything did; follows the variables on the way. */
@@ -218,11 +243,13 @@ public final class JavaSession implements AutoCloseable {
 
     /** The ways to go on at the cursor. */
     public synchronized Suggestions suggestions(String text, int cursor) {
+        bringIn(imports.rest());
         return reading.suggestions(text, cursor, variables.names());
     }
 
     /** Signatures and, if wanted, the documentation of what stands at the cursor; empty if Java knows nothing of it. */
     public synchronized List<String> documentation(String text, int cursor, boolean full) {
+        bringIn(imports.neededBy(text));
         return reading.documentation(text, cursor, full);
     }
 

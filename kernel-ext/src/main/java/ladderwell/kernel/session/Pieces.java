@@ -14,14 +14,15 @@ final class Pieces {
      * One snippet.
      *
      * @param source its source, ready to evaluate, without leading blanks
+     * @param written what its author wrote, without a semicolon added
      * @param start where it begins in the text
      * @param line the line of the text at which it begins, from 0
      * @param completeness what JShell thinks of it
      */
-    record Piece(String source, int start, int line, Completeness completeness) {
+    record Piece(String source, String written, int start, int line, Completeness completeness) {
         /** Whether the snippet was closed by its author; if not, it is an expression whose value is wanted. */
         boolean openEnded() {
-            return completeness == Completeness.COMPLETE_WITH_SEMI || lastSign(source) != ';';
+            return lastSign(written) != ';';
         }
 
         /** Whether the parser could make nothing of it, or wants more. */
@@ -77,8 +78,8 @@ final class Pieces {
             }
             boolean whole = info.source() == null || info.completeness() == Completeness.CONSIDERED_INCOMPLETE;
             String source = whole ? rest : info.source();
-            pieces.add(new Piece(source, start, line, info.completeness()));
             int length = whole ? rest.length() : rest.length() - info.remaining().length();
+            pieces.add(new Piece(source, rest.substring(0, length), start, line, info.completeness()));
             line += (int) rest.substring(0, length).chars().filter(c -> c == '\n').count();
             start += length;
         }

@@ -43,8 +43,8 @@ final class SnippetControl extends LocalExecutionControl {
     private @Nullable Field lastField;
 
     /** A snippet, and what came of it. */
-    private static final class Run {
-        final Method method;
+    static final class Run {
+        private final Method method;
         volatile @Nullable Object value;
         volatile @Nullable Throwable thrown;
         volatile boolean stopped;
@@ -55,12 +55,15 @@ final class SnippetControl extends LocalExecutionControl {
         }
 
         void call() {
+            Result.RUN.set(this);
             try {
-                value = method.invoke(null);
+                method.invoke(null);
             } catch (InvocationTargetException e) {
                 thrown = e.getCause();
             } catch (Throwable e) {
                 thrown = e;
+            } finally {
+                Result.RUN.remove();
             }
         }
     }
@@ -229,7 +232,7 @@ final class SnippetControl extends LocalExecutionControl {
         return now != null && now.stopped;
     }
 
-    /** The value of the last snippet, empty for null and for statements. */
+    /** The value that the last snippet left, empty for null and for statements. */
     Optional<Object> value() {
         Run now = run;
         return now == null ? Optional.empty() : Optional.ofNullable(now.value);

@@ -46,6 +46,9 @@ public class JavaSessionTest {
     void theLastExpressionGivesItsValueAsAnObject() {
         assertEquals(2, value("1+1"));
         assertEquals(List.of(1, 2), value("int a = 1;\nList.of(a, 2)"));
+        assertEquals(5, value("int assigned = 1; assigned = 5"));
+        assertEquals("a;", value("String.valueOf(\"a;\") /* no; end */"));
+        assertEquals(6, value("\"\"\"\n  a;\n  \"b\n  \"\"\".length() // ;") );
         assertEquals(Math.PI, value("PI // the ratio; of a circle"));
     }
 

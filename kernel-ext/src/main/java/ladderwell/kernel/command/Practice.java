@@ -1,0 +1,62 @@
+package ladderwell.kernel.command;
+
+import static ladderwell.quantity.Units.PERIOD;
+
+import java.util.concurrent.CancellationException;
+import ladderwell.FiniteWell;
+import ladderwell.Harmonic;
+import ladderwell.Observable;
+import ladderwell.Oscillator;
+import ladderwell.Run;
+import ladderwell.kernel.magic.Animation;
+import ladderwell.kernel.magic.TableRead;
+import ladderwell.kernel.render.Renderings;
+
+/**
+ * Evolves, reads and draws a few states in the background after the kernel has connected, so that the first evolution a
+ * user asks for finds its classes loaded and its loops compiled. Values it makes are thrown away.
+ */
+final class Practice {
+    /** The first cell, and the Java session's start, come before it. */
+    private static final int FIRST_PAUSE_MILLIS = 600;
+
+    private static final int ROUNDS = 12;
+
+    private Practice() {}
+
+    static void startInBackground() {
+        Thread thread = new Thread(Practice::run, "practice");
+        thread.setDaemon(true);
+        thread.setPriority(Thread.MIN_PRIORITY);
+        thread.start();
+    }
+
+    private static void run() {
+        try {
+            Thread.sleep(FIRST_PAUSE_MILLIS);
+            for (int round = 0; round < ROUNDS; round++) {
+                once(10 + 20 * round);
+                Thread.sleep(10);
+            }
+        } catch (InterruptedException | CancellationException e) {
+            Thread.currentThread().interrupt();
+        }
+    }
+
+    private static void once(double mean) {
+        Renderings renderings = new Renderings();
+        Harmonic mode = Oscillator.harmonic().natural();
+        Run swing = mode.coherent(mean).evolve(2, PERIOD).run();
+        renderings.render(new TableRead(
+                swing,
+                swing.table(
+                        Observable.POSITION,
+                        Observable.SPREAD_OF_POSITION,
+                        Observable.ENERGY,
+                        Observable.RETURN_PROBABILITY)));
+        renderings.render(new Animation("practice", swing, swing.density()));
+        FiniteWell well = Oscillator.finiteWell().natural(100);
+        Run beat = well.superposition(0, 1, 2).evolve(2, PERIOD).frames(40).run();
+        renderings.render(new Animation("practice", beat, beat.density()));
+    }
+}
