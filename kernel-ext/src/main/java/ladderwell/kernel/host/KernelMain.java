@@ -66,7 +66,7 @@ public final class KernelMain {
             return refuse(
                     "connection file " + connectionFile + ": its ports cannot be opened (" + e.getMessage() + ")");
         }
-        workbench.startJava();
+        workbench.practiseJava();
         endWithParent(ended);
         interruptOnSignal(workbench);
         try {

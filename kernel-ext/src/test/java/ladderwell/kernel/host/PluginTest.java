@@ -90,6 +90,24 @@ class PluginTest {
     }
 
     @Test
+    void theRealLanguageWorksInThatKernel() throws Exception {
+        kernel = IJava.restart();
+        Plugin.install();
+        String card = plain("%oscillator trap: harmonic, mass 40 u, frequency 1.2 MHz");
+        assertTrue(card.contains("trap") && card.contains("1.2"), card);
+        DisplayData table = kernel.eval("%%declare\n# a state and its motion\nstate psi: coherent in trap, mean 9.5\n"
+                + "evolve run: psi for 1 periods, frames 8\ntable run: position, spread of position\n");
+        assertEquals(2, kernel.displayed.size());
+        assertTrue(text(table).contains("position"), text(table));
+        assertTrue(((String) table.getData(MIMEType.TEXT_HTML)).contains("<table"));
+        assertEquals("true", plain("trap instanceof ladderwell.Oscillator && run instanceof ladderwell.Run"));
+        assertTrue(kernel.eval("psi").getData(MIMEType.TEXT_HTML).toString().contains("state"));
+        String mistake = message("%state phi: coherent in trap, mean -1");
+        assertTrue(mistake.contains("mean"), mistake);
+        assertTrue(plain("%levels trap, count 3").length() > 10);
+    }
+
+    @Test
     void argumentsAreJoinedAsTheyWereTyped() {
         assertEquals(
                 "own: potential \"a*x^4 - b*x^2\", mass 1 u, a 2 eV/angstrom^4",
