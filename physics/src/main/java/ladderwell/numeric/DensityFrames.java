@@ -97,8 +97,8 @@ public final class DensityFrames {
      */
     public double[][] of(double[][] re, double[][] im, Workers workers) {
         if (re.length != im.length) {
-            throw new IllegalArgumentException(
-                    re.length + " rows of real parts and " + im.length + " of imaginary parts, expected the same number");
+            throw new IllegalArgumentException(re.length + " rows of real parts and " + im.length
+                    + " of imaginary parts, expected the same number");
         }
         for (int j = 0; j < re.length; j++) {
             if (re[j].length != levels || im[j].length != levels) {
@@ -140,7 +140,8 @@ public final class DensityFrames {
     private double[][] frames(int times, Workers workers, Rows rows) {
         double[][] density = new double[times][points];
         int groups = (times + GROUP - 1) / GROUP;
-        // A few parts per thread, so that scratch arrays are made rarely; every frame is computed alone, so parts change no bit.
+        // A few parts per thread, so that scratch arrays are made rarely; every frame is computed alone, so parts
+        // change no bit.
         int parts = workers.threads() == 1 ? 1 : Math.min(groups, 4 * workers.threads());
         workers.forEach(parts, part -> {
             Panel panel = new Panel();
@@ -231,14 +232,7 @@ public final class DensityFrames {
 
     /** |even + odd|² to the upper half of the frame, |even - odd|² to mirrored. */
     private static void bothSides(
-            double[] even,
-            double[] odd,
-            int at,
-            int stride,
-            double[] frame,
-            int middle,
-            double[] mirrored,
-            int half) {
+            double[] even, double[] odd, int at, int stride, double[] frame, int middle, double[] mirrored, int half) {
         for (int i = 0; i < half; i++) {
             double evenRe = even[at + i];
             double oddRe = odd[at + i];

@@ -149,8 +149,7 @@ public final class ExactPhases {
         int rows = toTime - fromTime;
         for (int level = 0; level < levels(); level += LEVEL_BLOCK) {
             int to = Math.min(levels(), level + LEVEL_BLOCK);
-            Block block =
-                    kept.length > 0 ? new Block(level, to, kept[level / LEVEL_BLOCK]) : block(level, to, rows);
+            Block block = kept.length > 0 ? new Block(level, to, kept[level / LEVEL_BLOCK]) : block(level, to, rows);
             for (int j = 0; j < rows; j++) {
                 Interruption.check();
                 block.write(fromTime + j, re[j], im[j], level);
@@ -168,7 +167,8 @@ public final class ExactPhases {
             return one + 0.01 * U;
         }
         double product = one + PhaseFactors.ERROR + PRODUCT_ERROR;
-        // First order: one rounding per part and the remainder 2^-57. Third order: series, remainder and a complex product.
+        // First order: one rounding per part and the remainder 2^-57. Third order: series, remainder and a complex
+        // product.
         double shift = grid.firstOrder() ? 1.1 * U : 2 * U + PRODUCT_ERROR;
         return product + shift + 0.01 * U;
     }
@@ -288,11 +288,9 @@ public final class ExactPhases {
             int r = j - q * grid.period();
             double shift = grid.shift(j);
             if (grid.firstOrder()) {
-                productFirstOrder(
-                        coarseRe, coarseIm, table.re[r], table.im[r], high, shift, toRe, toIm, length);
+                productFirstOrder(coarseRe, coarseIm, table.re[r], table.im[r], high, shift, toRe, toIm, length);
             } else {
-                productThirdOrder(
-                        coarseRe, coarseIm, table.re[r], table.im[r], high, shift, toRe, toIm, length);
+                productThirdOrder(coarseRe, coarseIm, table.re[r], table.im[r], high, shift, toRe, toIm, length);
             }
         }
     }
@@ -438,8 +436,7 @@ public final class ExactPhases {
             if (largest > 4 * Math.ulp(largestTime) || angle > THIRD_ORDER) {
                 return IRREGULAR;
             }
-            return new Grid(
-                    true, angle <= FIRST_ORDER, period, coarseHighs, coarseLows, fineHighs, fineLows, shifts);
+            return new Grid(true, angle <= FIRST_ORDER, period, coarseHighs, coarseLows, fineHighs, fineLows, shifts);
         }
     }
 

@@ -60,8 +60,8 @@ public final class LadderSums {
      */
     public static LadderSums of(double[][] re, double[][] im, int first, Workers workers) {
         if (re.length != im.length) {
-            throw new IllegalArgumentException(
-                    re.length + " rows of real parts and " + im.length + " of imaginary parts, expected the same number");
+            throw new IllegalArgumentException(re.length + " rows of real parts and " + im.length
+                    + " of imaginary parts, expected the same number");
         }
         int levels = re.length == 0 ? 0 : re[0].length;
         Quanta[] quanta = new Quanta[re.length];

@@ -333,7 +333,8 @@ public final class Workbench implements AutoCloseable {
 
     private MimeBundle describe(Names.Named named) {
         MimeBundle value = render(named.value());
-        return value.with(MimeBundle.PLAIN, named.type().getSimpleName() + " " + named.name() + "\n" + value.plainText());
+        return value.with(
+                MimeBundle.PLAIN, named.type().getSimpleName() + " " + named.name() + "\n" + value.plainText());
     }
 
     /** The identifier at the cursor; empty when it is a member of something or there is none. */

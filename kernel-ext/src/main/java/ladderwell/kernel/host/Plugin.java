@@ -54,7 +54,8 @@ public final class Plugin {
      */
     public static void install() {
         Declarations declarations = new Declarations();
-        List<String> nouns = declarations.grammar().nouns().stream().map(Noun::word).toList();
+        List<String> nouns =
+                declarations.grammar().nouns().stream().map(Noun::word).toList();
         List<Class<?>> shown = List.of(
                 Oscillator.class,
                 State.class,
@@ -110,7 +111,8 @@ public final class Plugin {
         StringBuilder line = new StringBuilder();
         for (int i = 0; i < arguments.size(); i++) {
             String argument = arguments.get(i);
-            boolean commaFollows = i + 1 < arguments.size() && arguments.get(i + 1).startsWith(",");
+            boolean commaFollows =
+                    i + 1 < arguments.size() && arguments.get(i + 1).startsWith(",");
             boolean inBraces = line.lastIndexOf("{") > line.lastIndexOf("}") || argument.startsWith("{");
             boolean quoted = commaFollows || !inBraces && argument.matches(".*[\\s*(].*");
             line.append(i == 0 || argument.startsWith(",") ? "" : " ")

@@ -159,7 +159,8 @@ public final class Declarations implements Sentences {
     private Magic magic(Sentence sentence) {
         Magic magic = magics.get(sentence.noun().word());
         if (magic == null) {
-            throw new IllegalStateException("no class carries out '" + sentence.noun().word() + "'");
+            throw new IllegalStateException(
+                    "no class carries out '" + sentence.noun().word() + "'");
         }
         return magic;
     }

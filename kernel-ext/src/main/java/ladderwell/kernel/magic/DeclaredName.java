@@ -46,7 +46,9 @@ final class DeclaredName {
             String symbol = fact.symbol().isEmpty() ? "" : " " + fact.symbol();
             String value = fact.bound().isExact()
                     ? fact.value().toString()
-                    : (fact.bound().beside(fact.value().value()) + " " + fact.value().unit()).strip();
+                    : (fact.bound().beside(fact.value().value()) + " "
+                                    + fact.value().unit())
+                            .strip();
             lines.add(fact.name() + symbol + " = " + value);
         }
         return lines;

@@ -17,8 +17,7 @@ final class EvolveMagic implements Magic {
     @Override
     public Outcome carryOut(Sentence sentence, Things things) {
         Quantity duration = sentence.quantity("for");
-        Evolution evolution =
-                things.state(sentence.reference("state")).evolve(duration.value(), duration.unit());
+        Evolution evolution = things.state(sentence.reference("state")).evolve(duration.value(), duration.unit());
         if (sentence.has("frames")) {
             evolution = evolution.frames(sentence.count("frames"));
         }

@@ -16,19 +16,18 @@ final class OscillatorMagic implements Magic {
 
     @Override
     public Optional<Promise> promise(Sentence sentence) {
-        return Optional.of(
-                new Promise(sentence.name(), TYPES.getOrDefault(sentence.kind(), Oscillator.class), sentence.namePlace()));
+        return Optional.of(new Promise(
+                sentence.name(), TYPES.getOrDefault(sentence.kind(), Oscillator.class), sentence.namePlace()));
     }
 
     @Override
     public Outcome carryOut(Sentence sentence, Things things) {
-        Oscillator oscillator =
-                switch (sentence.kind()) {
-                    case "harmonic" -> harmonic(sentence);
-                    case "box" -> box(sentence);
-                    case "finite well" -> finiteWell(sentence);
-                    default -> throw new IllegalStateException("no oscillator is made of kind " + sentence.kind());
-                };
+        Oscillator oscillator = switch (sentence.kind()) {
+            case "harmonic" -> harmonic(sentence);
+            case "box" -> box(sentence);
+            case "finite well" -> finiteWell(sentence);
+            default -> throw new IllegalStateException("no oscillator is made of kind " + sentence.kind());
+        };
         return new Outcome(new Declared(sentence.name(), "oscillator", oscillator), oscillator);
     }
 

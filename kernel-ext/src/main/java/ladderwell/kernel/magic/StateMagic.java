@@ -36,14 +36,13 @@ final class StateMagic implements Magic {
     @Override
     public Outcome carryOut(Sentence sentence, Things things) throws MisreadSentence {
         Oscillator oscillator = things.oscillator(sentence.reference("in"));
-        State state =
-                switch (sentence.kind()) {
-                    case "number" -> oscillator.number(sentence.count("level"));
-                    case "coherent" -> coherent(sentence, (Harmonic) oscillator);
-                    case "superposition" -> superposition(sentence, oscillator);
-                    case "gaussian" -> gaussian(sentence, oscillator);
-                    default -> throw new IllegalStateException("no state is made of kind " + sentence.kind());
-                };
+        State state = switch (sentence.kind()) {
+            case "number" -> oscillator.number(sentence.count("level"));
+            case "coherent" -> coherent(sentence, (Harmonic) oscillator);
+            case "superposition" -> superposition(sentence, oscillator);
+            case "gaussian" -> gaussian(sentence, oscillator);
+            default -> throw new IllegalStateException("no state is made of kind " + sentence.kind());
+        };
         return new Outcome(new Declared(sentence.name(), "state", state), state);
     }
 
@@ -71,8 +70,8 @@ final class StateMagic implements Magic {
 
     private static Superposition superposition(Sentence sentence, Oscillator oscillator) throws MisreadSentence {
         List<Long> levels = sentence.counts("levels");
-        Superposition equal = (Superposition)
-                oscillator.superposition(levels.stream().mapToLong(Long::longValue).toArray());
+        Superposition equal = (Superposition) oscillator.superposition(
+                levels.stream().mapToLong(Long::longValue).toArray());
         if (!sentence.has("weights")) {
             return equal;
         }

@@ -28,8 +28,9 @@ final class TableMagic implements Magic {
         if (sentence.has("every")) {
             long step = sentence.count("every");
             int last = table.rowCount() - 1;
-            Table kept = table.rows(
-                    IntStream.rangeClosed(0, (int) (last / step)).map(i -> (int) (i * step)).toArray());
+            Table kept = table.rows(IntStream.rangeClosed(0, (int) (last / step))
+                    .map(i -> (int) (i * step))
+                    .toArray());
             kept.setName(table.name());
             table = kept;
         }

@@ -27,11 +27,17 @@ record Things(Names names) implements Surroundings {
         Object value = named.value();
         if (value instanceof Oscillator oscillator) {
             return new Known(
-                    named.name(), "oscillator", oscillator.kind(), oscillator.scale().isNatural());
+                    named.name(),
+                    "oscillator",
+                    oscillator.kind(),
+                    oscillator.scale().isNatural());
         }
         if (value instanceof State state) {
             return new Known(
-                    named.name(), "state", state.kind(), state.oscillator().scale().isNatural());
+                    named.name(),
+                    "state",
+                    state.kind(),
+                    state.oscillator().scale().isNatural());
         }
         if (value instanceof Run run) {
             return new Known(

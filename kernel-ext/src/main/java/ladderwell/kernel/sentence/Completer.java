@@ -77,7 +77,8 @@ final class Completer {
 
         Offers offers() {
             if (before.nounPiece().isEmpty() || touched(before.nounPiece().get())) {
-                int from = before.nounPiece().map(piece -> piece.place().start()).orElse(cursor);
+                int from =
+                        before.nounPiece().map(piece -> piece.place().start()).orElse(cursor);
                 List<Offer> nouns = grammar.nouns().stream()
                         .map(noun -> new Offer(noun.word(), "noun"))
                         .toList();
@@ -95,8 +96,11 @@ final class Completer {
             if (noun.head() != Head.NONE && before.colon().isEmpty()) {
                 return Offers.none(cursor);
             }
-            boolean first = before.clauses().stream().allMatch(clause -> clause.comma().isEmpty());
-            return first ? inHead(noun) : inClause(noun, before.clauses().get(before.clauses().size() - 1));
+            boolean first =
+                    before.clauses().stream().allMatch(clause -> clause.comma().isEmpty());
+            return first
+                    ? inHead(noun)
+                    : inClause(noun, before.clauses().get(before.clauses().size() - 1));
         }
 
         private boolean touched(Piece piece) {
@@ -147,7 +151,8 @@ final class Completer {
             List<Offer> offers = new ArrayList<>();
             if (!clause.joined()) {
                 noun.items()
-                        .forEach(item -> offers.add(new Offer(item.words() + (item.numbered() ? " " : ""), "observable")));
+                        .forEach(item ->
+                                offers.add(new Offer(item.words() + (item.numbered() ? " " : ""), "observable")));
             }
             usableKeys(noun, clause).forEach(key -> offers.add(new Offer(key.word(), "key")));
             return fitting(text, from, cursor, offers);
@@ -165,7 +170,8 @@ final class Completer {
             }
             Optional<NounKind> kind = whole.kind().isPresent() ? whole.kind() : before.kind();
             if (at.joined()) {
-                return noun.lead().filter(lead -> !used.contains(lead.word())).stream().toList();
+                return noun.lead().filter(lead -> !used.contains(lead.word())).stream()
+                        .toList();
             }
             return noun.keys(kind).stream()
                     .filter(key -> !used.contains(key.word()))
@@ -201,7 +207,8 @@ final class Completer {
             if (value.size() == 1 && !glued && numberEnd < number.place().end()) {
                 return Offers.none(cursor);
             }
-            int from = glued ? numberEnd : value.size() == 2 ? value.get(1).place().start() : cursor;
+            int from =
+                    glued ? numberEnd : value.size() == 2 ? value.get(1).place().start() : cursor;
             return fitting(text, from, cursor, units(key));
         }
 
@@ -227,7 +234,8 @@ final class Completer {
         }
 
         private Offers names(String noun, List<String> homes) {
-            int from = pieces.isEmpty() || !touched(pieces.get(pieces.size() - 1))
+            int from = pieces.isEmpty()
+                            || !touched(pieces.get(pieces.size() - 1))
                             || !pieces.get(pieces.size() - 1).is(Sort.WORD)
                     ? cursor
                     : pieces.get(pieces.size() - 1).place().start();

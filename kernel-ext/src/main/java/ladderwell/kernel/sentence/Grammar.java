@@ -44,7 +44,8 @@ public record Grammar(List<Noun> nouns) {
                             .formula("ω = 2πν for ν in Hz; a rate in rad/s or /s is ω as it stands"),
                     Key.quantity("wavenumber", "wavenumber ν̃ = 1/λ of the transition between neighbours", WAVENUMBER)
                             .formula("ω = 2πcν̃"),
-                    Key.quantity("spacing", "spacing of the levels as an energy", ENERGY).formula("ω = E/ħ"),
+                    Key.quantity("spacing", "spacing of the levels as an energy", ENERGY)
+                            .formula("ω = E/ħ"),
                     NATURAL.formula("ħ = m = ω = 1"))
             .ways(
                     Way.of("mass", "frequency"),
@@ -74,7 +75,10 @@ public record Grammar(List<Noun> nouns) {
             .ways(Way.of("mass", "width", "depth"), Way.of("natural", "depth"));
 
     private static final NounKind NUMBER = NounKind.of(
-                    "number", "number state", "one level of the oscillator, the Fock state |n⟩ of a harmonic one", "|n⟩")
+                    "number",
+                    "number state",
+                    "one level of the oscillator, the Fock state |n⟩ of a harmonic one",
+                    "|n⟩")
             .alias("fock")
             .keys(Key.count("level", 0, Long.MAX_VALUE, "3", "the level n, counted from 0"))
             .ways(Way.of("level"));
@@ -86,8 +90,12 @@ public record Grammar(List<Noun> nouns) {
                     "|α⟩, α = √n̄ e^{iφ},  a|α⟩ = α|α⟩")
             .homes("harmonic")
             .keys(
-                    Key.of("mean", Form.NUMBER, "9.5", "mean quanta n̄, any real number from 0").formula("n̄ = |α|²"),
-                    Key.quantity("phase", "phase φ of α at time 0; 0 starts at the turning point on the +x side", Kind.ANGLE)
+                    Key.of("mean", Form.NUMBER, "9.5", "mean quanta n̄, any real number from 0")
+                            .formula("n̄ = |α|²"),
+                    Key.quantity(
+                                    "phase",
+                                    "phase φ of α at time 0; 0 starts at the turning point on the +x side",
+                                    Kind.ANGLE)
                             .standard("0 deg"),
                     Key.of("alpha", Form.COMPLEX, "1.5+0.5i", "the amplitude α").formula("n̄ = |α|²"),
                     Key.quantity("displacement", "mean position at time 0", LENGTH)
@@ -151,7 +159,8 @@ public record Grammar(List<Noun> nouns) {
                                 "state psi: coherent in trap, mean 9.5, phase 30 deg",
                                 "prepares a state: what the motion starts in")
                         .kinds(COHERENT, NUMBER, SUPERPOSITION, GAUSSIAN)
-                        .lead(Key.reference("in", "oscillator", "trap", "the oscillator that the state is prepared in")),
+                        .lead(Key.reference(
+                                "in", "oscillator", "trap", "the oscillator that the state is prepared in")),
                 Noun.of(
                                 "evolve",
                                 "evolve NAME: STATE for DURATION, KEY VALUE, …",
@@ -167,7 +176,11 @@ public record Grammar(List<Noun> nouns) {
                         .keys(
                                 Key.count("frames", 1, Long.MAX_VALUE, "120", "number of equal time steps to look at")
                                         .standard("120"),
-                                Key.of("tolerance", Form.NUMBER, "1e-9", "largest error of the state, between 1e-13 and 0.1")
+                                Key.of(
+                                                "tolerance",
+                                                Form.NUMBER,
+                                                "1e-9",
+                                                "largest error of the state, between 1e-13 and 0.1")
                                         .formula("‖ψ − ψ̃‖ at every time")
                                         .standard("1e-9")),
                 Noun.of(
@@ -178,7 +191,12 @@ public record Grammar(List<Noun> nouns) {
                         .about("evolve")
                         .items(observables)
                         .keys(
-                                Key.count("every", 1, Long.MAX_VALUE, "10", "keeps the first row and every N-th after it")
+                                Key.count(
+                                                "every",
+                                                1,
+                                                Long.MAX_VALUE,
+                                                "10",
+                                                "keeps the first row and every N-th after it")
                                         .standard("1, every row"),
                                 Key.of("as", Form.NEW_NAME, "motion", "keeps the table under a name, for Java cells")),
                 Noun.of(

@@ -44,7 +44,9 @@ final class Inspector {
             }
             if (clause.value().contains(piece)) {
                 return clause.key().isPresent()
-                        ? clause.key().filter(key -> key.form() == Form.QUANTITY).flatMap(key -> unit(piece))
+                        ? clause.key()
+                                .filter(key -> key.form() == Form.QUANTITY)
+                                .flatMap(key -> unit(piece))
                         : item(outline, clause);
             }
         }
@@ -61,8 +63,9 @@ final class Inspector {
     private Explanation cell() {
         return new Explanation(
                 "%%" + Grammar.CELL + ": a cell of sentences",
-                List.of("one sentence a line, without the %; # starts a comment; a line indented deeper goes on with the"
-                        + " sentence before it"),
+                List.of(
+                        "one sentence a line, without the %; # starts a comment; a line indented deeper goes on with the"
+                                + " sentence before it"),
                 grammar.nouns().stream().map(Noun::pattern).toList());
     }
 
@@ -138,8 +141,12 @@ final class Inspector {
         if (symbol.isEmpty() || symbol.length() > 24) {
             return Optional.empty();
         }
-        return Units.parse(symbol).filter(unit -> !unit.isNatural()).map(unit -> new Explanation(
-                unit.plain() + ": a unit of " + unit.kind().word().replaceFirst("^an? ", ""), meaning(unit), List.of()));
+        return Units.parse(symbol)
+                .filter(unit -> !unit.isNatural())
+                .map(unit -> new Explanation(
+                        unit.plain() + ": a unit of " + unit.kind().word().replaceFirst("^an? ", ""),
+                        meaning(unit),
+                        List.of()));
     }
 
     private static List<String> meaning(Unit unit) {

@@ -33,7 +33,10 @@ final class ItemList {
             List<Clause> several = clauses.subList(0, n);
             if (several.stream().allMatch(clause -> clause.key().isEmpty())) {
                 String name = String.join(
-                        ", ", several.stream().map(clause -> Outline.text(clause.value())).toList());
+                        ", ",
+                        several.stream()
+                                .map(clause -> Outline.text(clause.value()))
+                                .toList());
                 Optional<Item> item = named(name);
                 if (item.isPresent()) {
                     return new Found(List.of(item.get().words()), n);
@@ -109,8 +112,9 @@ final class ItemList {
         }
         if (words.isEmpty() || !words.stream().allMatch(word -> word.is(Sort.WORD))) {
             throw new MisreadSentence(
-                    Words.quoted("{" + piece.text().strip() + "}") + " gives no text; expected the name of an observable,"
-                            + " such as " + noun.items().get(0).words(),
+                    Words.quoted("{" + piece.text().strip() + "}")
+                            + " gives no text; expected the name of an observable," + " such as "
+                            + noun.items().get(0).words(),
                     piece.place());
         }
         return one(words);
@@ -127,7 +131,9 @@ final class ItemList {
         for (int n = pieces.size() - 1; n > 0; n--) {
             if (n < 6 && named(Outline.text(pieces.subList(0, n))).isPresent()) {
                 return new MisreadSentence(
-                        "a comma is missing before " + Words.quoted(pieces.get(n).text()), pieces.get(n).place());
+                        "a comma is missing before "
+                                + Words.quoted(pieces.get(n).text()),
+                        pieces.get(n).place());
             }
         }
         String typed = Outline.text(pieces);

@@ -76,7 +76,9 @@ public record Key(
         return switch (form) {
             case FLAG -> "no value";
             case QUANTITY ->
-                kinds.stream().map(kind -> kind.word() + " such as " + kind.example()).collect(Collectors.joining(" or "));
+                kinds.stream()
+                        .map(kind -> kind.word() + " such as " + kind.example())
+                        .collect(Collectors.joining(" or "));
             case NUMBER -> "a plain number such as " + example;
             case COUNT -> "a whole number such as " + example;
             case COMPLEX -> "a complex number such as " + example;

@@ -52,7 +52,8 @@ record Outline(
     static Optional<Place> placeOf(List<Piece> pieces) {
         return pieces.isEmpty()
                 ? Optional.empty()
-                : Optional.of(pieces.get(0).place().to(pieces.get(pieces.size() - 1).place()));
+                : Optional.of(
+                        pieces.get(0).place().to(pieces.get(pieces.size() - 1).place()));
     }
 
     static String text(List<Piece> pieces) {
@@ -64,7 +65,13 @@ record Outline(
                 all.stream().filter(piece -> !piece.is(Sort.COMMENT)).toList();
         if (pieces.isEmpty()) {
             return new Outline(
-                    Optional.empty(), Optional.empty(), List.of(), Optional.empty(), List.of(), Optional.empty(), List.of());
+                    Optional.empty(),
+                    Optional.empty(),
+                    List.of(),
+                    Optional.empty(),
+                    List.of(),
+                    Optional.empty(),
+                    List.of());
         }
         Optional<Noun> noun = Optional.of(pieces.get(0))
                 .filter(piece -> piece.is(Sort.WORD))

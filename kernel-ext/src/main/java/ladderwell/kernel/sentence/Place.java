@@ -48,7 +48,11 @@ public record Place(int start, int end) {
         int lineStart = text.lastIndexOf('\n', at - 1) + 1;
         int lineEnd = text.indexOf('\n', at);
         lineEnd = lineEnd < 0 ? text.length() : lineEnd;
-        int number = firstLine + (int) text.substring(0, lineStart).chars().filter(c -> c == '\n').count();
+        int number = firstLine
+                + (int) text.substring(0, lineStart)
+                        .chars()
+                        .filter(c -> c == '\n')
+                        .count();
         int from = at - lineStart <= WINDOW * 2 / 3 ? lineStart : at - WINDOW / 2;
         int to = Math.min(lineEnd, Math.max(from + WINDOW, Math.min(end, at + CARETS)));
         String before = (from > lineStart ? "…" : "") + Words.shown(text.substring(from, at));

@@ -105,7 +105,8 @@ final class SentenceReader {
         Piece name = subject.get(0);
         if (!name.is(Sort.WORD)) {
             throw new MisreadSentence(
-                    "expected " + wanted + " after '" + noun.word() + "', not " + Words.quoted(name.text()), name.place());
+                    "expected " + wanted + " after '" + noun.word() + "', not " + Words.quoted(name.text()),
+                    name.place());
         }
         checkColon(noun, name);
         if (noun.declares()) {
@@ -138,7 +139,8 @@ final class SentenceReader {
         String text = name.text();
         if (text.length() > 200 || !SourceVersion.isIdentifier(text)) {
             throw new MisreadSentence(
-                    Words.quoted(text) + " cannot be a name; a name is made of letters, digits and _, starts with a letter,"
+                    Words.quoted(text)
+                            + " cannot be a name; a name is made of letters, digits and _, starts with a letter,"
                             + (text.length() > 200 ? " and is no longer than 200 characters" : " and has no blanks"),
                     name.place());
         }
@@ -215,21 +217,21 @@ final class SentenceReader {
             return new MisreadSentence(
                     "nothing stands behind " + where + "; expected "
                             + (noun.head() == Head.ITEMS
-                                    ? "an observable such as " + noun.items().get(0).words()
+                                    ? "an observable such as "
+                                            + noun.items().get(0).words()
                                     : "a key: " + Words.either(keys)),
                     at);
         }
         Piece first = clause.value().get(0);
         if (clause.joined()) {
-            String lead = noun.lead()
-                    .map(key -> " or '" + key.typed() + "'")
-                    .orElse("");
+            String lead = noun.lead().map(key -> " or '" + key.typed() + "'").orElse("");
             return new MisreadSentence(
                     Words.quoted(first.text()) + " is too much here; expected a comma" + lead
                             + Words.didYouMean(Words.nearest(first.text(), keys)),
                     first.place());
         }
-        boolean digits = Character.isDigit(first.text().isEmpty() ? ' ' : first.text().charAt(0));
+        boolean digits =
+                Character.isDigit(first.text().isEmpty() ? ' ' : first.text().charAt(0));
         boolean afterDigits = before.map(Clause::value)
                 .filter(value -> !value.isEmpty())
                 .map(value -> value.get(value.size() - 1).text())
@@ -306,7 +308,8 @@ final class SentenceReader {
         if (!known.noun().equals(noun)) {
             String such = fitting.isEmpty() ? "" : ", such as " + fitting.get(fitting.size() - 1);
             throw new MisreadSentence(
-                    Words.quoted(name) + " is " + Grammar.thing(known.noun()) + "; '" + taker + "' takes " + thing + such,
+                    Words.quoted(name) + " is " + Grammar.thing(known.noun()) + "; '" + taker + "' takes " + thing
+                            + such,
                     piece.place());
         }
         if (known.natural()) {
@@ -320,7 +323,8 @@ final class SentenceReader {
         if (homes.isEmpty() || homes.contains(known.kind())) {
             return;
         }
-        List<String> phrases = homes.stream().map(home -> phrase(key.noun(), home)).toList();
+        List<String> phrases =
+                homes.stream().map(home -> phrase(key.noun(), home)).toList();
         throw new MisreadSentence(
                 Words.article(outline.kind().orElseThrow().phrase()) + " lives in "
                         + Words.either(phrases.stream().map(Words::article).toList()) + "; "
@@ -388,16 +392,15 @@ final class SentenceReader {
                 return startsEntry(term);
             }
         });
-        Object object =
-                switch (key.form()) {
-                    case QUANTITY -> reading.quantity(natural);
-                    case NUMBER -> reading.number();
-                    case COUNT -> reading.count();
-                    case COMPLEX -> reading.complex();
-                    case COUNTS -> reading.counts();
-                    case COMPLEXES -> reading.complexes();
-                    default -> throw new IllegalStateException("read elsewhere: " + key.form());
-                };
+        Object object = switch (key.form()) {
+            case QUANTITY -> reading.quantity(natural);
+            case NUMBER -> reading.number();
+            case COUNT -> reading.count();
+            case COMPLEX -> reading.complex();
+            case COUNTS -> reading.counts();
+            case COMPLEXES -> reading.complexes();
+            default -> throw new IllegalStateException("read elsewhere: " + key.form());
+        };
         return new Value(object, terms, Outline.placeOf(clause.value()).orElse(keyPlace));
     }
 
@@ -470,7 +473,8 @@ final class SentenceReader {
         if (outline.kind().isPresent()) {
             Ways.refuseMissing(outline.kind().get(), values.keySet(), end);
         }
-        boolean unnamed = outline.clauses().stream().anyMatch(clause -> clause.key().isEmpty());
+        boolean unnamed =
+                outline.clauses().stream().anyMatch(clause -> clause.key().isEmpty());
         if (noun.head() == Head.ITEMS && items.isEmpty() && !unnamed) {
             throw new MisreadSentence(
                     noun.word() + " lists nothing; expected observables, as in '" + noun.example() + "'", end);

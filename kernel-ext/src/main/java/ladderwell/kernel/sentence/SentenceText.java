@@ -40,7 +40,11 @@ public record SentenceText(String text, Optional<Place> opening, List<Place> sen
                 opening = Optional.of(new Place(start + 2, end));
             } else if (text.charAt(start) != '#') {
                 boolean percent = text.charAt(start) == '%';
-                if (open && opening.isPresent() && indent > openIndent && !percent && !opensSentence(text, start, end)) {
+                if (open
+                        && opening.isPresent()
+                        && indent > openIndent
+                        && !percent
+                        && !opensSentence(text, start, end)) {
                     int last = sentences.size() - 1;
                     sentences.set(last, new Place(sentences.get(last).start(), end));
                 } else {
@@ -97,8 +101,8 @@ public record SentenceText(String text, Optional<Place> opening, List<Place> sen
         }
         if (!pieces.get(0).isWord(Grammar.CELL)) {
             throw new MisreadSentence(
-                    "'%%" + Words.quoted(pieces.get(0).text()).substring(1) + " is unknown; a cell of sentences starts with"
-                            + " %%declare",
+                    "'%%" + Words.quoted(pieces.get(0).text()).substring(1)
+                            + " is unknown; a cell of sentences starts with" + " %%declare",
                     pieces.get(0).place());
         }
         if (pieces.size() > 1) {

@@ -56,7 +56,11 @@ final class Values {
                     : withoutUnit(scanned.value(), first, natural);
         }
         Unit unit = unit(unitTerms, first.text());
-        String number = first.text().substring(0, first.text().length() - scanned.rest().map(r -> r.text().length()).orElse(0));
+        String number = first.text()
+                .substring(
+                        0,
+                        first.text().length()
+                                - scanned.rest().map(r -> r.text().length()).orElse(0));
         checkUnit(unit, unitTerms.get(0).place(), number + " " + unit.plain(), natural);
         return made(scanned.value(), unit, first.place().to(unitTerms.get(0).place()));
     }
@@ -66,7 +70,8 @@ final class Values {
             return made(number, key.kinds().contains(Kind.ANGLE) ? Units.RADIAN : Units.ONE, term.place());
         }
         throw new MisreadSentence(
-                "the unit is missing after " + Words.quoted(term.text()) + "; " + key.word() + " takes " + key.expected(),
+                "the unit is missing after " + Words.quoted(term.text()) + "; " + key.word() + " takes "
+                        + key.expected(),
                 term.place());
     }
 
@@ -101,7 +106,9 @@ final class Values {
         }
         // Only "kg m/s" is written in two words.
         for (int words = Math.min(2, found.size()); words > 0; words--) {
-            String symbol = words == 1 ? first.text() : first.text() + " " + found.get(1).text();
+            String symbol = words == 1
+                    ? first.text()
+                    : first.text() + " " + found.get(1).text();
             Optional<Unit> unit = symbol.length() > LONGEST_UNIT ? Optional.empty() : Units.parse(symbol);
             if (unit.isPresent()) {
                 refuseMore(found, words);
@@ -196,7 +203,9 @@ final class Values {
     /** Digits are read as they stand; what was written with a power of ten, such as 1e17, is the nearest double. */
     private static long exact(Term term, double real) {
         if (term.result().isPresent()) {
-            return term.result().get() instanceof Number number && !(number instanceof Double) && !(number instanceof Float)
+            return term.result().get() instanceof Number number
+                            && !(number instanceof Double)
+                            && !(number instanceof Float)
                     ? number.longValue()
                     : (long) real;
         }
@@ -304,7 +313,8 @@ final class Values {
         double value = plain ? ((Quantity) result).value() : ((Number) result).doubleValue();
         if (!Double.isFinite(value)) {
             throw new MisreadSentence(
-                    key.word() + " must be a finite number; " + Words.quoted(term.text()) + " is " + value, term.place());
+                    key.word() + " must be a finite number; " + Words.quoted(term.text()) + " is " + value,
+                    term.place());
         }
         return value;
     }

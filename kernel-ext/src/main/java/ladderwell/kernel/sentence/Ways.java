@@ -67,7 +67,9 @@ final class Ways {
         // Before anything is given every way is open; afterwards only the nearest ones are worth naming.
         String choices = Words.either(missing.stream()
                 .filter(words -> !started || words.size() == least)
-                .map(words -> words.stream().map(word -> "'" + typed(kind, word) + "'").collect(Collectors.joining(" and ")))
+                .map(words -> words.stream()
+                        .map(word -> "'" + typed(kind, word) + "'")
+                        .collect(Collectors.joining(" and ")))
                 .toList());
         throw new MisreadSentence(
                 Words.article(kind.phrase()) + (started ? " needs " + choices + " besides" : " needs " + choices), end);

@@ -60,9 +60,7 @@ final class Words {
 
     private static String joined(List<String> words, String last) {
         int n = words.size();
-        return n < 2
-                ? String.join("", words)
-                : String.join(", ", words.subList(0, n - 1)) + last + words.get(n - 1);
+        return n < 2 ? String.join("", words) : String.join(", ", words.subList(0, n - 1)) + last + words.get(n - 1);
     }
 
     /** "; did you mean 'harmonic'?" or nothing. */

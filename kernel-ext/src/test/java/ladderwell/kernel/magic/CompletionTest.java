@@ -35,7 +35,8 @@ class CompletionTest {
         Completion completion = completion(text);
         String plain = text.replace("|", "");
         return plain.substring(0, completion.start())
-                + completion.candidates().get(0).text() + plain.substring(completion.end());
+                + completion.candidates().get(0).text()
+                + plain.substring(completion.end());
     }
 
     private List<String> kinds(String text) {
@@ -83,7 +84,9 @@ class CompletionTest {
 
     @Test
     void keysThatAreNotYetUsedAndGoWithTheOthersFollowAComma() {
-        assertEquals(List.of("mass", "frequency", "wavenumber", "spacing", "natural"), offered("%oscillator x: harmonic, |"));
+        assertEquals(
+                List.of("mass", "frequency", "wavenumber", "spacing", "natural"),
+                offered("%oscillator x: harmonic, |"));
         assertEquals(List.of("frequency", "wavenumber", "spacing"), offered("%oscillator x: harmonic, mass 4 u, |"));
         assertEquals(List.of("mass"), offered("%oscillator x: harmonic, |, frequency 1 MHz"));
         assertEquals(List.of(), offered("%oscillator x: harmonic, mass 4 u, frequency 1 MHz, |"));
@@ -101,16 +104,20 @@ class CompletionTest {
         assertEquals(List.of("unit"), kinds("%oscillator x: box, mass {m} |"));
         assertEquals(List.of(), offered("%oscillator x: box, mass 40|"));
         assertEquals(List.of(), offered("%oscillator x: box, mass 40 u |"));
-        assertEquals(List.of("period", "periods"), offered("%evolve x: psi for 3 per|").stream().sorted().toList());
+        assertEquals(
+                List.of("period", "periods"),
+                offered("%evolve x: psi for 3 per|").stream().sorted().toList());
         assertTrue(offered("%evolve x: psi for 3 |").contains("us"));
         assertEquals(List.of("periods", "period"), offered("%evolve x: n for 3 |"));
     }
 
     @Test
     void observablesAndOptionsFollowInATable() {
-        assertTrue(offered("%table run: |").containsAll(List.of("position", "Mandel Q", "population of ", "every", "as")));
+        assertTrue(
+                offered("%table run: |").containsAll(List.of("position", "Mandel Q", "population of ", "every", "as")));
         assertEquals(
-                List.of("spread of position", "spread of momentum", "spread over swing"), offered("%table run: energy, spr|"));
+                List.of("spread of position", "spread of momentum", "spread over swing"),
+                offered("%table run: energy, spr|"));
         assertEquals("%table run: spread of position", completed("%table run: spread of p|"));
         assertEquals(List.of("observable"), kinds("%table run: p|"));
     }
@@ -127,8 +134,7 @@ class CompletionTest {
 
     @Test
     void aSentenceThatGoesOnInTheNextLineIsStillTheSame() {
-        assertEquals(
-                List.of("frequency"), offered("%%declare\noscillator x: harmonic,\n  mass 4 u,\n  fr|"));
+        assertEquals(List.of("frequency"), offered("%%declare\noscillator x: harmonic,\n  mass 4 u,\n  fr|"));
         assertEquals(List.of("mass", "width", "natural"), offered("%%declare\noscillator x: box,\n  |"));
         assertEquals(6, offered("%%declare\noscillator x: box,\n|").size());
     }

@@ -89,7 +89,8 @@ class DeclarationsTest {
                 + "%oscillator c: harmonic, mass 1 u, spacing 0.3 eV");
         assertEquals(7.5e6, ((Harmonic) bench.value("a")).angularFrequency());
         assertEquals(
-                Oscillator.harmonic().mass(1, Units.ATOMIC_MASS).wavenumber(2991, Units.PER_CENTIMETRE), bench.value("b"));
+                Oscillator.harmonic().mass(1, Units.ATOMIC_MASS).wavenumber(2991, Units.PER_CENTIMETRE),
+                bench.value("b"));
         assertEquals(
                 Oscillator.harmonic().mass(1, Units.ATOMIC_MASS).spacing(0.3, Units.ELECTRONVOLT), bench.value("c"));
     }
@@ -199,7 +200,8 @@ class DeclarationsTest {
 
     @Test
     void levelsShowEnergiesAndSpacings() throws SentenceFailure {
-        // A well of depth 8 in units of the ground energy of the box of its width has levels near 0.663, 2.603, 5.609 in
+        // A well of depth 8 in units of the ground energy of the box of its width has levels near 0.663, 2.603, 5.609
+        // in
         // that unit: common practice, no source.
         double unit = Math.PI * Math.PI / 2;
         bench.expressions.put("depth", 8 * unit);
@@ -219,7 +221,8 @@ class DeclarationsTest {
         assertEquals(2.603, table.doubleColumn("energy").get(1) / unit, 5e-4);
         assertEquals(5.609, table.doubleColumn("energy").get(2) / unit, 5e-4);
         assertEquals(
-                table.doubleColumn("energy").get(1) - table.doubleColumn("energy").get(0),
+                table.doubleColumn("energy").get(1)
+                        - table.doubleColumn("energy").get(0),
                 table.doubleColumn("spacing to the next").get(0),
                 1e-13);
         assertTrue(table.doubleColumn("spacing to the next").isMissing(2));
@@ -230,7 +233,9 @@ class DeclarationsTest {
         bench.run(TRAP + "%levels trap, count 4");
         Table table = ((LevelTable) bench.emitted.get(1)).table();
         assertEquals(4, table.rowCount());
-        assertTrue(table.columnNames().contains("energy / neV"), table.columnNames().toString());
+        assertTrue(
+                table.columnNames().contains("energy / neV"),
+                table.columnNames().toString());
         double spacing = table.doubleColumn("spacing to the next / neV").get(3);
         // h·1.2 MHz in neV, from the exact constants h and e.
         assertEquals(6.62607015e-34 * 1.2e6 / 1.602176634e-19 * 1e9, spacing, 1e-14 * spacing);
@@ -261,8 +266,10 @@ class DeclarationsTest {
     void aFailedCellLosesAndChangesNothing() throws SentenceFailure {
         bench.run(TRAP + PSI);
         Object trap = bench.value("trap");
-        assertThrows(SentenceFailure.class, () -> bench.run("%oscillator trap: harmonic, mass 9 u, frequency 1 MHz\n"
-                + "%state phi: coherent in trap, mean -1"));
+        assertThrows(
+                SentenceFailure.class,
+                () -> bench.run("%oscillator trap: harmonic, mass 9 u, frequency 1 MHz\n"
+                        + "%state phi: coherent in trap, mean -1"));
         assertSame(trap, bench.value("trap"));
         assertEquals(Optional.empty(), bench.find("phi"));
     }
@@ -273,9 +280,7 @@ class DeclarationsTest {
                 SentenceFailure.class, () -> bench.run("%oscillator trap: harmonic, mass {m} u, frequency 1 MHz"));
         assertEquals("Java does not know 'm'", failure.message());
         assertEquals(
-                List.of(
-                        "line 1: %oscillator trap: harmonic, mass {m} u, frequency 1 MHz",
-                        " ".repeat(41) + "^^^"),
+                List.of("line 1: %oscillator trap: harmonic, mass {m} u, frequency 1 MHz", " ".repeat(41) + "^^^"),
                 failure.lines());
     }
 }

@@ -62,7 +62,9 @@ class InspectionTest {
 
     @Test
     void anObservableSaysItsSymbol() {
-        assertSays("%table run: energy, spread of po|sition", "spread of position: an observable", "Δx: standard deviation");
+        assertSays(
+                "%table run: energy, spread of po|sition",
+                "spread of position: an observable", "Δx: standard deviation");
         assertSays("%table run: population o|f 3", "P_n");
         assertSays("%table run: return amplitude, real p|art", "return amplitude, real part: an observable");
     }

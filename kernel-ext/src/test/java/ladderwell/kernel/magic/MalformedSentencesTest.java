@@ -32,9 +32,53 @@ class MalformedSentencesTest {
             "%%declare\noscillator x: box,\n   mass 1 u, # comment\n   width 3 nm\n\nstate y: number in x, level 2");
 
     private static final List<String> SCRAPS = List.of(
-            ",", ":", "{", "}", "\"", "'", "#", "%", "\n", "\r", "\t", " ", "\u00a0", "\u0000", "\u001b", "\ud800", "\udc00",
-            "−", "NaN", "Infinity", "1e999", "-1", "1e-400", "/", "^", "i", "+", "..", "{{}", "\\", "for", "in", "mass", "u",
-            "m", "levels", "natural", "ψ", "\u202e", "\ud83c\udf0a", "٣", "e", "1_0", "=", "(", "kg m/s", "%%");
+            ",",
+            ":",
+            "{",
+            "}",
+            "\"",
+            "'",
+            "#",
+            "%",
+            "\n",
+            "\r",
+            "\t",
+            " ",
+            "\u00a0",
+            "\u0000",
+            "\u001b",
+            "\ud800",
+            "\udc00",
+            "−",
+            "NaN",
+            "Infinity",
+            "1e999",
+            "-1",
+            "1e-400",
+            "/",
+            "^",
+            "i",
+            "+",
+            "..",
+            "{{}",
+            "\\",
+            "for",
+            "in",
+            "mass",
+            "u",
+            "m",
+            "levels",
+            "natural",
+            "ψ",
+            "\u202e",
+            "\ud83c\udf0a",
+            "٣",
+            "e",
+            "1_0",
+            "=",
+            "(",
+            "kg m/s",
+            "%%");
 
     private static String mutated(Random random) {
         StringBuilder text = new StringBuilder(GOOD.get(random.nextInt(GOOD.size())));
@@ -107,8 +151,15 @@ class MalformedSentencesTest {
         Bench bench = prepared();
         for (String scrap : SCRAPS) {
             String much = scrap.repeat((1 << 20) / scrap.length());
-            for (String before : List.of("%", "%%declare\n", "%oscillator x: box, mass 1 u, width ", "%oscillator x: ",
-                    "%table run: ", "%levels ", "%state x: superposition in trap, levels 0 ", "%state x: coherent in trap, alpha ")) {
+            for (String before : List.of(
+                    "%",
+                    "%%declare\n",
+                    "%oscillator x: box, mass 1 u, width ",
+                    "%oscillator x: ",
+                    "%table run: ",
+                    "%levels ",
+                    "%state x: superposition in trap, levels 0 ",
+                    "%state x: coherent in trap, alpha ")) {
                 String text = before + much;
                 // Ten seconds are a hundred times what it takes; they tell linear from quadratic.
                 assertTimeoutPreemptively(Duration.ofSeconds(10), () -> {

@@ -148,9 +148,7 @@ class MistakesTest {
         assertEquals(expected, failure.message());
         String label = "line 1: ";
         assertEquals(
-                List.of(
-                        label + cell,
-                        " ".repeat(label.length() + open) + "^".repeat(Math.max(1, close - open - 1))),
+                List.of(label + cell, " ".repeat(label.length() + open) + "^".repeat(Math.max(1, close - open - 1))),
                 failure.lines());
     }
 
@@ -175,7 +173,9 @@ class MistakesTest {
         SentenceFailure failure =
                 assertThrows(SentenceFailure.class, () -> bench.run("%table still: energy, mean quanta"));
         assertTrue(failure.message().contains("mean quanta"), failure.message());
-        assertEquals(" ".repeat(8 + 22) + "^".repeat("mean quanta".length()), failure.lines().get(1));
+        assertEquals(
+                " ".repeat(8 + 22) + "^".repeat("mean quanta".length()),
+                failure.lines().get(1));
     }
 
     @Test
@@ -200,8 +200,7 @@ class MistakesTest {
     @Test
     void oneCellDoesNotDeclareANameTwiceWithDifferentNouns() {
         SentenceFailure failure = assertThrows(
-                SentenceFailure.class,
-                () -> bench.run("%oscillator x: box, natural\n%state x: number in x, level 1"));
+                SentenceFailure.class, () -> bench.run("%oscillator x: box, natural\n%state x: number in x, level 1"));
         assertEquals(
                 "'x' is declared by 'oscillator' above and cannot be declared by 'state' too; take another name",
                 failure.message());
@@ -210,8 +209,7 @@ class MistakesTest {
     @Test
     void aJavaVariableOfAnotherTypeIsNotOverwritten() {
         bench.javaVariable("x", "text");
-        SentenceFailure failure =
-                assertThrows(SentenceFailure.class, () -> bench.run("%oscillator x: box, natural"));
+        SentenceFailure failure = assertThrows(SentenceFailure.class, () -> bench.run("%oscillator x: box, natural"));
         assertEquals("'x' is a Java variable of type String already, not Box", failure.message());
         failure = assertThrows(SentenceFailure.class, () -> bench.run("%state y: number in x, level 1"));
         assertEquals("'x' is a Java value of another type; 'in' takes an oscillator, such as unit", failure.message());
@@ -231,17 +229,16 @@ class MistakesTest {
         assertMessage(
                 "the expression gives no numbers; levels takes whole numbers such as 0 1 2",
                 "%state x: superposition in trap, levels {none}");
-        assertMessage(
-                "mean takes a plain number such as 9.5, not 'nine'", "%state x: coherent in trap, mean {text}");
+        assertMessage("mean takes a plain number such as 9.5, not 'nine'", "%state x: coherent in trap, mean {text}");
         assertMessage(
                 "'{list}' gives the text '1, 2'; expected a number, a quantity, or words without commas and braces",
                 "%state x: coherent in trap, mean {list}");
-        assertMessage(
-                "'3 m' is a length; mass takes a mass such as 40 u", "%oscillator x: box, mass {len}, width 1 m");
+        assertMessage("'3 m' is a length; mass takes a mass such as 40 u", "%oscillator x: box, mass {len}, width 1 m");
         assertMessage(
                 "'{len}' gives a length, 3 m; mean takes a plain number such as 9.5",
                 "%state x: coherent in trap, mean {len}");
-        assertMessage("'m' is too much after '{len}'; expected a comma or the end of the sentence",
+        assertMessage(
+                "'m' is too much after '{len}'; expected a comma or the end of the sentence",
                 "%oscillator x: box, mass 1 u, width {len} m");
     }
 
