@@ -136,13 +136,14 @@ public final class MotionPicture {
     private JsonObject words() {
         String at = "%{x:.3~g}" + Markup.plot(motion.lengthUnit().isEmpty() ? "" : " " + motion.lengthUnit());
         String per = Markup.plot(motion.lengthUnit().isEmpty() ? "" : " /" + motion.lengthUnit());
-        String when = motion.periods(0).isPresent() ? " periods" : motion.timeUnit().isEmpty() ? "" : " " + motion.timeUnit();
+        String when =
+                motion.periods(0).isPresent() ? " periods" : motion.timeUnit().isEmpty() ? "" : " " + motion.timeUnit();
         JsonObject words = new JsonObject();
         words.addProperty("hover", at + ": %{y:.3~g}" + per + "<extra></extra>");
-        words.addProperty("stripHover", at + ", %{y:.3~g}" + Markup.plot(when) + ": %{z:.3~g}" + per + "<extra></extra>");
-        words.addProperty("energy", "⟨E⟩<br>" + Written.number(motion.meanEnergy(), 3));
         words.addProperty(
-                "potential", motion.energyUnit().isEmpty() ? "V" : "V / " + Markup.plot(motion.energyUnit()));
+                "stripHover", at + ", %{y:.3~g}" + Markup.plot(when) + ": %{z:.3~g}" + per + "<extra></extra>");
+        words.addProperty("energy", "⟨E⟩<br>" + Written.number(motion.meanEnergy(), 3));
+        words.addProperty("potential", motion.energyUnit().isEmpty() ? "V" : "V / " + Markup.plot(motion.energyUnit()));
         return words;
     }
 
@@ -158,9 +159,13 @@ public final class MotionPicture {
                         .tickSettings(Drawing.noTicks())
                         .build())
                 .yAxis(Drawing.axis(
-                                Written.axis("density", Written.inverse(motion.lengthUnit())), -RAIL * highest, highest, 4)
+                                Written.axis("density", Written.inverse(motion.lengthUnit())),
+                                -RAIL * highest,
+                                highest,
+                                4)
                         .build())
-                .yAxis2(Drawing.right(-RAIL * motion.top(), motion.top(), new double[] {0}).build())
+                .yAxis2(Drawing.right(-RAIL * motion.top(), motion.top(), new double[] {0})
+                        .build())
                 .build();
         double turn = motion.turningPoint();
         double reach = motion.reachAtMeanEnergy();

@@ -178,6 +178,7 @@ class MistakesTest {
         assertEquals(
                 " ".repeat(8 + 22) + "^".repeat("mean quanta".length()),
                 failure.lines().get(1));
+<<<<<<< HEAD
     }
 
     @Test
@@ -209,6 +210,8 @@ class MistakesTest {
         String message =
                 assertThrows(SentenceFailure.class, () -> bench.run(cell)).message();
         assertTrue(message.contains(part), message);
+=======
+>>>>>>> host
     }
 
     @Test

@@ -13,11 +13,15 @@ final class PictureGallery {
     /** A whole page. @param style of the page itself */
     static String page(String style, List<?> values) {
         Renderings renderings = new Renderings();
-        StringBuilder page = new StringBuilder("<!doctype html><html lang=\"en\"><head><meta charset=\"utf-8\"><title>Gallery</title>"
-                + "<link rel=\"icon\" href=\"data:,\"><style>body{margin:18px;font:14px/1.45 system-ui,'Segoe UI',Helvetica,Arial,sans-serif;" + style
-                + "}</style></head><body>\n");
+        StringBuilder page = new StringBuilder(
+                "<!doctype html><html lang=\"en\"><head><meta charset=\"utf-8\"><title>Gallery</title>"
+                        + "<link rel=\"icon\" href=\"data:,\"><style>body{margin:18px;font:14px/1.45 system-ui,'Segoe UI',Helvetica,Arial,sans-serif;"
+                        + style
+                        + "}</style></head><body>\n");
         for (Object value : values) {
-            page.append("<div class=\"cell\">").append(renderings.render(value).data().get("text/html")).append("</div>\n");
+            page.append("<div class=\"cell\">")
+                    .append(renderings.render(value).data().get("text/html"))
+                    .append("</div>\n");
         }
         return page.append("</body></html>\n").toString();
     }
