@@ -112,8 +112,8 @@ public final class DensityFrames {
      */
     public void fill(double[][] re, double[][] im, double[][] density, Workers workers) {
         if (re.length != im.length) {
-            throw new IllegalArgumentException(
-                    re.length + " rows of real parts and " + im.length + " of imaginary parts, expected the same number");
+            throw new IllegalArgumentException(re.length + " rows of real parts and " + im.length
+                    + " of imaginary parts, expected the same number");
         }
         for (int j = 0; j < re.length; j++) {
             if (re[j].length != levels || im[j].length != levels) {
@@ -166,7 +166,8 @@ public final class DensityFrames {
 
     private void frames(int times, double[][] density, Workers workers, Rows rows) {
         int groups = (times + GROUP - 1) / GROUP;
-        // A few parts per thread, so that scratch arrays are made rarely; every frame is computed alone, so parts change no bit.
+        // A few parts per thread, so that scratch arrays are made rarely; every frame is computed alone, so parts
+        // change no bit.
         int parts = workers.threads() == 1 ? 1 : Math.min(groups, 4 * workers.threads());
         workers.forEach(parts, part -> {
             Panel panel = new Panel();

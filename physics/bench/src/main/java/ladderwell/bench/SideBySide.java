@@ -50,13 +50,11 @@ public final class SideBySide {
         }
         System.out.println();
         sides.notes.forEach(System.out::println);
-        System.out.println(
-                """
+        System.out.println("""
 
                 Ratios of times, each the shortest of a sample: median over %d rounds taken in turn, range in brackets. NumPy is the fastest of its variants whose error is
                 no more than 1000 times ours or 1e-10; a tuned variant (*) goes beyond ordinary craft and is no part of the goal.
-                Errors: ours, then NumPy's, as the task's script defines them."""
-                        .formatted(sides.rounds));
+                Errors: ours, then NumPy's, as the task's script defines them.""".formatted(sides.rounds));
         System.exit(all ? 0 : 1);
     }
 
@@ -156,11 +154,7 @@ public final class SideBySide {
 
     private static String shown(double[] sorted) {
         return String.format(
-                Locale.ROOT,
-                "%.3g (%.3g to %.3g)",
-                sorted[sorted.length / 2],
-                sorted[0],
-                sorted[sorted.length - 1]);
+                Locale.ROOT, "%.3g (%.3g to %.3g)", sorted[sorted.length / 2], sorted[0], sorted[sorted.length - 1]);
     }
 
     private static void warm(Runnable run) {
