@@ -20,7 +20,7 @@ def blas():
     return "; ".join(found) or "no OpenBLAS"
 
 
-def sample(work, least=0.08):
+def sample(work, least=0.3):
     """Shortest time of work() in ms over at least `least` seconds or three runs. The last result is kept, as a notebook keeps it."""
     times, result = [], None
     start = time.perf_counter()

@@ -32,7 +32,8 @@ public record Coherent(Harmonic oscillator, double mean, double phaseAngle, List
     }
 
     static Coherent mean(Harmonic oscillator, double mean) {
-        return new Coherent(oscillator, mean, 0, List.of(Fact.exact("mean", "n̄", Checks.finite("mean quanta", mean), ONE)));
+        return new Coherent(
+                oscillator, mean, 0, List.of(Fact.exact("mean", "n̄", Checks.finite("mean quanta", mean), ONE)));
     }
 
     static Coherent alpha(Harmonic oscillator, double re, double im) {
@@ -106,7 +107,8 @@ public record Coherent(Harmonic oscillator, double mean, double phaseAngle, List
         facts.add(new Fact("phase", "φ", Quantity.of(phaseAngle, RADIAN), Bound.guaranteed(Math.ulp(phaseAngle))));
         double swing = Math.sqrt(2 * mean) * scale.length();
         facts.add(shown.fact("swing (turning point)", "√(2n̄)·ℓ", Kind.LENGTH, swing, uncertainty));
-        facts.add(shown.fact("spread of position", "Δx = ℓ/√2", Kind.LENGTH, scale.length() * Math.sqrt(0.5), uncertainty));
+        facts.add(shown.fact(
+                "spread of position", "Δx = ℓ/√2", Kind.LENGTH, scale.length() * Math.sqrt(0.5), uncertainty));
         facts.add(shown.fact(
                 "spread of momentum", "Δp = ħ/√2ℓ", Kind.MOMENTUM, scale.momentum() * Math.sqrt(0.5), uncertainty));
         if (mean > 0) {

@@ -75,7 +75,9 @@ final class DensityReading {
                 x,
                 values,
                 Bound.guaranteed(error),
-                average ? "closed form of a coherent state, mean over a grid spacing" : "closed form of a coherent state");
+                average
+                        ? "closed form of a coherent state, mean over a grid spacing"
+                        : "closed form of a coherent state");
     }
 
     private static Density sumOverLevels(Run run, double[] x) {

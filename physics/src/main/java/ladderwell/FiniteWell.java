@@ -137,14 +137,11 @@ public record FiniteWell(Optional<Quantity> mass, Optional<Quantity> width, Quan
         facts.add(Fact.exact("bound levels", "", levels.count(), ONE));
         double uncertainty = mass.map(Checks::relativeUncertainty).orElse(0.0);
         facts.add(Fact.closedForm(
-                "depth over the box's ground energy",
-                "V₀/(π²ħ²/2mL²)",
-                scaledDepth() / boxGround,
-                ONE,
-                uncertainty));
+                "depth over the box's ground energy", "V₀/(π²ħ²/2mL²)", scaledDepth() / boxGround, ONE, uncertainty));
         facts.add(level("ground energy", "E₀", 0, scale, uncertainty));
         if (levels.count() > 1) {
-            facts.add(level("highest bound level", "E_" + (levels.count() - 1), levels.count() - 1, scale, uncertainty));
+            facts.add(
+                    level("highest bound level", "E_" + (levels.count() - 1), levels.count() - 1, scale, uncertainty));
             double spacing = levels.energyHigh(1) - levels.energyHigh(0);
             if (!scale.isNatural()) {
                 facts.add(new Shown(scale)

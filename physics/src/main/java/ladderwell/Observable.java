@@ -32,7 +32,8 @@ public record Observable(String name, String symbol, Kind kind, String meaning, 
             "Δx/A",
             Kind.NUMBER,
             "Δx over the turning point A of the mean motion; 1/(2√n̄) for a coherent state (harmonic only)");
-    public static final Observable ENERGY = of("energy", "⟨E⟩", Kind.ENERGY, "mean energy above the bottom of the well");
+    public static final Observable ENERGY =
+            of("energy", "⟨E⟩", Kind.ENERGY, "mean energy above the bottom of the well");
     public static final Observable MEAN_QUANTA =
             of("mean quanta", "⟨n⟩", Kind.NUMBER, "mean number of quanta (harmonic only)");
     public static final Observable VARIANCE_OF_QUANTA =

@@ -55,7 +55,11 @@ public record Packet(Oscillator oscillator, Quantity position, Quantity momentum
         Shown shown = new Shown(scale);
         List<Fact> facts = new ArrayList<>(given());
         facts.add(shown.fact(
-                "spread of momentum", "Δp = ħ/2Δx", Kind.MOMENTUM, 0.5 * scale.length() / spread.si() * scale.momentum(), 0));
+                "spread of momentum",
+                "Δp = ħ/2Δx",
+                Kind.MOMENTUM,
+                0.5 * scale.length() / spread.si() * scale.momentum(),
+                0));
         facts.add(shown.energy("mean energy", "⟨p²⟩/2m", meanEnergy(), oscillator));
         return List.copyOf(facts);
     }

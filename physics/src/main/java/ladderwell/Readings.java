@@ -26,7 +26,8 @@ final class Readings {
 
     Series series(Observable o) {
         if (o.level() >= 0) {
-            return constant(o, populations().population(o.level()), populations().populationBound(o.level()));
+            return constant(
+                    o, populations().population(o.level()), populations().populationBound(o.level()));
         }
         if (o.equals(Observable.POSITION)) {
             Means m = means();
@@ -84,7 +85,8 @@ final class Readings {
             return along(o, r::im, j -> r.error(), Certainty.GUARANTEED);
         }
         throw new IllegalArgumentException("'" + o.name() + "' is no observable of a run; known are "
-                + String.join(", ", Observable.all().stream().map(Observable::name).toList()));
+                + String.join(
+                        ", ", Observable.all().stream().map(Observable::name).toList()));
     }
 
     private Series spreadOverSwing(Observable o) {
@@ -137,9 +139,7 @@ final class Readings {
 
     private synchronized Means means() {
         if (means == null) {
-            means = oscillator instanceof Harmonic
-                    ? Means.onLadder(state, Workers.CALLER)
-                    : Means.onElements(state);
+            means = oscillator instanceof Harmonic ? Means.onLadder(state, Workers.CALLER) : Means.onElements(state);
         }
         return means;
     }

@@ -51,7 +51,8 @@ public final class Run {
         PhasedState phased = PhasedState.of(state.oscillator().levels(), amplitudes, times);
         if (phased.error() > evolution.tolerance()) {
             throw new PhysicsException.NotConverged(
-                    "the state after " + evolution.duration() + " (rounding and the errors of the levels set this floor; "
+                    "the state after " + evolution.duration()
+                            + " (rounding and the errors of the levels set this floor; "
                             + "ask for a looser tolerance or a shorter time)",
                     1,
                     phased.error(),
@@ -126,7 +127,8 @@ public final class Run {
 
     private static void ask(Record.Builder record, String prefix, List<Fact> given) {
         for (int i = 0; i < given.size(); i++) {
-            record.asked(prefix + (i + 1) + "." + given.get(i).name(), given.get(i).value());
+            record.asked(
+                    prefix + (i + 1) + "." + given.get(i).name(), given.get(i).value());
         }
     }
 

@@ -23,7 +23,8 @@ final class RunTable {
                 (2.0 * observables.size() + 2) * run.times() * Double.BYTES * 2,
                 "ask for fewer frames or fewer observables");
         Scale scale = run.state().oscillator().scale();
-        Table table = Table.create(run.state().kind() + " in " + run.state().oscillator().kind());
+        Table table = Table.create(
+                run.state().kind() + " in " + run.state().oscillator().kind());
         addTimes(table, run, scale);
         for (Observable observable : observables) {
             Series series = run.series(observable);
@@ -41,8 +42,7 @@ final class RunTable {
             lab[j] = unit.fromSi(run.time(j) * scale.time());
             periods[j] = run.time(j) / period;
         }
-        table.addColumns(
-                DoubleColumn.create(head("time", unit), lab), DoubleColumn.create("time / periods", periods));
+        table.addColumns(DoubleColumn.create(head("time", unit), lab), DoubleColumn.create("time / periods", periods));
     }
 
     private static void addSeries(Table table, Series series, Scale scale) {

@@ -1,7 +1,6 @@
 package ladderwell;
 
 import ladderwell.quantity.Kind;
-import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
 import ladderwell.quantity.Unit;
 

@@ -26,8 +26,8 @@ public record Superposition(Oscillator oscillator, List<Long> levels, List<Doubl
             throw new IllegalArgumentException("a superposition needs at least one level");
         }
         if (re.size() != levels.size() || im.size() != levels.size()) {
-            throw new IllegalArgumentException("a superposition of " + levels.size() + " levels needs as many weights, not "
-                    + Math.max(re.size(), im.size()));
+            throw new IllegalArgumentException("a superposition of " + levels.size()
+                    + " levels needs as many weights, not " + Math.max(re.size(), im.size()));
         }
         if (levels.stream().distinct().count() != levels.size()) {
             throw new IllegalArgumentException("a superposition names each level once, not " + levels);
@@ -58,7 +58,10 @@ public record Superposition(Oscillator oscillator, List<Long> levels, List<Doubl
     static Superposition equal(Oscillator oscillator, long... levels) {
         List<Long> names = Arrays.stream(levels).boxed().toList();
         return new Superposition(
-                oscillator, names, names.stream().map(n -> 1.0).toList(), names.stream().map(n -> 0.0).toList());
+                oscillator,
+                names,
+                names.stream().map(n -> 1.0).toList(),
+                names.stream().map(n -> 0.0).toList());
     }
 
     /** The same levels with these real weights. */

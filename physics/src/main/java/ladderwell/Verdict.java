@@ -28,7 +28,8 @@ final class Verdict {
         if (run.amplitudes().levels() == 2) {
             long a = run.amplitudes().first(0);
             long b = run.phased().lastLevel();
-            double spacing = oscillator.levels().energyHigh(b) - oscillator.levels().energyHigh(a);
+            double spacing =
+                    oscillator.levels().energyHigh(b) - oscillator.levels().energyHigh(a);
             return "two levels: returns exactly after every beat of " + time(run, 2 * Math.PI / spacing);
         }
         return "no common period is claimed for these levels; " + bestReturn(run);

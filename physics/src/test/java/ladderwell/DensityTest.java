@@ -23,7 +23,10 @@ class DensityTest {
             double centre = Math.sqrt(2 * mean) * Math.cos(density.run().time(j));
             for (int i = 0; i < density.points(); i++) {
                 double d = density.position(i) - centre;
-                assertEquals(Math.exp(-d * d) / Math.sqrt(Math.PI), density.value(j, i), density.bound().size() + 1e-15);
+                assertEquals(
+                        Math.exp(-d * d) / Math.sqrt(Math.PI),
+                        density.value(j, i),
+                        density.bound().size() + 1e-15);
             }
         }
         assertTrue(density.bound().size() < 1e-6, () -> "bound " + density.bound());
@@ -32,7 +35,8 @@ class DensityTest {
     @Test
     void farUpTheLadderTheClosedFormTakesOverAndKeepsTheWholeProbability() {
         for (double mean : new double[] {1.2e4, 1e8}) {
-            Density density = mode.coherent(mean).evolve(1, PERIOD).frames(7).run().density(400);
+            Density density =
+                    mode.coherent(mean).evolve(1, PERIOD).frames(7).run().density(400);
             assertTrue(density.method().startsWith("closed form"), density.method());
             double spacing = density.position(1) - density.position(0);
             for (int j = 0; j < density.times(); j++) {
@@ -58,15 +62,21 @@ class DensityTest {
             well.gaussian(Quantity.of(-0.1, ONE), Quantity.of(8, ONE), Quantity.of(0.06, ONE))
         };
         for (State state : states) {
-            Density density = state.evolve(0.7, PERIOD).frames(5).tolerance(1e-3).run().density(2001);
+            Density density =
+                    state.evolve(0.7, PERIOD).frames(5).tolerance(1e-3).run().density(2001);
             double spacing = density.position(1) - density.position(0);
             for (int j = 0; j < density.times(); j++) {
                 double total = 0;
                 for (int i = 0; i < density.points(); i++) {
                     total += density.value(j, i) * spacing;
                 }
-                // trapezium rule on a smooth function (kinks of φ′ at the walls: second order in the spacing), state to 1e-3
-                assertEquals(1, total, 3e-3, state.kind() + " in " + state.oscillator().kind());
+                // trapezium rule on a smooth function (kinks of φ′ at the walls: second order in the spacing), state to
+                // 1e-3
+                assertEquals(
+                        1,
+                        total,
+                        3e-3,
+                        state.kind() + " in " + state.oscillator().kind());
             }
         }
     }

@@ -74,12 +74,16 @@ class HonestBoundsTest {
                 check(what, run, ENERGY, j, n.add(HALF));
                 // ⟨α|αe^{-it}⟩ e^{-it/2} = exp(n̄(cos t − 1)) e^{-i(n̄ sin t + t/2)}
                 BigDecimal[] ahead = FiftyDigits.cosSin(t);
-                BigDecimal size = FiftyDigits.exp(n.multiply(ahead[0].subtract(BigDecimal.ONE), DIGITS)
-                        .max(new BigDecimal("-2000")));
-                BigDecimal[] angle = FiftyDigits.cosSin(
-                        n.multiply(ahead[1]).add(t.multiply(HALF)));
+                BigDecimal size = FiftyDigits.exp(
+                        n.multiply(ahead[0].subtract(BigDecimal.ONE), DIGITS).max(new BigDecimal("-2000")));
+                BigDecimal[] angle = FiftyDigits.cosSin(n.multiply(ahead[1]).add(t.multiply(HALF)));
                 check(what, run, RETURN_AMPLITUDE_REAL, j, size.multiply(angle[0], DIGITS));
-                check(what, run, RETURN_AMPLITUDE_IMAGINARY, j, size.multiply(angle[1], DIGITS).negate());
+                check(
+                        what,
+                        run,
+                        RETURN_AMPLITUDE_IMAGINARY,
+                        j,
+                        size.multiply(angle[1], DIGITS).negate());
                 check(what, run, RETURN_PROBABILITY, j, size.multiply(size, DIGITS));
             }
             long level = Math.max(0, Math.round(mean + 3 * random.nextGaussian() * Math.sqrt(mean)));
@@ -95,7 +99,11 @@ class HonestBoundsTest {
         for (int i = 0; i < 400; i++) {
             boolean ladder = i % 2 == 0;
             int size = 1 + random.nextInt(6);
-            long[] levels = random.longs(0, ladder ? 100_000 : 300).distinct().limit(size).sorted().toArray();
+            long[] levels = random.longs(0, ladder ? 100_000 : 300)
+                    .distinct()
+                    .limit(size)
+                    .sorted()
+                    .toArray();
             if (ladder && size > 1) {
                 levels[1] = levels[0] + 1;
                 levels = java.util.Arrays.stream(levels).distinct().sorted().toArray();

@@ -1,8 +1,8 @@
 package ladderwell;
 
 import static ladderwell.quantity.Units.ATOMIC_MASS;
-import static ladderwell.quantity.Units.ELECTRON_MASS;
 import static ladderwell.quantity.Units.ELECTRONVOLT;
+import static ladderwell.quantity.Units.ELECTRON_MASS;
 import static ladderwell.quantity.Units.HERTZ;
 import static ladderwell.quantity.Units.JOULE;
 import static ladderwell.quantity.Units.MEGAHERTZ;
@@ -49,14 +49,17 @@ class OscillatorTest {
 
     @Test
     void theCardShowsBothFrequenciesAndTheZeroPointLength() {
-        // S-CON-09: 40Ca+ at 1 MHz, atom of 39.962590863 u (AME) less one electron, 11.2456552 nm; CODATA 2022 constants
+        // S-CON-09: 40Ca+ at 1 MHz, atom of 39.962590863 u (AME) less one electron, 11.2456552 nm; CODATA 2022
+        // constants
         double electron = Constants.ELECTRON_REST_MASS / Constants.ATOMIC_MASS_CONSTANT;
-        Harmonic trap = Oscillator.harmonic().mass(39.962590863 - electron, ATOMIC_MASS).frequency(1, MEGAHERTZ);
+        Harmonic trap =
+                Oscillator.harmonic().mass(39.962590863 - electron, ATOMIC_MASS).frequency(1, MEGAHERTZ);
         Fact length = fact(trap.facts(), "zero-point length");
         assertEquals("nm", length.value().unit().symbol());
         assertEquals(11.2456552, length.value().value(), 5e-8);
         assertEquals(1e6, fact(trap.facts(), "frequency").value().si(), 1e-9);
-        assertEquals(2e6 * Math.PI, fact(trap.facts(), "angular frequency").value().si(), 1e-8);
+        assertEquals(
+                2e6 * Math.PI, fact(trap.facts(), "angular frequency").value().si(), 1e-8);
     }
 
     @Test
@@ -93,9 +96,11 @@ class OscillatorTest {
 
     @Test
     void badDeclarationsAreRefusedInOneSentenceThatNamesTheInput() {
-        assertTrue(message(() -> Oscillator.harmonic().mass(-3, ATOMIC_MASS)).contains("mass must be positive, not -3 u"));
+        assertTrue(
+                message(() -> Oscillator.harmonic().mass(-3, ATOMIC_MASS)).contains("mass must be positive, not -3 u"));
         assertTrue(message(() -> Oscillator.harmonic().mass(0, ATOMIC_MASS)).contains("mass must be positive"));
-        assertTrue(message(() -> Oscillator.harmonic().mass(Double.NaN, ATOMIC_MASS)).contains("finite"));
+        assertTrue(message(() -> Oscillator.harmonic().mass(Double.NaN, ATOMIC_MASS))
+                .contains("finite"));
         assertTrue(message(() -> Oscillator.harmonic().mass(40, MEGAHERTZ)).contains("a mass such as 40 u"));
         assertTrue(message(() -> Oscillator.harmonic().mass(40, ATOMIC_MASS).frequency(2, SECOND))
                 .contains("frequency must be a frequency"));
@@ -108,7 +113,8 @@ class OscillatorTest {
                         .width(1, NANOMETRE)
                         .depth(-0.3, ELECTRONVOLT))
                 .contains("depth must be positive"));
-        assertTrue(message(() -> Oscillator.finiteWell().natural(Double.POSITIVE_INFINITY)).contains("finite"));
+        assertTrue(message(() -> Oscillator.finiteWell().natural(Double.POSITIVE_INFINITY))
+                .contains("finite"));
     }
 
     static String message(org.junit.jupiter.api.function.Executable action) {

@@ -14,8 +14,14 @@ import java.util.List;
 @AnalyzeClasses(packages = "ladderwell", importOptions = ImportOption.DoNotIncludeTests.class)
 class RoomsTest {
     private static final String[] LIBRARIES = {
-        "java..", "jdk.incubator.vector..", "javax.measure..", "org.apache.commons.math3..", "tech.tablesaw..", "tech.units..",
-        "org.erdtman..", "org.jspecify.."
+        "java..",
+        "jdk.incubator.vector..",
+        "javax.measure..",
+        "org.apache.commons.math3..",
+        "tech.tablesaw..",
+        "tech.units..",
+        "org.erdtman..",
+        "org.jspecify.."
     };
 
     private static ArchRule only(String room, String... lower) {

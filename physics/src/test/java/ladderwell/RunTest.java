@@ -13,8 +13,8 @@ import static ladderwell.Observable.UNCERTAINTY_PRODUCT;
 import static ladderwell.Observable.VARIANCE_OF_QUANTA;
 import static ladderwell.Observable.population;
 import static ladderwell.quantity.Units.ATOMIC_MASS;
-import static ladderwell.quantity.Units.ELECTRON_MASS;
 import static ladderwell.quantity.Units.ELECTRONVOLT;
+import static ladderwell.quantity.Units.ELECTRON_MASS;
 import static ladderwell.quantity.Units.FEMTOSECOND;
 import static ladderwell.quantity.Units.MEGAHERTZ;
 import static ladderwell.quantity.Units.NANOMETRE;
@@ -44,7 +44,8 @@ class RunTest {
         double allowed = series.error(j) + 4 * Math.ulp(expected);
         assertTrue(
                 Math.abs(series.value(j) - expected) <= allowed,
-                () -> what + " at time " + j + ": " + series.value(j) + " ± " + series.error(j) + ", closed form " + expected);
+                () -> what + " at time " + j + ": " + series.value(j) + " ± " + series.error(j) + ", closed form "
+                        + expected);
     }
 
     @ParameterizedTest
@@ -71,7 +72,9 @@ class RunTest {
             within("|A|²", Math.exp(-4 * mean * Math.pow(Math.sin(t / 2), 2)), run.series(RETURN_PROBABILITY), j);
         }
         // errors are small enough to be of use: far below what they belong to
-        assertTrue(run.series(SPREAD_OF_POSITION).error(5) < 1e-3, () -> "Δx ± " + run.series(SPREAD_OF_POSITION).error(5));
+        assertTrue(
+                run.series(SPREAD_OF_POSITION).error(5) < 1e-3,
+                () -> "Δx ± " + run.series(SPREAD_OF_POSITION).error(5));
         assertTrue(run.series(POSITION).error(5) <= 1e-7 * (1 + swing));
         assertTrue(run.stateError().size() <= 1e-9);
         assertEquals(Certainty.GUARANTEED, run.series(POSITION).certainty());
@@ -99,7 +102,8 @@ class RunTest {
         // (|0⟩+|1⟩)/√2: ⟨x⟩ = cos t/√2; levels 0 and 1000 never meet in x: ⟨x⟩ = 0, ⟨x²⟩ = ⟨n⟩ + ½
         Run near = mode.superposition(0, 1).evolve(2, PERIOD).frames(16).run();
         Run far = mode.superposition(0, 1000).evolve(2, PERIOD).frames(16).run();
-        Run both = mode.superposition(0, 1, 500, 501).evolve(2, PERIOD).frames(16).run();
+        Run both =
+                mode.superposition(0, 1, 500, 501).evolve(2, PERIOD).frames(16).run();
         for (int j = 0; j < near.times(); j++) {
             double t = near.time(j);
             within("near", Math.cos(t) * Math.sqrt(0.5), near.series(POSITION), j);
@@ -133,9 +137,14 @@ class RunTest {
 
     @Test
     void anElectronInAFiniteWellDoesNotRepeat() {
-        FiniteWell well =
-                Oscillator.finiteWell().mass(0.067, ELECTRON_MASS).width(12, NANOMETRE).depth(0.42, ELECTRONVOLT);
-        Run run = well.superposition(0, 1, 2).evolve(2000, FEMTOSECOND).frames(4000).run();
+        FiniteWell well = Oscillator.finiteWell()
+                .mass(0.067, ELECTRON_MASS)
+                .width(12, NANOMETRE)
+                .depth(0.42, ELECTRONVOLT);
+        Run run = well.superposition(0, 1, 2)
+                .evolve(2000, FEMTOSECOND)
+                .frames(4000)
+                .run();
         Series back = run.series(RETURN_PROBABILITY);
         boolean away = false;
         for (int j = 0; j < back.size(); j++) {
@@ -157,7 +166,11 @@ class RunTest {
             long[] levels = random.longs(0, 40).distinct().limit(size).sorted().toArray();
             double[] re = random.doubles(size, -1, 1).toArray();
             double[] im = random.doubles(size, -1, 1).toArray();
-            Run run = mode.superposition(levels).weights(re, im).evolve(1 + random.nextInt(50), ONE).frames(7).run();
+            Run run = mode.superposition(levels)
+                    .weights(re, im)
+                    .evolve(1 + random.nextInt(50), ONE)
+                    .frames(7)
+                    .run();
             var elements = ladderwell.motion.Means.onElements(run.phased());
             for (int j = 0; j < run.times(); j++) {
                 assertEquals(
@@ -247,8 +260,10 @@ class RunTest {
         assertTrue(OscillatorTest.message(() -> psi.evolve(-1, PERIOD)).contains("duration must be positive"));
         assertTrue(OscillatorTest.message(() -> psi.evolve(1, MEGAHERTZ)).contains("duration must be"));
         assertTrue(OscillatorTest.message(() -> psi.evolve(1, PERIOD).frames(0)).contains("at least 1"));
-        assertTrue(OscillatorTest.message(() -> psi.evolve(1, PERIOD).tolerance(1e-20)).contains("between 1e-13"));
-        Run run = Oscillator.box().natural().superposition(0, 1).evolve(1, PERIOD).run();
+        assertTrue(OscillatorTest.message(() -> psi.evolve(1, PERIOD).tolerance(1e-20))
+                .contains("between 1e-13"));
+        Run run =
+                Oscillator.box().natural().superposition(0, 1).evolve(1, PERIOD).run();
         assertTrue(OscillatorTest.message(() -> run.series(MEAN_QUANTA)).contains("defined for a harmonic oscillator"));
         assertTrue(OscillatorTest.message(run::table).contains("at least one observable"));
     }

@@ -80,10 +80,13 @@ class StateTest {
     void badStatesAreRefusedInOneSentence() {
         assertTrue(OscillatorTest.message(() -> trap.coherent(-1)).contains("at least 0, not -1"));
         assertTrue(OscillatorTest.message(() -> trap.coherent(Double.NaN)).contains("finite"));
-        assertTrue(OscillatorTest.message(() -> trap.coherent(4).phase(3, MEGAHERTZ)).contains("an angle such as 30 deg"));
+        assertTrue(OscillatorTest.message(() -> trap.coherent(4).phase(3, MEGAHERTZ))
+                .contains("an angle such as 30 deg"));
         assertTrue(OscillatorTest.message(() -> trap.superposition()).contains("at least one level"));
         assertTrue(OscillatorTest.message(() -> trap.superposition(1, 1)).contains("each level once"));
-        assertTrue(OscillatorTest.message(() -> trap.superposition(1, 2).weights(1)).contains("as many weights"));
-        assertTrue(OscillatorTest.message(() -> trap.superposition(1, 2).weights(0, 0)).contains("differ from 0"));
+        assertTrue(OscillatorTest.message(() -> trap.superposition(1, 2).weights(1))
+                .contains("as many weights"));
+        assertTrue(OscillatorTest.message(() -> trap.superposition(1, 2).weights(0, 0))
+                .contains("differ from 0"));
     }
 }

@@ -19,8 +19,8 @@ public final class Launcher {
     public static void main(String[] arguments) throws Throwable {
         String complaint = complaint(System.getProperty("java.specification.version", "0"), hasShell());
         if (!complaint.isEmpty()) {
-            System.err.println("ladderwell: " + complaint + "; this is Java " + System.getProperty("java.version") + " in "
-                    + System.getProperty("java.home"));
+            System.err.println("ladderwell: " + complaint + "; this is Java " + System.getProperty("java.version")
+                    + " in " + System.getProperty("java.home"));
             System.exit(WRONG_JAVA);
         }
         try {

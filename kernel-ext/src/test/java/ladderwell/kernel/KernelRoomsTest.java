@@ -32,8 +32,7 @@ class KernelRoomsTest {
                                 allowed |= target.startsWith(KERNEL + name);
                             }
                             if (!allowed) {
-                                events.add(SimpleConditionEvent.violated(
-                                        dependency, dependency.getDescription()));
+                                events.add(SimpleConditionEvent.violated(dependency, dependency.getDescription()));
                             }
                         });
                     }

@@ -38,7 +38,8 @@ public final class Means {
         for (int s = 0; s < sums.length; s++) {
             sums[s] = LadderSums.of(state.phases(s), Math.toIntExact(amplitudes.first(s)), workers);
         }
-        // The sums are those of the normalised kept state, which is at most 2δ away from ψ. ‖aδψ‖ and ‖a†δψ‖ are at most
+        // The sums are those of the normalised kept state, which is at most 2δ away from ψ. ‖aδψ‖ and ‖a†δψ‖ are at
+        // most
         // √(last+2)·2δ on the kept levels and √(Σ (n+1)P_n) on the discarded ones.
         double delta = 2 * state.error();
         double top = Math.sqrt(state.lastLevel() + 2.0);
@@ -114,7 +115,8 @@ public final class Means {
             }
         }
         Elements elements = state.levels().elements(kept);
-        // Inside the kept levels an operator is a matrix: |δ⟨A⟩| ≤ 2‖A‖δ, and an element off by ε moves ⟨A⟩ by at most Kε.
+        // Inside the kept levels an operator is a matrix: |δ⟨A⟩| ≤ 2‖A‖δ, and an element off by ε moves ⟨A⟩ by at most
+        // Kε.
         double delta = state.error();
         double x = size * elements.positionError() + 2.01 * norm(elements.positionRows()) * delta;
         double p = size * elements.momentumError() + 2.01 * norm(elements.momentumRows()) * delta;
@@ -147,8 +149,10 @@ public final class Means {
             double meanX = form(elements.positionRows(), re, re) + form(elements.positionRows(), im, im);
             // ⟨i|p|j⟩ = i·A with A antisymmetric: Σ c_i* (iA_ij) c_j = −2 Σ re_i A_ij im_j
             double meanP = -2 * form(elements.momentumRows(), re, im);
-            double squareX = form(elements.positionSquaredRows(), re, re) + form(elements.positionSquaredRows(), im, im);
-            double squareP = form(elements.momentumSquaredRows(), re, re) + form(elements.momentumSquaredRows(), im, im);
+            double squareX =
+                    form(elements.positionSquaredRows(), re, re) + form(elements.positionSquaredRows(), im, im);
+            double squareP =
+                    form(elements.momentumSquaredRows(), re, re) + form(elements.momentumSquaredRows(), im, im);
             means.position[j] = meanX;
             means.momentum[j] = meanP;
             means.positionVariance[j] = squareX - meanX * meanX;

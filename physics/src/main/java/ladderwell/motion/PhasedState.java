@@ -12,8 +12,7 @@ public final class PhasedState {
     private final ExactPhases[] phases;
     private final double error;
 
-    private PhasedState(
-            Levels levels, Amplitudes amplitudes, double[] times, ExactPhases[] phases, double error) {
+    private PhasedState(Levels levels, Amplitudes amplitudes, double[] times, ExactPhases[] phases, double error) {
         this.levels = levels;
         this.amplitudes = amplitudes;
         this.times = times;
@@ -45,7 +44,8 @@ public final class PhasedState {
             phases[s] = ExactPhases.of(high, low, amplitudes.reals(s), amplitudes.imaginaries(s), times);
             rounding = Math.max(rounding, phases[s].errorBound());
         }
-        // What was left out at time 0, the rounding of every phase, and the levels' own errors acting for the whole time.
+        // What was left out at time 0, the rounding of every phase, and the levels' own errors acting for the whole
+        // time.
         double error = (amplitudes.normError() + rounding + Math.sqrt(energyDrift)) * (1 + 1e-12);
         return new PhasedState(levels, amplitudes, times.clone(), phases, error);
     }

@@ -32,21 +32,21 @@ public final class Populations {
         double[] energy = centred(amplitudes, state.levels()::energyHigh);
         double tail0 = amplitudes.tailMoment(0);
         double centre = level[0];
-        double levelMean = meanError(level, delta)
-                + amplitudes.tailMoment(1)
-                + centre * tail0;
-        double levelVariance = squareError(level, delta)
-                + amplitudes.tailMoment(2)
-                + centre * centre * tail0
-                + levelMean * levelMean;
-        boolean ladder = state.levels().count() == Long.MAX_VALUE && state.levels().energyHigh(0) == 0.5;
+        double levelMean = meanError(level, delta) + amplitudes.tailMoment(1) + centre * tail0;
+        double levelVariance =
+                squareError(level, delta) + amplitudes.tailMoment(2) + centre * centre * tail0 + levelMean * levelMean;
+        boolean ladder =
+                state.levels().count() == Long.MAX_VALUE && state.levels().energyHigh(0) == 0.5;
         double levelError = 0;
         for (int s = 0; s < amplitudes.segments(); s++) {
-            levelError = Math.max(levelError, state.levels().energyError(amplitudes.first(s) + amplitudes.length(s) - 1));
+            levelError =
+                    Math.max(levelError, state.levels().energyError(amplitudes.first(s) + amplitudes.length(s) - 1));
         }
-        // On the harmonic ladder E = n + ½, so the level's tail moment is the energy's; elsewhere no moment bound is proved.
+        // On the harmonic ladder E = n + ½, so the level's tail moment is the energy's; elsewhere no moment bound is
+        // proved.
         boolean proved = state.complete() || ladder;
-        double energyMean = meanError(energy, delta) + levelError + (ladder ? amplitudes.tailMoment(1) + (centre + 1) * tail0 : 0);
+        double energyMean =
+                meanError(energy, delta) + levelError + (ladder ? amplitudes.tailMoment(1) + (centre + 1) * tail0 : 0);
         return new Populations(state, level, energy, new Bound[] {
             Bound.guaranteed(levelMean),
             Bound.guaranteed(levelVariance),
@@ -104,7 +104,10 @@ public final class Populations {
     }
 
     private static double squareError(double[] c, double delta) {
-        return 2.01 * c[2] * delta + 2 * c[3] * c[3] * delta * delta + c[1] * delta * 2.01 + c[4] * 0x1p-51 * (c[1] + 1);
+        return 2.01 * c[2] * delta
+                + 2 * c[3] * c[3] * delta * delta
+                + c[1] * delta * 2.01
+                + c[4] * 0x1p-51 * (c[1] + 1);
     }
 
     /** ⟨n⟩. */

@@ -112,8 +112,8 @@ public final class DensityFrames {
      */
     public void fill(double[][] re, double[][] im, double[][] density, Workers workers) {
         if (re.length != im.length) {
-            throw new IllegalArgumentException(
-                    re.length + " rows of real parts and " + im.length + " of imaginary parts, expected the same number");
+            throw new IllegalArgumentException(re.length + " rows of real parts and " + im.length
+                    + " of imaginary parts, expected the same number");
         }
         for (int j = 0; j < re.length; j++) {
             if (re[j].length != levels || im[j].length != levels) {
@@ -166,7 +166,8 @@ public final class DensityFrames {
 
     private void frames(int times, double[][] density, Workers workers, Rows rows) {
         int groups = (times + GROUP - 1) / GROUP;
-        // A few parts per thread, so that scratch arrays are made rarely; every frame is computed alone, so parts change no bit.
+        // A few parts per thread, so that scratch arrays are made rarely; every frame is computed alone, so parts
+        // change no bit.
         int parts = workers.threads() == 1 ? 1 : Math.min(groups, 4 * workers.threads());
         workers.forEach(parts, part -> {
             Panel panel = new Panel();
@@ -246,6 +247,34 @@ public final class DensityFrames {
         }
     }
 
+<<<<<<< HEAD
+=======
+    private static void squares(double[] sums, int at, int stride, double[] frame, int count) {
+        for (int i = 0; i < count; i++) {
+            double u = sums[at + i];
+            double v = sums[at + stride + i];
+            frame[i] = Math.fma(u, u, v * v);
+        }
+    }
+
+    /** |even + odd|² to the upper half of the frame, |even - odd|² to mirrored. */
+    private static void bothSides(
+            double[] even, double[] odd, int at, int stride, double[] frame, int middle, double[] mirrored, int half) {
+        for (int i = 0; i < half; i++) {
+            double evenRe = even[at + i];
+            double oddRe = odd[at + i];
+            double evenIm = even[at + stride + i];
+            double oddIm = odd[at + stride + i];
+            double u = evenRe + oddRe;
+            double v = evenIm + oddIm;
+            double p = evenRe - oddRe;
+            double q = evenIm - oddIm;
+            frame[middle + i] = Math.fma(u, u, v * v);
+            mirrored[i] = Math.fma(p, p, q * q);
+        }
+    }
+
+>>>>>>> host
     /**
      * Guaranteed bound on the error of any density value, given the errors of what went in.
      *

@@ -101,12 +101,7 @@ public final class ExactPhases {
     }
 
     private ExactPhases(
-            double[] energyHigh,
-            double[] energyLow,
-            double[] re,
-            double[] im,
-            double[] times,
-            double energyError) {
+            double[] energyHigh, double[] energyLow, double[] re, double[] im, double[] times, double energyError) {
         this.energyHigh = energyHigh;
         this.energyLow = energyLow;
         this.re = re;
@@ -144,8 +139,8 @@ public final class ExactPhases {
         double[] low = new double[levels];
         for (int k = 0; k < levels; k++) {
             double difference = energyHigh[k] - energyHigh[m];
-            double lowPart = PhaseFactors.sumError(energyHigh[k], -energyHigh[m], difference)
-                    + (energyLow[k] - energyLow[m]);
+            double lowPart =
+                    PhaseFactors.sumError(energyHigh[k], -energyHigh[m], difference) + (energyLow[k] - energyLow[m]);
             double turned = (k - m) * rate;
             double rest = difference - turned;
             lowPart += PhaseFactors.sumError(difference, -turned, rest) - Math.fma(k - m, rate, -turned);
@@ -196,8 +191,12 @@ public final class ExactPhases {
         Table[] tables = kept();
         for (int level = 0; level < levels(); level += LEVEL_BLOCK) {
             int to = Math.min(levels(), level + LEVEL_BLOCK);
+<<<<<<< HEAD
             Block block =
                     tables.length > 0 ? new Block(level, to, tables[level / LEVEL_BLOCK]) : block(level, to, rows);
+=======
+            Block block = kept.length > 0 ? new Block(level, to, kept[level / LEVEL_BLOCK]) : block(level, to, rows);
+>>>>>>> host
             for (int j = 0; j < rows; j++) {
                 Interruption.check();
                 block.write(fromTime + j, re[j], im[j], level);
@@ -214,7 +213,12 @@ public final class ExactPhases {
         if (!grid.uniform()) {
             return one;
         }
-        // First order: one rounding per part and the remainder 2^-57. Third order: series, remainder and a complex product.
+<<<<<<< HEAD
+=======
+        double product = one + PhaseFactors.ERROR + PRODUCT_ERROR;
+>>>>>>> host
+        // First order: one rounding per part and the remainder 2^-57. Third order: series, remainder and a complex
+        // product.
         double shift = grid.firstOrder() ? 1.1 * U : 2 * U + PRODUCT_ERROR;
         return one + PhaseFactors.ERROR + PRODUCT_ERROR + shift;
     }
@@ -337,11 +341,9 @@ public final class ExactPhases {
             int r = j - q * grid.period();
             double shift = grid.shift(j);
             if (grid.firstOrder()) {
-                productFirstOrder(
-                        coarseRe, coarseIm, table.re[r], table.im[r], high, shift, toRe, toIm, length);
+                productFirstOrder(coarseRe, coarseIm, table.re[r], table.im[r], high, shift, toRe, toIm, length);
             } else {
-                productThirdOrder(
-                        coarseRe, coarseIm, table.re[r], table.im[r], high, shift, toRe, toIm, length);
+                productThirdOrder(coarseRe, coarseIm, table.re[r], table.im[r], high, shift, toRe, toIm, length);
             }
         }
     }
@@ -487,8 +489,7 @@ public final class ExactPhases {
             if (largest > 4 * Math.ulp(largestTime) || angle > THIRD_ORDER) {
                 return IRREGULAR;
             }
-            return new Grid(
-                    true, angle <= FIRST_ORDER, period, coarseHighs, coarseLows, fineHighs, fineLows, shifts);
+            return new Grid(true, angle <= FIRST_ORDER, period, coarseHighs, coarseLows, fineHighs, fineLows, shifts);
         }
     }
 

@@ -92,8 +92,8 @@ public final class LadderSums {
      */
     public static LadderSums of(double[][] re, double[][] im, int first, Workers workers) {
         if (re.length != im.length) {
-            throw new IllegalArgumentException(
-                    re.length + " rows of real parts and " + im.length + " of imaginary parts, expected the same number");
+            throw new IllegalArgumentException(re.length + " rows of real parts and " + im.length
+                    + " of imaginary parts, expected the same number");
         }
         int levels = re.length == 0 ? 0 : re[0].length;
         Quanta[] quanta = new Quanta[re.length];
@@ -223,7 +223,8 @@ public final class LadderSums {
     private void sumBlock(
             Loops loops, Source source, int levels, int from, int to, int fromRow, int toRow, double[] into) {
         int count = to - from;
-        // Whole vectors; what is beyond the last level is 0 and adds nothing (only the last block is not a multiple of 8).
+        // Whole vectors; what is beyond the last level is 0 and adds nothing (only the last block is not a multiple of
+        // 8).
         int padded = (count + 7) / 8 * 8;
         double[] up = new double[padded];
         double[] down = new double[padded];

@@ -26,8 +26,7 @@ interface Loops {
      * @shape a is [depth][ROWS] from aAt, b is [depth][columns] from bAt, c is rows of {@code stride} from cAt
      * @param add whether c is added to (true) or overwritten
      */
-    void product(
-            double[] a, int aAt, double[] b, int bAt, int depth, boolean add, double[] c, int cAt, int stride);
+    void product(double[] a, int aAt, double[] b, int bAt, int depth, boolean add, double[] c, int cAt, int stride);
 
     /**
      * Sums over levels n for b_n = √(n+1) c_{n+1} - α c_n and g_n = √n c_{n-1} - α* c_n, which are (a - α)c and (a - α)†c:
@@ -57,14 +56,7 @@ interface Loops {
      * @param mirrored whether odd counts and the lower half is written
      */
     void squares(
-            double[] even,
-            double[] odd,
-            int row,
-            boolean mirrored,
-            double[] frame,
-            int upper,
-            int lower,
-            int count);
+            double[] even, double[] odd, int row, boolean mirrored, double[] frame, int upper, int lower, int count);
 
     /** The same for columns from … count-1, one by one. */
     static void squaresOneByOne(

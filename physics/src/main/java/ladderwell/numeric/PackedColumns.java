@@ -40,7 +40,8 @@ final class PackedColumns {
                 int low = block * DEPTH;
                 int high = Math.min(depth, low + DEPTH);
                 int keepFrom = low;
-                while (keepFrom < high && negligible(rows[firstRow + keepFrom * rowStep], fromColumn + from, count, negligible)) {
+                while (keepFrom < high
+                        && negligible(rows[firstRow + keepFrom * rowStep], fromColumn + from, count, negligible)) {
                     keepFrom++;
                 }
                 int keepTo = high;

@@ -129,13 +129,7 @@ final class PhaseFactors {
     }
 
     private static void writeFar(
-            double energyHigh,
-            double energyLow,
-            double timeHigh,
-            double timeLow,
-            double[] re,
-            double[] im,
-            int at) {
+            double energyHigh, double energyLow, double timeHigh, double timeLow, double[] re, double[] im, int at) {
         Angle angle = Angle.of(energyHigh, energyLow, timeHigh, timeLow);
         double z = angle.high * angle.high;
         double cosine0 = cosine(z);

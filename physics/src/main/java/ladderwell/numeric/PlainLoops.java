@@ -67,14 +67,7 @@ final class PlainLoops implements Loops {
 
     @Override
     public void squares(
-            double[] even,
-            double[] odd,
-            int row,
-            boolean mirrored,
-            double[] frame,
-            int upper,
-            int lower,
-            int count) {
+            double[] even, double[] odd, int row, boolean mirrored, double[] frame, int upper, int lower, int count) {
         Loops.squaresOneByOne(COLUMNS, even, odd, row, mirrored, frame, upper, lower, 0, count);
     }
 

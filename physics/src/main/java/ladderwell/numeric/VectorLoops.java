@@ -72,14 +72,7 @@ final class VectorLoops implements Loops {
 
     @Override
     public void squares(
-            double[] even,
-            double[] odd,
-            int row,
-            boolean mirrored,
-            double[] frame,
-            int upper,
-            int lower,
-            int count) {
+            double[] even, double[] odd, int row, boolean mirrored, double[] frame, int upper, int lower, int count) {
         int re = row * COLUMNS;
         int im = re + COLUMNS;
         int j = 0;

@@ -23,7 +23,8 @@ class DecimalsTest {
             BigDecimal c = Decimals.cos(x);
             assertEquals(0, Decimals.distance(s.multiply(s).add(c.multiply(c)), BigDecimal.ONE), 1e-60);
             BigDecimal twice = x.multiply(BigDecimal.valueOf(2));
-            assertEquals(0, Decimals.distance(Decimals.sin(twice), s.multiply(c).multiply(BigDecimal.valueOf(2))), 1e-60);
+            assertEquals(
+                    0, Decimals.distance(Decimals.sin(twice), s.multiply(c).multiply(BigDecimal.valueOf(2))), 1e-60);
         }
     }
 

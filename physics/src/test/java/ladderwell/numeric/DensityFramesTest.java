@@ -16,7 +16,15 @@ import org.junit.jupiter.api.Test;
 
 class DensityFramesTest {
     private static final int[][] SHAPES = {
-        {1, 1, 1}, {1, 2, 3}, {2, 1, 1}, {3, 7, 5}, {8, 16, 16}, {17, 33, 17}, {60, 131, 40}, {61, 130, 33}, {301, 40, 5}
+        {1, 1, 1},
+        {1, 2, 3},
+        {2, 1, 1},
+        {3, 7, 5},
+        {8, 16, 16},
+        {17, 33, 17},
+        {60, 131, 40},
+        {61, 130, 33},
+        {301, 40, 5}
     };
 
     /** Sine functions of a box over its width: even and odd in turn about the middle. */
@@ -175,7 +183,6 @@ class DensityFramesTest {
     void stopsWhenTheThreadIsInterrupted() {
         DensityFrames frames = DensityFrames.of(box(3, 5));
         Thread.currentThread().interrupt();
-        assertThrows(
-                CancellationException.class, () -> frames.of(new double[1][3], new double[1][3], Workers.CALLER));
+        assertThrows(CancellationException.class, () -> frames.of(new double[1][3], new double[1][3], Workers.CALLER));
     }
 }

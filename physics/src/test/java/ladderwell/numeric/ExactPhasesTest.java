@@ -52,7 +52,10 @@ class ExactPhasesTest {
     @Test
     void reducedPhaseIsRightNextToMultiplesOfHalfPi() {
         for (long k : new long[] {1, 2, 3, 4, 1001, 123_456_789L, 987_654_321_012L, 600_000_000_000_001L}) {
-            double near = Decimals.PI.multiply(BigDecimal.valueOf(k)).divide(BigDecimal.valueOf(2), 100, java.math.RoundingMode.HALF_EVEN).doubleValue();
+            double near = Decimals.PI
+                    .multiply(BigDecimal.valueOf(k))
+                    .divide(BigDecimal.valueOf(2), 100, java.math.RoundingMode.HALF_EVEN)
+                    .doubleValue();
             for (double x : new double[] {Math.nextDown(near), near, Math.nextUp(near), -near}) {
                 BigDecimal expected = Decimals.reduced(new BigDecimal(x));
                 double error = Decimals.distance(expected, new BigDecimal(ExactPhases.reduced(x, 0, 1)));

@@ -138,8 +138,7 @@ class LadderSumsTest {
             Arrays.setAll(energy, k -> (first + k + 0.5) * (1 + 1e-3 * k));
             double[] times = new double[40];
             Arrays.setAll(times, j -> 0.3 * j);
-            LadderSums sums = LadderSums.of(
-                    ExactPhases.of(energy, zero, c, zero, times), first, Workers.CALLER);
+            LadderSums sums = LadderSums.of(ExactPhases.of(energy, zero, c, zero, times), first, Workers.CALLER);
             for (int check = 0; check < 5; check++) {
                 int j = random.nextInt(40);
                 BigDecimal[] re = new BigDecimal[levels];
@@ -147,7 +146,10 @@ class LadderSumsTest {
                 for (int k = 0; k < levels; k++) {
                     BigDecimal phase = new BigDecimal(energy[k]).multiply(new BigDecimal(times[j]));
                     re[k] = new BigDecimal(c[k]).multiply(Decimals.cos(phase)).round(DIGITS);
-                    im[k] = new BigDecimal(c[k]).multiply(Decimals.sin(phase)).negate().round(DIGITS);
+                    im[k] = new BigDecimal(c[k])
+                            .multiply(Decimals.sin(phase))
+                            .negate()
+                            .round(DIGITS);
                 }
                 Direct.of(re, im, first).check("first " + first + " time " + times[j], sums, j);
             }
@@ -214,7 +216,10 @@ class LadderSumsTest {
             for (int k = 0; k < levels; k++) {
                 BigDecimal phase = Decimals.exact(energy[k], low[k]).multiply(new BigDecimal(times[j]));
                 re[k] = new BigDecimal(c[k]).multiply(Decimals.cos(phase)).round(DIGITS);
-                im[k] = new BigDecimal(c[k]).multiply(Decimals.sin(phase)).negate().round(DIGITS);
+                im[k] = new BigDecimal(c[k])
+                        .multiply(Decimals.sin(phase))
+                        .negate()
+                        .round(DIGITS);
             }
             Direct.of(re, im, first).check("anharmonic time " + times[j], sums, j);
         }
@@ -222,7 +227,8 @@ class LadderSumsTest {
 
     @Test
     void aCoherentStateFarUpTheLadderKeepsItsNoise() {
-        // Harmonic motion from a coherent state: ⟨a⟩ = α e^{-it}, ⟨δ†δ⟩ = ⟨δ²⟩ = 0 (exact theory), up to the tail beyond 9 spreads.
+        // Harmonic motion from a coherent state: ⟨a⟩ = α e^{-it}, ⟨δ†δ⟩ = ⟨δ²⟩ = 0 (exact theory), up to the tail
+        // beyond 9 spreads.
         int first = 100_000_000 - 90_000;
         int levels = 180_000;
         double[] zero = new double[levels];

@@ -15,7 +15,16 @@ import org.junit.jupiter.api.Test;
 
 class MatrixProductTest {
     private static final int[][] SHAPES = {
-        {1, 1, 1}, {1, 5, 1}, {2, 3, 4}, {4, 8, 16}, {5, 7, 9}, {33, 17, 31}, {64, 256, 24}, {65, 257, 25}, {37, 600, 131}, {3, 0, 5}
+        {1, 1, 1},
+        {1, 5, 1},
+        {2, 3, 4},
+        {4, 8, 16},
+        {5, 7, 9},
+        {33, 17, 31},
+        {64, 256, 24},
+        {65, 257, 25},
+        {37, 600, 131},
+        {3, 0, 5}
     };
 
     static double[][] random(Random random, int rows, int columns) {

@@ -59,7 +59,8 @@ final class CellScanner {
 
     private static boolean startsSentence(String line) {
         String text = line.stripLeading();
-        return text.startsWith("%") && (text.length() == 1 || text.charAt(1) == '\n' || Character.isLetter(text.charAt(1)));
+        return text.startsWith("%")
+                && (text.length() == 1 || text.charAt(1) == '\n' || Character.isLetter(text.charAt(1)));
     }
 
     /** Moves over one line of Java; {@code open} holds what closes the comment or text block that is open, if any. */

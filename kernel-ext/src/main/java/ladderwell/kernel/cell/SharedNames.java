@@ -49,8 +49,8 @@ final class SharedNames implements Names {
     @Override
     public synchronized void check(String noun, String name, Class<?> type) {
         if (!SourceVersion.isIdentifier(name) || SourceVersion.isKeyword(name)) {
-            throw new IllegalArgumentException(
-                    "\"" + name + "\" cannot be a name; expected a letter, then letters, digits or _, and no word of Java");
+            throw new IllegalArgumentException("\"" + name
+                    + "\" cannot be a name; expected a letter, then letters, digits or _, and no word of Java");
         }
         Named known = named.get(name);
         if (known != null && !known.noun().equals(noun)) {
@@ -82,7 +82,10 @@ final class SharedNames implements Names {
 
     /** Takes back every declaration since {@link #begin}. */
     synchronized void undo() {
-        named.keySet().stream().filter(name -> !beforeCell.containsKey(name)).toList().forEach(this::forget);
+        named.keySet().stream()
+                .filter(name -> !beforeCell.containsKey(name))
+                .toList()
+                .forEach(this::forget);
         named.clear();
         named.putAll(beforeCell);
     }

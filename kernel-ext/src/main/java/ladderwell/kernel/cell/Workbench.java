@@ -70,19 +70,21 @@ public final class Workbench implements AutoCloseable {
                 "static java.lang.Math.*");
     }
 
-    /**
-     * Starts the Java session in the background, unless it has been started already, and makes it quick while no cell
-     * runs. For notebooks that people type in; without it the session starts when it is first needed.
-     */
+    /** Starts the Java session in the background, unless it has been started already. */
     public void startJava() {
+        CompletableFuture<JavaSession> unused = java();
+    }
+
+    /** Makes Java quick in the background while no cell runs. For notebooks that people type in. */
+    public void practiseJava() {
         CompletableFuture<Void> unused = java().thenRun(() -> {
-            Thread thread = new Thread(this::practise, "java practice");
+            Thread thread = new Thread(this::practiseNow, "java practice");
             thread.setDaemon(true);
             thread.start();
         });
     }
 
-    private void practise() {
+    private void practiseNow() {
         try {
             WarmUp.practise(imports, () -> {
                 synchronized (phaseLock) {
@@ -331,7 +333,8 @@ public final class Workbench implements AutoCloseable {
 
     private MimeBundle describe(Names.Named named) {
         MimeBundle value = render(named.value());
-        return value.with(MimeBundle.PLAIN, named.type().getSimpleName() + " " + named.name() + "\n" + value.plainText());
+        return value.with(
+                MimeBundle.PLAIN, named.type().getSimpleName() + " " + named.name() + "\n" + value.plainText());
     }
 
     /** The identifier at the cursor; empty when it is a member of something or there is none. */

@@ -23,9 +23,8 @@ final class JupyterFolder {
         String os = system.getProperty("os.name", "").toLowerCase(Locale.ROOT);
         boolean windows = os.startsWith("windows");
         // Java takes the home folder from the user's record, Jupyter from HOME where it is set.
-        String home = windows || !given(environment.get("HOME"))
-                ? system.getProperty("user.home")
-                : environment.get("HOME");
+        String home =
+                windows || !given(environment.get("HOME")) ? system.getProperty("user.home") : environment.get("HOME");
         if (!given(home)) {
             throw new CommandException("there is no home folder to install into; name one with --prefix");
         }

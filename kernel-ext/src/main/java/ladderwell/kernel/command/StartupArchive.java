@@ -42,7 +42,11 @@ final class StartupArchive {
             }
             if (process.exitValue() != 0) {
                 throw new IOException("the kernel failed its first run: "
-                        + Files.readString(log).strip().lines().reduce((a, b) -> b).orElse("no message"));
+                        + Files.readString(log)
+                                .strip()
+                                .lines()
+                                .reduce((a, b) -> b)
+                                .orElse("no message"));
             }
             if (!Files.exists(part)) {
                 return false;

@@ -84,11 +84,13 @@ final class CellKernel extends BaseKernel {
             return Map.of("status", "ok");
         });
         connection.setHandler(
-                MessageType.EXECUTE_REQUEST, guarded(MessageType.EXECUTE_REPLY, (env, message) -> execute(env, message)));
+                MessageType.EXECUTE_REQUEST,
+                guarded(MessageType.EXECUTE_REPLY, (env, message) -> execute(env, message)));
         connection.setHandler(
-                MessageType.SHUTDOWN_REQUEST, guarded(MessageType.SHUTDOWN_REPLY, (env, message) -> shutDown(env, message)));
-        for (MessageType<?> type : List.of(
-                MessageType.COMM_OPEN_COMMAND, MessageType.COMM_MSG_COMMAND, MessageType.COMM_CLOSE_COMMAND)) {
+                MessageType.SHUTDOWN_REQUEST,
+                guarded(MessageType.SHUTDOWN_REPLY, (env, message) -> shutDown(env, message)));
+        for (MessageType<?> type :
+                List.of(MessageType.COMM_OPEN_COMMAND, MessageType.COMM_MSG_COMMAND, MessageType.COMM_CLOSE_COMMAND)) {
             guardExisting(connection, type);
         }
     }
@@ -179,8 +181,7 @@ final class CellKernel extends BaseKernel {
         boolean stored = request.shouldStoreHistory() && !request.isSilent();
         int number = stored ? executionCount.incrementAndGet() : Math.max(1, executionCount.get());
         CellMessages messages = new CellMessages(publisher(), message, request.isSilent());
-        messages.send(
-                MessageType.PUBLISH_EXECUTE_INPUT, Map.of("code", request.getCode(), "execution_count", number));
+        messages.send(MessageType.PUBLISH_EXECUTE_INPUT, Map.of("code", request.getCode(), "execution_count", number));
         CellEnd cellEnd = workbench.run(request.getCode(), number, messages);
         Map<String, Object> reply = new LinkedHashMap<>();
         reply.put("execution_count", number);
@@ -204,9 +205,8 @@ final class CellKernel extends BaseKernel {
             }
         }
         if (stored) {
-            Optional<String> output = cellEnd instanceof CellEnd.Done done
-                    ? done.result().map(MimeBundle::plainText)
-                    : Optional.empty();
+            Optional<String> output =
+                    cellEnd instanceof CellEnd.Done done ? done.result().map(MimeBundle::plainText) : Optional.empty();
             history.add(number, request.getCode(), output);
         }
         env.reply(Messages.reply(MessageType.EXECUTE_REPLY, message, reply));
@@ -266,11 +266,16 @@ final class CellKernel extends BaseKernel {
             kinds.add(Map.of("text", candidate.text(), "type", candidate.kind(), "start", start, "end", stop));
         }
         return Map.of(
-                "status", "ok",
-                "matches", completion.candidates().stream().map(Completion.Candidate::text).toList(),
-                "cursor_start", start,
-                "cursor_end", stop,
-                "metadata", Map.of("_jupyter_types_experimental", kinds));
+                "status",
+                "ok",
+                "matches",
+                completion.candidates().stream().map(Completion.Candidate::text).toList(),
+                "cursor_start",
+                start,
+                "cursor_end",
+                stop,
+                "metadata",
+                Map.of("_jupyter_types_experimental", kinds));
     }
 
     private Map<String, ?> inspect(InspectRequest request) {

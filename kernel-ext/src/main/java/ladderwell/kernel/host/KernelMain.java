@@ -66,7 +66,7 @@ public final class KernelMain {
             return refuse(
                     "connection file " + connectionFile + ": its ports cannot be opened (" + e.getMessage() + ")");
         }
-        workbench.startJava();
+        workbench.practiseJava();
         endWithParent(ended);
         interruptOnSignal(workbench);
         try {
@@ -114,7 +114,8 @@ public final class KernelMain {
             throw new IllegalArgumentException("names no ip and transport; expected what a Jupyter client writes");
         }
         if (properties.getKey() == null || properties.getSignatureScheme() == null) {
-            throw new IllegalArgumentException("names no key and signature_scheme; expected what a Jupyter client writes");
+            throw new IllegalArgumentException(
+                    "names no key and signature_scheme; expected what a Jupyter client writes");
         }
         List<Integer> ports = List.of(
                 properties.getShellPort(),

@@ -5,6 +5,9 @@ import io.github.spencerpark.jupyter.kernel.display.RenderContext;
 import io.github.spencerpark.jupyter.kernel.display.mime.MIMEType;
 import java.util.List;
 import java.util.Optional;
+import ladderwell.Oscillator;
+import ladderwell.Run;
+import ladderwell.State;
 import ladderwell.kernel.cell.CellOutput;
 import ladderwell.kernel.cell.MimeBundle;
 import ladderwell.kernel.cell.Names;
@@ -12,7 +15,16 @@ import ladderwell.kernel.cell.Renderer;
 import ladderwell.kernel.cell.SentenceContext;
 import ladderwell.kernel.cell.SentenceFailure;
 import ladderwell.kernel.cell.Sentences;
+import ladderwell.kernel.magic.Animation;
+import ladderwell.kernel.magic.Declarations;
+import ladderwell.kernel.magic.Declared;
+import ladderwell.kernel.magic.LevelTable;
+import ladderwell.kernel.magic.TableRead;
+import ladderwell.kernel.render.Renderings;
+import ladderwell.kernel.sentence.Noun;
 import org.jspecify.annotations.Nullable;
+import tech.tablesaw.api.Table;
+import tech.tablesaw.plotly.components.Figure;
 
 /**
  * Ladderwell inside an existing IJava kernel: with the jar on its class path, one call installs the sentences as magics
@@ -32,6 +44,29 @@ public final class Plugin {
         this.sentences = sentences;
         this.renderer = renderer;
         this.names = new HostedNames(host);
+    }
+
+    /**
+     * Installs Ladderwell in the running kernel: the nouns as line magics, {@code %%declare}, and the forms of its
+     * results.
+     *
+     * @throws IllegalStateException when no IJava kernel is running in this process
+     */
+    public static void install() {
+        Declarations declarations = new Declarations();
+        List<String> nouns =
+                declarations.grammar().nouns().stream().map(Noun::word).toList();
+        List<Class<?>> shown = List.of(
+                Oscillator.class,
+                State.class,
+                Run.class,
+                Declared.class,
+                TableRead.class,
+                LevelTable.class,
+                Animation.class,
+                Table.class,
+                Figure.class);
+        install(declarations, new Renderings(), nouns, shown);
     }
 
     /**
@@ -76,7 +111,8 @@ public final class Plugin {
         StringBuilder line = new StringBuilder();
         for (int i = 0; i < arguments.size(); i++) {
             String argument = arguments.get(i);
-            boolean commaFollows = i + 1 < arguments.size() && arguments.get(i + 1).startsWith(",");
+            boolean commaFollows =
+                    i + 1 < arguments.size() && arguments.get(i + 1).startsWith(",");
             boolean inBraces = line.lastIndexOf("{") > line.lastIndexOf("}") || argument.startsWith("{");
             boolean quoted = commaFollows || !inBraces && argument.matches(".*[\\s*(].*");
             line.append(i == 0 || argument.startsWith(",") ? "" : " ")

@@ -50,7 +50,11 @@ public final class Cell {
 
     /** The first line that is not blank, to name the cell by; empty for a blank cell. */
     public String firstLine() {
-        return source.lines().filter(line -> !line.isBlank()).findFirst().orElse("").strip();
+        return source.lines()
+                .filter(line -> !line.isBlank())
+                .findFirst()
+                .orElse("")
+                .strip();
     }
 
     /** Its tags, such as {@code raises-exception}. */

@@ -27,8 +27,7 @@ final class JsonPrinter {
 
     private void print(JsonElement element, int depth) {
         if (element instanceof JsonObject object) {
-            List<String> keys =
-                    object.keySet().stream().sorted(BY_CODE_POINTS).toList();
+            List<String> keys = object.keySet().stream().sorted(BY_CODE_POINTS).toList();
             printList(keys.iterator(), '{', '}', depth, key -> {
                 string(key);
                 out.append(": ");

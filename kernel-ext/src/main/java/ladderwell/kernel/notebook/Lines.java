@@ -60,9 +60,7 @@ final class Lines {
     private static void splitBundle(@org.jspecify.annotations.Nullable JsonElement bundle) {
         if (bundle instanceof JsonObject data) {
             for (String type : List.copyOf(data.keySet())) {
-                if (type.startsWith("text/")
-                        || type.equals("application/javascript")
-                        || type.equals("image/svg+xml")) {
+                if (type.startsWith("text/") || type.equals("application/javascript") || type.equals("image/svg+xml")) {
                     split(data, type);
                 }
             }

@@ -24,8 +24,18 @@ record NotebookPictures(Cell cell, Path folder) implements MarkdownText.Pictures
     private static final long LARGEST = 16L << 20;
 
     private static final Map<String, String> TYPES = Map.of(
-            "png", "image/png", "jpg", "image/jpeg", "jpeg", "image/jpeg", "gif", "image/gif", "webp", "image/webp",
-            "svg", "image/svg+xml");
+            "png",
+            "image/png",
+            "jpg",
+            "image/jpeg",
+            "jpeg",
+            "image/jpeg",
+            "gif",
+            "image/gif",
+            "webp",
+            "image/webp",
+            "svg",
+            "image/svg+xml");
 
     private static final Pattern DATA =
             Pattern.compile("data:image/(?:png|jpeg|gif|webp|svg\\+xml);base64,[A-Za-z0-9+/=\\s]*");
@@ -42,11 +52,12 @@ record NotebookPictures(Cell cell, Path folder) implements MarkdownText.Pictures
     }
 
     private Optional<String> attached(String name) {
-        return cell.attachment(name).flatMap(bundle -> bundle.entrySet().stream()
-                .filter(entry -> TYPES.containsValue(entry.getKey()))
-                .map(entry -> data(entry.getKey(), entry.getValue()))
-                .flatMap(Optional::stream)
-                .findFirst());
+        return cell.attachment(name)
+                .flatMap(bundle -> bundle.entrySet().stream()
+                        .filter(entry -> TYPES.containsValue(entry.getKey()))
+                        .map(entry -> data(entry.getKey(), entry.getValue()))
+                        .flatMap(Optional::stream)
+                        .findFirst());
     }
 
     /** The address of an image as notebooks store it: base64, or text for SVG. */
@@ -75,8 +86,8 @@ record NotebookPictures(Cell cell, Path folder) implements MarkdownText.Pictures
             }
             byte[] bytes = Files.readAllBytes(file);
             return looksLike(type, bytes)
-                    ? Optional.of("data:" + type + ";base64,"
-                            + Base64.getEncoder().encodeToString(bytes))
+                    ? Optional.of(
+                            "data:" + type + ";base64," + Base64.getEncoder().encodeToString(bytes))
                     : Optional.empty();
         } catch (IOException | InvalidPathException e) {
             // No such picture: the page says so in its place.

@@ -17,8 +17,9 @@ import java.util.Optional;
  */
 public final class Report {
     /** The line that every report ends with. */
-    public static final String CAUTION = "Results are calculations from an idealised model. They are not a safety case for"
-            + " lasers, high voltage, vacuum or cryogenics, which local codes and licensed practice govern.";
+    public static final String CAUTION =
+            "Results are calculations from an idealised model. They are not a safety case for"
+                    + " lasers, high voltage, vacuum or cryogenics, which local codes and licensed practice govern.";
 
     /** Scripts and styles of the page itself, pictures that are part of it, and nothing else. */
     private static final String POLICY = "default-src 'none'; style-src 'unsafe-inline'; script-src 'unsafe-inline';"
@@ -67,9 +68,10 @@ public final class Report {
                 switch (cell.kind()) {
                     case MARKDOWN -> text(page, cell);
                     case CODE -> code(page, cell);
-                    case RAW -> page.append("<pre class=\"raw\">")
-                            .append(Html.escaped(cell.source()))
-                            .append("</pre>\n");
+                    case RAW ->
+                        page.append("<pre class=\"raw\">")
+                                .append(Html.escaped(cell.source()))
+                                .append("</pre>\n");
                 }
             }
         }
@@ -115,7 +117,9 @@ public final class Report {
             page.append("<div class=\"outputs\">\n");
             for (JsonElement output : cell.outputs()) {
                 if (output instanceof JsonObject object) {
-                    page.append("<div class=\"output\">").append(output(object, cell)).append("</div>\n");
+                    page.append("<div class=\"output\">")
+                            .append(output(object, cell))
+                            .append("</div>\n");
                 }
             }
             page.append("</div>\n");
@@ -126,7 +130,8 @@ public final class Report {
     private String output(JsonObject output, Cell cell) {
         String type = string(output, "output_type");
         if (type.equals("stream")) {
-            String text = Optional.ofNullable(output.get("text")).map(Lines::joined).orElse("");
+            String text =
+                    Optional.ofNullable(output.get("text")).map(Lines::joined).orElse("");
             return "<pre class=\"" + (string(output, "name").equals("stderr") ? "stderr" : "stdout") + "\">"
                     + Ansi.html(Overwriting.settled(text)) + "</pre>";
         }

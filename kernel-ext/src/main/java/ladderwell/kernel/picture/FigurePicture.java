@@ -13,7 +13,16 @@ import tech.tablesaw.plotly.traces.Trace;
 public final class FigurePicture {
     /** What the library that travels with the page can draw. */
     private static final Set<String> DRAWN = Set.of(
-            "scatter", "bar", "box", "heatmap", "histogram", "histogram2d", "contour", "pie", "violin", "histogram2dcontour");
+            "scatter",
+            "bar",
+            "box",
+            "heatmap",
+            "histogram",
+            "histogram2d",
+            "contour",
+            "pie",
+            "violin",
+            "histogram2dcontour");
 
     private final JsonObject drawing;
     private final String title;
@@ -35,7 +44,8 @@ public final class FigurePicture {
             JsonObject drawing = new JsonObject();
             JsonObject page = JavascriptLiteral.object(layout.asJavascript());
             for (String name : page.keySet()) {
-                // The builder asks for evenly stepped ticks without a step, which the library takes as one tick per unit.
+                // The builder asks for evenly stepped ticks without a step, which the library takes as one tick per
+                // unit.
                 if (page.get(name) instanceof JsonObject axis && axis.has("tickmode") && !axis.has("dtick")) {
                     axis.addProperty("tickmode", axis.has("tickvals") ? "array" : "auto");
                 }
@@ -57,7 +67,10 @@ public final class FigurePicture {
             return new FigurePicture(drawing, title, traces.length, obstacle);
         } catch (IllegalArgumentException e) {
             return new FigurePicture(
-                    new JsonObject(), "", traces.length, Optional.of("its description could not be read, " + e.getMessage()));
+                    new JsonObject(),
+                    "",
+                    traces.length,
+                    Optional.of("its description could not be read, " + e.getMessage()));
         }
     }
 

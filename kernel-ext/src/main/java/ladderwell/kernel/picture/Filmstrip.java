@@ -32,9 +32,14 @@ final class Filmstrip {
             panel(svg, motion, frame(k, moments, last), left, curves[k], peak, potential);
         }
         String unit = motion.periods(0).isPresent() ? "time in periods" : "time";
-        svg.append("<text class=\"faint\" x=\"").append(LEFT).append("\" y=\"117\">").append(unit)
-                .append(" · position from ").append(Markup.text(Written.number(motion.position(0), 3)))
-                .append(" to ").append(Markup.text(Written.number(motion.position(motion.points() - 1), 3)))
+        svg.append("<text class=\"faint\" x=\"")
+                .append(LEFT)
+                .append("\" y=\"117\">")
+                .append(unit)
+                .append(" · position from ")
+                .append(Markup.text(Written.number(motion.position(0), 3)))
+                .append(" to ")
+                .append(Markup.text(Written.number(motion.position(motion.points() - 1), 3)))
                 .append(Markup.text(Written.behind(motion.lengthUnit())))
                 .append(" · ring: classical motion</text></svg>");
         return svg.toString();
@@ -46,21 +51,42 @@ final class Filmstrip {
 
     private static void panel(
             StringBuilder svg, Motion motion, int frame, int left, double[] curve, double peak, String potential) {
-        svg.append("<svg x=\"").append(left).append("\" y=\"0\" width=\"").append(PANEL).append("\" height=\"100\">");
+        svg.append("<svg x=\"")
+                .append(left)
+                .append("\" y=\"0\" width=\"")
+                .append(PANEL)
+                .append("\" height=\"100\">");
         StringBuilder line = new StringBuilder();
         for (int i = 0; i < curve.length; i++) {
-            line.append(i == 0 ? "M" : "L").append(i).append(' ').append(tenth(BOTTOM - 0.94 * (BOTTOM - TOP) * curve[i] / peak));
+            line.append(i == 0 ? "M" : "L")
+                    .append(i)
+                    .append(' ')
+                    .append(tenth(BOTTOM - 0.94 * (BOTTOM - TOP) * curve[i] / peak));
         }
         int right = curve.length - 1;
-        svg.append("<path class=\"fill\" d=\"").append(line).append("L").append(right).append(' ').append(BOTTOM).append("L0 ")
-                .append(BOTTOM).append("z\"/>");
+        svg.append("<path class=\"fill\" d=\"")
+                .append(line)
+                .append("L")
+                .append(right)
+                .append(' ')
+                .append(BOTTOM)
+                .append("L0 ")
+                .append(BOTTOM)
+                .append("z\"/>");
         svg.append(potential);
         svg.append("<path class=\"line\" d=\"").append(line).append("\"/>");
         double x = across(motion, motion.classicalPosition(frame));
         double y = up(motion, motion.classicalHeight(frame));
-        svg.append("<circle class=\"ring\" cx=\"").append(tenth(x)).append("\" cy=\"").append(tenth(y)).append("\" r=\"3.2\"/>");
-        svg.append("<text class=\"ink\" text-anchor=\"middle\" x=\"").append(PANEL / 2).append("\" y=\"98\">")
-                .append(Markup.text(motion.shortTime(frame))).append("</text></svg>");
+        svg.append("<circle class=\"ring\" cx=\"")
+                .append(tenth(x))
+                .append("\" cy=\"")
+                .append(tenth(y))
+                .append("\" r=\"3.2\"/>");
+        svg.append("<text class=\"ink\" text-anchor=\"middle\" x=\"")
+                .append(PANEL / 2)
+                .append("\" y=\"98\">")
+                .append(Markup.text(motion.shortTime(frame)))
+                .append("</text></svg>");
     }
 
     private static String potential(Motion motion) {
@@ -68,7 +94,8 @@ final class Filmstrip {
         StringBuilder path = new StringBuilder("<path class=\"hair\" d=\"");
         String before = "";
         for (int i = 0; i < potential.x().length; i++) {
-            String point = tenth(across(motion, potential.x()[i] * motion.lengthScale())) + ' '
+            String point = tenth(across(motion, potential.x()[i] * motion.lengthScale()))
+                    + ' '
                     + tenth(up(motion, potential.height()[i] * motion.energyScale()));
             if (!point.equals(before)) {
                 path.append(i == 0 ? "M" : "L").append(point);
@@ -77,8 +104,16 @@ final class Filmstrip {
         }
         double reach = motion.reachAtMeanEnergy();
         String height = tenth(up(motion, motion.meanEnergy()));
-        return path.append("\"/><path class=\"dash\" d=\"M").append(tenth(across(motion, -reach))).append(' ').append(height)
-                .append("L").append(tenth(across(motion, reach))).append(' ').append(height).append("\"/>").toString();
+        return path.append("\"/><path class=\"dash\" d=\"M")
+                .append(tenth(across(motion, -reach)))
+                .append(' ')
+                .append(height)
+                .append("L")
+                .append(tenth(across(motion, reach)))
+                .append(' ')
+                .append(height)
+                .append("\"/>")
+                .toString();
     }
 
     private static double across(Motion motion, double x) {

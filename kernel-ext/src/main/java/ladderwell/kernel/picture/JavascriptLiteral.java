@@ -164,7 +164,8 @@ final class JavascriptLiteral {
 
     private String word() {
         int start = at;
-        while (at < text.length() && (Character.isLetterOrDigit(text.charAt(at)) || "_$+-.".indexOf(text.charAt(at)) >= 0)) {
+        while (at < text.length()
+                && (Character.isLetterOrDigit(text.charAt(at)) || "_$+-.".indexOf(text.charAt(at)) >= 0)) {
             at++;
         }
         if (start == at) {

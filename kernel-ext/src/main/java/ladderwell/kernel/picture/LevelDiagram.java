@@ -175,7 +175,8 @@ final class LevelDiagram {
     String description() {
         String which = count() == 1 ? "Level " + levels[0] : "Levels " + levels[0] + " to " + levels[count() - 1];
         String part = asked > count() ? ", the lowest " + count() + " of " + asked + "," : "";
-        return which + " of " + name + " (" + oscillator.kind() + ")" + part + " with " + (count() == 1 ? "its wave function" : "their wave functions")
+        return which + " of " + name + " (" + oscillator.kind() + ")" + part + " with "
+                + (count() == 1 ? "its wave function" : "their wave functions")
                 + ", in the potential; energies from " + Written.number(energy(0), 4) + " to "
                 + Written.number(energy(count() - 1), 4) + Written.behind(energyUnit()) + ".";
     }

@@ -35,8 +35,7 @@ public final class LevelPicture {
 
     /** The picture as HTML. */
     public String html(Easel easel) {
-        return easel.picture(
-                "levels", diagram.name(), drawing(), "", Easel.image(still(), diagram.description()), "");
+        return easel.picture("levels", diagram.name(), drawing(), "", Easel.image(still(), diagram.description()), "");
     }
 
     JsonObject drawing() {
@@ -110,8 +109,15 @@ public final class LevelPicture {
         svg.append(StillInk.head(WIDTH, HEIGHT, diagram.description()));
         double left = Drawing.LEFT;
         double right = WIDTH - Drawing.RIGHT;
-        svg.append("<svg x=\"").append(Drawing.LEFT).append("\" y=\"").append(TOP).append("\" width=\"")
-                .append((int) (right - left)).append("\" height=\"").append(HEIGHT - TOP - BOTTOM).append("\">");
+        svg.append("<svg x=\"")
+                .append(Drawing.LEFT)
+                .append("\" y=\"")
+                .append(TOP)
+                .append("\" width=\"")
+                .append((int) (right - left))
+                .append("\" height=\"")
+                .append(HEIGHT - TOP - BOTTOM)
+                .append("\">");
         Potential potential = diagram.potential();
         double[] px = potential.x().clone();
         double[] py = potential.height().clone();
@@ -126,24 +132,42 @@ public final class LevelPicture {
         }
         for (int k = 0; k < diagram.count(); k++) {
             double[] at = {diagram.energy(k), diagram.energy(k)};
-            svg.append("<path class=\"dash\" d=\"").append(path(new double[] {x[0], x[x.length - 1]}, at, 1)).append("\"/>");
-            svg.append("<path class=\"line\" d=\"").append(path(x, diagram.lifted(k), 3)).append("\"/>");
+            svg.append("<path class=\"dash\" d=\"")
+                    .append(path(new double[] {x[0], x[x.length - 1]}, at, 1))
+                    .append("\"/>");
+            svg.append("<path class=\"line\" d=\"")
+                    .append(path(x, diagram.lifted(k), 3))
+                    .append("\"/>");
         }
         svg.append("</svg>");
         for (int k = 0; k < diagram.count(); k++) {
             if (diagram.labelled(k, HEIGHT - TOP - BOTTOM)) {
-                svg.append("<text class=\"ochre\" x=\"").append((int) right + 6).append("\" y=\"")
-                        .append(Filmstrip.tenth(TOP + up(diagram.energy(k)) + 4)).append("\">").append(diagram.label(k))
+                svg.append("<text class=\"ochre\" x=\"")
+                        .append((int) right + 6)
+                        .append("\" y=\"")
+                        .append(Filmstrip.tenth(TOP + up(diagram.energy(k)) + 4))
+                        .append("\">")
+                        .append(diagram.label(k))
                         .append("</text>");
             }
         }
-        svg.append("<text class=\"faint\" x=\"").append(Drawing.LEFT).append("\" y=\"").append(HEIGHT - 20)
-                .append("\">").append(Markup.text(Written.axis("energy", diagram.energyUnit()))).append(" from ")
-                .append(Markup.text(Written.number(diagram.bottom(), 3))).append(" to ")
-                .append(Markup.text(Written.number(diagram.top(), 3))).append(" · ")
-                .append(Markup.text(Written.axis("position x", diagram.lengthUnit()))).append(" from ")
-                .append(Markup.text(Written.number(diagram.from(), 3))).append(" to ")
-                .append(Markup.text(Written.number(diagram.to(), 3))).append("</text></svg>");
+        svg.append("<text class=\"faint\" x=\"")
+                .append(Drawing.LEFT)
+                .append("\" y=\"")
+                .append(HEIGHT - 20)
+                .append("\">")
+                .append(Markup.text(Written.axis("energy", diagram.energyUnit())))
+                .append(" from ")
+                .append(Markup.text(Written.number(diagram.bottom(), 3)))
+                .append(" to ")
+                .append(Markup.text(Written.number(diagram.top(), 3)))
+                .append(" · ")
+                .append(Markup.text(Written.axis("position x", diagram.lengthUnit())))
+                .append(" from ")
+                .append(Markup.text(Written.number(diagram.from(), 3)))
+                .append(" to ")
+                .append(Markup.text(Written.number(diagram.to(), 3)))
+                .append("</text></svg>");
         return svg.toString();
     }
 

@@ -7,7 +7,8 @@ import com.google.gson.JsonElement;
 /** Text made safe for the place where it is put: HTML or SVG, a script, the text of a plot. */
 public final class Markup {
     // Escaping is done below, for exactly the characters that matter inside a script.
-    private static final Gson SAFE_JSON = new GsonBuilder().disableHtmlEscaping().create();
+    private static final Gson SAFE_JSON =
+            new GsonBuilder().disableHtmlEscaping().create();
 
     private Markup() {}
 
@@ -30,7 +31,11 @@ public final class Markup {
     private static boolean allowed(int c) {
         return c == '\t'
                 || c == '\n'
-                || (c >= 0x20 && !(c >= 0x7F && c < 0xA0) && !(c >= 0xD800 && c < 0xE000) && c != 0xFFFE && c != 0xFFFF);
+                || (c >= 0x20
+                        && !(c >= 0x7F && c < 0xA0)
+                        && !(c >= 0xD800 && c < 0xE000)
+                        && c != 0xFFFE
+                        && c != 0xFFFF);
     }
 
     /** Data inside a script element: JSON in which nothing can end the script or open a comment. */

@@ -138,7 +138,9 @@ final class Motion {
     }
 
     OptionalDouble periods(int frame) {
-        return period.isPresent() ? OptionalDouble.of(scaledTime(frame) / period.getAsDouble()) : OptionalDouble.empty();
+        return period.isPresent()
+                ? OptionalDouble.of(scaledTime(frame) / period.getAsDouble())
+                : OptionalDouble.empty();
     }
 
     /** |ψ|² per unit of length. */
@@ -255,8 +257,10 @@ final class Motion {
                 ? Written.number(periods(last).getAsDouble(), 4) + " periods = " + Written.number(labTime(last), 4)
                         + Written.behind(timeUnit())
                 : Written.number(labTime(last), 4) + Written.behind(timeUnit());
-        return "Density of " + name + " moving in the potential of its oscillator (" + run.state().oscillator().kind()
-                + ") over " + span + ", " + frames() + " frames, position from " + Written.number(position(0), 3) + " to "
+        return "Density of " + name + " moving in the potential of its oscillator ("
+                + run.state().oscillator().kind()
+                + ") over " + span + ", " + frames() + " frames, position from " + Written.number(position(0), 3)
+                + " to "
                 + Written.number(position(points() - 1), 3) + Written.behind(lengthUnit()) + "; "
                 + run.verdict() + ".";
     }

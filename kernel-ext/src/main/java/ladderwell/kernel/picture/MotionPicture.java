@@ -14,7 +14,7 @@ import tech.tablesaw.plotly.traces.ScatterTrace;
  */
 public final class MotionPicture {
     /** Strip of the axis below zero where the mean position and the turning points are marked, as a part of the scale. */
-    private static final double RAIL = 0.085;
+    private static final double RAIL = 0.1;
 
     private static final double HEADROOM = 1.06;
     private static final int MILLISECONDS_PER_FRAME = 45;
@@ -136,13 +136,14 @@ public final class MotionPicture {
     private JsonObject words() {
         String at = "%{x:.3~g}" + Markup.plot(motion.lengthUnit().isEmpty() ? "" : " " + motion.lengthUnit());
         String per = Markup.plot(motion.lengthUnit().isEmpty() ? "" : " /" + motion.lengthUnit());
-        String when = motion.periods(0).isPresent() ? " periods" : motion.timeUnit().isEmpty() ? "" : " " + motion.timeUnit();
+        String when =
+                motion.periods(0).isPresent() ? " periods" : motion.timeUnit().isEmpty() ? "" : " " + motion.timeUnit();
         JsonObject words = new JsonObject();
         words.addProperty("hover", at + ": %{y:.3~g}" + per + "<extra></extra>");
-        words.addProperty("stripHover", at + ", %{y:.3~g}" + Markup.plot(when) + ": %{z:.3~g}" + per + "<extra></extra>");
-        words.addProperty("energy", "⟨E⟩<br>" + Written.number(motion.meanEnergy(), 3));
         words.addProperty(
-                "potential", motion.energyUnit().isEmpty() ? "V" : "V / " + Markup.plot(motion.energyUnit()));
+                "stripHover", at + ", %{y:.3~g}" + Markup.plot(when) + ": %{z:.3~g}" + per + "<extra></extra>");
+        words.addProperty("energy", "⟨E⟩<br>" + Written.number(motion.meanEnergy(), 3));
+        words.addProperty("potential", motion.energyUnit().isEmpty() ? "V" : "V / " + Markup.plot(motion.energyUnit()));
         return words;
     }
 
@@ -158,9 +159,13 @@ public final class MotionPicture {
                         .tickSettings(Drawing.noTicks())
                         .build())
                 .yAxis(Drawing.axis(
-                                Written.axis("density", Written.inverse(motion.lengthUnit())), -RAIL * highest, highest, 4)
+                                Written.axis("density", Written.inverse(motion.lengthUnit())),
+                                -RAIL * highest,
+                                highest,
+                                4)
                         .build())
-                .yAxis2(Drawing.right(-RAIL * motion.top(), motion.top(), new double[] {0}).build())
+                .yAxis2(Drawing.right(-RAIL * motion.top(), motion.top(), new double[] {0})
+                        .build())
                 .build();
         double turn = motion.turningPoint();
         double reach = motion.reachAtMeanEnergy();
@@ -210,7 +215,9 @@ public final class MotionPicture {
                 .build()
                 .asJavascript(0)));
         if (withLine) {
-            traces.add(Drawing.trace(Drawing.line("classical", 1.3)));
+            // A packet of a few pixels would vanish under a full line.
+            boolean narrow = 1 / motion.peak() < 0.01 * (motion.position(motion.points() - 1) - motion.position(0));
+            traces.add(Drawing.trace(narrow ? Drawing.dots("classical", 1.3) : Drawing.line("classical", 1.3)));
         }
         return Drawing.figure(layout, traces);
     }

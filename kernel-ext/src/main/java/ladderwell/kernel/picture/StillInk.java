@@ -19,7 +19,8 @@ final class StillInk {
     private StillInk() {}
 
     static String head(int width, int height, String title) {
-        return "<svg xmlns=\"http://www.w3.org/2000/svg\" width=\"" + width + "\" height=\"" + height + "\" viewBox=\"0 0 "
+        return "<svg xmlns=\"http://www.w3.org/2000/svg\" width=\"" + width + "\" height=\"" + height
+                + "\" viewBox=\"0 0 "
                 + width + " " + height + "\" role=\"img\"><title>" + Markup.text(title) + "</title><style>" + STYLE
                 + "</style>";
     }

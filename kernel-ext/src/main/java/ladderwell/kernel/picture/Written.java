@@ -10,7 +10,9 @@ final class Written {
 
     /** A number with no more digits than a picture can show. */
     static double rounded(double value, int digits) {
-        return value == 0 ? 0 : new BigDecimal(value).round(new MathContext(digits)).doubleValue();
+        return value == 0
+                ? 0
+                : new BigDecimal(value).round(new MathContext(digits)).doubleValue();
     }
 
     /** A few digits for people. */

@@ -26,8 +26,8 @@ final class CardRendering {
     /** One line of a card. */
     private record Line(String name, String symbol, String html, String plain) {
         static Line of(Fact fact) {
-            SupportedDigits digits =
-                    SupportedDigits.of(fact.value().value(), fact.bound(), fact.value().unit());
+            SupportedDigits digits = SupportedDigits.of(
+                    fact.value().value(), fact.bound(), fact.value().unit());
             return new Line(fact.name(), fact.symbol(), digits.html(), digits.plain());
         }
 
@@ -58,8 +58,8 @@ final class CardRendering {
                 "‖ψ − ψ̃‖",
                 Markup.text(size) + SupportedDigits.letter(error),
                 size + " " + error.kind().letter()));
-        MimeBundle card = card(
-                head + ": " + run.state().kind() + " for " + duration, run.verdict(), lines, run.errorLine());
+        MimeBundle card =
+                card(head + ": " + run.state().kind() + " for " + duration, run.verdict(), lines, run.errorLine());
         return new MimeBundle(card.data(), Map.of("ladderwell", record(run)));
     }
 
@@ -78,8 +78,8 @@ final class CardRendering {
 
     /** The record of a run as metadata, so that what is shown can be made again and checked. */
     static Map<String, Object> record(Run run) {
-        Map<String, Object> record = new Gson()
-                .fromJson(run.record().json(), new TypeToken<LinkedHashMap<String, Object>>() {}.getType());
+        Map<String, Object> record =
+                new Gson().fromJson(run.record().json(), new TypeToken<LinkedHashMap<String, Object>>() {}.getType());
         return Map.of("record", record);
     }
 
@@ -94,14 +94,19 @@ final class CardRendering {
                 .append(Markup.text(head))
                 .append("</div>\n");
         if (!verdict.isEmpty()) {
-            html.append("<div class=\"lw-verdict\">").append(Markup.text(verdict)).append("</div>\n");
+            html.append("<div class=\"lw-verdict\">")
+                    .append(Markup.text(verdict))
+                    .append("</div>\n");
         }
         html.append("<table class=\"lw-table\"><tbody>\n");
         PlainTable plain = new PlainTable(false, false, false);
         for (Line line : lines) {
             html.append("<tr><td>")
                     .append(Markup.text(line.name()))
-                    .append(line.symbol().isEmpty() ? "" : "<span class=\"lw-symbol\">" + Markup.text(line.symbol()) + "</span>")
+                    .append(
+                            line.symbol().isEmpty()
+                                    ? ""
+                                    : "<span class=\"lw-symbol\">" + Markup.text(line.symbol()) + "</span>")
                     .append("</td><td>")
                     .append(line.html())
                     .append("</td></tr>\n");
@@ -109,7 +114,9 @@ final class CardRendering {
         }
         html.append("</tbody></table>\n");
         if (!errorLine.isEmpty()) {
-            html.append("<div class=\"lw-error\">").append(Markup.text(errorLine)).append("</div>\n");
+            html.append("<div class=\"lw-error\">")
+                    .append(Markup.text(errorLine))
+                    .append("</div>\n");
         }
         html.append("</div>");
         String text = head + (verdict.isEmpty() ? "" : "\n" + verdict) + "\n" + plain.text()

@@ -25,7 +25,8 @@ final class PictureRendering {
         MotionPicture picture = MotionPicture.of(animation.name(), run, density);
         String text = "Animation " + animation.name() + ": " + run.verdict() + "\n" + picture.description() + "\n"
                 + density.times() + " times, " + density.points() + " positions, " + density.method()
-                + ", density off by at most " + Digits.pretty(Digits.upward(density.bound().size(), 2))
+                + ", density off by at most "
+                + Digits.pretty(Digits.upward(density.bound().size(), 2))
                 + " per scaled length (" + density.bound().kind().word() + ")\n" + run.errorLine();
         MimeBundle bundle = MimeBundle.plain(text)
                 .with(MimeBundle.HTML, picture.html(easel))

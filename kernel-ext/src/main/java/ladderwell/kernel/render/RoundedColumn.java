@@ -5,9 +5,9 @@ import java.math.MathContext;
 import java.math.RoundingMode;
 import ladderwell.quantity.Digits;
 import tech.tablesaw.api.ColumnType;
-import tech.tablesaw.columns.Column;
 import tech.tablesaw.api.NumericColumn;
 import tech.tablesaw.api.Table;
+import tech.tablesaw.columns.Column;
 
 /**
  * The cells of one column as they are shown. A column of numbers with a ± column behind it is rounded where the largest
@@ -73,7 +73,8 @@ final class RoundedColumn {
                 continue;
             }
             largest = Math.max(largest, Math.abs(value));
-            BigDecimal rounded = new BigDecimal(value).round(new MathContext(PLAIN_DIGITS)).stripTrailingZeros();
+            BigDecimal rounded =
+                    new BigDecimal(value).round(new MathContext(PLAIN_DIGITS)).stripTrailingZeros();
             behind = Math.max(behind, rounded.scale());
             fixed &= value == 0 || Math.abs(value) >= 1e-4 && Math.abs(value) < 1e7;
         }
@@ -147,6 +148,8 @@ final class RoundedColumn {
     }
 
     private static String minus(BigDecimal number) {
-        return number.signum() == 0 && number.scale() <= 0 ? "0" : number.toPlainString().replace('-', '−');
+        return number.signum() == 0 && number.scale() <= 0
+                ? "0"
+                : number.toPlainString().replace('-', '−');
     }
 }

@@ -41,7 +41,11 @@ record SupportedDigits(double value, Bound bound, String unit) {
         BigDecimal rounded = exact.round(new MathContext(MOST, RoundingMode.HALF_EVEN));
         rounded = rounded.setScale(rounded.scale() + MOST - rounded.precision());
         BigDecimal unit = BigDecimal.ONE.scaleByPowerOfTen(-rounded.scale());
-        if (!bound.isKnown() || new BigDecimal(bound.size()).add(exact.subtract(rounded).abs()).compareTo(unit) > 0) {
+        if (!bound.isKnown()
+                || new BigDecimal(bound.size())
+                                .add(exact.subtract(rounded).abs())
+                                .compareTo(unit)
+                        > 0) {
             return Optional.empty();
         }
         int top = MOST - 1 - rounded.scale();
@@ -66,14 +70,17 @@ record SupportedDigits(double value, Bound bound, String unit) {
         int open = number.indexOf('(');
         int close = number.indexOf(')', open);
         if (open >= 0 && close > open) {
-            number = number.substring(0, open) + "<span class=\"lw-pm\">" + number.substring(open, close + 1) + "</span>"
-                    + number.substring(close + 1);
+            number = number.substring(0, open) + "<span class=\"lw-pm\">" + number.substring(open, close + 1)
+                    + "</span>" + number.substring(close + 1);
         }
         String told = bound.isExact() || !Double.isFinite(value)
                 ? ""
-                : " title=\"" + Markup.text(Digits.pretty(Digits.shortest(value)) + " ± " + size() + behind() + ", "
-                        + bound.kind().word()) + "\"";
-        return "<span" + told + ">" + number + Markup.text(behind()) + "</span>" + (bound.isExact() ? "" : letter(bound));
+                : " title=\""
+                        + Markup.text(Digits.pretty(Digits.shortest(value)) + " ± " + size() + behind() + ", "
+                                + bound.kind().word())
+                        + "\"";
+        return "<span" + told + ">" + number + Markup.text(behind()) + "</span>"
+                + (bound.isExact() ? "" : letter(bound));
     }
 
     private String size() {
@@ -81,6 +88,7 @@ record SupportedDigits(double value, Bound bound, String unit) {
     }
 
     static String letter(Bound bound) {
-        return " <span class=\"lw-sure\" title=\"" + bound.kind().word() + "\">" + bound.kind().letter() + "</span>";
+        return " <span class=\"lw-sure\" title=\"" + bound.kind().word() + "\">"
+                + bound.kind().letter() + "</span>";
     }
 }

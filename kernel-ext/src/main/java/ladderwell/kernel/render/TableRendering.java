@@ -42,15 +42,23 @@ final class TableRendering {
         }
         html.append("<table class=\"lw-table\"><thead><tr>");
         for (int c = 0; c < columns; c++) {
-            html.append("<th scope=\"col\"").append(look(table.column(c))).append(" title=\"")
-                    .append(Markup.text(cut(table.column(c).name()))).append("\">")
-                    .append(Markup.text(cut(head(table, c)))).append("</th>");
+            html.append("<th scope=\"col\"")
+                    .append(look(table.column(c)))
+                    .append(" title=\"")
+                    .append(Markup.text(cut(table.column(c).name())))
+                    .append("\">")
+                    .append(Markup.text(cut(head(table, c))))
+                    .append("</th>");
         }
         html.append("</tr></thead><tbody>\n");
         for (int r = 0; r < rows; r++) {
             html.append("<tr>");
             for (int c = 0; c < columns; c++) {
-                html.append("<td").append(look(table.column(c))).append(">").append(Markup.text(cells[c][r])).append("</td>");
+                html.append("<td")
+                        .append(look(table.column(c)))
+                        .append(">")
+                        .append(Markup.text(cells[c][r]))
+                        .append("</td>");
             }
             html.append("</tr>\n");
         }
@@ -76,7 +84,8 @@ final class TableRendering {
     }
 
     private static String look(Column<?> column) {
-        String names = (RoundedColumn.isNumber(column) ? "lw-number" : "") + (RoundedColumn.isError(column) ? " lw-pm" : "");
+        String names =
+                (RoundedColumn.isNumber(column) ? "lw-number" : "") + (RoundedColumn.isError(column) ? " lw-pm" : "");
         return names.isEmpty() ? "" : " class=\"" + names.strip() + "\"";
     }
 
@@ -108,7 +117,9 @@ final class TableRendering {
         if (!rest.isEmpty()) {
             text.append('\n').append(rest);
         }
-        return below.isEmpty() ? text.toString() : text.append('\n').append(below).toString();
+        return below.isEmpty()
+                ? text.toString()
+                : text.append('\n').append(below).toString();
     }
 
     /** What is not shown, counted; empty if all is. */
@@ -120,7 +131,9 @@ final class TableRendering {
             rest.append("… ").append(rows).append(rows == 1 ? " more row" : " more rows");
         }
         if (columns > 0) {
-            rest.append(rest.isEmpty() ? "… " : " and ").append(columns).append(columns == 1 ? " more column" : " more columns");
+            rest.append(rest.isEmpty() ? "… " : " and ")
+                    .append(columns)
+                    .append(columns == 1 ? " more column" : " more columns");
         }
         return rest.toString();
     }

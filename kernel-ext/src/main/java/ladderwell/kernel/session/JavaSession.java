@@ -34,6 +34,7 @@ public final class JavaSession implements AutoCloseable {
     private final JShell shell;
     private final Variables variables;
     private final CodeReading reading;
+    private final Imports imports;
     private SnippetId place = new SnippetId(0, 1, 0);
 
     /**
@@ -50,7 +51,15 @@ public final class JavaSession implements AutoCloseable {
                 .build();
         variables = new Variables(shell, control);
         reading = new CodeReading(shell);
-        for (String name : imports) {
+        this.imports = new Imports(imports);
+        // The compiler's own start takes most of a session's start.
+        shell.eval(CALL + "0" + CALL_END);
+        control.forget();
+    }
+
+    private void bringIn(List<String> names) {
+        place = new SnippetId(0, 1, place.count());
+        for (String name : names) {
             shell.eval("import " + name + ";");
         }
     }
@@ -81,6 +90,7 @@ public final class JavaSession implements AutoCloseable {
      * @param firstLine the line of the cell at which the text begins
      */
     public synchronized JavaEnd run(String text, int cell, int firstLine) {
+        bringIn(imports.neededBy(text));
         SourceCodeAnalysis analysis = shell.sourceCodeAnalysis();
         List<Piece> pieces = Pieces.of(text, analysis);
         for (Piece piece : pieces) {
@@ -233,11 +243,13 @@ public final class JavaSession implements AutoCloseable {
 
     /** The ways to go on at the cursor. */
     public synchronized Suggestions suggestions(String text, int cursor) {
+        bringIn(imports.rest());
         return reading.suggestions(text, cursor, variables.names());
     }
 
     /** Signatures and, if wanted, the documentation of what stands at the cursor; empty if Java knows nothing of it. */
     public synchronized List<String> documentation(String text, int cursor, boolean full) {
+        bringIn(imports.neededBy(text));
         return reading.documentation(text, cursor, full);
     }
 

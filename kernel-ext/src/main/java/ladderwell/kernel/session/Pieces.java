@@ -78,9 +78,11 @@ final class Pieces {
             }
             boolean whole = info.source() == null || info.completeness() == Completeness.CONSIDERED_INCOMPLETE;
             String source = whole ? rest : info.source();
-            int length = whole ? rest.length() : rest.length() - info.remaining().length();
+            int length =
+                    whole ? rest.length() : rest.length() - info.remaining().length();
             pieces.add(new Piece(source, rest.substring(0, length), start, line, info.completeness()));
-            line += (int) rest.substring(0, length).chars().filter(c -> c == '\n').count();
+            line += (int)
+                    rest.substring(0, length).chars().filter(c -> c == '\n').count();
             start += length;
         }
         return pieces;

@@ -119,7 +119,11 @@ final class Traceback {
             int end = (int) Math.min(text.length(), offset + Math.max(0, problem.getEndPosition()));
             int from = text.lastIndexOf('\n', at - 1) + 1;
             int to = text.indexOf('\n', at) < 0 ? text.length() : text.indexOf('\n', at);
-            int line = firstLine + (int) text.substring(0, from).chars().filter(c -> c == '\n').count();
+            int line = firstLine
+                    + (int) text.substring(0, from)
+                            .chars()
+                            .filter(c -> c == '\n')
+                            .count();
             first = first.isEmpty() ? message : first;
             lines.add(headline(place(cell, line), message));
             lines.add("    " + text.substring(from, to));

@@ -8,7 +8,8 @@ public final class SmallRenderer implements Renderer {
     public MimeBundle render(Object value) {
         MimeBundle plain = MimeBundle.plain(String.valueOf(value));
         return value instanceof List<?> list
-                ? plain.with(MimeBundle.HTML, "<ul>" + list.size() + "</ul>").with("application/json", "{\"size\": " + list.size() + "}")
+                ? plain.with(MimeBundle.HTML, "<ul>" + list.size() + "</ul>")
+                        .with("application/json", "{\"size\": " + list.size() + "}")
                 : plain;
     }
 }

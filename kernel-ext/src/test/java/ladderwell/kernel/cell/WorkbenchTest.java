@@ -45,7 +45,8 @@ class WorkbenchTest {
 
         @Override
         public void display(MimeBundle bundle, Optional<String> displayId) {
-            lines.add("display " + bundle.plainText() + displayId.map(id -> " as " + id).orElse(""));
+            lines.add("display " + bundle.plainText()
+                    + displayId.map(id -> " as " + id).orElse(""));
         }
 
         @Override
@@ -62,7 +63,9 @@ class WorkbenchTest {
     @BeforeEach
     void open() {
         bench = new Workbench(
-                new SmallSentences(), new SmallRenderer(), List.of("java.util.*", "static ladderwell.kernel.cell.Show.*"));
+                new SmallSentences(),
+                new SmallRenderer(),
+                List.of("java.util.*", "static ladderwell.kernel.cell.Show.*"));
     }
 
     @AfterEach
@@ -104,7 +107,8 @@ class WorkbenchTest {
     void sentencesAloneDoNotStartJava() {
         assertEquals("1", result("%count a: 1"));
         assertEquals("3", result("%count b: a plus 2"));
-        assertTrue(Thread.getAllStackTraces().keySet().stream().noneMatch(t -> t.getName().equals("java session")));
+        assertTrue(Thread.getAllStackTraces().keySet().stream()
+                .noneMatch(t -> t.getName().equals("java session")));
         assertEquals(Optional.empty(), bench.names().find("nothing"));
     }
 
@@ -130,9 +134,14 @@ class WorkbenchTest {
         result("double nbar = 9.5;\nint plus(int n) { return n + 1; }");
         assertEquals("9", result("%count n: {nbar}"));
         assertEquals("10", result("%count m: {plus(n)}"));
-        assertEquals("Java cannot evaluate {no + 1}: cannot find symbol: variable no", failure("%count n: {no + 1}").message());
-        assertEquals("Java cannot evaluate {1 / 0}: / by zero", failure("%count n: {1 / 0}").message());
-        assertEquals("{int i = 3;} has no value", failure("%count n: {int i = 3;}").message());
+        assertEquals(
+                "Java cannot evaluate {no + 1}: cannot find symbol: variable no",
+                failure("%count n: {no + 1}").message());
+        assertEquals(
+                "Java cannot evaluate {1 / 0}: / by zero",
+                failure("%count n: {1 / 0}").message());
+        assertEquals(
+                "{int i = 3;} has no value", failure("%count n: {int i = 3;}").message());
         assertEquals(9, value("n"));
     }
 
@@ -155,7 +164,9 @@ class WorkbenchTest {
         assertEquals("2", result("%count free: 2"));
         assertEquals("2", result("free"));
         result("%word w: x");
-        assertEquals("w is already declared as word; choose another name for this count", failure("%count w: 1").message());
+        assertEquals(
+                "w is already declared as word; choose another name for this count",
+                failure("%count w: 1").message());
         for (String name : List.of("3a", "int", "a-b", "_")) {
             assertTrue(failure("%count " + name + ": 1").message().startsWith("\"" + name + "\" cannot be a name"));
         }
@@ -177,7 +188,9 @@ class WorkbenchTest {
         assertEquals(1, value("a"));
         assertEquals("1", result("a"));
         failure("%count a: 2\n%break");
-        assertEquals(List.of("a"), bench.names().declared().stream().map(Names.Named::name).toList());
+        assertEquals(
+                List.of("a"),
+                bench.names().declared().stream().map(Names.Named::name).toList());
     }
 
     @Test
@@ -201,10 +214,18 @@ class WorkbenchTest {
     void streamsAndDisplaysKeepTheirOrder() {
         assertEquals(
                 "7",
-                result("System.out.print(\"a\"); System.out.print(\"b\"); System.err.print(\"c\"); display(1);\n"
-                        + "System.out.print(\"d\"); display(List.of(2), \"spot\"); updateDisplay(3, \"spot\"); clearOutput(true);\n7"));
+                result(
+                        "System.out.print(\"a\"); System.out.print(\"b\"); System.err.print(\"c\"); display(1);\n"
+                                + "System.out.print(\"d\"); display(List.of(2), \"spot\"); updateDisplay(3, \"spot\"); clearOutput(true);\n7"));
         assertEquals(
-                List.of("out ab", "err c", "display 1", "out d", "display [2] as spot", "update 3 as spot", "clear true"),
+                List.of(
+                        "out ab",
+                        "err c",
+                        "display 1",
+                        "out d",
+                        "display [2] as spot",
+                        "update 3 as spot",
+                        "clear true"),
                 said);
         result("%chat hello");
         assertEquals(List.of("out hello", "display shown as chat", "update shown anew as chat"), said);
@@ -213,12 +234,15 @@ class WorkbenchTest {
     @Test
     void listsCarryHtml() {
         CellEnd.Done done = (CellEnd.Done) run("List.of(1, 2)");
-        assertEquals(List.of("text/plain", "text/html", "application/json"), List.copyOf(done.result().orElseThrow().data().keySet()));
+        assertEquals(
+                List.of("text/plain", "text/html", "application/json"),
+                List.copyOf(done.result().orElseThrow().data().keySet()));
     }
 
     @Test
     void valuesThatCannotBeShownAreNamed() {
-        assertTrue(result("class Mute { public String toString() { throw new IllegalStateException(\"mute\"); } }\nnew Mute()")
+        assertTrue(result(
+                        "class Mute { public String toString() { throw new IllegalStateException(\"mute\"); } }\nnew Mute()")
                 .endsWith("Mute (cannot be shown: java.lang.IllegalStateException: mute)"));
         assertEquals("null", result("(Object) null"));
     }
@@ -228,7 +252,8 @@ class WorkbenchTest {
         result("int x = 3;");
         assertEquals(new CellEnd.Done(Optional.of(MimeBundle.plain("4"))), bench.evaluate("x + 1"));
         CellEnd.Failed failed = assertInstanceOf(CellEnd.Failed.class, bench.evaluate("x / 0"));
-        assertTrue(failed.traceback().get(failed.traceback().size() - 1).endsWith("at the expression"), failed.toString());
+        assertTrue(
+                failed.traceback().get(failed.traceback().size() - 1).endsWith("at the expression"), failed.toString());
     }
 
     private CellEnd interrupted(String code, int afterMillis) throws Exception {
@@ -241,7 +266,9 @@ class WorkbenchTest {
     @Test
     void anInterruptEndsSentencesAndJavaAlike() throws Exception {
         result("%count a: 1\na");
-        for (String code : List.of("%wait", "while (true) { }", "%count b: {Thread.sleep(600000)}", "Thread.sleep(600_000);\n%count never: 1")) {
+        for (String code : List.of(
+                "%wait",
+                "while (true) { }", "%count b: {Thread.sleep(600000)}", "Thread.sleep(600_000);\n%count never: 1")) {
             assertInstanceOf(CellEnd.Interrupted.class, interrupted(code, 500), code);
             assertEquals("1", result("a"));
         }
@@ -268,18 +295,32 @@ class WorkbenchTest {
         result("%count trapDepth: 1");
         String cell = "%count b: {trapD}\nString s = trapD";
         assertEquals("[count]", texts(bench.complete("%cou", 4)));
-        assertEquals(new Completion(11, 16, List.of(new Completion.Candidate("trapDepth", "instance"))), bench.complete(cell, 16));
+        assertEquals(
+                new Completion(11, 16, List.of(new Completion.Candidate("trapDepth", "instance"))),
+                bench.complete(cell, 16));
         Completion inJava = bench.complete(cell, cell.length());
         assertEquals("[trapDepth]", texts(inJava));
         assertEquals(cell.length() - 5, inJava.start());
         assertEquals(Optional.of(MimeBundle.plain("count: a whole number")), bench.inspect("%count b: 1", 3, 0));
-        assertEquals("Integer trapDepth\n1", bench.inspect("%count b: {trapDepth}", 13, 0).orElseThrow().plainText());
-        assertEquals("int Math.abs(int a)", bench.inspect("Math.abs(-3)", 6, 0).orElseThrow().plainText().lines().findFirst().orElseThrow());
+        assertEquals(
+                "Integer trapDepth\n1",
+                bench.inspect("%count b: {trapDepth}", 13, 0).orElseThrow().plainText());
+        assertEquals(
+                "int Math.abs(int a)",
+                bench.inspect("Math.abs(-3)", 6, 0)
+                        .orElseThrow()
+                        .plainText()
+                        .lines()
+                        .findFirst()
+                        .orElseThrow());
         assertEquals(Optional.empty(), bench.inspect("", 0, 0));
     }
 
     private static String texts(Completion completion) {
-        return completion.candidates().stream().map(Completion.Candidate::text).toList().toString();
+        return completion.candidates().stream()
+                .map(Completion.Candidate::text)
+                .toList()
+                .toString();
     }
 
     @Test

@@ -20,7 +20,11 @@ class PluginTest {
     @BeforeEach
     void install() {
         kernel = IJava.restart();
-        Plugin.install(new SmallSentences(), new SmallRenderer(), List.of("count", "word", "chat", "break"), List.of(List.class));
+        Plugin.install(
+                new SmallSentences(),
+                new SmallRenderer(),
+                List.of("count", "word", "chat", "break"),
+                List.of(List.class));
     }
 
     private String plain(String cell) throws Exception {
@@ -44,7 +48,8 @@ class PluginTest {
     @Test
     void cellMagicsRunManySentences() throws Exception {
         assertEquals("5", plain("%%declare\ncount a: 3\ncount b: a plus 2"));
-        assertEquals(List.of("3"), kernel.displayed.stream().map(PluginTest::text).toList());
+        assertEquals(
+                List.of("3"), kernel.displayed.stream().map(PluginTest::text).toList());
         assertEquals("8", plain("a + b"));
     }
 
@@ -65,7 +70,9 @@ class PluginTest {
     @Test
     void aFailedCellChangesNoName() throws Exception {
         plain("%count a: 1");
-        assertEquals("line 1: no sentence \"nonsense\"; expected count", message("%%declare\ncount a: 2\ncount b: 3\nnonsense"));
+        assertEquals(
+                "line 1: no sentence \"nonsense\"; expected count",
+                message("%%declare\ncount a: 2\ncount b: 3\nnonsense"));
         assertEquals("1", plain("a"));
         assertThrows(Exception.class, () -> kernel.eval("b"));
         assertEquals("2", plain("%count c: a plus 1"));
@@ -76,7 +83,9 @@ class PluginTest {
     @Test
     void aNameOfAnotherTypeIsRefused() throws Exception {
         kernel.eval("String taken = \"x\";");
-        assertEquals("taken is already a Java variable of type String; choose another name for this count", message("%count taken: 1"));
+        assertEquals(
+                "taken is already a Java variable of type String; choose another name for this count",
+                message("%count taken: 1"));
         plain("%word w: x");
         assertEquals("w is already declared as word; choose another name for this count", message("%count w: 1"));
         assertTrue(message("%count 3: 1").startsWith("\"3\" cannot be a name"));
@@ -86,22 +95,48 @@ class PluginTest {
     void javaValuesAreShownByTheRenderer() throws Exception {
         DisplayData shown = kernel.eval("List.of(1, 2)");
         assertEquals("<ul>2</ul>", shown.getData(MIMEType.TEXT_HTML));
-        assertEquals("[1, 2]", kernel.getRenderer().renderAs(List.of(1, 2), "text/plain").getData(MIMEType.TEXT_PLAIN));
+        assertEquals(
+                "[1, 2]",
+                kernel.getRenderer().renderAs(List.of(1, 2), "text/plain").getData(MIMEType.TEXT_PLAIN));
+    }
+
+    @Test
+    void theRealLanguageWorksInThatKernel() throws Exception {
+        kernel = IJava.restart();
+        Plugin.install();
+        String card = plain("%oscillator trap: harmonic, mass 40 u, frequency 1.2 MHz");
+        assertTrue(card.contains("trap") && card.contains("1.2"), card);
+        DisplayData table = kernel.eval("%%declare\n# a state and its motion\nstate psi: coherent in trap, mean 9.5\n"
+                + "evolve run: psi for 1 periods, frames 8\ntable run: position, spread of position\n");
+        assertEquals(2, kernel.displayed.size());
+        assertTrue(text(table).contains("position"), text(table));
+        assertTrue(((String) table.getData(MIMEType.TEXT_HTML)).contains("<table"));
+        assertEquals("true", plain("trap instanceof ladderwell.Oscillator && run instanceof ladderwell.Run"));
+        assertTrue(kernel.eval("psi").getData(MIMEType.TEXT_HTML).toString().contains("state"));
+        String mistake = message("%state phi: coherent in trap, mean -1");
+        assertTrue(mistake.contains("mean"), mistake);
+        assertTrue(plain("%levels trap, count 3").length() > 10);
     }
 
     @Test
     void argumentsAreJoinedAsTheyWereTyped() {
         assertEquals(
                 "own: potential \"a*x^4 - b*x^2\", mass 1 u, a 2 eV/angstrom^4",
-                Plugin.joined(List.of("own:", "potential", "a*x^4 - b*x^2", ",", "mass", "1", "u,", "a", "2", "eV/angstrom^4")));
-        assertEquals("own: potential \"x\", mass {m + (1)} u", Plugin.joined(List.of("own:", "potential", "x", ",", "mass", "{m", "+", "(1)}", "u")));
+                Plugin.joined(List.of(
+                        "own:", "potential", "a*x^4 - b*x^2", ",", "mass", "1", "u,", "a", "2", "eV/angstrom^4")));
+        assertEquals(
+                "own: potential \"x\", mass {m + (1)} u",
+                Plugin.joined(List.of("own:", "potential", "x", ",", "mass", "{m", "+", "(1)}", "u")));
         assertEquals("", Plugin.joined(List.of()));
     }
 
     @Test
     void withoutThatKernelInstallingSaysSo() {
-        // The stand-in is on the class path of the tests, so its absence is shown by its method being asked of another class.
+        // The stand-in is on the class path of the tests, so its absence is shown by its method being asked of another
+        // class.
         IllegalStateException e = assertThrows(IllegalStateException.class, () -> HostedKernel.of(String.class));
-        assertTrue(e.getMessage().startsWith("Ladderwell can be installed in a running IJava kernel only"), e.getMessage());
+        assertTrue(
+                e.getMessage().startsWith("Ladderwell can be installed in a running IJava kernel only"),
+                e.getMessage());
     }
 }

@@ -32,7 +32,11 @@ class RealClientTest {
 
     private Outcome python(String file) throws Exception {
         Outcome outcome = RealPrograms.run(
-                environment, 300, RealPrograms.PYTHON, PYTHON_TESTS.resolve(file).toString(), "-v");
+                environment,
+                300,
+                RealPrograms.PYTHON,
+                PYTHON_TESTS.resolve(file).toString(),
+                "-v");
         assertEquals(0, outcome.exitCode(), outcome.text());
         assertTrue(outcome.text().contains("\nOK"), outcome.text());
         return outcome;
@@ -49,6 +53,16 @@ class RealClientTest {
     @Test
     void whatTheProtocolAsksBesidesIsKept() throws Exception {
         Outcome outcome = python("test_protocol.py");
+        outcome.text().lines().filter(line -> line.startsWith("measured:")).forEach(System.out::println);
+    }
+
+    @Test
+    void theMainJobRunsInARealClient() throws Exception {
+        environment = RealPrograms.installKernel(
+                folder,
+                "ladderwell-test",
+                RealPrograms.java("ladderwell.kernel.command.Ladderwell", "kernel", "{connection_file}"));
+        Outcome outcome = python("test_main_job.py");
         outcome.text().lines().filter(line -> line.startsWith("measured:")).forEach(System.out::println);
     }
 
@@ -74,7 +88,11 @@ class RealClientTest {
     @Test
     void aJavaWithoutShellIsSaidInOneLine() throws Exception {
         var command = RealPrograms.java("ladderwell.kernel.host.SmallKernel", "none.json");
-        command.addAll(1, java.util.List.of("--limit-modules", "java.base,java.logging,java.compiler,java.desktop,java.sql,jdk.unsupported"));
+        command.addAll(
+                1,
+                java.util.List.of(
+                        "--limit-modules",
+                        "java.base,java.logging,java.compiler,java.desktop,java.sql,jdk.unsupported"));
         Outcome outcome = RealPrograms.run(Map.of(), 60, command.toArray(String[]::new));
         assertEquals(2, outcome.exitCode(), outcome.text());
         assertEquals(1, outcome.text().lines().count(), outcome.text());

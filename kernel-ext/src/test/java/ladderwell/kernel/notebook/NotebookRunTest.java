@@ -39,8 +39,10 @@ class NotebookRunTest {
             cell.add("metadata", metadata);
             cell.addProperty("source", source);
             if (!source.startsWith("#")) {
-                cell.add("outputs", JsonParser.parseString("[{\"output_type\": \"stream\", \"name\": \"stdout\","
-                        + " \"text\": \"of an earlier run\"}]"));
+                cell.add(
+                        "outputs",
+                        JsonParser.parseString("[{\"output_type\": \"stream\", \"name\": \"stdout\","
+                                + " \"text\": \"of an earlier run\"}]"));
                 cell.addProperty("execution_count", 99);
             }
             cells.add(cell);
@@ -88,8 +90,7 @@ class NotebookRunTest {
     }
 
     private static String text(JsonArray outputs, int output) {
-        return String.valueOf(
-                Lines.joined(outputs.get(output).getAsJsonObject().get("text")));
+        return String.valueOf(Lines.joined(outputs.get(output).getAsJsonObject().get("text")));
     }
 
     @Test
@@ -136,15 +137,12 @@ class NotebookRunTest {
                     return new CellEnd.Done(Optional.of(MimeBundle.plain("42")));
                 })
                 .run();
-        assertEquals(
-                JsonParser.parseString(
-                        """
+        assertEquals(JsonParser.parseString("""
                         [{"output_type": "display_data", "metadata": {"needs_background": "light"}, "data": {
                            "text/plain": ["p\\n", "q"], "image/png": "AAA=", "application/json": {"x": [1]}}},
                          {"output_type": "execute_result", "execution_count": 1, "metadata": {},
                            "data": {"text/plain": ["42"]}}]
-                        """),
-                outputs(notebook, 0));
+                        """), outputs(notebook, 0));
     }
 
     @Test
@@ -206,7 +204,9 @@ class NotebookRunTest {
                 ? new CellEnd.Failed(
                         "java.lang.ArithmeticException",
                         "/ by zero",
-                        List.of("\u001b[31mArithmeticException\u001b[0m: / by zero", "  at cell [\u001b[1m2\u001b[0m], line 4"))
+                        List.of(
+                                "\u001b[31mArithmeticException\u001b[0m: / by zero",
+                                "  at cell [\u001b[1m2\u001b[0m], line 4"))
                 : NOTHING;
     }
 
@@ -293,8 +293,7 @@ class NotebookRunTest {
                     return NOTHING;
                 })
                 .run();
-        String stored =
-                """
+        String stored = """
                    "outputs": [
                     {
                      "name": "stdout",

@@ -64,7 +64,9 @@ class NotebookTest {
         assertEquals(
                 List.of(Cell.Kind.MARKDOWN, Cell.Kind.CODE, Cell.Kind.CODE, Cell.Kind.CODE, Cell.Kind.RAW),
                 cells.stream().map(Cell::kind).toList());
-        assertEquals("%%declare\noscillator trap: harmonic, mass 40 u, frequency 1.2 MHz\n", cells.get(1).source());
+        assertEquals(
+                "%%declare\noscillator trap: harmonic, mass 40 u, frequency 1.2 MHz\n",
+                cells.get(1).source());
         assertEquals("%%declare", cells.get(1).firstLine());
         assertEquals(Set.of("raises-exception", "x"), cells.get(2).tags());
         assertEquals("", cells.get(3).source());
@@ -72,8 +74,7 @@ class NotebookTest {
 
     @Test
     void anOlderMinorNumberGetsIdsThatAreTheSameEveryTime() throws Exception {
-        String old =
-                """
+        String old = """
                 {"nbformat": 4, "nbformat_minor": 2, "metadata": {}, "cells": [
                  {"cell_type": "code", "source": "a", "metadata": {}, "outputs": [], "execution_count": null},
                  {"cell_type": "code", "source": "a", "metadata": {}, "outputs": [], "execution_count": null},
@@ -90,15 +91,13 @@ class NotebookTest {
 
     @Test
     void idsThatAreTwiceOrAgainstTheRulesAreReplacedAndOthersKept() throws Exception {
-        Notebook notebook = Notebook.parse(
-                """
+        Notebook notebook = Notebook.parse("""
                 {"nbformat": 4, "nbformat_minor": 5, "metadata": {}, "cells": [
                  {"cell_type": "raw", "source": "a", "metadata": {}, "id": "same"},
                  {"cell_type": "raw", "source": "b", "metadata": {}, "id": "same"},
                  {"cell_type": "raw", "source": "c", "metadata": {}, "id": "has blanks"},
                  {"cell_type": "raw", "source": "d", "metadata": {}, "id": 7}]}
-                """,
-                "n");
+                """, "n");
         List<String> ids = notebook.cells().stream().map(Cell::id).toList();
         assertEquals("same", ids.get(0));
         assertEquals(4, new HashSet<>(ids).size());
@@ -107,13 +106,10 @@ class NotebookTest {
 
     @Test
     void aLaterMinorNumberAndUnknownFieldsAreKept() throws Exception {
-        String text = Notebook.parse(
-                        """
+        String text = Notebook.parse("""
                         {"nbformat": 4, "nbformat_minor": 9, "later": {"x": 1.50}, "cells": [
                          {"cell_type": "code", "source": "", "id": "a", "later": [1e400]}]}
-                        """,
-                        "n")
-                .text();
+                        """, "n").text();
         assertTrue(text.contains("\"nbformat_minor\": 9"));
         assertTrue(text.contains("\"later\": {\n  \"x\": 1.50\n }"), text);
         assertTrue(text.contains("1e400"));
@@ -215,6 +211,8 @@ class NotebookTest {
                                 "n")
                         .language()
                         .orElseThrow());
-        assertFalse(Notebook.parse("{\"nbformat\": 4, \"cells\": []}", "n").language().isPresent());
+        assertFalse(Notebook.parse("{\"nbformat\": 4, \"cells\": []}", "n")
+                .language()
+                .isPresent());
     }
 }

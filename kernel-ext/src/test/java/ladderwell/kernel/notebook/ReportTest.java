@@ -133,8 +133,19 @@ class ReportTest {
     void hostileMarkdownStaysText(String text) throws Exception {
         String html = markdown(text);
         String tags = html.replaceAll("(?s)>[^<]*", ">").toLowerCase(java.util.Locale.ROOT);
-        for (String bad : List.of("<script", "<img", "<iframe", "<svg", "<style", "<div", "onerror", "onclick", "onload",
-                "onmouseover", "javascript:", "data:text")) {
+        for (String bad : List.of(
+                "<script",
+                "<img",
+                "<iframe",
+                "<svg",
+                "<style",
+                "<div",
+                "onerror",
+                "onclick",
+                "onload",
+                "onmouseover",
+                "javascript:",
+                "data:text")) {
             assertFalse(tags.contains(bad), () -> bad + " in " + html);
         }
     }
@@ -204,8 +215,10 @@ class ReportTest {
         MimeBundle plain = MimeBundle.plain("a < b");
         assertTrue(ran(plain).contains("<pre>a &lt; b</pre>"));
         assertTrue(ran(plain.with("text/html", "<b>x</b><script>1</script>")).contains("<b>x</b><script>1</script>"));
-        assertTrue(ran(plain.with("image/png", "AAA\nA")).contains("<img src=\"data:image/png;base64,AAAA\" alt=\"a &lt; b\">"));
-        assertTrue(ran(plain.with("image/svg+xml", "<svg/>")).contains("<img src=\"data:image/svg+xml;base64,PHN2Zy8+\""));
+        assertTrue(ran(plain.with("image/png", "AAA\nA"))
+                .contains("<img src=\"data:image/png;base64,AAAA\" alt=\"a &lt; b\">"));
+        assertTrue(
+                ran(plain.with("image/svg+xml", "<svg/>")).contains("<img src=\"data:image/svg+xml;base64,PHN2Zy8+\""));
         assertTrue(ran(new MimeBundle(Map.of("text/plain", "p", "text/markdown", "*m*"), Map.of()))
                 .contains("<em>m</em>"));
     }
@@ -213,10 +226,7 @@ class ReportTest {
     @Test
     void outputsThatSomeoneElseStoredRunNoScript() throws Exception {
         JsonObject cell = code("x");
-        cell.add(
-                "outputs",
-                com.google.gson.JsonParser.parseString(
-                        """
+        cell.add("outputs", com.google.gson.JsonParser.parseString("""
                         [{"output_type": "display_data", "metadata": {}, "data": {
                            "text/html": "<script>alert(1)</script>", "text/plain": "plain <b>"}},
                          {"output_type": "display_data", "metadata": {}, "data": {

@@ -13,13 +13,17 @@ class JavascriptLiteralTest {
     @Test
     void readsWhatTheBuildersWrite() {
         assertEquals(
-                JsonParser.parseString("{\"a\":'it''s'.length,\"b\":0}".replace("'it''s'.length", "\"it's\"").replace("\"b\":0", "\"b\":[1,-2.5,null,\"x\"]")),
+                JsonParser.parseString("{\"a\":'it''s'.length,\"b\":0}"
+                        .replace("'it''s'.length", "\"it's\"")
+                        .replace("\"b\":0", "\"b\":[1,-2.5,null,\"x\"]")),
                 JavascriptLiteral.object("var layout = {\n a: 'it\\'s',\n b: [1, -2.5, NaN, \"x\",],\n};"));
     }
 
     @Test
     void readsEscapes() {
-        assertEquals("\n\u2028\"", JavascriptLiteral.object("{t: '\\n\\u2028\\\"'}").get("t").getAsString());
+        assertEquals(
+                "\n\u2028\"",
+                JavascriptLiteral.object("{t: '\\n\\u2028\\\"'}").get("t").getAsString());
     }
 
     @ParameterizedTest
@@ -44,7 +48,8 @@ class JavascriptLiteralTest {
 
     @Test
     void dropsKeysThatReachBehindAnObject() {
-        assertFalse(JavascriptLiteral.object("{__proto__: {polluted: true}, a: 1}").has("__proto__"));
+        assertFalse(
+                JavascriptLiteral.object("{__proto__: {polluted: true}, a: 1}").has("__proto__"));
     }
 
     @Test

@@ -20,8 +20,11 @@ class MarkupTest {
         JsonObject data = new JsonObject();
         data.addProperty("t", hostile);
         String script = Markup.script(data);
-        assertFalse(script.contains("<") || script.contains(">") || script.contains("\u2028") || script.contains("\u2029"));
-        assertEquals(hostile, JsonParser.parseString(script).getAsJsonObject().get("t").getAsString());
+        assertFalse(
+                script.contains("<") || script.contains(">") || script.contains("\u2028") || script.contains("\u2029"));
+        assertEquals(
+                hostile,
+                JsonParser.parseString(script).getAsJsonObject().get("t").getAsString());
     }
 
     @Test

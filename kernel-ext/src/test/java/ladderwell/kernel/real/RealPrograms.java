@@ -107,8 +107,7 @@ public final class RealPrograms {
      * @param command what starts it; {@code {connection_file}} stands for the connection file
      * @return the environment to give to clients
      */
-    public static Map<String, String> installKernel(Path folder, String name, List<String> command)
-            throws IOException {
+    public static Map<String, String> installKernel(Path folder, String name, List<String> command) throws IOException {
         Path kernel = Files.createDirectories(folder.resolve("kernels").resolve(name));
         StringBuilder argv = new StringBuilder();
         for (String word : command) {

@@ -48,11 +48,12 @@ class BrowserPictureTest {
         String still = bare.render(animation).data().get("text/html");
         Files.writeString(
                 pages.resolve("missing.html"),
-                "<!doctype html><meta charset=\"utf-8\">" + still + "<script id=\"library\" type=\"text/plain\">" + library
-                        + "</script>");
+                "<!doctype html><meta charset=\"utf-8\">" + still + "<script id=\"library\" type=\"text/plain\">"
+                        + library + "</script>");
         Files.writeString(
                 pages.resolve("live.html"),
-                "<!doctype html><meta charset=\"utf-8\"><script id=\"library\" type=\"text/plain\">" + library + "</script>"
+                "<!doctype html><meta charset=\"utf-8\"><script id=\"library\" type=\"text/plain\">" + library
+                        + "</script>"
                         + "<script>window.comms=[];window.Jupyter={notebook:{kernel:{comm_manager:{new_comm:function(t){"
                         + "window.comms.push(t);return {on_msg:function(f){setTimeout(function(){f({content:{data:{script:"
                         + "document.getElementById('library').textContent}}})},100)}}}}}}};</script>"

@@ -85,27 +85,37 @@ class CardRenderingTest {
     @Test
     void tenDigitsKeepTheirZerosAndTheirPowerOfTen() {
         assertEquals("1.200000000(1) MHz g", new SupportedDigits(1.2, Bound.guaranteed(1e-15), "MHz").plain());
-        assertEquals("5.759091688(1)×10⁻⁵ K s", new SupportedDigits(5.7590916879e-5, Bound.statistical(1e-18), "K").plain());
+        assertEquals(
+                "5.759091688(1)×10⁻⁵ K s", new SupportedDigits(5.7590916879e-5, Bound.statistical(1e-18), "K").plain());
         assertEquals("−4.000000000(1)×10⁸ g", new SupportedDigits(-4e8, Bound.guaranteed(1e-7), "").plain());
     }
 
     @Test
     void unknownErrorsSaySo() {
         assertEquals(
-                "1.5(?) s", new SupportedDigits(1.5, Bound.estimated(Double.POSITIVE_INFINITY), "s").plain().replace(" e", ""));
+                "1.5(?) s",
+                new SupportedDigits(1.5, Bound.estimated(Double.POSITIVE_INFINITY), "s")
+                        .plain()
+                        .replace(" e", ""));
     }
 
     @Test
     void certaintyIsALetterWithItsWord() throws Exception {
-        Document html = WellFormed.html(
-                renderings.render(Scenarios.TRAP).data().get("text/html"));
+        Document html = WellFormed.html(renderings.render(Scenarios.TRAP).data().get("text/html"));
         NodeList spans = html.getElementsByTagName("span");
         boolean explained = false;
         for (int i = 0; i < spans.getLength(); i++) {
             var attributes = spans.item(i).getAttributes();
-            if ("lw-sure".equals(attributes.getNamedItem("class") == null ? "" : attributes.getNamedItem("class").getNodeValue())) {
+            if ("lw-sure"
+                    .equals(
+                            attributes.getNamedItem("class") == null
+                                    ? ""
+                                    : attributes.getNamedItem("class").getNodeValue())) {
                 assertTrue(spans.item(i).getTextContent().matches("[ges]"));
-                assertTrue(attributes.getNamedItem("title").getNodeValue().startsWith(spans.item(i).getTextContent()));
+                assertTrue(attributes
+                        .getNamedItem("title")
+                        .getNodeValue()
+                        .startsWith(spans.item(i).getTextContent()));
                 explained = true;
             }
         }

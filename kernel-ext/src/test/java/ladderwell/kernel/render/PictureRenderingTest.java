@@ -49,11 +49,13 @@ class PictureRenderingTest {
     private static JsonObject drawing(MimeBundle bundle) {
         String html = html(bundle);
         int from = html.lastIndexOf("})(window, ") + "})(window, ".length();
-        return JsonParser.parseString(html.substring(from, html.lastIndexOf(");</script>"))).getAsJsonObject();
+        return JsonParser.parseString(html.substring(from, html.lastIndexOf(");</script>")))
+                .getAsJsonObject();
     }
 
     private static Element still(MimeBundle bundle) throws Exception {
-        return (Element) WellFormed.html(html(bundle)).getElementsByTagName("img").item(0);
+        return (Element)
+                WellFormed.html(html(bundle)).getElementsByTagName("img").item(0);
     }
 
     @Test
@@ -102,7 +104,9 @@ class PictureRenderingTest {
     void theStillIsAnImageWithWordsThatAnyPageShows() throws Exception {
         MimeBundle bundle = new Renderings().render(Scenarios.animation("run", Scenarios.ion()));
         Element still = still(bundle);
-        assertTrue(still.getAttribute("alt").startsWith("Density of run moving in the potential"), still.getAttribute("alt"));
+        assertTrue(
+                still.getAttribute("alt").startsWith("Density of run moving in the potential"),
+                still.getAttribute("alt"));
         String source = still.getAttribute("src");
         String prefix = "data:image/svg+xml;base64,";
         assertTrue(source.startsWith(prefix));
@@ -141,7 +145,11 @@ class PictureRenderingTest {
         MimeBundle bundle = new Renderings(PageLibrary.inPage()).render(new Animation("run", run, run.density(200)));
         assertTrue(html(bundle).contains("every 4th frame is shown"));
         byte[] counts = Base64.getDecoder()
-                .decode(drawing(bundle).getAsJsonObject("data").getAsJsonObject("frames").get("counts").getAsString());
+                .decode(drawing(bundle)
+                        .getAsJsonObject("data")
+                        .getAsJsonObject("frames")
+                        .get("counts")
+                        .getAsString());
         assertEquals(251 * 200 * 2, counts.length);
     }
 
@@ -216,7 +224,9 @@ class PictureRenderingTest {
         Document svg = WellFormed.xml(bundle.data().get("image/svg+xml"));
         assertEquals(4, classCount(svg, "line"), "one curve a level");
         assertEquals(4, classCount(svg, "dash"), "one line a level");
-        assertEquals(4, drawing(bundle).getAsJsonObject("data").getAsJsonArray("labels").size());
+        assertEquals(
+                4,
+                drawing(bundle).getAsJsonObject("data").getAsJsonArray("labels").size());
     }
 
     private static int classCount(Document svg, String name) {
@@ -230,8 +240,8 @@ class PictureRenderingTest {
 
     @Test
     void ofManyLevelsThePictureShowsTheLowest() throws Exception {
-        LevelTable many = Scenarios.levels(
-                "trap", Scenarios.TRAP, LongStream.range(0, 40).toArray());
+        LevelTable many =
+                Scenarios.levels("trap", Scenarios.TRAP, LongStream.range(0, 40).toArray());
         MimeBundle bundle = new Renderings().render(many);
         assertEquals(12, classCount(WellFormed.xml(bundle.data().get("image/svg+xml")), "line"));
         assertTrue(bundle.plainText().contains("the lowest 12 of 40"), bundle.plainText());
@@ -245,14 +255,20 @@ class PictureRenderingTest {
 
     @Test
     void figuresOfJavaCellsAreShownInThePage() throws Exception {
-        Table table = Table.create(
-                "t", DoubleColumn.create("it's </script>", 1, 2, 3), DoubleColumn.create("y", 1, 4, 9));
+        Table table =
+                Table.create("t", DoubleColumn.create("it's </script>", 1, 2, 3), DoubleColumn.create("y", 1, 4, 9));
         Figure figure = LinePlot.create("squares' </script> \u2028", table, "it's </script>", "y");
         MimeBundle bundle = new Renderings(PageLibrary.inPage()).render(figure);
         WellFormed.html(html(bundle));
         JsonObject drawing = drawing(bundle);
         assertEquals(1, drawing.getAsJsonArray("traces").size());
-        assertEquals("scatter", drawing.getAsJsonArray("traces").get(0).getAsJsonObject().get("type").getAsString());
+        assertEquals(
+                "scatter",
+                drawing.getAsJsonArray("traces")
+                        .get(0)
+                        .getAsJsonObject()
+                        .get("type")
+                        .getAsString());
         assertTrue(bundle.plainText().startsWith("Figure"), bundle.plainText());
         assertFalse(html(bundle).contains("cdn"));
     }

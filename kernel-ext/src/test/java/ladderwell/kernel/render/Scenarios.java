@@ -27,8 +27,10 @@ import tech.tablesaw.api.Table;
 /** Invented motions to be shown: an ion in a trap, an electron in a well, and one in natural units. */
 final class Scenarios {
     static final Harmonic TRAP = Oscillator.harmonic().mass(40, ATOMIC_MASS).frequency(1.2, MEGAHERTZ);
-    static final FiniteWell WELL =
-            Oscillator.finiteWell().mass(0.067, ELECTRON_MASS).width(24, NANOMETRE).depth(0.3, ELECTRONVOLT);
+    static final FiniteWell WELL = Oscillator.finiteWell()
+            .mass(0.067, ELECTRON_MASS)
+            .width(24, NANOMETRE)
+            .depth(0.3, ELECTRONVOLT);
     static final Box BOX = Oscillator.box().natural();
 
     private Scenarios() {}
@@ -42,7 +44,11 @@ final class Scenarios {
     }
 
     static Run natural() {
-        return Oscillator.harmonic().natural().superposition(1, 2, 4).evolve(2, PERIOD).run();
+        return Oscillator.harmonic()
+                .natural()
+                .superposition(1, 2, 4)
+                .evolve(2, PERIOD)
+                .run();
     }
 
     static Animation animation(String name, Run run) {

@@ -96,19 +96,18 @@ class TableRenderingTest {
     void textStandsInColumns() {
         Table table = Table.create(
                 "bag", StringColumn.create("what", "ball", "a long stick"), IntColumn.create("count", 3, 1000));
-        assertEquals(
-                """
+        assertEquals("""
                 bag
                 what          count
                 ball              3
-                a long stick   1000""",
-                renderings.render(table).plainText());
+                a long stick   1000""", renderings.render(table).plainText());
     }
 
     @Test
     void hostileCellsAndHeadsStayText() throws Exception {
         String hostile = "</td></table><script>alert('x')</script>&amp;\u0000\u2028";
-        Table table = Table.create(hostile, StringColumn.create(hostile, hostile, ""), BooleanColumn.create("b", true, false));
+        Table table = Table.create(
+                hostile, StringColumn.create(hostile, hostile, ""), BooleanColumn.create("b", true, false));
         Document html = WellFormed.html(renderings.render(table).data().get("text/html"));
         assertEquals(0, html.getElementsByTagName("script").getLength());
         assertEquals(1, html.getElementsByTagName("table").getLength());
@@ -131,7 +130,10 @@ class TableRenderingTest {
 
     @Test
     void emptyTablesHaveTheirHeads() throws Exception {
-        assertTrue(renderings.render(Table.create("", DoubleColumn.create("x"))).plainText().contains("x"));
+        assertTrue(renderings
+                .render(Table.create("", DoubleColumn.create("x")))
+                .plainText()
+                .contains("x"));
         WellFormed.html(renderings.render(Table.create()).data().get("text/html"));
     }
 
@@ -148,6 +150,12 @@ class TableRenderingTest {
     void anErrorInTheFirstColumnBelongsToNothing() {
         Table table = Table.create("", DoubleColumn.create("± x", 0.25));
         assertEquals("0.25", RoundedColumn.cells(table, 0, 1)[0]);
-        assertEquals("0.25", renderings.render(new TableRead(Scenarios.ion(), table)).plainText().split("\n")[1].strip());
+        assertEquals(
+                "0.25",
+                renderings
+                        .render(new TableRead(Scenarios.ion(), table))
+                        .plainText()
+                        .split("\n")[1]
+                        .strip());
     }
 }

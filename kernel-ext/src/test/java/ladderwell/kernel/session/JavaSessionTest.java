@@ -31,7 +31,9 @@ public class JavaSessionTest {
 
     private static Object value(String text) {
         JavaEnd end = session.run(text, 3, 1);
-        return assertInstanceOf(JavaEnd.Done.class, end, () -> end.toString()).value().orElseThrow();
+        return assertInstanceOf(JavaEnd.Done.class, end, () -> end.toString())
+                .value()
+                .orElseThrow();
     }
 
     private static JavaEnd.Failed failure(String text) {
@@ -48,13 +50,20 @@ public class JavaSessionTest {
         assertEquals(List.of(1, 2), value("int a = 1;\nList.of(a, 2)"));
         assertEquals(5, value("int assigned = 1; assigned = 5"));
         assertEquals("a;", value("String.valueOf(\"a;\") /* no; end */"));
-        assertEquals(6, value("\"\"\"\n  a;\n  \"b\n  \"\"\".length() // ;") );
+        assertEquals(6, value("\"\"\"\n  a;\n  \"b\n  \"\"\".length() // ;"));
         assertEquals(Math.PI, value("PI // the ratio; of a circle"));
     }
 
     @Test
     void statementsAndDeclarationsGiveNoValue() {
-        for (String text : List.of("1+1;", "int b = 3", "int c = 3;", "for (int i = 0; i < 2; i++) { }", "", "// only a remark", "System.out.print(\"\")")) {
+        for (String text : List.of(
+                "1+1;",
+                "int b = 3",
+                "int c = 3;",
+                "for (int i = 0; i < 2; i++) { }",
+                "",
+                "// only a remark",
+                "System.out.print(\"\")")) {
             JavaEnd.Done done = assertInstanceOf(JavaEnd.Done.class, session.run(text, 1, 1), text);
             assertEquals(Optional.empty(), done.value(), text);
             assertFalse(done.isNull(), text);
@@ -63,9 +72,11 @@ public class JavaSessionTest {
 
     @Test
     void anExpressionThatIsNullSaysSo() {
-        assertTrue(assertInstanceOf(JavaEnd.Done.class, session.run("(String) null", 1, 1)).isNull());
+        assertTrue(assertInstanceOf(JavaEnd.Done.class, session.run("(String) null", 1, 1))
+                .isNull());
         value("String nothing = null; 1");
-        assertTrue(assertInstanceOf(JavaEnd.Done.class, session.run("nothing", 1, 1)).isNull());
+        assertTrue(assertInstanceOf(JavaEnd.Done.class, session.run("nothing", 1, 1))
+                .isNull());
     }
 
     @Test
@@ -99,8 +110,13 @@ public class JavaSessionTest {
 
     @Test
     void aTracebackHoldsCauses() {
-        String lines = lines(failure("try { List.of().get(0); }\ncatch (RuntimeException e) {\n  throw new IllegalStateException(\"outer\", e); }"));
-        assertTrue(lines.startsWith("java.lang.IllegalStateException: outer\n    at cell [3], line 3\nCaused by: java.lang."), lines);
+        String lines = lines(
+                failure(
+                        "try { List.of().get(0); }\ncatch (RuntimeException e) {\n  throw new IllegalStateException(\"outer\", e); }"));
+        assertTrue(
+                lines.startsWith(
+                        "java.lang.IllegalStateException: outer\n    at cell [3], line 3\nCaused by: java.lang."),
+                lines);
     }
 
     @Test
@@ -157,14 +173,17 @@ public class JavaSessionTest {
         JavaEnd end = running.get(20, TimeUnit.SECONDS);
         // Before Java 20 a loop that catches everything may catch every stop; then it is left behind.
         boolean mayStay = text.contains("Throwable") && Runtime.version().feature() < 20;
-        assertTrue(end.equals(new JavaEnd.Stopped(false)) || mayStay && end.equals(new JavaEnd.Stopped(true)), end.toString());
+        assertTrue(
+                end.equals(new JavaEnd.Stopped(false)) || mayStay && end.equals(new JavaEnd.Stopped(true)),
+                end.toString());
         session.ready();
         assertEquals(2, value("1+1"));
     }
 
     @Test
     void codeThatHeedsNothingIsLeftBehind() throws Exception {
-        CompletableFuture<JavaEnd> running = CompletableFuture.supplyAsync(() -> session.run("ladderwell.kernel.session.JavaSessionTest.deaf()", 1, 1));
+        CompletableFuture<JavaEnd> running = CompletableFuture.supplyAsync(
+                () -> session.run("ladderwell.kernel.session.JavaSessionTest.deaf()", 1, 1));
         Thread.sleep(700);
         session.stop();
         assertInstanceOf(JavaEnd.Stopped.class, running.get(20, TimeUnit.SECONDS));
@@ -200,7 +219,9 @@ public class JavaSessionTest {
     @Test
     void variablesOfTheSessionCanBeRead() {
         value("double nbar = 9.5; nbar");
-        assertEquals(new Variable("nbar", double.class, Optional.of(9.5)), session.variable("nbar").orElseThrow());
+        assertEquals(
+                new Variable("nbar", double.class, Optional.of(9.5)),
+                session.variable("nbar").orElseThrow());
         session.run("var nbar = List.of(nbar);", 1, 1);
         session.run("String nbar = \"text\";", 1, 1);
         assertEquals(Optional.of("text"), session.variable("nbar").orElseThrow().value());
@@ -208,16 +229,29 @@ public class JavaSessionTest {
 
     @Test
     void deepRecursionAndBrokenClassesAreErrorsLikeOthers() {
-        assertEquals("java.lang.StackOverflowError", failure("int deep(int n) { return deep(n + 1) + 1; }\ndeep(0)").name());
-        assertEquals("java.lang.ExceptionInInitializerError", failure("class Bad { static int v = 1 / Integer.parseInt(\"0\"); }\nBad.v").name());
-        assertEquals("java.lang.OutOfMemoryError", failure("long[][] all = new long[100000][]; for (int i = 0; i < all.length; i++) all[i] = new long[1 << 27];").name());
+        assertEquals(
+                "java.lang.StackOverflowError",
+                failure("int deep(int n) { return deep(n + 1) + 1; }\ndeep(0)").name());
+        assertEquals(
+                "java.lang.ExceptionInInitializerError",
+                failure("class Bad { static int v = 1 / Integer.parseInt(\"0\"); }\nBad.v")
+                        .name());
+        assertEquals(
+                "java.lang.OutOfMemoryError",
+                failure(
+                                "long[][] all = new long[100000][]; for (int i = 0; i < all.length; i++) all[i] = new long[1 << 27];")
+                        .name());
         assertEquals(2, value("1+1"));
     }
 
     @Test
     void exitDoesNotEndTheProcess() {
-        assertTrue(failure("long big = 1L << 40; double half = 0.5; System.exit(7);").message().startsWith("System.exit(7) "));
-        assertTrue(failure("java.util.stream.IntStream.of(8).forEach(System::exit)").message().startsWith("System.exit(8) "));
+        assertTrue(failure("long big = 1L << 40; double half = 0.5; System.exit(7);")
+                .message()
+                .startsWith("System.exit(7) "));
+        assertTrue(failure("java.util.stream.IntStream.of(8).forEach(System::exit)")
+                .message()
+                .startsWith("System.exit(8) "));
     }
 
     @Test
@@ -243,7 +277,8 @@ public class JavaSessionTest {
 
     @Test
     void documentationGivesSignatures() {
-        assertEquals(List.of("double Math.hypot(double x, double y)"), session.documentation("Math.hypot(1, 2)", 7, false));
+        assertEquals(
+                List.of("double Math.hypot(double x, double y)"), session.documentation("Math.hypot(1, 2)", 7, false));
         assertEquals(List.of("double Math.hypot(double x, double y)"), session.documentation("Math.hypot", 10, false));
         assertTrue(session.documentation("int i = 1;\nList", 14, false).get(0).contains("java.util.List"));
         assertEquals(List.of(), session.documentation("noSuchThing", 3, true));

@@ -20,7 +20,9 @@ import org.openjdk.jmh.annotations.Warmup;
 @OutputTimeUnit(TimeUnit.MICROSECONDS)
 @Warmup(iterations = 5, time = 1)
 @Measurement(iterations = 5, time = 1)
-@Fork(value = 1, jvmArgsAppend = {"--add-modules", "jdk.incubator.vector"})
+@Fork(
+        value = 1,
+        jvmArgsAppend = {"--add-modules", "jdk.incubator.vector"})
 public class DensityFramesBenchmark {
     private final RandomPacket packet = new RandomPacket();
     private final MatrixProduct functions = MatrixProduct.by(packet.functions);

@@ -31,8 +31,7 @@ final class HarmonicLadder {
 
     /** Means of x and p at all times. */
     void run() {
-        LadderSums sums =
-                LadderSums.of(ExactPhases.of(energy, zero, coefficients, zero, times), first, Workers.CALLER);
+        LadderSums sums = LadderSums.of(ExactPhases.of(energy, zero, coefficients, zero, times), first, Workers.CALLER);
         double amplitude = Math.sqrt(mean);
         error = 0;
         for (int j = 0; j < TIMES; j++) {

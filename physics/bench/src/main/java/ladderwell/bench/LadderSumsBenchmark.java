@@ -19,7 +19,9 @@ import org.openjdk.jmh.annotations.Warmup;
 @OutputTimeUnit(TimeUnit.MICROSECONDS)
 @Warmup(iterations = 5, time = 1)
 @Measurement(iterations = 5, time = 1)
-@Fork(value = 1, jvmArgsAppend = {"--add-modules", "jdk.incubator.vector"})
+@Fork(
+        value = 1,
+        jvmArgsAppend = {"--add-modules", "jdk.incubator.vector"})
 public class LadderSumsBenchmark {
     /** Mean quanta. */
     @Param({"1e2", "1e5", "1e8"})

@@ -51,7 +51,8 @@ final class OscillatorFunctions {
         Arrays.setAll(x, i -> new BigDecimal(points[111 * i]));
         Arrays.fill(before, BigDecimal.ZERO);
         Arrays.fill(now, BigDecimal.ONE);
-        // With φ_n = f_n exp(-x²/2)/π^¼ and g_n = f_n √(n!) 2^{-n/2}: no roots but one at the end: g_{n+1} = x g_n - n/2 g_{n-1}.
+        // With φ_n = f_n exp(-x²/2)/π^¼ and g_n = f_n √(n!) 2^{-n/2}: no roots but one at the end: g_{n+1} = x g_n -
+        // n/2 g_{n-1}.
         for (int n = 0; n < INDEX; n++) {
             BigDecimal half = BigDecimal.valueOf(n).divide(BigDecimal.valueOf(2));
             for (int i = 0; i < 10; i++) {

@@ -50,13 +50,11 @@ public final class SideBySide {
         }
         System.out.println();
         sides.notes.forEach(System.out::println);
-        System.out.println(
-                """
+        System.out.println("""
 
                 Ratios of times, each the shortest of a sample: median over %d rounds taken in turn, range in brackets. NumPy is the fastest of its variants whose error is
                 no more than 1000 times ours or 1e-10; a tuned variant (*) goes beyond ordinary craft and is no part of the goal.
-                Errors: ours, then NumPy's, as the task's script defines them."""
-                        .formatted(sides.rounds));
+                Errors: ours, then NumPy's, as the task's script defines them.""".formatted(sides.rounds));
         System.exit(all ? 0 : 1);
     }
 
@@ -108,7 +106,17 @@ public final class SideBySide {
                 tuned == plain ? "" : shown(ratios(ours, tuned)),
                 String.format(Locale.ROOT, "%.1e %.1e", error, plain.error()),
                 String.format(Locale.ROOT, "%.3g %s", task.goal(), met ? "met" : "MISSED"));
+        StringBuilder times = new StringBuilder("shortest runs in ms, " + task.name() + ", threads " + task.threads());
+        times.append(String.format(Locale.ROOT, ": ours %.3g", median(ours)));
+        others.forEach((name, of) -> times.append(String.format(Locale.ROOT, "; %s %.3g", name, median(of))));
+        note(times.toString());
         return met;
+    }
+
+    private static double median(double[] values) {
+        double[] sorted = values.clone();
+        Arrays.sort(sorted);
+        return sorted[sorted.length / 2];
     }
 
     private void note(String text) {
@@ -133,8 +141,13 @@ public final class SideBySide {
     }
 
     private static double median(Times times) {
-        double[] sorted = times.milliseconds().stream().mapToDouble(t -> t).sorted().toArray();
+<<<<<<< HEAD
+        return median(times.milliseconds().stream().mapToDouble(t -> t).toArray());
+=======
+        double[] sorted =
+                times.milliseconds().stream().mapToDouble(t -> t).sorted().toArray();
         return sorted[sorted.length / 2];
+>>>>>>> host
     }
 
     /** The ratios of each round, sorted. */
@@ -147,11 +160,7 @@ public final class SideBySide {
 
     private static String shown(double[] sorted) {
         return String.format(
-                Locale.ROOT,
-                "%.3g (%.3g to %.3g)",
-                sorted[sorted.length / 2],
-                sorted[0],
-                sorted[sorted.length - 1]);
+                Locale.ROOT, "%.3g (%.3g to %.3g)", sorted[sorted.length / 2], sorted[0], sorted[sorted.length - 1]);
     }
 
     private static void warm(Runnable run) {
@@ -161,11 +170,11 @@ public final class SideBySide {
         }
     }
 
-    /** Shortest time of one run in a sample of at least 80 ms or three runs, as in partner.py: what the machine can do undisturbed. */
+    /** Shortest time of one run in a sample of at least 300 ms or three runs, as in partner.py: what the machine can do undisturbed. */
     private static double milliseconds(Runnable run) {
         double shortest = Double.POSITIVE_INFINITY;
         long start = System.nanoTime();
-        for (int i = 0; i < 3 || System.nanoTime() - start < 80_000_000L; i++) {
+        for (int i = 0; i < 3 || System.nanoTime() - start < 300_000_000L; i++) {
             long before = System.nanoTime();
             run.run();
             shortest = Math.min(shortest, (System.nanoTime() - before) * 1e-6);

@@ -82,7 +82,8 @@ public final class IJava {
             } else {
                 value = Optional.ofNullable(evalRaw(cell));
             }
-            return value.map(v -> v instanceof DisplayData data ? data : getRenderer().render(v))
+            return value.map(v ->
+                            v instanceof DisplayData data ? data : getRenderer().render(v))
                     .orElse(null);
         }
 
