@@ -247,34 +247,6 @@ public final class DensityFrames {
         }
     }
 
-<<<<<<< HEAD
-=======
-    private static void squares(double[] sums, int at, int stride, double[] frame, int count) {
-        for (int i = 0; i < count; i++) {
-            double u = sums[at + i];
-            double v = sums[at + stride + i];
-            frame[i] = Math.fma(u, u, v * v);
-        }
-    }
-
-    /** |even + odd|² to the upper half of the frame, |even - odd|² to mirrored. */
-    private static void bothSides(
-            double[] even, double[] odd, int at, int stride, double[] frame, int middle, double[] mirrored, int half) {
-        for (int i = 0; i < half; i++) {
-            double evenRe = even[at + i];
-            double oddRe = odd[at + i];
-            double evenIm = even[at + stride + i];
-            double oddIm = odd[at + stride + i];
-            double u = evenRe + oddRe;
-            double v = evenIm + oddIm;
-            double p = evenRe - oddRe;
-            double q = evenIm - oddIm;
-            frame[middle + i] = Math.fma(u, u, v * v);
-            mirrored[i] = Math.fma(p, p, q * q);
-        }
-    }
-
->>>>>>> host
     /**
      * Guaranteed bound on the error of any density value, given the errors of what went in.
      *

@@ -191,12 +191,8 @@ public final class ExactPhases {
         Table[] tables = kept();
         for (int level = 0; level < levels(); level += LEVEL_BLOCK) {
             int to = Math.min(levels(), level + LEVEL_BLOCK);
-<<<<<<< HEAD
             Block block =
                     tables.length > 0 ? new Block(level, to, tables[level / LEVEL_BLOCK]) : block(level, to, rows);
-=======
-            Block block = kept.length > 0 ? new Block(level, to, kept[level / LEVEL_BLOCK]) : block(level, to, rows);
->>>>>>> host
             for (int j = 0; j < rows; j++) {
                 Interruption.check();
                 block.write(fromTime + j, re[j], im[j], level);
@@ -213,10 +209,6 @@ public final class ExactPhases {
         if (!grid.uniform()) {
             return one;
         }
-<<<<<<< HEAD
-=======
-        double product = one + PhaseFactors.ERROR + PRODUCT_ERROR;
->>>>>>> host
         // First order: one rounding per part and the remainder 2^-57. Third order: series, remainder and a complex
         // product.
         double shift = grid.firstOrder() ? 1.1 * U : 2 * U + PRODUCT_ERROR;

@@ -26,25 +26,10 @@ record Things(Names names) implements Surroundings {
     private static Known known(Named named) {
         Object value = named.value();
         if (value instanceof Oscillator oscillator) {
-<<<<<<< HEAD
             return new Known(named.name(), "oscillator", oscillator.kind(), natural(oscillator));
         }
         if (value instanceof State state) {
             return new Known(named.name(), "state", state.kind(), natural(state.oscillator()));
-=======
-            return new Known(
-                    named.name(),
-                    "oscillator",
-                    oscillator.kind(),
-                    oscillator.scale().isNatural());
-        }
-        if (value instanceof State state) {
-            return new Known(
-                    named.name(),
-                    "state",
-                    state.kind(),
-                    state.oscillator().scale().isNatural());
->>>>>>> host
         }
         if (value instanceof Run run) {
             return new Known(named.name(), "evolve", "", natural(run.state().oscillator()));

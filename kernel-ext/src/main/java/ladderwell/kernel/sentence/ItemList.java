@@ -132,11 +132,7 @@ final class ItemList {
             if (n < 6 && named(Outline.text(pieces.subList(0, n))).isPresent()) {
                 return new MisreadSentence(
                         "a comma is missing before "
-<<<<<<< HEAD
                                 + Words.quoted(pieces.get(n).typed()),
-=======
-                                + Words.quoted(pieces.get(n).text()),
->>>>>>> host
                         pieces.get(n).place());
             }
         }

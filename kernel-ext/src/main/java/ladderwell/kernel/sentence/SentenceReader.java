@@ -59,130 +59,6 @@ final class SentenceReader {
                 items);
     }
 
-<<<<<<< HEAD
-=======
-    private void refuseLooseMarks() throws MisreadSentence {
-        for (Piece piece : pieces) {
-            Place mark = new Place(piece.place().start(), piece.place().start() + 1);
-            if (piece.is(Sort.UNCLOSED)) {
-                boolean brace = piece.text().startsWith("{");
-                throw new MisreadSentence(
-                        brace
-                                ? "this brace is never closed; a Java expression ends with '}'"
-                                : "this quote is never closed; a quotation ends with '\"' on the same line",
-                        mark);
-            }
-            if (piece.is(Sort.STRAY)) {
-                throw new MisreadSentence("this closing brace closes nothing; an expression starts with '{'", mark);
-            }
-        }
-    }
-
-    private Noun noun() throws MisreadSentence {
-        List<String> nouns = grammar.nouns().stream().map(Noun::word).toList();
-        if (outline.nounPiece().isEmpty()) {
-            throw new MisreadSentence(
-                    "a sentence starts with a noun: " + Words.either(nouns), new Place(place.start(), place.start()));
-        }
-        Piece piece = outline.nounPiece().get();
-        if (outline.noun().isEmpty()) {
-            Optional<String> near = Words.nearest(piece.text(), nouns);
-            throw new MisreadSentence(
-                    Words.quoted(piece.text()) + " is no noun; a sentence starts with " + Words.either(nouns)
-                            + Words.didYouMean(near),
-                    piece.place());
-        }
-        return outline.noun().get();
-    }
-
-    private Piece name(Noun noun) throws MisreadSentence {
-        Place nounPlace = outline.nounPiece().orElseThrow().place();
-        String wanted = noun.declares() ? "a name" : "the name of " + Grammar.thing(noun.subject());
-        List<Piece> subject = outline.subject();
-        if (subject.isEmpty()) {
-            throw new MisreadSentence(
-                    wanted + " is missing after '" + noun.word() + "', as in '" + noun.example() + "'",
-                    nounPlace.behind());
-        }
-        Piece name = subject.get(0);
-        if (!name.is(Sort.WORD)) {
-            throw new MisreadSentence(
-                    "expected " + wanted + " after '" + noun.word() + "', not " + Words.quoted(name.text()),
-                    name.place());
-        }
-        checkColon(noun, name);
-        if (noun.declares()) {
-            checkIdentifier(name);
-        }
-        return name;
-    }
-
-    private void checkColon(Noun noun, Piece name) throws MisreadSentence {
-        List<Piece> subject = outline.subject();
-        String after = Words.quoted(name.text());
-        if (noun.head() == Head.NONE) {
-            if (outline.colon().isPresent()) {
-                throw new MisreadSentence(
-                        noun.word() + " takes no colon; the form is '" + noun.pattern() + "'",
-                        outline.colon().get().place());
-            }
-        } else if (outline.colon().isEmpty()) {
-            throw new MisreadSentence(
-                    "a colon is missing after " + after + "; the form is '" + noun.pattern() + "'",
-                    subject.size() > 1 ? subject.get(1).place() : name.place().behind());
-        } else if (subject.size() > 1) {
-            throw new MisreadSentence(
-                    "a name is one word; " + Words.quoted(subject.get(1).text()) + " is too much before the colon",
-                    subject.get(1).place());
-        }
-    }
-
-    private static void checkIdentifier(Piece name) throws MisreadSentence {
-        String text = name.text();
-        if (text.length() > 200 || !SourceVersion.isIdentifier(text)) {
-            throw new MisreadSentence(
-                    Words.quoted(text)
-                            + " cannot be a name; a name is made of letters, digits and _, starts with a letter,"
-                            + (text.length() > 200 ? " and is no longer than 200 characters" : " and has no blanks"),
-                    name.place());
-        }
-        if (SourceVersion.isKeyword(text)) {
-            throw new MisreadSentence(
-                    Words.quoted(text) + " cannot be a name, because it is a word of Java; take another", name.place());
-        }
-    }
-
-    private void checkHead(Noun noun) throws MisreadSentence {
-        if (noun.head() == Head.NONE || noun.head() == Head.ITEMS) {
-            return;
-        }
-        Place behindColon = outline.colon().orElseThrow().place().behind();
-        if (noun.head() == Head.REFERENCE) {
-            if (outline.head().isEmpty()) {
-                throw new MisreadSentence(
-                        "the name of " + Grammar.thing(noun.headNoun()) + " is missing after the colon", behindColon);
-            }
-            return;
-        }
-        if (outline.kind().isPresent()) {
-            return;
-        }
-        List<String> kinds = noun.kinds().stream().map(NounKind::word).toList();
-        String expected = "; kinds of " + noun.word() + " are " + Words.all(kinds);
-        if (outline.head().isEmpty()) {
-            throw new MisreadSentence("a kind is missing after the colon" + expected, behindColon);
-        }
-        List<Piece> head = outline.head();
-        List<Piece> two = head.subList(0, Math.min(2, head.size()));
-        Optional<String> nearTwo = Words.nearest(Outline.text(two), kinds);
-        Optional<String> near = nearTwo.or(() -> Words.nearest(head.get(0).text(), kinds));
-        List<Piece> wrong = nearTwo.isPresent() ? two : head.subList(0, 1);
-        throw new MisreadSentence(
-                Words.quoted(Outline.text(wrong)) + " is no kind of " + noun.word() + expected + Words.didYouMean(near),
-                Outline.placeOf(wrong).orElse(behindColon));
-    }
-
->>>>>>> host
     // ------------------------------------------------------------------ keys
 
     private List<Key> keys(Noun noun) {
@@ -291,65 +167,13 @@ final class SentenceReader {
         }
     }
 
-<<<<<<< HEAD
     private Known speakOf(Known known) {
-=======
-    private Known refer(String noun, Piece piece, String taker) throws MisreadSentence {
-        String name = piece.text();
-        String thing = Grammar.thing(noun);
-        List<String> fitting = surroundings.all().stream()
-                .filter(known -> known.noun().equals(noun))
-                .map(Known::name)
-                .toList();
-        Optional<Known> found = name.length() > 200 ? Optional.empty() : surroundings.find(name);
-        if (found.isEmpty()) {
-            String hint = fitting.isEmpty()
-                    ? "; none is declared yet, as in '"
-                            + grammar.noun(noun).map(Noun::example).orElse(noun) + "'"
-                    : Words.didYouMean(Words.nearest(name, fitting));
-            throw new MisreadSentence(
-                    "there is no " + thing.substring(thing.indexOf(' ') + 1) + " " + Words.quoted(name) + hint,
-                    piece.place());
-        }
-        Known known = found.get();
-        if (!known.noun().equals(noun)) {
-            String such = fitting.isEmpty() ? "" : ", such as " + fitting.get(fitting.size() - 1);
-            throw new MisreadSentence(
-                    Words.quoted(name) + " is " + Grammar.thing(known.noun()) + "; '" + taker + "' takes " + thing
-                            + such,
-                    piece.place());
-        }
->>>>>>> host
         if (known.natural()) {
             natural = Optional.of(Words.quoted(known.name()));
         }
         return known;
     }
 
-<<<<<<< HEAD
-=======
-    private void checkHome(Key key, Known known, Place at) throws MisreadSentence {
-        List<String> homes = outline.kind().map(NounKind::homes).orElse(List.of());
-        if (homes.isEmpty() || homes.contains(known.kind())) {
-            return;
-        }
-        List<String> phrases =
-                homes.stream().map(home -> phrase(key.noun(), home)).toList();
-        throw new MisreadSentence(
-                Words.article(outline.kind().orElseThrow().phrase()) + " lives in "
-                        + Words.either(phrases.stream().map(Words::article).toList()) + "; "
-                        + Words.quoted(known.name()) + " is " + Words.article(phrase(key.noun(), known.kind())),
-                at);
-    }
-
-    private String phrase(String noun, String kind) {
-        return grammar.noun(noun)
-                .flatMap(some -> some.kind(kind))
-                .map(NounKind::phrase)
-                .orElse(kind);
-    }
-
->>>>>>> host
     // ------------------------------------------------------------------ values
 
     private List<String> readValues(Noun noun) throws MisreadSentence {

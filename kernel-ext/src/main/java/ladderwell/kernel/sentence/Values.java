@@ -195,20 +195,10 @@ final class Values {
     }
 
     /** Digits are read as they stand; what was written with a power of ten, such as 1e17, is the nearest double. */
-<<<<<<< HEAD
     private long exact(Term term, double real) throws MisreadSentence {
         if (term.result().isPresent()
                 && (term.result().get() instanceof Long || term.result().get() instanceof Integer)) {
             return ((Number) term.result().get()).longValue();
-=======
-    private static long exact(Term term, double real) {
-        if (term.result().isPresent()) {
-            return term.result().get() instanceof Number number
-                            && !(number instanceof Double)
-                            && !(number instanceof Float)
-                    ? number.longValue()
-                    : (long) real;
->>>>>>> host
         }
         try {
             return Long.parseLong(term.text().replace('−', '-'));

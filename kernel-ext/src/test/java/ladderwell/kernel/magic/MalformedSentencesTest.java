@@ -155,19 +155,7 @@ class MalformedSentencesTest {
         Bench bench = prepared();
         for (String scrap : SCRAPS) {
             String much = scrap.repeat((1 << 20) / scrap.length());
-<<<<<<< HEAD
             for (String before : List.of("%", "%%declare\n", "%oscillator x: box, mass 1 u, width ", "%table run: ")) {
-=======
-            for (String before : List.of(
-                    "%",
-                    "%%declare\n",
-                    "%oscillator x: box, mass 1 u, width ",
-                    "%oscillator x: ",
-                    "%table run: ",
-                    "%levels ",
-                    "%state x: superposition in trap, levels 0 ",
-                    "%state x: coherent in trap, alpha ")) {
->>>>>>> host
                 String text = before + much;
                 try {
                     bench.run(text);

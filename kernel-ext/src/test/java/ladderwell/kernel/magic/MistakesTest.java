@@ -178,7 +178,6 @@ class MistakesTest {
         assertEquals(
                 " ".repeat(8 + 22) + "^".repeat("mean quanta".length()),
                 failure.lines().get(1));
-<<<<<<< HEAD
     }
 
     @Test
@@ -210,8 +209,6 @@ class MistakesTest {
         String message =
                 assertThrows(SentenceFailure.class, () -> bench.run(cell)).message();
         assertTrue(message.contains(part), message);
-=======
->>>>>>> host
     }
 
     @Test

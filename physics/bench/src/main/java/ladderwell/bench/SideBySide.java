@@ -141,13 +141,7 @@ public final class SideBySide {
     }
 
     private static double median(Times times) {
-<<<<<<< HEAD
         return median(times.milliseconds().stream().mapToDouble(t -> t).toArray());
-=======
-        double[] sorted =
-                times.milliseconds().stream().mapToDouble(t -> t).sorted().toArray();
-        return sorted[sorted.length / 2];
->>>>>>> host
     }
 
     /** The ratios of each round, sorted. */
