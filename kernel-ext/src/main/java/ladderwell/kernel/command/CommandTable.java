@@ -1,11 +1,13 @@
 package ladderwell.kernel.command;
 
 import java.io.PrintWriter;
+import java.util.Optional;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
+import picocli.CommandLine.UnmatchedArgumentException;
 
 /** The commands and what they have in common: version, help, and mistakes said in one sentence. */
 @Command(
@@ -27,6 +29,11 @@ final class CommandTable implements Runnable {
     private CommandTable() {}
 
     static int run(String... arguments) {
+        return line().execute(arguments);
+    }
+
+    /** The parser of the command line. */
+    static CommandLine line() {
         CommandLine line = new CommandLine(new CommandTable());
         line.setParameterExceptionHandler(CommandTable::mistyped);
         line.setExecutionExceptionHandler((error, command, parsed) -> {
@@ -36,13 +43,17 @@ final class CommandTable implements Runnable {
             }
             throw error;
         });
-        return line.execute(arguments);
+        return line;
     }
 
     private static int mistyped(ParameterException mistake, String[] arguments) {
         CommandLine command = mistake.getCommandLine();
         PrintWriter err = command.getErr();
-        err.println("ladderwell: " + mistake.getMessage() + " (see '"
+        Optional<String> nearest = mistake instanceof UnmatchedArgumentException unmatched
+                ? unmatched.getSuggestions().stream().findFirst()
+                : Optional.empty();
+        err.println("ladderwell: " + mistake.getMessage()
+                + nearest.map(word -> "; did you mean '" + word + "'?").orElse("") + " (see '"
                 + command.getCommandSpec().qualifiedName() + " --help')");
         return WRONG;
     }

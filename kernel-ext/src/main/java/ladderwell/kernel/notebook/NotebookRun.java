@@ -81,9 +81,9 @@ public final class NotebookRun {
         }
     }
 
-    /** The line of the cell that a traceback names first. */
+    /** The line of the cell that a traceback names first: Java says cell and line, a sentence the line alone. */
     private static OptionalInt line(List<String> traceback, int count) {
-        Pattern place = Pattern.compile("cell \\[" + count + "], line (\\d{1,9})");
+        Pattern place = Pattern.compile("(?:^|cell \\[" + count + "], )line (\\d{1,9})\\b");
         for (String line : traceback) {
             Matcher found = place.matcher(Ansi.plain(line));
             if (found.find()) {

@@ -226,6 +226,14 @@ class NotebookRunTest {
     }
 
     @Test
+    void theLineOfASentenceIsNamedToo() throws Exception {
+        CellEnd end = new CellEnd.Failed("Declaration", "no such unit", List.of("line 12: state x: …", "  ^"));
+        assertEquals(
+                new RunEnd.Failed(1, OptionalInt.of(12), "Declaration", "no such unit"),
+                run(notebook("a"), (code, output) -> end).run());
+    }
+
+    @Test
     void aCellThatMayFailDoesNotEndTheRun() throws Exception {
         Notebook notebook = notebook("(raises-exception) bad", "c");
         assertEquals(
