@@ -33,6 +33,10 @@ public record Box(Optional<Quantity> mass, Optional<Quantity> width) implements 
         }
         mass.ifPresent(m -> Checks.positive("mass", m, Kind.MASS));
         width.ifPresent(w -> Checks.positive("width", w, Kind.LENGTH));
+        if (mass.isPresent()) {
+            // refuses a mass and a width whose scale leaves the range of numbers
+            Scale.of(mass.orElseThrow().si(), width.orElseThrow().si());
+        }
     }
 
     /** A box on the way: its mass, or natural units. */

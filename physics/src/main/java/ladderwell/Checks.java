@@ -3,6 +3,7 @@ package ladderwell;
 import java.util.Arrays;
 import java.util.stream.Collectors;
 import ladderwell.quantity.Constants;
+import ladderwell.quantity.Digits;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Units;
@@ -30,9 +31,14 @@ final class Checks {
         return value;
     }
 
+    /** A double as a person would write it: -1 and not -1.0. */
+    static String number(double value) {
+        return Double.isFinite(value) ? Digits.shortest(value) : String.valueOf(value);
+    }
+
     static double finite(String what, double value) {
         if (!Double.isFinite(value)) {
-            throw new IllegalArgumentException(what + " must be a finite number, not " + value);
+            throw new IllegalArgumentException(what + " must be a finite number, not " + number(value));
         }
         return value;
     }

@@ -25,7 +25,13 @@ public record Coherent(Harmonic oscillator, double mean, double phaseAngle, List
 
     public Coherent {
         if (!(mean >= 0) || Double.isInfinite(mean)) {
-            throw new IllegalArgumentException("mean quanta must be a finite number of at least 0, not " + mean);
+            throw new IllegalArgumentException(
+                    "mean quanta must be a finite number of at least 0, not " + Checks.number(mean));
+        }
+        if (mean > Amplitudes.LARGEST_MEAN) {
+            throw new IllegalArgumentException("mean quanta of " + Checks.number(mean) + " need about "
+                    + Checks.number(Math.rint(14 * Math.sqrt(mean) / 1e6) * 1e6)
+                    + " levels; at most " + Checks.number(Amplitudes.LARGEST_MEAN) + " quanta are carried");
         }
         Checks.finite("phase", phaseAngle);
         given = List.copyOf(given);

@@ -33,6 +33,11 @@ public record Harmonic(Optional<Quantity> mass, Optional<Quantity> spacing) impl
         mass.ifPresent(m -> Checks.positive("mass", m, Kind.MASS));
         spacing.ifPresent(s -> Checks.positive(
                 "frequency", s, Kind.CYCLE_FREQUENCY, Kind.ANGULAR_FREQUENCY, Kind.WAVENUMBER, Kind.ENERGY));
+        // refuses a mass and a frequency whose scale leaves the range of numbers
+        if (mass.isPresent()) {
+            Scale.harmonic(
+                    mass.orElseThrow().si(), spacing.map(Harmonic::angular).orElseThrow());
+        }
     }
 
     /** A harmonic oscillator on the way: its mass, or natural units. */

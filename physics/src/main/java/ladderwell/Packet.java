@@ -2,6 +2,8 @@ package ladderwell;
 
 import java.util.ArrayList;
 import java.util.List;
+import ladderwell.evidence.PhysicsException;
+import ladderwell.quantity.Digits;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
@@ -32,12 +34,22 @@ public record Packet(Oscillator oscillator, Quantity position, Quantity momentum
     @Override
     public Amplitudes amplitudes(double tolerance) {
         Scale scale = oscillator.scale();
-        return Amplitudes.packet(
-                oscillator.levels(),
-                position.si() / scale.length(),
-                momentum.si() / scale.momentum(),
-                spread.si() / scale.length(),
-                tolerance);
+        try {
+            return Amplitudes.packet(
+                    oscillator.levels(),
+                    position.si() / scale.length(),
+                    momentum.si() / scale.momentum(),
+                    spread.si() / scale.length(),
+                    tolerance);
+        } catch (PhysicsException.NotCarried scaled) {
+            // the room speaks of scaled units; the user typed these
+            throw new PhysicsException.NotCarried(
+                    "a packet of spread " + spread + " at " + position + " with momentum " + momentum
+                            + ", wanted to a norm error of " + Digits.shortest(tolerance) + ",",
+                    scaled.missingWeight(),
+                    scaled.levels(),
+                    scaled.remedy());
+        }
     }
 
     /** ⟨p²⟩/2m of the free packet; the walls change it only through what leaks into them. */

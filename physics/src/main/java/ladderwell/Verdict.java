@@ -17,7 +17,7 @@ final class Verdict {
             String period = time(run, 2 * Math.PI);
             if (state instanceof Coherent coherent && coherent.mean() > 0) {
                 return "follows the classical motion for ever with its shape unchanged, period " + period
-                        + ", spread over swing " + Digits.significant(0.5 / Math.sqrt(coherent.mean()), 4);
+                        + ", spread over swing " + rounded(0.5 / Math.sqrt(coherent.mean()));
             }
             return "returns exactly after every period of " + period + " (equal level spacing)";
         }
@@ -60,9 +60,14 @@ final class Verdict {
 
     private static String time(Run run, double scaled) {
         if (run.state().oscillator().scale().isNatural()) {
-            return Digits.significant(scaled, 5);
+            return rounded(scaled);
         }
         Quantity time = run.labTime(scaled);
-        return Digits.significant(time.value(), 5) + " " + time.unit().symbol();
+        return rounded(time.value()) + " " + time.unit().symbol();
+    }
+
+    /** Six digits of a number known to a few units in its last place, with what the rounding leaves open. */
+    private static String rounded(double value) {
+        return Digits.pretty(Digits.withBound(value, 2e-6 * value));
     }
 }

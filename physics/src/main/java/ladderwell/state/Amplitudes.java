@@ -11,7 +11,7 @@ import ladderwell.level.Levels;
  */
 public final class Amplitudes {
     /** Largest mean quanta of a coherent state; its window then holds about 1.5e7 levels. */
-    static final double LARGEST_MEAN = 1e12;
+    public static final double LARGEST_MEAN = 1e12;
 
     /** Tail moments k = 0 … 4. */
     static final int MOMENTS = 5;
