@@ -3,7 +3,6 @@
 A partner is started once per task. It prints one line `ready`, a tab and the OpenBLAS kernel with its threads. For each line `go` it reads
 it times every variant and prints `name<TAB>milliseconds<TAB>error` for each, then an empty line. It ends with its input.
 """
-import statistics
 import sys
 import time
 
@@ -21,15 +20,15 @@ def blas():
     return "; ".join(found) or "no OpenBLAS"
 
 
-def sample(work, least=0.08, most=25):
-    """Median time of work() in ms over at least `least` seconds or three runs. The last result is kept, as a notebook keeps it."""
+def sample(work, least=0.3):
+    """Shortest time of work() in ms over at least `least` seconds or three runs. The last result is kept, as a notebook keeps it."""
     times, result = [], None
     start = time.perf_counter()
-    while len(times) < 3 or (time.perf_counter() - start < least and len(times) < most):
+    while len(times) < 3 or time.perf_counter() - start < least:
         before = time.perf_counter()
         result = work()  # noqa: F841
         times.append(time.perf_counter() - before)
-    return statistics.median(times) * 1e3
+    return min(times) * 1e3
 
 
 def serve(variants):

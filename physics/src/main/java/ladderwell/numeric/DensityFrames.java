@@ -11,9 +11,10 @@ public final class DensityFrames {
     private static final double U = 0x1p-53;
     private static final double NEGLIGIBLE = 0x1p-62;
 
-    /** Times handled together: 32 rows of real and imaginary parts and their sums fit a second-level cache. */
+    /** Times handled together: their packed coefficients stay in the second-level cache. */
     private static final int GROUP = 16;
 
+    private final Loops loops;
     private final int levels;
     private final int points;
     private final boolean alternating;
@@ -44,6 +45,7 @@ public final class DensityFrames {
     }
 
     DensityFrames(Loops loops, double[][] functions, boolean alternating) {
+        this.loops = loops;
         levels = functions.length;
         points = levels == 0 ? 0 : functions[0].length;
         this.alternating = alternating;
@@ -96,6 +98,19 @@ public final class DensityFrames {
      * @throws java.util.concurrent.CancellationException if the thread is interrupted
      */
     public double[][] of(double[][] re, double[][] im, Workers workers) {
+        double[][] density = new double[re.length][points];
+        fill(re, im, density, workers);
+        return density;
+    }
+
+    /**
+     * The same, into given frames: for frames asked for again and again, new memory would cost a tenth of the time.
+     *
+     * @shape re and im are [times][levels]; density is [at least times][points], written
+     * @throws IllegalArgumentException if a row does not have one coefficient for each function, or a frame one entry for each point
+     * @throws java.util.concurrent.CancellationException if the thread is interrupted
+     */
+    public void fill(double[][] re, double[][] im, double[][] density, Workers workers) {
         if (re.length != im.length) {
             throw new IllegalArgumentException(re.length + " rows of real parts and " + im.length
                     + " of imaginary parts, expected the same number");
@@ -106,7 +121,17 @@ public final class DensityFrames {
                         + " imaginary parts, expected " + levels + " (one for each function)");
             }
         }
-        return frames(re.length, workers, (from, to, toRe, toIm) -> {
+        if (density.length < re.length) {
+            throw new IllegalArgumentException(
+                    density.length + " frames to write to, expected one for each of " + re.length + " times");
+        }
+        for (int j = 0; j < re.length; j++) {
+            if (density[j].length != points) {
+                throw new IllegalArgumentException(
+                        "frame " + j + " has " + density[j].length + " entries, expected " + points);
+            }
+        }
+        frames(re.length, density, workers, (from, to, toRe, toIm) -> {
             for (int j = from; j < to; j++) {
                 toRe[j - from] = re[j];
                 toIm[j - from] = im[j];
@@ -126,7 +151,8 @@ public final class DensityFrames {
             throw new IllegalArgumentException(
                     phases.levels() + " levels in the phases, expected " + levels + " (one for each function)");
         }
-        return frames(phases.times(), workers, (from, to, toRe, toIm) -> {
+        double[][] density = new double[phases.times()][points];
+        frames(phases.times(), density, workers, (from, to, toRe, toIm) -> {
             for (int j = 0; j < to - from; j++) {
                 if (toRe[j] == null) {
                     toRe[j] = new double[levels];
@@ -135,10 +161,10 @@ public final class DensityFrames {
             }
             phases.fill(from, to, toRe, toIm);
         });
+        return density;
     }
 
-    private double[][] frames(int times, Workers workers, Rows rows) {
-        double[][] density = new double[times][points];
+    private void frames(int times, double[][] density, Workers workers, Rows rows) {
         int groups = (times + GROUP - 1) / GROUP;
         // A few parts per thread, so that scratch arrays are made rarely; every frame is computed alone, so parts
         // change no bit.
@@ -151,55 +177,54 @@ public final class DensityFrames {
                 panel.frames(from, Math.min(times, from + GROUP), rows, density);
             }
         });
-        return density;
     }
 
     /** Scratch arrays of one thread, and the work on one group of times. */
     private final class Panel {
         private final double[][] re = new double[GROUP][];
         private final double[][] im = new double[GROUP][];
-        private final double[] left = new double[2 * GROUP * even.depth()];
-        private final int stride = even.paddedColumns();
-        private final double[] evenSums = new double[2 * GROUP * stride];
-        private final double[] oddSums = alternating ? new double[2 * GROUP * stride] : evenSums;
-        private final double[] mirrored = new double[alternating ? stride : 0];
+        private final double[] evenLeft = new double[2 * GROUP * even.depth()];
+        private final double[] oddLeft = new double[alternating ? 2 * GROUP * odd.depth() : 0];
+        private final int width = loops.columns();
+        private final double[] evenSums = new double[Loops.ROWS * width];
+        private final double[] oddSums = new double[Loops.ROWS * width];
 
         void frames(int from, int to, Rows rows, double[][] density) {
             rows.read(from, to, re, im);
-            multiply(even, 0, alternating ? 2 : 1, to - from, evenSums);
-            if (!alternating) {
-                for (int j = from; j < to; j++) {
-                    squares(evenSums, 2 * (j - from) * stride, stride, density[j], points);
+            int count = to - from;
+            int strips = (count + 1) / 2;
+            for (int s = 0; s < strips; s++) {
+                int second = Math.min(count - 1, 2 * s + 1);
+                pack(2 * s, second, 0, even.depth(), evenLeft, s * Loops.ROWS * even.depth());
+                if (alternating) {
+                    pack(2 * s, second, 1, odd.depth(), oddLeft, s * Loops.ROWS * odd.depth());
                 }
-                return;
             }
-            multiply(odd, 1, 2, to - from, oddSums);
-            int middle = points / 2;
-            int half = points - middle;
-            for (int j = from; j < to; j++) {
-                double[] frame = density[j];
-                bothSides(evenSums, oddSums, 2 * (j - from) * stride, stride, frame, middle, mirrored, half);
-                // On an odd number of points the middle one belongs to both sides and is there already.
-                for (int i = half - middle; i < half; i++) {
-                    frame[half - 1 - i] = mirrored[i];
+            int middle = alternating ? points / 2 : 0;
+            for (int panel = 0; panel < even.panels(); panel++) {
+                Interruption.check();
+                int column = panel * width;
+                int columns = Math.min(width, points - middle - column);
+                // On an odd number of points upper and lower half share the middle one.
+                int lower = points - 1 - middle - column;
+                for (int s = 0; s < strips; s++) {
+                    even.multiply(evenLeft, s * Loops.ROWS * even.depth(), panel, evenSums, 0, width);
+                    if (alternating) {
+                        odd.multiply(oddLeft, s * Loops.ROWS * odd.depth(), panel, oddSums, 0, width);
+                    }
+                    double[] frame = density[from + 2 * s];
+                    loops.squares(evenSums, oddSums, 0, alternating, frame, middle + column, lower, columns);
+                    if (2 * s + 1 < count) {
+                        frame = density[from + 2 * s + 1];
+                        loops.squares(evenSums, oddSums, 2, alternating, frame, middle + column, lower, columns);
+                    }
                 }
             }
         }
 
-        /** Sums of c_k φ_k over k = first, first + step, …: rows 2j real, 2j + 1 imaginary part of time j. */
-        private void multiply(PackedColumns functions, int first, int step, int count, double[] sums) {
-            int depth = functions.depth();
-            int strips = (count + 1) / 2;
-            for (int s = 0; s < strips; s++) {
-                int second = Math.min(count - 1, 2 * s + 1);
-                pack(re[2 * s], im[2 * s], re[second], im[second], first, step, depth, left, s * Loops.ROWS * depth);
-            }
-            for (int panel = 0; panel < functions.panels(); panel++) {
-                Interruption.check();
-                for (int s = 0; s < strips; s++) {
-                    functions.multiply(left, s * Loops.ROWS * depth, panel, sums, s * Loops.ROWS * stride, stride);
-                }
-            }
+        private void pack(int first, int second, int parity, int depth, double[] left, int at) {
+            DensityFrames.pack(
+                    re[first], im[first], re[second], im[second], parity, alternating ? 2 : 1, depth, left, at);
         }
     }
 
@@ -219,31 +244,6 @@ public final class DensityFrames {
             left[at + 4 * l + 1] = im0[k];
             left[at + 4 * l + 2] = re1[k];
             left[at + 4 * l + 3] = im1[k];
-        }
-    }
-
-    private static void squares(double[] sums, int at, int stride, double[] frame, int count) {
-        for (int i = 0; i < count; i++) {
-            double u = sums[at + i];
-            double v = sums[at + stride + i];
-            frame[i] = Math.fma(u, u, v * v);
-        }
-    }
-
-    /** |even + odd|² to the upper half of the frame, |even - odd|² to mirrored. */
-    private static void bothSides(
-            double[] even, double[] odd, int at, int stride, double[] frame, int middle, double[] mirrored, int half) {
-        for (int i = 0; i < half; i++) {
-            double evenRe = even[at + i];
-            double oddRe = odd[at + i];
-            double evenIm = even[at + stride + i];
-            double oddIm = odd[at + stride + i];
-            double u = evenRe + oddRe;
-            double v = evenIm + oddIm;
-            double p = evenRe - oddRe;
-            double q = evenIm - oddIm;
-            frame[middle + i] = Math.fma(u, u, v * v);
-            mirrored[i] = Math.fma(p, p, q * q);
         }
     }
 

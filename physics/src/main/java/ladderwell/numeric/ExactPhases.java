@@ -1,6 +1,6 @@
 package ladderwell.numeric;
 
-import java.util.Arrays;
+import java.util.Optional;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -11,7 +11,7 @@ import org.jspecify.annotations.Nullable;
  * grid to rounding, t_j = T_q + T_r + δ_j with j = qB + r, most sines and cosines are saved: the factor is the product of one entry for
  * T_q and one for T_r (both double-double), and e^{-iEδ_j}, which carries the rounding of the stored time, by its Taylor series.
  *
- * <p>Objects are immutable; all methods may be called from several threads.
+ * <p>Objects do not change; all methods may be called from several threads.
  *
  * @units E t is an angle in rad: energies in any unit, times in its inverse (ħ = 1)
  */
@@ -47,8 +47,9 @@ public final class ExactPhases {
     private final double[] im;
     private final double[] times;
     private final double largestPhase;
+    private final double phaseError;
     private final Grid grid;
-    private final Table[] kept;
+    private Table @Nullable [] kept; // guarded by this
 
     /**
      * E t mod 2π in [-π, π] (to rounding).
@@ -80,39 +81,79 @@ public final class ExactPhases {
      * @throws IllegalArgumentException if lengths differ, a number is not finite, or some |E t| exceeds {@link #LARGEST_PHASE}
      */
     public static ExactPhases of(double[] energyHigh, double[] energyLow, double[] re, double[] im, double[] times) {
-        return new ExactPhases(energyHigh, energyLow, re, im, times);
-    }
-
-    private ExactPhases(double[] energyHigh, double[] energyLow, double[] re, double[] im, double[] times) {
         int levels = energyHigh.length;
         requireLength(energyLow, levels, "low parts of energies");
         requireLength(re, levels, "real parts");
         requireLength(im, levels, "imaginary parts");
-        this.energyHigh = new double[levels];
-        this.energyLow = new double[levels];
-        double largestEnergy = 0;
+        double[] high = new double[levels];
+        double[] low = new double[levels];
         for (int k = 0; k < levels; k++) {
-            double high = requireFinite(energyHigh[k] + requireFinite(energyLow[k], "energy", k), "energy", k);
-            this.energyHigh[k] = high;
-            this.energyLow[k] = PhaseFactors.sumError(energyHigh[k], energyLow[k], high);
-            largestEnergy = Math.max(largestEnergy, Math.abs(high));
+            high[k] = requireFinite(energyHigh[k] + requireFinite(energyLow[k], "energy", k), "energy", k);
+            low[k] = PhaseFactors.sumError(energyHigh[k], energyLow[k], high[k]);
             requireFinite(re[k], "coefficient", k);
             requireFinite(im[k], "coefficient", k);
         }
-        double largestTime = 0;
         for (int j = 0; j < times.length; j++) {
-            largestTime = Math.max(largestTime, Math.abs(requireFinite(times[j], "time", j)));
+            requireFinite(times[j], "time", j);
         }
-        requireReducible(largestEnergy * largestTime);
-        this.re = re.clone();
-        this.im = im.clone();
-        this.times = times.clone();
+        requireReducible(largest(high) * largest(times));
+        return new ExactPhases(high, low, re.clone(), im.clone(), times.clone(), 0);
+    }
+
+    private ExactPhases(
+            double[] energyHigh, double[] energyLow, double[] re, double[] im, double[] times, double energyError) {
+        this.energyHigh = energyHigh;
+        this.energyLow = energyLow;
+        this.re = re;
+        this.im = im;
+        this.times = times;
+        double largestEnergy = largest(energyHigh);
+        double largestTime = largest(times);
         largestPhase = largestEnergy * largestTime;
-        grid = Grid.through(this.times, largestEnergy, largestTime, largestPhase);
-        kept = new Table[grid.uniform() && levels <= KEPT_LEVELS ? (levels + LEVEL_BLOCK - 1) / LEVEL_BLOCK : 0];
-        for (int i = 0; i < kept.length; i++) {
-            kept[i] = new Table(i * LEVEL_BLOCK, Math.min(levels, (i + 1) * LEVEL_BLOCK));
+        phaseError = energyError * largestTime;
+        grid = Grid.through(times, largestEnergy, largestTime, largestPhase);
+    }
+
+    /** The tables of T_r for each block of levels, made at the first call; none for irregular times or too many levels. */
+    private synchronized Table[] kept() {
+        if (kept == null) {
+            int levels = levels();
+            boolean keep = grid.uniform() && levels <= KEPT_LEVELS;
+            kept = new Table[keep ? (levels + LEVEL_BLOCK - 1) / LEVEL_BLOCK : 0];
+            for (int i = 0; i < kept.length; i++) {
+                kept[i] = new Table(i * LEVEL_BLOCK, Math.min(levels, (i + 1) * LEVEL_BLOCK));
+            }
         }
+        return kept;
+    }
+
+    /**
+     * The same coefficients in a frame that turns with the ladder, c_k e^{i(E_m + (k - m)Ω)t}: what is left of the energies is their
+     * curvature about level m. Errors of the new energies enter {@link #errorBound}. Empty when that does not make phases smaller.
+     *
+     * @param rate Ω, taken as an exact number
+     */
+    Optional<ExactPhases> turning(int m, double rate) {
+        int levels = levels();
+        double[] high = new double[levels];
+        double[] low = new double[levels];
+        for (int k = 0; k < levels; k++) {
+            double difference = energyHigh[k] - energyHigh[m];
+            double lowPart =
+                    PhaseFactors.sumError(energyHigh[k], -energyHigh[m], difference) + (energyLow[k] - energyLow[m]);
+            double turned = (k - m) * rate;
+            double rest = difference - turned;
+            lowPart += PhaseFactors.sumError(difference, -turned, rest) - Math.fma(k - m, rate, -turned);
+            high[k] = rest + lowPart;
+            low[k] = PhaseFactors.sumError(rest, lowPart, high[k]);
+        }
+        double largest = largest(energyHigh);
+        if (!(largest(high) <= largest)) {
+            return Optional.empty();
+        }
+        // Every rounding above is of a number below 2^-51 (2 largest + levels Ω).
+        double error = 0x1p-102 * (largest + levels * Math.abs(rate));
+        return Optional.of(new ExactPhases(high, low, re, im, times, error));
     }
 
     /** The number of levels. */
@@ -147,9 +188,11 @@ public final class ExactPhases {
                     "times " + fromTime + " to " + toTime + ", expected a range within 0 to " + times.length);
         }
         int rows = toTime - fromTime;
+        Table[] tables = kept();
         for (int level = 0; level < levels(); level += LEVEL_BLOCK) {
             int to = Math.min(levels(), level + LEVEL_BLOCK);
-            Block block = kept.length > 0 ? new Block(level, to, kept[level / LEVEL_BLOCK]) : block(level, to, rows);
+            Block block =
+                    tables.length > 0 ? new Block(level, to, tables[level / LEVEL_BLOCK]) : block(level, to, rows);
             for (int j = 0; j < rows; j++) {
                 Interruption.check();
                 block.write(fromTime + j, re[j], im[j], level);
@@ -162,15 +205,14 @@ public final class ExactPhases {
      * numbers, for coefficients of at least 1e-290 in size (below, the absolute error is at most 1e-305).
      */
     public double errorBound() {
-        double one = PhaseFactors.ERROR + PRODUCT_ERROR;
+        double one = PhaseFactors.ERROR + PRODUCT_ERROR + 0.01 * U + phaseError;
         if (!grid.uniform()) {
-            return one + 0.01 * U;
+            return one;
         }
-        double product = one + PhaseFactors.ERROR + PRODUCT_ERROR;
         // First order: one rounding per part and the remainder 2^-57. Third order: series, remainder and a complex
         // product.
         double shift = grid.firstOrder() ? 1.1 * U : 2 * U + PRODUCT_ERROR;
-        return product + shift + 0.01 * U;
+        return one + PhaseFactors.ERROR + PRODUCT_ERROR + shift;
     }
 
     double initialRe(int level) {
@@ -181,16 +223,19 @@ public final class ExactPhases {
         return im[level];
     }
 
+    double energy(int level) {
+        return energyHigh[level];
+    }
+
     /**
-     * e^{-i(E_upper - E_lower)t} at times fromTime … fromTime+count-1, to about 1e-15: a reference, not a result.
+     * Writes e^{-i rate t} at all times.
+     *
+     * @accuracy {@link PhaseFactors#ERROR}, the rate taken as an exact number
      */
-    void writeDifference(int lower, int upper, int fromTime, int count, double[] re, double[] im) {
-        double high = energyHigh[upper] - energyHigh[lower];
-        double low = PhaseFactors.sumError(energyHigh[upper], -energyHigh[lower], high)
-                + (energyLow[upper] - energyLow[lower]);
+    void writeTurns(double rate, double[] toRe, double[] toIm) {
         // E t is symmetric: here the times stand where levels stand elsewhere, so that one energy serves many times.
-        double[] at = Arrays.copyOfRange(times, fromTime, fromTime + count);
-        new PhaseFactors(count).write(at, new double[count], count, high, low, 2 * largestPhase, re, im);
+        double phase = Math.abs(rate) * largest(times);
+        new PhaseFactors(times.length).write(times, new double[times.length], times.length, rate, 0, phase, toRe, toIm);
     }
 
     /**
@@ -438,6 +483,14 @@ public final class ExactPhases {
             }
             return new Grid(true, angle <= FIRST_ORDER, period, coarseHighs, coarseLows, fineHighs, fineLows, shifts);
         }
+    }
+
+    private static double largest(double[] numbers) {
+        double largest = 0;
+        for (double number : numbers) {
+            largest = Math.max(largest, Math.abs(number));
+        }
+        return largest;
     }
 
     private static void requireReducible(double phase) {

@@ -1,5 +1,8 @@
 package ladderwell.numeric;
 
+import java.util.Arrays;
+import java.util.Optional;
+
 /**
  * Sums over a ladder of levels that give the mean and the fluctuations of a and of n, for every row of coefficients (every time of a run).
  *
@@ -23,6 +26,8 @@ public final class LadderSums {
 
     private static final int ROWS_PER_TASK = 2048;
 
+    private static final double[][] EMPTY = {};
+
     private final int first;
     private final double coefficientError;
     private final int terms;
@@ -30,23 +35,50 @@ public final class LadderSums {
     private final double[] referenceRe;
     private final double[] referenceIm;
     private final double[] sums;
+    /** Turns from the frame in which the sums were taken, one for each row, or empty for none. */
+    private double[] turnRe = {};
+
+    private double[] turnIm = {};
 
     /**
-     * The sums for coefficients that evolve by phases; rows of coefficients are never all in memory.
+     * The sums for coefficients that evolve by phases; rows of coefficients are never all in memory. They are taken in a frame that turns
+     * with the ladder about its most populated levels, where phases are small.
      *
      * @param first level of the first coefficient (0 for the whole ladder)
      * @throws IllegalArgumentException if first is negative or all coefficients are 0
      * @throws java.util.concurrent.CancellationException if the thread is interrupted
      */
     public static LadderSums of(ExactPhases phases, int first, Workers workers) {
-        int levels = phases.levels();
-        Quanta quanta = Quanta.of(levels, first, phases::initialRe, phases::initialIm, 0);
-        LadderSums result = new LadderSums(first, levels, phases.times(), phases.errorBound(), new Quanta[] {quanta});
+        Quanta quanta = Quanta.of(phases, first);
+        int m = quanta.densest;
+        if (m >= 0) {
+            double rate = phases.energy(m + 1) - phases.energy(m);
+            Optional<ExactPhases> turning = phases.turning(m, rate);
+            if (turning.isPresent()) {
+                LadderSums result = new LadderSums(first, turning.get(), quanta);
+                result.turnRe = new double[phases.times()];
+                result.turnIm = new double[phases.times()];
+                phases.writeTurns(rate, result.turnRe, result.turnIm);
+                result.placeReferences(turning.get());
+                result.sum(turning.get(), workers, EMPTY, EMPTY);
+                return result;
+            }
+        }
+        LadderSums result = new LadderSums(first, phases, quanta);
         result.placeReferences(phases);
-        result.sum(levels, workers, (from, to, rows) -> {
-            ExactPhases.Block block = phases.block(from, to, rows);
-            return (row, toRe, toIm) -> block.write(row, toRe, toIm, 0);
-        });
+        result.sum(phases, workers, EMPTY, EMPTY);
+        return result;
+    }
+
+    /**
+     * The same sums, and the coefficients themselves, as {@link ExactPhases#fill} writes them but for rounding.
+     *
+     * @shape re and im are [phases.times()][at least levels]; written
+     */
+    public static LadderSums of(ExactPhases phases, int first, double[][] re, double[][] im, Workers workers) {
+        LadderSums result = new LadderSums(first, phases, Quanta.of(phases, first));
+        result.placeReferences(phases);
+        result.sum(phases, workers, re, im);
         return result;
     }
 
@@ -66,18 +98,15 @@ public final class LadderSums {
         int levels = re.length == 0 ? 0 : re[0].length;
         Quanta[] quanta = new Quanta[re.length];
         for (int j = 0; j < re.length; j++) {
-            double[] rowRe = re[j];
-            double[] rowIm = im[j];
-            if (rowRe.length != levels || rowIm.length != levels) {
-                throw new IllegalArgumentException("row " + j + " has " + rowRe.length + " real and " + rowIm.length
+            if (re[j].length != levels || im[j].length != levels) {
+                throw new IllegalArgumentException("row " + j + " has " + re[j].length + " real and " + im[j].length
                         + " imaginary parts, expected " + levels);
             }
-            quanta[j] = Quanta.of(levels, first, k -> rowRe[k], k -> rowIm[k], j);
+            quanta[j] = Quanta.of(re[j], im[j], first, j);
         }
         LadderSums result = new LadderSums(first, levels, re.length, 0, quanta);
         for (int j = 0; j < re.length; j++) {
-            int m = quanta[j].densest;
-            result.placeReference(j, m, re[j], im[j]);
+            result.placeReference(j, quanta[j].densest, re[j], im[j]);
         }
         result.sum(levels, workers, (from, to, rows) -> (j, toRe, toIm) -> {
             int start = Math.max(0, from);
@@ -86,6 +115,10 @@ public final class LadderSums {
             System.arraycopy(im[j], start, toIm, start - from, count);
         });
         return result;
+    }
+
+    private LadderSums(int first, ExactPhases phases, Quanta quanta) {
+        this(first, phases.levels(), phases.times(), phases.errorBound(), new Quanta[] {quanta});
     }
 
     private LadderSums(int first, int levels, int rows, double coefficientError, Quanta[] quanta) {
@@ -104,7 +137,7 @@ public final class LadderSums {
         if (m < 0) {
             return;
         }
-        phases.writeDifference(m, m + 1, 0, referenceRe.length, referenceRe, referenceIm);
+        phases.writeTurns(phases.energy(m + 1) - phases.energy(m), referenceRe, referenceIm);
         double a = phases.initialRe(m);
         double b = phases.initialIm(m);
         double c = phases.initialRe(m + 1);
@@ -127,6 +160,25 @@ public final class LadderSums {
         double scale = Math.sqrt(first + m + 1.0) / (re[m] * re[m] + im[m] * im[m]);
         referenceRe[j] = scale * (re[m] * re[m + 1] + im[m] * im[m + 1]);
         referenceIm[j] = scale * (re[m] * im[m + 1] - im[m] * re[m + 1]);
+    }
+
+    /** Sums over the rows of phases, which are written to keepRe and keepIm on the way unless these are empty. */
+    private void sum(ExactPhases phases, Workers workers, double[][] keepRe, double[][] keepIm) {
+        int levels = phases.levels();
+        sum(levels, workers, (from, to, rows) -> {
+            ExactPhases.Block block = phases.block(from, to, rows);
+            if (keepRe.length == 0) {
+                return (row, toRe, toIm) -> block.write(row, toRe, toIm, 0);
+            }
+            // The first and last level of a block belong to its neighbours.
+            int start = Math.max(0, from + 1);
+            int count = Math.min(levels, to - 1) - start;
+            return (row, toRe, toIm) -> {
+                block.write(row, toRe, toIm, 0);
+                System.arraycopy(toRe, start - from, keepRe[row], start, count);
+                System.arraycopy(toIm, start - from, keepIm[row], start, count);
+            };
+        });
     }
 
     /** Where rows come from, a block of levels at a time; levels outside the row read as 0. */
@@ -171,16 +223,19 @@ public final class LadderSums {
     private void sumBlock(
             Loops loops, Source source, int levels, int from, int to, int fromRow, int toRow, double[] into) {
         int count = to - from;
-        double[] up = new double[count];
-        double[] down = new double[count];
+        // Whole vectors; what is beyond the last level is 0 and adds nothing (only the last block is not a multiple of
+        // 8).
+        int padded = (count + 7) / 8 * 8;
+        double[] up = new double[padded];
+        double[] down = new double[padded];
         for (int i = 0; i < count; i++) {
             double n = (double) first + from + i;
             up[i] = Math.sqrt(n + 1);
             down[i] = Math.sqrt(Math.max(0, n));
         }
         // Entry 0 is the level below the first of the block; what lies outside the row stays 0.
-        double[] re = new double[count + 2];
-        double[] im = new double[count + 2];
+        double[] re = new double[padded + 2];
+        double[] im = new double[padded + 2];
         Rows rows = source.block(from - 1, to + 1, toRow - fromRow);
         for (int j = fromRow; j < toRow; j++) {
             Interruption.check();
@@ -191,7 +246,7 @@ public final class LadderSums {
                     up,
                     down,
                     0,
-                    count,
+                    padded,
                     referenceRe[j],
                     referenceIm[j],
                     into,
@@ -211,33 +266,58 @@ public final class LadderSums {
 
     /** Re⟨a⟩ of row j. */
     public double amplitudeRe(int j) {
-        return referenceRe[j] + sums[Loops.LADDER_SUMS * j] / norm(j);
+        return turnRe.length == 0 ? amplitude(j, 0) : amplitude(j, 0) * turnRe[j] - amplitude(j, 1) * turnIm[j];
     }
 
     /** Im⟨a⟩ of row j. */
     public double amplitudeIm(int j) {
-        return referenceIm[j] + sums[Loops.LADDER_SUMS * j + 1] / norm(j);
+        return turnRe.length == 0 ? amplitude(j, 1) : amplitude(j, 0) * turnIm[j] + amplitude(j, 1) * turnRe[j];
     }
 
     /** ⟨δ†δ⟩ of row j, δ = a - ⟨a⟩; never negative. */
     public double fluctuation(int j) {
-        double re = sums[Loops.LADDER_SUMS * j] / norm(j);
-        double im = sums[Loops.LADDER_SUMS * j + 1] / norm(j);
-        return Math.max(0, sums[Loops.LADDER_SUMS * j + 2] / norm(j) - re * re - im * im);
+        double re = mean(j, 0);
+        double im = mean(j, 1);
+        return Math.max(0, mean(j, 2) - re * re - im * im);
     }
 
     /** Re⟨δ²⟩ of row j. */
     public double squeezingRe(int j) {
-        double re = sums[Loops.LADDER_SUMS * j] / norm(j);
-        double im = sums[Loops.LADDER_SUMS * j + 1] / norm(j);
-        return sums[Loops.LADDER_SUMS * j + 3] / norm(j) - re * re + im * im;
+        if (turnRe.length == 0) {
+            return squareRe(j);
+        }
+        double cosine = turnRe[j] * turnRe[j] - turnIm[j] * turnIm[j];
+        return squareRe(j) * cosine - squareIm(j) * (2 * turnRe[j] * turnIm[j]);
     }
 
     /** Im⟨δ²⟩ of row j. */
     public double squeezingIm(int j) {
-        double re = sums[Loops.LADDER_SUMS * j] / norm(j);
-        double im = sums[Loops.LADDER_SUMS * j + 1] / norm(j);
-        return sums[Loops.LADDER_SUMS * j + 4] / norm(j) - 2 * re * im;
+        if (turnRe.length == 0) {
+            return squareIm(j);
+        }
+        double cosine = turnRe[j] * turnRe[j] - turnIm[j] * turnIm[j];
+        return squareRe(j) * (2 * turnRe[j] * turnIm[j]) + squareIm(j) * cosine;
+    }
+
+    /** One of the sums of row j, over the norm. */
+    private double mean(int j, int sum) {
+        return sums[Loops.LADDER_SUMS * j + sum] / norm(j);
+    }
+
+    /** ⟨a⟩ in the frame of the sums, real (0) or imaginary (1) part. */
+    private double amplitude(int j, int part) {
+        return (part == 0 ? referenceRe[j] : referenceIm[j]) + mean(j, part);
+    }
+
+    /** Re⟨δ²⟩ in the frame of the sums. */
+    private double squareRe(int j) {
+        double re = mean(j, 0);
+        double im = mean(j, 1);
+        return mean(j, 3) - re * re + im * im;
+    }
+
+    private double squareIm(int j) {
+        return mean(j, 4) - 2 * mean(j, 0) * mean(j, 1);
     }
 
     /** ⟨n⟩ of row j. */
@@ -257,22 +337,32 @@ public final class LadderSums {
 
     /** Guaranteed bound on |computed - exact| of ⟨a⟩ in row j, from rounding and from the errors of the coefficients. */
     public double amplitudeError(int j) {
-        double b = lowered(j);
-        double bError = loweredError(j);
-        double error = bError + (coefficientError + (terms + 16) * U) * (b + bError);
-        return 1.01 * error + 2 * U * (Math.hypot(referenceRe[j], referenceIm[j]) + b);
+        double size = Math.hypot(referenceRe[j], referenceIm[j]) + lowered(j);
+        return 1.01 * shiftError(j) + (2 * U + turnError()) * size;
     }
 
     /** Guaranteed bound on the error of ⟨δ†δ⟩, and of |⟨δ²⟩|, in row j. */
     public double fluctuationError(int j) {
         double b = lowered(j);
         double bError = loweredError(j);
-        double gError = bError + (coefficientError + 5 * U);
+        double gError = bError + coefficientError + 5 * U;
         double g = Math.sqrt(b * b + 1);
         double products = (b + bError) * gError + g * bError + (terms + 16) * U * (b + bError) * (g + gError);
-        double shift = Math.hypot(sums[Loops.LADDER_SUMS * j], sums[Loops.LADDER_SUMS * j + 1]) / norm(j);
-        double shiftError = bError + (coefficientError + (terms + 16) * U) * (b + bError);
-        return 1.01 * (products + (2 * shift + shiftError) * shiftError + 8 * U * shift * shift);
+        double shift = Math.hypot(mean(j, 0), mean(j, 1));
+        double shiftError = shiftError(j);
+        return 1.01 * (products + (2 * shift + shiftError) * shiftError + 8 * U * shift * shift)
+                + 2 * turnError() * Math.hypot(squareRe(j), squareIm(j));
+    }
+
+    /** Bound on the error of Σ c* b over the norm. */
+    private double shiftError(int j) {
+        double bError = loweredError(j);
+        return bError + (coefficientError + (terms + 16) * U) * (lowered(j) + bError);
+    }
+
+    /** Of a turn back from the frame: the factor and a complex product (twice that for ⟨δ²⟩). */
+    private double turnError() {
+        return turnRe.length == 0 ? 0 : 1.01 * (PhaseFactors.ERROR + 3 * U);
     }
 
     /** Guaranteed bound on the error of {@link #meanQuanta} in row j, against the given coefficients. */
@@ -292,7 +382,7 @@ public final class LadderSums {
 
     /** ‖b‖/‖c‖ of row j. */
     private double lowered(int j) {
-        return Math.sqrt(sums[Loops.LADDER_SUMS * j + 2] / norm(j));
+        return Math.sqrt(mean(j, 2));
     }
 
     /**
@@ -319,23 +409,26 @@ public final class LadderSums {
             this.densest = densest;
         }
 
-        interface Part {
-            double at(int level);
+        static Quanta of(ExactPhases phases, int first) {
+            double[] re = new double[phases.levels()];
+            double[] im = new double[phases.levels()];
+            Arrays.setAll(re, phases::initialRe);
+            Arrays.setAll(im, phases::initialIm);
+            return of(re, im, first, 0);
         }
 
-        static Quanta of(int levels, int first, Part re, Part im, int row) {
+        static Quanta of(double[] re, double[] im, int first, int row) {
             if (first < 0) {
                 throw new IllegalArgumentException("first level is " + first + ", expected 0 or above");
             }
+            int levels = re.length;
             double[] weight = new double[levels];
             CompensatedSum norm = new CompensatedSum();
             CompensatedSum mean = new CompensatedSum();
             double largest = 0x1p-900;
             int densest = -1;
             for (int k = 0; k < levels; k++) {
-                double a = re.at(k);
-                double b = im.at(k);
-                weight[k] = a * a + b * b;
+                weight[k] = re[k] * re[k] + im[k] * im[k];
                 norm.add(weight[k]);
                 mean.add(k * weight[k]);
                 if (k > 0 && weight[k - 1] > 0x1p-450 && weight[k] * weight[k - 1] > largest) {
@@ -358,14 +451,14 @@ public final class LadderSums {
         }
     }
 
-    /** A sum with its rounding errors carried along (Neumaier 1974): relative error about 2 u for positive terms. */
+    /** A sum with its rounding errors carried along (Ogita, Rump and Oishi 2005): relative error about 2 u for positive terms. */
     private static final class CompensatedSum {
         private double sum;
         private double carry;
 
         void add(double term) {
             double next = sum + term;
-            carry += Math.abs(sum) >= Math.abs(term) ? (sum - next) + term : (term - next) + sum;
+            carry += PhaseFactors.sumError(sum, term, next);
             sum = next;
         }
 

@@ -47,6 +47,45 @@ interface Loops {
             double[] sums,
             int sumAt);
 
+    /**
+     * Squares of sums on one panel: for each column j below count, |u_j|² to frame[upper + j], u = even + odd, and, when odd is given,
+     * |even - odd|² to frame[lower - j]; where both are the same entry the first stays. Rows row and row + 1 of the panels are real and
+     * imaginary parts.
+     *
+     * @shape even and odd are [ROWS][columns]
+     * @param mirrored whether odd counts and the lower half is written
+     */
+    void squares(
+            double[] even, double[] odd, int row, boolean mirrored, double[] frame, int upper, int lower, int count);
+
+    /** The same for columns from … count-1, one by one. */
+    static void squaresOneByOne(
+            int columns,
+            double[] even,
+            double[] odd,
+            int row,
+            boolean mirrored,
+            double[] frame,
+            int upper,
+            int lower,
+            int from,
+            int count) {
+        int re = row * columns;
+        int im = re + columns;
+        for (int j = from; j < count; j++) {
+            double u = even[re + j];
+            double v = even[im + j];
+            if (mirrored) {
+                double p = u - odd[re + j];
+                double q = v - odd[im + j];
+                u += odd[re + j];
+                v += odd[im + j];
+                frame[lower - j] = Math.fma(p, p, q * q);
+            }
+            frame[upper + j] = Math.fma(u, u, v * v);
+        }
+    }
+
     /** Holds the choice, made when first asked for. */
     final class Chosen {
         private static final Loops LOOPS = VectorSupport.available() ? new VectorLoops() : new PlainLoops();

@@ -72,11 +72,12 @@ public final class MatrixProduct {
             }
         }
         int stride = right.paddedColumns();
+        int width = stride / Math.max(1, right.panels());
         double[] c = new double[strips * Loops.ROWS * stride];
         for (int p = 0; p < right.panels(); p++) {
             Interruption.check();
             for (int s = 0; s < strips; s++) {
-                right.multiply(packed, s * Loops.ROWS * depth, p, c, s * Loops.ROWS * stride, stride);
+                right.multiply(packed, s * Loops.ROWS * depth, p, c, s * Loops.ROWS * stride + p * width, stride);
             }
         }
         for (int i = from; i < to; i++) {

@@ -101,12 +101,11 @@ final class PackedColumns {
     }
 
     /**
-     * The product of {@link Loops#ROWS} rows and one panel, to c[r][panel columns].
+     * The product of {@link Loops#ROWS} rows and one panel.
      *
-     * @shape left is [depth][ROWS] from leftAt; c is rows of {@code stride} from cAt, the panel at its own columns
+     * @shape left is [depth][ROWS] from leftAt; c is rows of {@code stride} from cAt, written over {@link Loops#columns} columns
      */
     void multiply(double[] left, int leftAt, int panel, double[] c, int cAt, int stride) {
-        int at = cAt + panel * loops.columns();
         for (int block = 0; block < blocks; block++) {
             int index = panel * blocks + block;
             double[] packed = data[index];
@@ -118,7 +117,7 @@ final class PackedColumns {
                     packed.length / loops.columns(),
                     block > 0,
                     c,
-                    at,
+                    cAt,
                     stride);
         }
     }

@@ -66,6 +66,12 @@ final class PlainLoops implements Loops {
     }
 
     @Override
+    public void squares(
+            double[] even, double[] odd, int row, boolean mirrored, double[] frame, int upper, int lower, int count) {
+        Loops.squaresOneByOne(COLUMNS, even, odd, row, mirrored, frame, upper, lower, 0, count);
+    }
+
+    @Override
     public void ladder(
             double[] re,
             double[] im,

@@ -2,6 +2,7 @@ package ladderwell.numeric;
 
 import jdk.incubator.vector.DoubleVector;
 import jdk.incubator.vector.VectorOperators;
+import jdk.incubator.vector.VectorShuffle;
 import jdk.incubator.vector.VectorSpecies;
 
 /**
@@ -12,6 +13,7 @@ import jdk.incubator.vector.VectorSpecies;
 final class VectorLoops implements Loops {
     private static final VectorSpecies<Double> SPECIES = DoubleVector.SPECIES_PREFERRED;
     static final int LANES = SPECIES.length();
+    private static final VectorShuffle<Double> REVERSED = VectorShuffle.fromOp(SPECIES, i -> LANES - 1 - i);
     private static final int COLUMNS = 2 * LANES;
 
     @Override
@@ -66,6 +68,35 @@ final class VectorLoops implements Loops {
         c21.intoArray(c, cAt + 2 * stride + LANES);
         c30.intoArray(c, cAt + 3 * stride);
         c31.intoArray(c, cAt + 3 * stride + LANES);
+    }
+
+    @Override
+    public void squares(
+            double[] even, double[] odd, int row, boolean mirrored, double[] frame, int upper, int lower, int count) {
+        int re = row * COLUMNS;
+        int im = re + COLUMNS;
+        int j = 0;
+        if (mirrored) {
+            for (; j <= count - LANES; j += LANES) {
+                DoubleVector a = DoubleVector.fromArray(SPECIES, even, re + j);
+                DoubleVector b = DoubleVector.fromArray(SPECIES, odd, re + j);
+                DoubleVector c = DoubleVector.fromArray(SPECIES, even, im + j);
+                DoubleVector d = DoubleVector.fromArray(SPECIES, odd, im + j);
+                DoubleVector u = a.add(b);
+                DoubleVector v = c.add(d);
+                DoubleVector p = a.sub(b);
+                DoubleVector q = c.sub(d);
+                p.fma(p, q.mul(q)).rearrange(REVERSED).intoArray(frame, lower - j - (LANES - 1));
+                u.fma(u, v.mul(v)).intoArray(frame, upper + j);
+            }
+        } else {
+            for (; j <= count - LANES; j += LANES) {
+                DoubleVector u = DoubleVector.fromArray(SPECIES, even, re + j);
+                DoubleVector v = DoubleVector.fromArray(SPECIES, even, im + j);
+                u.fma(u, v.mul(v)).intoArray(frame, upper + j);
+            }
+        }
+        Loops.squaresOneByOne(COLUMNS, even, odd, row, mirrored, frame, upper, lower, j, count);
     }
 
     @Override

@@ -165,6 +165,14 @@ class DensityFramesTest {
                 IllegalArgumentException.class, () -> frames.of(new double[1][2], new double[1][3], Workers.CALLER));
         assertThrows(
                 IllegalArgumentException.class, () -> frames.of(new double[1][3], new double[2][3], Workers.CALLER));
+        double[][] none = {};
+        double[][] wrong = {{0, 0}};
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> frames.fill(new double[1][3], new double[1][3], none, Workers.CALLER));
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> frames.fill(new double[1][3], new double[1][3], wrong, Workers.CALLER));
         double[] two = {1, 2};
         assertThrows(
                 IllegalArgumentException.class,

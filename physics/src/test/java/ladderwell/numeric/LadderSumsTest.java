@@ -157,6 +157,75 @@ class LadderSumsTest {
     }
 
     @Test
+    void sumsThatKeepTheCoefficientsGiveBothAlike() {
+        Random random = new Random(35);
+        for (int levels : new int[] {1, 2, 40, 254, 255, 256, 600}) {
+            for (double step : new double[] {0.1, Math.sqrt(0.1)}) {
+                double[] energy = random.doubles(levels).map(e -> 30 * e).toArray();
+                double[] cRe = random.doubles(levels).toArray();
+                double[] cIm = random.doubles(levels).toArray();
+                double[] times = new double[90];
+                Arrays.setAll(times, j -> step == 0.1 ? step * j : step * Math.sqrt(j));
+                ExactPhases phases = ExactPhases.of(energy, new double[levels], cRe, cIm, times);
+                double[][] expectedRe = new double[90][levels];
+                double[][] expectedIm = new double[90][levels];
+                phases.fill(0, 90, expectedRe, expectedIm);
+                double[][] re = new double[90][levels];
+                double[][] im = new double[90][levels];
+                LadderSums kept = LadderSums.of(phases, 3, re, im, Workers.CALLER);
+                LadderSums alone = LadderSums.of(phases, 3, Workers.CALLER);
+                for (int j = 0; j < 90; j++) {
+                    // Coefficients are below √2; either way is right to the bound of the phases.
+                    assertArrayEquals(expectedRe[j], re[j], 3 * phases.errorBound());
+                    assertArrayEquals(expectedIm[j], im[j], 3 * phases.errorBound());
+                    double bound = kept.amplitudeError(j) + alone.amplitudeError(j);
+                    assertEquals(alone.amplitudeRe(j), kept.amplitudeRe(j), bound);
+                    assertEquals(alone.amplitudeIm(j), kept.amplitudeIm(j), bound);
+                    bound = kept.fluctuationError(j) + alone.fluctuationError(j);
+                    assertEquals(alone.fluctuation(j), kept.fluctuation(j), bound);
+                    assertEquals(alone.squeezingRe(j), kept.squeezingRe(j), bound);
+                    assertEquals(alone.squeezingIm(j), kept.squeezingIm(j), bound);
+                }
+            }
+        }
+    }
+
+    @Test
+    void anharmonicPhasesFarUpTheLadderKeepTheirBounds() {
+        // n(n-1)/2 near 1e8: phases reach 1e16, in the turning frame 1e3.
+        Random random = new Random(36);
+        int first = 100_000_000;
+        int levels = 40;
+        double[] zero = new double[levels];
+        double[] c = coherent(first + 20.0, first, levels);
+        double[] energy = new double[levels];
+        double[] low = new double[levels];
+        for (int k = 0; k < levels; k++) {
+            BigDecimal n = BigDecimal.valueOf((long) first + k);
+            BigDecimal exact = n.multiply(n.subtract(BigDecimal.ONE)).divide(BigDecimal.valueOf(2));
+            energy[k] = exact.doubleValue();
+            low[k] = exact.subtract(new BigDecimal(energy[k])).doubleValue();
+        }
+        double[] times = new double[60];
+        Arrays.setAll(times, j -> 0.05 * j);
+        LadderSums sums = LadderSums.of(ExactPhases.of(energy, low, c, zero, times), first, Workers.CALLER);
+        for (int check = 0; check < 4; check++) {
+            int j = random.nextInt(60);
+            BigDecimal[] re = new BigDecimal[levels];
+            BigDecimal[] im = new BigDecimal[levels];
+            for (int k = 0; k < levels; k++) {
+                BigDecimal phase = Decimals.exact(energy[k], low[k]).multiply(new BigDecimal(times[j]));
+                re[k] = new BigDecimal(c[k]).multiply(Decimals.cos(phase)).round(DIGITS);
+                im[k] = new BigDecimal(c[k])
+                        .multiply(Decimals.sin(phase))
+                        .negate()
+                        .round(DIGITS);
+            }
+            Direct.of(re, im, first).check("anharmonic time " + times[j], sums, j);
+        }
+    }
+
+    @Test
     void aCoherentStateFarUpTheLadderKeepsItsNoise() {
         // Harmonic motion from a coherent state: ⟨a⟩ = α e^{-it}, ⟨δ†δ⟩ = ⟨δ²⟩ = 0 (exact theory), up to the tail
         // beyond 9 spreads.

@@ -3,6 +3,7 @@ package ladderwell.kernel.magic;
 import java.util.Optional;
 import ladderwell.Evolution;
 import ladderwell.Run;
+import ladderwell.kernel.sentence.MisreadSentence;
 import ladderwell.kernel.sentence.Sentence;
 import ladderwell.quantity.Quantity;
 
@@ -15,7 +16,7 @@ final class EvolveMagic implements Magic {
     }
 
     @Override
-    public Outcome carryOut(Sentence sentence, Things things) {
+    public Outcome carryOut(Sentence sentence, Things things) throws MisreadSentence {
         Quantity duration = sentence.quantity("for");
         Evolution evolution = things.state(sentence.reference("state")).evolve(duration.value(), duration.unit());
         if (sentence.has("frames")) {
@@ -23,6 +24,12 @@ final class EvolveMagic implements Magic {
         }
         if (sentence.has("tolerance")) {
             evolution = evolution.tolerance(sentence.number("tolerance"));
+        }
+        if (!Double.isFinite(evolution.scaledDuration() * evolution.frames())) {
+            throw new MisreadSentence(
+                    "a duration of " + duration
+                            + " is too long to count in the oscillator's own time; expected a shorter one",
+                    sentence.placeOf("for"));
         }
         Run run = evolution.run();
         return new Outcome(new Declared(sentence.name(), "evolve", run), run);

@@ -28,6 +28,8 @@ final class OscillatorMagic implements Magic {
             case "finite well" -> finiteWell(sentence);
             default -> throw new IllegalStateException("no oscillator is made of kind " + sentence.kind());
         };
+        // A mass and a length may be fine and their scale still outside the range of numbers: refused here, not later.
+        oscillator.scale();
         return new Outcome(new Declared(sentence.name(), "oscillator", oscillator), oscillator);
     }
 

@@ -21,6 +21,9 @@ import ladderwell.quantity.Units;
 
 /** {@code state psi: coherent in trap, mean 9.5, phase 30 deg}. */
 final class StateMagic implements Magic {
+    /** The loosest tolerance that an evolution takes. */
+    private static final double LOOSEST_TOLERANCE = 0.1;
+
     private static final Map<String, Class<?>> TYPES = Map.of(
             "number", NumberState.class,
             "coherent", Coherent.class,
@@ -91,9 +94,11 @@ final class StateMagic implements Magic {
         Quantity position = orZero(sentence, "position", Units.METRE);
         Quantity momentum = orZero(sentence, "momentum", Units.KILOGRAM_METRE_PER_SECOND);
         Quantity spread = sentence.quantity("spread");
-        if (oscillator instanceof Box box) {
-            return box.gaussian(position, momentum, spread);
-        }
-        return ((FiniteWell) oscillator).gaussian(position, momentum, spread);
+        Packet packet = oscillator instanceof Box box
+                ? box.gaussian(position, momentum, spread)
+                : ((FiniteWell) oscillator).gaussian(position, momentum, spread);
+        // What the bound levels cannot carry even loosely is refused here; what they cannot carry closely, by the run.
+        packet.amplitudes(LOOSEST_TOLERANCE);
+        return packet;
     }
 }

@@ -26,24 +26,25 @@ record Things(Names names) implements Surroundings {
     private static Known known(Named named) {
         Object value = named.value();
         if (value instanceof Oscillator oscillator) {
-            return new Known(
-                    named.name(),
-                    "oscillator",
-                    oscillator.kind(),
-                    oscillator.scale().isNatural());
+            return new Known(named.name(), "oscillator", oscillator.kind(), natural(oscillator));
         }
         if (value instanceof State state) {
-            return new Known(
-                    named.name(),
-                    "state",
-                    state.kind(),
-                    state.oscillator().scale().isNatural());
+            return new Known(named.name(), "state", state.kind(), natural(state.oscillator()));
         }
         if (value instanceof Run run) {
-            return new Known(
-                    named.name(), "evolve", "", run.state().oscillator().scale().isNatural());
+            return new Known(named.name(), "evolve", "", natural(run.state().oscillator()));
         }
         return new Known(named.name(), named.noun(), "", false);
+    }
+
+    private static boolean natural(Oscillator oscillator) {
+        try {
+            return oscillator.scale().isNatural();
+        } catch (IllegalArgumentException e) {
+            // A scale outside the range of numbers, from a Java cell: it has units, and whoever uses it will hear of
+            // it.
+            return false;
+        }
     }
 
     Oscillator oscillator(String name) {

@@ -83,6 +83,15 @@ final class Drawing {
                         .build());
     }
 
+    static ScatterTrace.ScatterBuilder dots(String name, double width) {
+        return line(name, width)
+                .line(Line.builder()
+                        .width(width)
+                        .dash(Line.Dash.DOT)
+                        .simplify(false)
+                        .build());
+    }
+
     static ScatterTrace.ScatterBuilder ring(String name) {
         return named(ScatterTrace.builder(LATER, LATER), name)
                 .mode(ScatterTrace.Mode.MARKERS)

@@ -14,7 +14,7 @@ import tech.tablesaw.plotly.traces.ScatterTrace;
  */
 public final class MotionPicture {
     /** Strip of the axis below zero where the mean position and the turning points are marked, as a part of the scale. */
-    private static final double RAIL = 0.085;
+    private static final double RAIL = 0.1;
 
     private static final double HEADROOM = 1.06;
     private static final int MILLISECONDS_PER_FRAME = 45;
@@ -215,7 +215,9 @@ public final class MotionPicture {
                 .build()
                 .asJavascript(0)));
         if (withLine) {
-            traces.add(Drawing.trace(Drawing.line("classical", 1.3)));
+            // A packet of a few pixels would vanish under a full line.
+            boolean narrow = 1 / motion.peak() < 0.01 * (motion.position(motion.points() - 1) - motion.position(0));
+            traces.add(Drawing.trace(narrow ? Drawing.dots("classical", 1.3) : Drawing.line("classical", 1.3)));
         }
         return Drawing.figure(layout, traces);
     }

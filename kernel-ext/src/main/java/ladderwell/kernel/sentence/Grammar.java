@@ -24,6 +24,9 @@ public record Grammar(List<Noun> nouns) {
     /** The first line of a cell of sentences, without the two percent signs. */
     public static final String CELL = "declare";
 
+    /** Most characters of a sentence, so that every text is answered in bounded time. */
+    public static final int LONGEST_SENTENCE = 100_000;
+
     private static final Key MASS_KEY = Key.quantity("mass", "mass of the particle", MASS);
     private static final Key NATURAL =
             Key.of("natural", Form.FLAG, "", "natural units: values are plain numbers, without units");
@@ -240,6 +243,13 @@ public record Grammar(List<Noun> nouns) {
      */
     public Sentence read(String text, Place sentence, Surroundings surroundings, Expressions expressions)
             throws MisreadSentence {
+        if (isTooLong(sentence)) {
+            throw new MisreadSentence(
+                    "a sentence has at most " + LONGEST_SENTENCE + " characters, not "
+                            + (sentence.end() - sentence.start()) + "; a long list can be given as a Java expression in"
+                            + " braces",
+                    new Place(sentence.start(), sentence.start()));
+        }
         return new SentenceReader(this, text, sentence, surroundings, expressions).read();
     }
 
@@ -251,20 +261,29 @@ public record Grammar(List<Noun> nouns) {
         return read(text, sentence, surroundings, (expression, place) -> Values.UNKNOWN);
     }
 
+    private static boolean isTooLong(Place sentence) {
+        return sentence.end() - sentence.start() > LONGEST_SENTENCE;
+    }
+
     /** What could stand at the cursor. */
     public Offers complete(SentenceText text, int cursor, Surroundings surroundings) {
-        return new Completer(this, surroundings).at(text, cursor);
+        return isTooLong(text.at(cursor))
+                ? Offers.none(Math.max(0, cursor))
+                : new Completer(this, surroundings).at(text, cursor);
     }
 
     /** The word at the cursor, if there is one. */
     public Optional<String> wordAt(SentenceText text, int cursor) {
         Place place = text.at(cursor);
+        if (isTooLong(place)) {
+            return Optional.empty();
+        }
         return Inspector.wordAt(Pieces.of(text.text(), place.start(), place.end()), cursor)
                 .map(Piece::text);
     }
 
     /** What the word at the cursor means, if it is a word of the language; declared names are the caller's business. */
     public Optional<Explanation> explain(SentenceText text, int cursor) {
-        return new Inspector(this).at(text, cursor);
+        return isTooLong(text.at(cursor)) ? Optional.empty() : new Inspector(this).at(text, cursor);
     }
 }

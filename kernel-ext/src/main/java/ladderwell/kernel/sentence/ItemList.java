@@ -132,7 +132,7 @@ final class ItemList {
             if (n < 6 && named(Outline.text(pieces.subList(0, n))).isPresent()) {
                 return new MisreadSentence(
                         "a comma is missing before "
-                                + Words.quoted(pieces.get(n).text()),
+                                + Words.quoted(pieces.get(n).typed()),
                         pieces.get(n).place());
             }
         }

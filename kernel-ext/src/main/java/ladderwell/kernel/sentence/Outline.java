@@ -57,7 +57,7 @@ record Outline(
     }
 
     static String text(List<Piece> pieces) {
-        return pieces.stream().map(Piece::text).collect(Collectors.joining(" "));
+        return pieces.stream().map(Piece::typed).collect(Collectors.joining(" "));
     }
 
     static Outline of(Grammar grammar, List<Piece> all) {

@@ -21,6 +21,15 @@ record Piece(Sort sort, String text, Place place) {
         STRAY
     }
 
+    /** The text as it was typed, braces and quotes included. */
+    String typed() {
+        return switch (sort) {
+            case JAVA -> "{" + text + "}";
+            case QUOTED -> '"' + text + '"';
+            default -> text;
+        };
+    }
+
     boolean is(Sort other) {
         return sort == other;
     }

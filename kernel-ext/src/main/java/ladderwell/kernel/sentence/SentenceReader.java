@@ -5,7 +5,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import javax.lang.model.SourceVersion;
 import ladderwell.kernel.sentence.Noun.Head;
 import ladderwell.kernel.sentence.Outline.Clause;
 import ladderwell.kernel.sentence.Piece.Sort;
@@ -37,10 +36,11 @@ final class SentenceReader {
     }
 
     Sentence read() throws MisreadSentence {
-        refuseLooseMarks();
-        Noun noun = noun();
-        Piece name = name(noun);
-        checkHead(noun);
+        Opening opening = new Opening(grammar, place, pieces, outline);
+        opening.refuseLooseMarks();
+        Noun noun = opening.noun();
+        Piece name = opening.name(noun);
+        opening.checkHead(noun);
         checkClauses(noun);
         readReferences(noun, name);
         if (outline.kind().isPresent()) {
@@ -57,127 +57,6 @@ final class SentenceReader {
                 Outline.placeOf(pieces).orElse(place),
                 values,
                 items);
-    }
-
-    private void refuseLooseMarks() throws MisreadSentence {
-        for (Piece piece : pieces) {
-            Place mark = new Place(piece.place().start(), piece.place().start() + 1);
-            if (piece.is(Sort.UNCLOSED)) {
-                boolean brace = piece.text().startsWith("{");
-                throw new MisreadSentence(
-                        brace
-                                ? "this brace is never closed; a Java expression ends with '}'"
-                                : "this quote is never closed; a quotation ends with '\"' on the same line",
-                        mark);
-            }
-            if (piece.is(Sort.STRAY)) {
-                throw new MisreadSentence("this closing brace closes nothing; an expression starts with '{'", mark);
-            }
-        }
-    }
-
-    private Noun noun() throws MisreadSentence {
-        List<String> nouns = grammar.nouns().stream().map(Noun::word).toList();
-        if (outline.nounPiece().isEmpty()) {
-            throw new MisreadSentence(
-                    "a sentence starts with a noun: " + Words.either(nouns), new Place(place.start(), place.start()));
-        }
-        Piece piece = outline.nounPiece().get();
-        if (outline.noun().isEmpty()) {
-            Optional<String> near = Words.nearest(piece.text(), nouns);
-            throw new MisreadSentence(
-                    Words.quoted(piece.text()) + " is no noun; a sentence starts with " + Words.either(nouns)
-                            + Words.didYouMean(near),
-                    piece.place());
-        }
-        return outline.noun().get();
-    }
-
-    private Piece name(Noun noun) throws MisreadSentence {
-        Place nounPlace = outline.nounPiece().orElseThrow().place();
-        String wanted = noun.declares() ? "a name" : "the name of " + Grammar.thing(noun.subject());
-        List<Piece> subject = outline.subject();
-        if (subject.isEmpty()) {
-            throw new MisreadSentence(
-                    wanted + " is missing after '" + noun.word() + "', as in '" + noun.example() + "'",
-                    nounPlace.behind());
-        }
-        Piece name = subject.get(0);
-        if (!name.is(Sort.WORD)) {
-            throw new MisreadSentence(
-                    "expected " + wanted + " after '" + noun.word() + "', not " + Words.quoted(name.text()),
-                    name.place());
-        }
-        checkColon(noun, name);
-        if (noun.declares()) {
-            checkIdentifier(name);
-        }
-        return name;
-    }
-
-    private void checkColon(Noun noun, Piece name) throws MisreadSentence {
-        List<Piece> subject = outline.subject();
-        String after = Words.quoted(name.text());
-        if (noun.head() == Head.NONE) {
-            if (outline.colon().isPresent()) {
-                throw new MisreadSentence(
-                        noun.word() + " takes no colon; the form is '" + noun.pattern() + "'",
-                        outline.colon().get().place());
-            }
-        } else if (outline.colon().isEmpty()) {
-            throw new MisreadSentence(
-                    "a colon is missing after " + after + "; the form is '" + noun.pattern() + "'",
-                    subject.size() > 1 ? subject.get(1).place() : name.place().behind());
-        } else if (subject.size() > 1) {
-            throw new MisreadSentence(
-                    "a name is one word; " + Words.quoted(subject.get(1).text()) + " is too much before the colon",
-                    subject.get(1).place());
-        }
-    }
-
-    private static void checkIdentifier(Piece name) throws MisreadSentence {
-        String text = name.text();
-        if (text.length() > 200 || !SourceVersion.isIdentifier(text)) {
-            throw new MisreadSentence(
-                    Words.quoted(text)
-                            + " cannot be a name; a name is made of letters, digits and _, starts with a letter,"
-                            + (text.length() > 200 ? " and is no longer than 200 characters" : " and has no blanks"),
-                    name.place());
-        }
-        if (SourceVersion.isKeyword(text)) {
-            throw new MisreadSentence(
-                    Words.quoted(text) + " cannot be a name, because it is a word of Java; take another", name.place());
-        }
-    }
-
-    private void checkHead(Noun noun) throws MisreadSentence {
-        if (noun.head() == Head.NONE || noun.head() == Head.ITEMS) {
-            return;
-        }
-        Place behindColon = outline.colon().orElseThrow().place().behind();
-        if (noun.head() == Head.REFERENCE) {
-            if (outline.head().isEmpty()) {
-                throw new MisreadSentence(
-                        "the name of " + Grammar.thing(noun.headNoun()) + " is missing after the colon", behindColon);
-            }
-            return;
-        }
-        if (outline.kind().isPresent()) {
-            return;
-        }
-        List<String> kinds = noun.kinds().stream().map(NounKind::word).toList();
-        String expected = "; kinds of " + noun.word() + " are " + Words.all(kinds);
-        if (outline.head().isEmpty()) {
-            throw new MisreadSentence("a kind is missing after the colon" + expected, behindColon);
-        }
-        List<Piece> head = outline.head();
-        List<Piece> two = head.subList(0, Math.min(2, head.size()));
-        Optional<String> nearTwo = Words.nearest(Outline.text(two), kinds);
-        Optional<String> near = nearTwo.or(() -> Words.nearest(head.get(0).text(), kinds));
-        List<Piece> wrong = nearTwo.isPresent() ? two : head.subList(0, 1);
-        throw new MisreadSentence(
-                Words.quoted(Outline.text(wrong)) + " is no kind of " + noun.word() + expected + Words.didYouMean(near),
-                Outline.placeOf(wrong).orElse(behindColon));
     }
 
     // ------------------------------------------------------------------ keys
@@ -226,7 +105,7 @@ final class SentenceReader {
         if (clause.joined()) {
             String lead = noun.lead().map(key -> " or '" + key.typed() + "'").orElse("");
             return new MisreadSentence(
-                    Words.quoted(first.text()) + " is too much here; expected a comma" + lead
+                    Words.quoted(first.typed()) + " is too much here; expected a comma" + lead
                             + Words.didYouMean(Words.nearest(first.text(), keys)),
                     first.place());
         }
@@ -239,36 +118,37 @@ final class SentenceReader {
                 .isPresent();
         if (digits && afterDigits) {
             return new MisreadSentence(
-                    "expected a key after the comma, not " + Words.quoted(first.text())
+                    "expected a key after the comma, not " + Words.quoted(first.typed())
                             + "; decimals are written with a point, as in 9.5",
                     first.place());
         }
         String of = outline.kind().map(kind -> Words.article(kind.phrase())).orElse("'" + noun.word() + "'");
         return new MisreadSentence(
-                Words.quoted(first.text()) + " is no key of " + of + "; expected " + Words.either(keys)
+                Words.quoted(first.typed()) + " is no key of " + of + "; expected " + Words.either(keys)
                         + Words.didYouMean(Words.nearest(first.text(), keys)),
                 first.place());
     }
 
     private static MisreadSentence commaMissing(Piece piece) {
-        return new MisreadSentence("a comma is missing before " + Words.quoted(piece.text()), piece.place());
+        return new MisreadSentence("a comma is missing before " + Words.quoted(piece.typed()), piece.place());
     }
 
     // ------------------------------------------------------------------ names spoken of
 
     private void readReferences(Noun noun, Piece name) throws MisreadSentence {
+        References references = new References(grammar, surroundings, outline.kind());
         if (!noun.declares()) {
-            refer(noun.subject(), name, noun.word());
+            speakOf(references.known(noun.subject(), name, noun.word()));
         }
         if (noun.head() == Head.REFERENCE) {
             Piece head = outline.head().get(0);
             if (!head.is(Sort.WORD)) {
                 throw new MisreadSentence(
                         "expected the name of " + Grammar.thing(noun.headNoun()) + " after the colon, not "
-                                + Words.quoted(head.text()),
+                                + Words.quoted(head.typed()),
                         head.place());
             }
-            Known known = refer(noun.headNoun(), head, noun.word());
+            Known known = speakOf(references.known(noun.headNoun(), head, noun.word()));
             values.put(noun.headNoun(), new Value(known.name(), List.of(), head.place()));
         }
         for (Clause clause : outline.clauses()) {
@@ -278,65 +158,20 @@ final class SentenceReader {
             Key key = clause.key().get();
             if (key.form() == Form.REFERENCE) {
                 Piece spoken = one(key, clause);
-                Known known = refer(key.noun(), spoken, key.word());
-                checkHome(key, known, spoken.place());
+                Known known = speakOf(references.known(key.noun(), spoken, key.word()));
+                references.checkHome(key, known, spoken.place());
                 values.put(key.word(), new Value(known.name(), List.of(), spoken.place()));
             } else if (key.form() == Form.FLAG && key.word().equals("natural")) {
-                natural = Optional.of(Words.quoted(name.text()));
+                natural = Optional.of(Words.quoted(name.typed()));
             }
         }
     }
 
-    private Known refer(String noun, Piece piece, String taker) throws MisreadSentence {
-        String name = piece.text();
-        String thing = Grammar.thing(noun);
-        List<String> fitting = surroundings.all().stream()
-                .filter(known -> known.noun().equals(noun))
-                .map(Known::name)
-                .toList();
-        Optional<Known> found = name.length() > 200 ? Optional.empty() : surroundings.find(name);
-        if (found.isEmpty()) {
-            String hint = fitting.isEmpty()
-                    ? "; none is declared yet, as in '"
-                            + grammar.noun(noun).map(Noun::example).orElse(noun) + "'"
-                    : Words.didYouMean(Words.nearest(name, fitting));
-            throw new MisreadSentence(
-                    "there is no " + thing.substring(thing.indexOf(' ') + 1) + " " + Words.quoted(name) + hint,
-                    piece.place());
-        }
-        Known known = found.get();
-        if (!known.noun().equals(noun)) {
-            String such = fitting.isEmpty() ? "" : ", such as " + fitting.get(fitting.size() - 1);
-            throw new MisreadSentence(
-                    Words.quoted(name) + " is " + Grammar.thing(known.noun()) + "; '" + taker + "' takes " + thing
-                            + such,
-                    piece.place());
-        }
+    private Known speakOf(Known known) {
         if (known.natural()) {
-            natural = Optional.of(Words.quoted(name));
+            natural = Optional.of(Words.quoted(known.name()));
         }
         return known;
-    }
-
-    private void checkHome(Key key, Known known, Place at) throws MisreadSentence {
-        List<String> homes = outline.kind().map(NounKind::homes).orElse(List.of());
-        if (homes.isEmpty() || homes.contains(known.kind())) {
-            return;
-        }
-        List<String> phrases =
-                homes.stream().map(home -> phrase(key.noun(), home)).toList();
-        throw new MisreadSentence(
-                Words.article(outline.kind().orElseThrow().phrase()) + " lives in "
-                        + Words.either(phrases.stream().map(Words::article).toList()) + "; "
-                        + Words.quoted(known.name()) + " is " + Words.article(phrase(key.noun(), known.kind())),
-                at);
-    }
-
-    private String phrase(String noun, String kind) {
-        return grammar.noun(noun)
-                .flatMap(some -> some.kind(kind))
-                .map(NounKind::phrase)
-                .orElse(kind);
     }
 
     // ------------------------------------------------------------------ values
@@ -377,7 +212,7 @@ final class SentenceReader {
         }
         if (key.form() == Form.NEW_NAME) {
             Piece name = one(key, clause);
-            checkIdentifier(name);
+            Opening.checkIdentifier(name);
             return new Value(name.text(), List.of(), name.place());
         }
         List<Term> terms = terms(key, clause);
@@ -429,9 +264,7 @@ final class SentenceReader {
         Piece first = clause.value().get(0);
         if (!first.is(Sort.WORD)) {
             throw new MisreadSentence(
-                    key.word() + " takes " + key.expected() + ", not "
-                            + Words.quoted(first.is(Sort.JAVA) ? "{" + first.text() + "}" : first.text()),
-                    first.place());
+                    key.word() + " takes " + key.expected() + ", not " + Words.quoted(first.typed()), first.place());
         }
         if (clause.value().size() > 1) {
             throw after(Term.word(clause.value().get(1)), first.text());

@@ -93,7 +93,9 @@ public record SentenceText(String text, Optional<Place> opening, List<Place> sen
             return;
         }
         Place place = opening.get();
-        List<Piece> pieces = Pieces.of(text, place.start(), place.end()).stream()
+        // What stands beyond so many characters is too much anyway.
+        int end = Math.min(place.end(), place.start() + Grammar.LONGEST_SENTENCE);
+        List<Piece> pieces = Pieces.of(text, place.start(), end).stream()
                 .filter(piece -> !piece.is(Piece.Sort.COMMENT))
                 .toList();
         if (pieces.isEmpty()) {

@@ -56,7 +56,7 @@ record Term(String text, Place place, Optional<Object> result, boolean word) {
 
     /** A piece that is no expression. */
     static Term word(Piece piece) {
-        return new Term(piece.text(), piece.place(), Optional.empty(), piece.is(Sort.WORD));
+        return new Term(piece.typed(), piece.place(), Optional.empty(), piece.is(Sort.WORD));
     }
 
     boolean isUnknown() {

@@ -186,12 +186,6 @@ final class Values {
         if (real != Math.rint(real)) {
             throw notExpected(term);
         }
-        if (Math.abs(real) >= 0x1p63) {
-            throw new MisreadSentence(
-                    key.word() + " " + Words.quoted(term.text()) + " is too large; whole numbers reach to "
-                            + Long.MAX_VALUE,
-                    term.place());
-        }
         long whole = exact(term, real);
         if (whole < key.least() || whole > key.most()) {
             String range = whole < key.least() ? "at least " + key.least() : "at most " + key.most();
@@ -201,17 +195,20 @@ final class Values {
     }
 
     /** Digits are read as they stand; what was written with a power of ten, such as 1e17, is the nearest double. */
-    private static long exact(Term term, double real) {
-        if (term.result().isPresent()) {
-            return term.result().get() instanceof Number number
-                            && !(number instanceof Double)
-                            && !(number instanceof Float)
-                    ? number.longValue()
-                    : (long) real;
+    private long exact(Term term, double real) throws MisreadSentence {
+        if (term.result().isPresent()
+                && (term.result().get() instanceof Long || term.result().get() instanceof Integer)) {
+            return ((Number) term.result().get()).longValue();
         }
         try {
             return Long.parseLong(term.text().replace('−', '-'));
         } catch (NumberFormatException e) {
+            if (Math.abs(real) >= 0x1p63) {
+                throw new MisreadSentence(
+                        key.word() + " " + Words.quoted(term.text())
+                                + " is too large; whole numbers reach to about 9.2e18",
+                        term.place());
+            }
             return (long) real;
         }
     }

@@ -151,7 +151,7 @@ function motion(root, p) {
     top.layout.annotations = [
       word(m.words.energy, ink.ochre, Object.assign({y: m.energy}, e)),
       word(m.words.potential, ink.grey, {xref: 'paper', x: 1, xanchor: 'left', yref: 'paper', y: 1, yanchor: 'top', xshift: 5, align: 'left'}),
-      word('\u27e8x\u27e9', ink.teal, {xref: 'paper', x: 0, xanchor: 'left', xshift: 3, yref: 'y', y: -rail / 2})
+      word('\u27e8x\u27e9', ink.teal, {xref: 'paper', x: 0, xanchor: 'right', xshift: -6, yref: 'y', y: -rail * 0.66})
     ];
     below.layout.annotations = [word(below.traces[1] ? '\u25cb\u2009\u2014<br>classical' : '\u25cb classical', ink.red,
       {xref: 'paper', x: 1, xanchor: 'left', xshift: 12, yref: 'paper', y: 1, yanchor: 'top', align: 'left'})];
@@ -286,7 +286,7 @@ function figure(root, p) {
     p.layout.colorway = [ink.teal, ink.ochre, ink.indigo, ink.plum, ink.red, ink.grey];
     ['xaxis', 'yaxis'].forEach(function (name) {
       var axis = p.layout[name] = p.layout[name] || {};
-      axis.gridcolor = axis.zerolinecolor = ink.faint;
+      axis.gridcolor = axis.zerolinecolor = 'rgba(128,128,128,.22)';
     });
     p.layout.width = asked ? Math.min(asked, Math.max(300, root.clientWidth || asked)) : width(root);
   }

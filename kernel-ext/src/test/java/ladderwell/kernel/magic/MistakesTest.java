@@ -7,6 +7,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.List;
 import ladderwell.Oscillator;
 import ladderwell.kernel.cell.SentenceFailure;
+import ladderwell.quantity.Quantity;
+import ladderwell.quantity.Units;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -91,7 +93,7 @@ class MistakesTest {
                 "%state x: coherent in trap, alpha «1+2» | alpha takes a complex number such as 1.5+0.5i, not '1+2'",
                 "%state x: number in trap, level «1.5» | level takes a whole number such as 3, not '1.5'",
                 "%state x: number in trap, level «-1» | level must be at least 0, not -1",
-                "%state x: number in trap, level «1e30» | level '1e30' is too large; whole numbers reach to 9223372036854775807",
+                "%state x: number in trap, level «1e30» | level '1e30' is too large; whole numbers reach to about 9.2e18",
                 "%state x: superposition in trap, levels 0 «one» 2 | levels takes whole numbers such as 0 1 2, not 'one'",
                 "%state x: superposition in trap, levels 0 1, weights «1 i 2» | there are 2 levels but 3 weights; expected one weight for each level, in the same order",
                 // names spoken of
@@ -179,6 +181,37 @@ class MistakesTest {
     }
 
     @Test
+    void anOscillatorWhoseScaleLeavesTheRangeOfNumbersIsRefusedWhenItIsDeclared() throws SentenceFailure {
+        assertRefused("outside the range of numbers", "%oscillator x: box, mass 1e-300 kg, width 1e-300 m");
+        assertRefused("the length of a scale", "%oscillator x: harmonic, mass 1e300 kg, frequency 1e300 Hz");
+        bench.javaVariable(
+                "mine", Oscillator.harmonic().mass(1e300, Units.KILOGRAM).frequency(1e300, Units.HERTZ));
+        bench.run("%state y: number in trap, level 1");
+        assertRefused("the length of a scale", "%state x: coherent in mine, displacement 1 m");
+    }
+
+    @Test
+    void aPacketThatTheBoundLevelsCannotCarryIsRefusedWithTheMissingWeight() {
+        SentenceFailure failure =
+                assertThrows(SentenceFailure.class, () -> bench.run("%state x: gaussian in well, spread 50 nm"));
+        assertTrue(failure.message().contains("needs weight 0."), failure.message());
+        assertEquals(
+                " ".repeat(8 + 35) + "^".repeat("50 nm".length()),
+                failure.lines().get(1));
+    }
+
+    @Test
+    void aDurationBeyondTheRangeOfNumbersIsRefused() {
+        assertRefused("a duration of 1e300 s is too long", "%evolve x: psi for 1e300 s");
+    }
+
+    private void assertRefused(String part, String cell) {
+        String message =
+                assertThrows(SentenceFailure.class, () -> bench.run(cell)).message();
+        assertTrue(message.contains(part), message);
+    }
+
+    @Test
     void nothingDeclaredYetIsSaidWithAnExample() {
         Bench empty = new Bench();
         SentenceFailure failure =
@@ -222,7 +255,7 @@ class MistakesTest {
         bench.expressions.put("none", new int[0]);
         bench.expressions.put("text", "nine");
         bench.expressions.put("list", "1, 2");
-        bench.expressions.put("len", ladderwell.quantity.Quantity.of(3, ladderwell.quantity.Units.METRE));
+        bench.expressions.put("len", Quantity.of(3, Units.METRE));
         assertMessage("mean must be a finite number; '{nan}' is NaN", "%state x: coherent in trap, mean {nan}");
         assertMessage(
                 "'{osc}' gives a Box; mean takes a plain number such as 9.5", "%state x: coherent in trap, mean {osc}");
@@ -253,7 +286,7 @@ class MistakesTest {
 
     @Test
     void whateverCannotBeShownIsReplaced() {
-        String key = "\u0000\u0007\ud800" + "k".repeat(1 << 20);
+        String key = "\u0000\u0007\ud800" + "k".repeat(90_000);
         SentenceFailure failure =
                 assertThrows(SentenceFailure.class, () -> bench.run("%oscillator x: box, " + key + " 3 nm"));
         assertTrue(failure.message().startsWith("'\uFFFD\uFFFD\uFFFDkkkk"), failure.message());

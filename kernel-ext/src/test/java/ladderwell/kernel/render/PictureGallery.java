@@ -1,10 +1,15 @@
 package ladderwell.kernel.render;
 
+import static ladderwell.quantity.Units.PERIOD;
+
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import ladderwell.kernel.magic.Declared;
+import tech.tablesaw.api.DoubleColumn;
+import tech.tablesaw.api.Table;
+import tech.tablesaw.plotly.api.LinePlot;
 
 /** Pages to be looked at in a browser, by a test or by a person: one cell below the other, as an exported notebook has them. */
 final class PictureGallery {
@@ -40,7 +45,14 @@ final class PictureGallery {
                 Scenarios.levels("well", Scenarios.WELL, 0, 1, 2, 3, 4, 5),
                 Scenarios.levels("box", Scenarios.BOX, 0, 1, 2, 3),
                 Scenarios.levels("trap", Scenarios.TRAP, 0, 1, 2, 3, 4),
-                Scenarios.animation("nat", Scenarios.natural()));
+                Scenarios.animation("nat", Scenarios.natural()),
+                Scenarios.animation("far", Scenarios.TRAP.coherent(1e4).evolve(2, PERIOD).run()),
+                Scenarios.animation("wave", Scenarios.BOX.superposition(0, 1, 2, 3).evolve(3, PERIOD).run()),
+                LinePlot.create(
+                        "squares",
+                        Table.create("t", DoubleColumn.create("x", 1, 2, 3), DoubleColumn.create("y", 1, 4, 9)),
+                        "x",
+                        "y"));
     }
 
     static void write(Path directory) throws IOException {

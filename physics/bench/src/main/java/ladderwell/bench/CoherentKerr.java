@@ -45,8 +45,7 @@ final class CoherentKerr {
     /** The whole task: coefficients at all times, means and variances of x and p. */
     void run() {
         ExactPhases phases = ExactPhases.of(energy, zero, coefficients, zero, times);
-        phases.fill(0, TIMES, re, im);
-        LadderSums sums = LadderSums.of(phases, 0, Workers.CALLER);
+        LadderSums sums = LadderSums.of(phases, 0, re, im, Workers.CALLER);
         double root = Math.sqrt(2);
         for (int j = 0; j < TIMES; j++) {
             x[j] = root * sums.amplitudeRe(j);

@@ -15,7 +15,7 @@ final class Partner implements AutoCloseable {
      * The time and error of one way to do the task.
      *
      * @param name a leading star marks a way beyond ordinary craft, shown beside the goal but not part of it
-     * @param milliseconds median time of one run
+     * @param milliseconds shortest time of one run in a sample
      */
     record Variant(String name, double milliseconds, double error) {
         boolean tuned() {

@@ -17,7 +17,7 @@ final class RandomPacket {
     final double[][] re = new double[TIMES][LEVELS];
     final double[][] im = new double[TIMES][LEVELS];
     private final DensityFrames frames = DensityFrames.alternating(functions);
-    private double[][] density = {};
+    private final double[][] density = new double[TIMES][POINTS];
 
     RandomPacket() {
         Random random = new Random(3);
@@ -44,7 +44,7 @@ final class RandomPacket {
     }
 
     void run(Workers workers) {
-        density = frames.of(re, im, workers);
+        frames.fill(re, im, density, workers);
     }
 
     /** Largest error at every 40th time, against compensated sums (exact products, error carried along). */

@@ -52,7 +52,7 @@ public final class SideBySide {
         sides.notes.forEach(System.out::println);
         System.out.println("""
 
-                Ratios of times: median over %d rounds taken in turn, range in brackets. NumPy is the fastest of its variants whose error is
+                Ratios of times, each the shortest of a sample: median over %d rounds taken in turn, range in brackets. NumPy is the fastest of its variants whose error is
                 no more than 1000 times ours or 1e-10; a tuned variant (*) goes beyond ordinary craft and is no part of the goal.
                 Errors: ours, then NumPy's, as the task's script defines them.""".formatted(sides.rounds));
         System.exit(all ? 0 : 1);
@@ -106,7 +106,17 @@ public final class SideBySide {
                 tuned == plain ? "" : shown(ratios(ours, tuned)),
                 String.format(Locale.ROOT, "%.1e %.1e", error, plain.error()),
                 String.format(Locale.ROOT, "%.3g %s", task.goal(), met ? "met" : "MISSED"));
+        StringBuilder times = new StringBuilder("shortest runs in ms, " + task.name() + ", threads " + task.threads());
+        times.append(String.format(Locale.ROOT, ": ours %.3g", median(ours)));
+        others.forEach((name, of) -> times.append(String.format(Locale.ROOT, "; %s %.3g", name, median(of))));
+        note(times.toString());
         return met;
+    }
+
+    private static double median(double[] values) {
+        double[] sorted = values.clone();
+        Arrays.sort(sorted);
+        return sorted[sorted.length / 2];
     }
 
     private void note(String text) {
@@ -131,9 +141,7 @@ public final class SideBySide {
     }
 
     private static double median(Times times) {
-        double[] sorted =
-                times.milliseconds().stream().mapToDouble(t -> t).sorted().toArray();
-        return sorted[sorted.length / 2];
+        return median(times.milliseconds().stream().mapToDouble(t -> t).toArray());
     }
 
     /** The ratios of each round, sorted. */
@@ -151,21 +159,20 @@ public final class SideBySide {
 
     private static void warm(Runnable run) {
         long start = System.nanoTime();
-        for (int i = 0; i < 5 || (System.nanoTime() - start < 2_000_000_000L && i < 20_000); i++) {
+        for (int i = 0; i < 5 || (System.nanoTime() - start < 3_000_000_000L && i < 50_000); i++) {
             run.run();
         }
     }
 
-    /** Median time of one run, over at least 80 ms or three runs, as in partner.py. */
+    /** Shortest time of one run in a sample of at least 300 ms or three runs, as in partner.py: what the machine can do undisturbed. */
     private static double milliseconds(Runnable run) {
-        List<Double> times = new ArrayList<>();
+        double shortest = Double.POSITIVE_INFINITY;
         long start = System.nanoTime();
-        while (times.size() < 3 || (System.nanoTime() - start < 80_000_000L && times.size() < 25)) {
+        for (int i = 0; i < 3 || System.nanoTime() - start < 300_000_000L; i++) {
             long before = System.nanoTime();
             run.run();
-            times.add((System.nanoTime() - before) * 1e-6);
+            shortest = Math.min(shortest, (System.nanoTime() - before) * 1e-6);
         }
-        double[] sorted = times.stream().mapToDouble(t -> t).sorted().toArray();
-        return sorted[sorted.length / 2];
+        return shortest;
     }
 }
