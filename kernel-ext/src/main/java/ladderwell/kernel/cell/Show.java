@@ -1,27 +1,31 @@
 package ladderwell.kernel.cell;
 
 import java.util.Optional;
-import java.util.concurrent.atomic.AtomicReference;
+import org.jspecify.annotations.Nullable;
 
 /**
  * What a Java cell may call to show values before its end. Every notebook imports these methods by name. They speak to
  * the running cell, from whatever thread they are called.
  */
 public final class Show {
-    private static final AtomicReference<Optional<CellRun>> RUNNING = new AtomicReference<>(Optional.empty());
+    private static volatile @Nullable CellRun running;
 
     private Show() {}
 
     static void during(CellRun run) {
-        RUNNING.set(Optional.of(run));
+        running = run;
     }
 
     static void ended() {
-        RUNNING.set(Optional.empty());
+        running = null;
     }
 
     private static CellRun cell() {
-        return RUNNING.get().orElseThrow(() -> new IllegalStateException("nothing can be shown: no cell is running"));
+        CellRun cell = running;
+        if (cell == null) {
+            throw new IllegalStateException("nothing can be shown: no cell is running");
+        }
+        return cell;
     }
 
     /** Shows a value below the cell. */
