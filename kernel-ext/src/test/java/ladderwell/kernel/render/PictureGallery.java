@@ -46,8 +46,14 @@ final class PictureGallery {
                 Scenarios.levels("box", Scenarios.BOX, 0, 1, 2, 3),
                 Scenarios.levels("trap", Scenarios.TRAP, 0, 1, 2, 3, 4),
                 Scenarios.animation("nat", Scenarios.natural()),
-                Scenarios.animation("far", Scenarios.TRAP.coherent(1e4).evolve(2, PERIOD).run()),
-                Scenarios.animation("wave", Scenarios.BOX.superposition(0, 1, 2, 3).evolve(3, PERIOD).run()),
+                Scenarios.animation(
+                        "far", Scenarios.TRAP.coherent(1e4).evolve(2, PERIOD).run()),
+                Scenarios.animation(
+                        "wave",
+                        Scenarios.BOX
+                                .superposition(0, 1, 2, 3)
+                                .evolve(3, PERIOD)
+                                .run()),
                 LinePlot.create(
                         "squares",
                         Table.create("t", DoubleColumn.create("x", 1, 2, 3), DoubleColumn.create("y", 1, 4, 9)),
