@@ -1,7 +1,6 @@
 package ladderwell.kernel.command;
 
 import java.io.PrintWriter;
-import java.util.Optional;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Model.CommandSpec;
@@ -49,11 +48,12 @@ final class CommandTable implements Runnable {
     private static int mistyped(ParameterException mistake, String[] arguments) {
         CommandLine command = mistake.getCommandLine();
         PrintWriter err = command.getErr();
-        Optional<String> nearest = mistake instanceof UnmatchedArgumentException unmatched
-                ? unmatched.getSuggestions().stream().findFirst()
-                : Optional.empty();
-        err.println("ladderwell: " + mistake.getMessage()
-                + nearest.map(word -> "; did you mean '" + word + "'?").orElse("") + " (see '"
+        boolean unknownCommand =
+                mistake instanceof UnmatchedArgumentException && command.getParent() == null;
+        String message = unknownCommand
+                ? "there is no command " + String.join(" ", arguments) + "; expected run, install or kernel"
+                : String.valueOf(mistake.getMessage());
+        err.println("ladderwell: " + message + " (see '"
                 + command.getCommandSpec().qualifiedName() + " --help')");
         return WRONG;
     }

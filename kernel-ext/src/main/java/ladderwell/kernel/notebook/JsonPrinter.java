@@ -7,6 +7,7 @@ import com.google.gson.JsonPrimitive;
 import java.util.Comparator;
 import java.util.Iterator;
 import java.util.List;
+import java.util.function.Consumer;
 
 /**
  * Prints JSON byte for byte as Jupyter writes notebooks: keys in the order of their code points, one blank of indent,
@@ -37,6 +38,10 @@ final class JsonPrinter {
             printList(array.iterator(), '[', ']', depth, item -> print(item, depth + 1));
         } else if (element instanceof JsonPrimitive primitive && primitive.isString()) {
             string(primitive.getAsString());
+        } else if (element instanceof JsonPrimitive primitive
+                && primitive.isNumber()
+                && primitive.getAsNumber() instanceof Double number) {
+            out.append(NumberText.of(number));
         } else {
             // A number that was read keeps the digits it was written with.
             out.append(element.isJsonNull() ? "null" : element.getAsString());
@@ -44,7 +49,7 @@ final class JsonPrinter {
     }
 
     private <T> void printList(
-            Iterator<T> items, char open, char close, int depth, java.util.function.Consumer<T> printItem) {
+            Iterator<T> items, char open, char close, int depth, Consumer<T> printItem) {
         out.append(open);
         if (items.hasNext()) {
             while (items.hasNext()) {

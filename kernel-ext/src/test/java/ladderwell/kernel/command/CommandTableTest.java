@@ -59,8 +59,13 @@ class CommandTableTest {
     }
 
     @Test
-    void aMistypedCommandIsRefusedWithTheNearestOne() throws Exception {
-        assertEquals("Unmatched argument at index 0: 'rin'; did you mean 'run'? (see 'ladderwell --help')", refusal("rin"));
+    void aMistypedCommandIsRefusedWithThoseThereAre() throws Exception {
+        assertEquals(
+                "there is no command rin x; expected run, install or kernel (see 'ladderwell --help')",
+                refusal("rin", "x"));
+        err.getBuffer().setLength(0);
+        assertEquals(
+                "Unknown option: '--htm' (see 'ladderwell run --help')", refusal("run", "a.ipynb", "--htm"));
     }
 
     @Test

@@ -68,8 +68,8 @@ class ScriptTest {
                 "sh", "sed", "head", "tail", "cat", "find", "mkdir", "mv", "rm", "touch", "dirname", "readlink", "sleep",
                 "kill")) {
             for (String place : List.of("/bin/", "/usr/bin/")) {
-                if (Files.exists(Path.of(place + tool)) && !Files.exists(programs.resolve(tool))) {
-                    Files.createSymbolicLink(programs.resolve(tool), Path.of(place + tool));
+                if (Files.exists(Path.of(place + tool))) {
+                    program(tool, "#!/bin/sh\nexec " + place + tool + " \"$@\"\n");
                 }
             }
         }
