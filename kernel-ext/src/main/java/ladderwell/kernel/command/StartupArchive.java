@@ -10,7 +10,8 @@ import java.util.concurrent.TimeUnit;
 
 /**
  * The class-data archive of an installed kernel. It is made by starting the kernel once as Jupyter would and letting it
- * work ({@link TrainCommand}); a Java that it does not fit ignores it.
+ * work ({@link TrainCommand}); a Java that it does not fit ignores it. Java 17 finds in it only the classes of the JDK
+ * where the path of the jar holds blanks or letters outside ASCII; 25 finds all.
  */
 final class StartupArchive {
     private static final long LONGEST_SECONDS = 180;

@@ -179,7 +179,8 @@ final class CellKernel extends BaseKernel {
             return;
         }
         boolean stored = request.shouldStoreHistory() && !request.isSilent();
-        int number = stored ? executionCount.incrementAndGet() : Math.max(1, executionCount.get());
+        // The count of the base library stands at the number of the next cell, 1 at first.
+        int number = stored ? executionCount.getAndIncrement() : executionCount.get();
         CellMessages messages = new CellMessages(publisher(), message, request.isSilent());
         messages.send(MessageType.PUBLISH_EXECUTE_INPUT, Map.of("code", request.getCode(), "execution_count", number));
         CellEnd cellEnd = workbench.run(request.getCode(), number, messages);
