@@ -28,7 +28,8 @@ public record Evolution(State state, Quantity duration, long frames, double tole
             throw new IllegalArgumentException("frames must be at least 1, not " + frames);
         }
         if (!(tolerance >= 1e-13 && tolerance <= 0.1)) {
-            throw new IllegalArgumentException("tolerance must lie between 1e-13 and 0.1, not " + Checks.number(tolerance));
+            throw new IllegalArgumentException(
+                    "tolerance must lie between 1e-13 and 0.1, not " + Checks.number(tolerance));
         }
     }
 

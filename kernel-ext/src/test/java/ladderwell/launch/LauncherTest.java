@@ -28,8 +28,8 @@ class LauncherTest {
 
     @Test
     void java8CanLoadIt() throws Exception {
-        try (DataInputStream in = new DataInputStream(
-                Objects.requireNonNull(Launcher.class.getResourceAsStream("Launcher.class")))) {
+        try (DataInputStream in =
+                new DataInputStream(Objects.requireNonNull(Launcher.class.getResourceAsStream("Launcher.class")))) {
             assertEquals(0xCAFEBABE, in.readInt());
             assertEquals(0, in.readUnsignedShort());
             // The class file version of Java 8 (Java Virtual Machine Specification, table 4.1-A).

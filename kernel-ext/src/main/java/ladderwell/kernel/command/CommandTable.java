@@ -48,13 +48,12 @@ final class CommandTable implements Runnable {
     private static int mistyped(ParameterException mistake, String[] arguments) {
         CommandLine command = mistake.getCommandLine();
         PrintWriter err = command.getErr();
-        boolean unknownCommand =
-                mistake instanceof UnmatchedArgumentException && command.getParent() == null;
+        boolean unknownCommand = mistake instanceof UnmatchedArgumentException && command.getParent() == null;
         String message = unknownCommand
                 ? "there is no command " + String.join(" ", arguments) + "; expected run, install or kernel"
                 : String.valueOf(mistake.getMessage());
-        err.println("ladderwell: " + message + " (see '"
-                + command.getCommandSpec().qualifiedName() + " --help')");
+        err.println(
+                "ladderwell: " + message + " (see '" + command.getCommandSpec().qualifiedName() + " --help')");
         return WRONG;
     }
 

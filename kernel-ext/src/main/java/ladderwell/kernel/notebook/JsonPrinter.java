@@ -48,8 +48,7 @@ final class JsonPrinter {
         }
     }
 
-    private <T> void printList(
-            Iterator<T> items, char open, char close, int depth, Consumer<T> printItem) {
+    private <T> void printList(Iterator<T> items, char open, char close, int depth, Consumer<T> printItem) {
         out.append(open);
         if (items.hasNext()) {
             while (items.hasNext()) {

@@ -64,8 +64,7 @@ class CommandTableTest {
                 "there is no command rin x; expected run, install or kernel (see 'ladderwell --help')",
                 refusal("rin", "x"));
         err.getBuffer().setLength(0);
-        assertEquals(
-                "Unknown option: '--htm' (see 'ladderwell run --help')", refusal("run", "a.ipynb", "--htm"));
+        assertEquals("Unknown option: '--htm' (see 'ladderwell run --help')", refusal("run", "a.ipynb", "--htm"));
     }
 
     @Test
@@ -111,7 +110,11 @@ class CommandTableTest {
         Path nowhere = folder.resolve("nowhere");
         assertEquals(
                 "there is no folder " + nowhere + " to write o.ipynb to",
-                refusal("run", file.toString(), "--output", nowhere.resolve("o.ipynb").toString()));
+                refusal(
+                        "run",
+                        file.toString(),
+                        "--output",
+                        nowhere.resolve("o.ipynb").toString()));
         err.getBuffer().setLength(0);
         assertEquals(folder + " cannot be written", refusal("run", file.toString(), "--html", folder.toString()));
         err.getBuffer().setLength(0);

@@ -111,8 +111,8 @@ class InstallJarTest {
     void theArchiveIsUsed() throws Exception {
         // Java 17 passes over archived classes of a jar whose path holds blanks or letters outside ASCII.
         Path plain = folder.resolve("plain");
-        Outcome installed = java(
-                "-jar", kernel.resolve("ladderwell.jar").toString(), "install", "--prefix", plain.toString());
+        Outcome installed =
+                java("-jar", kernel.resolve("ladderwell.jar").toString(), "install", "--prefix", plain.toString());
         assertEquals(0, installed.exitCode(), installed.text());
         Path log = folder.resolve("classes.log");
         List<String> command = argv(plain.resolve("share/jupyter/kernels/ladderwell"));
@@ -219,7 +219,8 @@ class InstallJarTest {
         assertEquals(3, outcome.exitCode());
         assertEquals(1, outcome.text().lines().count(), outcome.text());
         assertTrue(
-                outcome.text().startsWith("ladderwell: a full JDK is needed, with the module jdk.jshell; this is Java "),
+                outcome.text()
+                        .startsWith("ladderwell: a full JDK is needed, with the module jdk.jshell; this is Java "),
                 outcome.text());
     }
 

@@ -35,7 +35,8 @@ class RunCommandTest {
     }
 
     private Path notebook(String... cells) throws Exception {
-        StringBuilder text = new StringBuilder("{\"nbformat\": 4, \"nbformat_minor\": 2, \"metadata\": {}, \"cells\": [");
+        StringBuilder text =
+                new StringBuilder("{\"nbformat\": 4, \"nbformat_minor\": 2, \"metadata\": {}, \"cells\": [");
         for (int i = 0; i < cells.length; i++) {
             text.append(i == 0 ? "" : ",")
                     .append("{\"cell_type\": \"code\", \"metadata\": {}, \"outputs\": [], \"execution_count\": null,")
@@ -129,7 +130,9 @@ class RunCommandTest {
                 Thread.sleep(50);
             }
             Thread.sleep(500);
-            new ProcessBuilder("kill", "-INT", String.valueOf(process.pid())).start().waitFor();
+            new ProcessBuilder("kill", "-INT", String.valueOf(process.pid()))
+                    .start()
+                    .waitFor();
             assertTrue(process.waitFor(60, TimeUnit.SECONDS), Files.readString(said));
             assertEquals(130, process.exitValue(), Files.readString(said));
         } finally {

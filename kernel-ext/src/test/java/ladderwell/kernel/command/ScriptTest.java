@@ -21,8 +21,7 @@ import org.junit.jupiter.api.io.TempDir;
 
 /** {@code kernel-ext/bin/ladderwell} in a copy of the tree's outline, with stand-ins for Java and Maven. */
 class ScriptTest {
-    private static final String JAVA_17 =
-            """
+    private static final String JAVA_17 = """
             #!/bin/sh
             if [ "$1" = -version ]; then
                 echo 'openjdk version "17.0.9" 2023-10-17' >&2
@@ -32,8 +31,7 @@ class ScriptTest {
             fi
             """;
 
-    private static final String MAVEN =
-            """
+    private static final String MAVEN = """
             #!/bin/sh
             echo "$@" >>"$BUILDS"
             sleep 1
@@ -65,7 +63,19 @@ class ScriptTest {
         Files.copy(Path.of("bin/ladderwell"), script);
         programs = Files.createDirectories(folder.resolve("programs"));
         for (String tool : List.of(
-                "sh", "sed", "head", "tail", "cat", "find", "mkdir", "mv", "rm", "touch", "dirname", "readlink", "sleep",
+                "sh",
+                "sed",
+                "head",
+                "tail",
+                "cat",
+                "find",
+                "mkdir",
+                "mv",
+                "rm",
+                "touch",
+                "dirname",
+                "readlink",
+                "sleep",
                 "kill")) {
             for (String place : List.of("/bin/", "/usr/bin/")) {
                 if (Files.exists(Path.of(place + tool))) {

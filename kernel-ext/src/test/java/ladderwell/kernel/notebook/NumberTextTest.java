@@ -19,8 +19,26 @@ class NumberTextTest {
     @Test
     void numbersHaveTheFormOfPythons() {
         Map<Double, String> expected = Map.of(
-                1e-9, "1e-09", 1.5e-5, "1.5e-05", 1e-4, "0.0001", 1.0, "1.0", -120.0, "-120.0", 1e15, "1000000000000000.0",
-                1e16, "1e+16", 2e-323, "2e-323", -1.7976931348623157e308, "-1.7976931348623157e+308", 0.1, "0.1");
+                1e-9,
+                "1e-09",
+                1.5e-5,
+                "1.5e-05",
+                1e-4,
+                "0.0001",
+                1.0,
+                "1.0",
+                -120.0,
+                "-120.0",
+                1e15,
+                "1000000000000000.0",
+                1e16,
+                "1e+16",
+                2e-323,
+                "2e-323",
+                -1.7976931348623157e308,
+                "-1.7976931348623157e+308",
+                0.1,
+                "0.1");
         expected.forEach((number, text) -> assertEquals(text, NumberText.of(number)));
         assertEquals("-0.0", NumberText.of(-0.0));
     }
