@@ -135,6 +135,16 @@ class ProtocolTests(unittest.TestCase):
         reply, _ = self.run_cell("1+1")
         self.assertEqual(reply["status"], "ok")
 
+    def test_a_page_without_the_plotting_library_gets_it_over_a_comm(self):
+        content = {"comm_id": "page-1", "target_name": "ladderwell.library", "data": {}}
+        request = self.kc.session.msg("comm_open", content)
+        self.kc.shell_channel.send(request)
+        (answer,) = self.outputs_of(request["header"]["msg_id"])
+        self.assertEqual(answer["msg_type"], "comm_msg")
+        self.assertEqual(answer["content"]["comm_id"], "page-1")
+        self.assertIn("ladderwellPlayer", answer["content"]["data"]["script"])
+        self.kc.shell_channel.send(self.kc.session.msg("comm_close", {"comm_id": "page-1", "data": {}}))
+
     def test_streams_keep_their_order(self):
         code = 'for (int i = 0; i < 50; i++) { System.out.println("o" + i); System.err.println("e" + i); }'
         _, outputs = self.run_cell(code)

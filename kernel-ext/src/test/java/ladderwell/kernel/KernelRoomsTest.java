@@ -61,7 +61,7 @@ class KernelRoomsTest {
     static final ArchRule notebook = only("notebook", "render", "picture", "magic", "cell");
 
     @ArchTest
-    static final ArchRule host = only("host", "render", "magic", "sentence", "cell", "session");
+    static final ArchRule host = only("host", "render", "picture", "magic", "sentence", "cell", "session");
 
     @ArchTest
     static final ArchRule onlyTheHostSeesTheProtocol = noClasses()

@@ -36,6 +36,10 @@ public final class Workbench implements AutoCloseable {
     private boolean inJava;
     private boolean interruptRequested;
 
+    private boolean cellAnnounced;
+
+    private boolean interruptedBeforeItBegan;
+
     /** A workbench with the imports that every Ladderwell notebook starts with. */
     public Workbench(Sentences sentences, Renderer renderer) {
         this(sentences, renderer, standardImports());
@@ -164,6 +168,13 @@ public final class Workbench implements AutoCloseable {
         return work(0, new Silence(), run -> run.run(List.of(new CellText.Part(false, expression, 0, 1))));
     }
 
+    /** Says that a cell is about to run, so that an interrupt that comes before its first step is not lost. */
+    public void announceCell() {
+        synchronized (phaseLock) {
+            cellAnnounced = true;
+        }
+    }
+
     private CellEnd work(int number, CellOutput output, java.util.function.Function<CellRun, CellEnd> work) {
         ONE_CELL.lock();
         try {
@@ -171,7 +182,12 @@ public final class Workbench implements AutoCloseable {
             names.begin();
             synchronized (phaseLock) {
                 runner = Thread.currentThread();
-                interruptRequested = false;
+                interruptRequested = interruptedBeforeItBegan;
+                interruptedBeforeItBegan = false;
+                cellAnnounced = false;
+                if (interruptRequested) {
+                    runner.interrupt();
+                }
             }
             streams.lead(output);
             Show.during(run);
@@ -380,6 +396,7 @@ public final class Workbench implements AutoCloseable {
         synchronized (phaseLock) {
             Thread running = runner;
             if (running == null) {
+                interruptedBeforeItBegan = cellAnnounced;
                 return;
             }
             interruptRequested = true;

@@ -89,6 +89,7 @@ final class CellKernel extends BaseKernel {
         connection.setHandler(
                 MessageType.SHUTDOWN_REQUEST,
                 guarded(MessageType.SHUTDOWN_REPLY, (env, message) -> shutDown(env, message)));
+        LibraryComm.answer(commManager, message -> publisher().send(message));
         for (MessageType<?> type :
                 List.of(MessageType.COMM_OPEN_COMMAND, MessageType.COMM_MSG_COMMAND, MessageType.COMM_CLOSE_COMMAND)) {
             guardExisting(connection, type);
@@ -178,6 +179,7 @@ final class CellKernel extends BaseKernel {
                     Map.of("status", "aborted", "execution_count", executionCount.get())));
             return;
         }
+        workbench.announceCell();
         boolean stored = request.shouldStoreHistory() && !request.isSilent();
         // The count of the base library stands at the number of the next cell, 1 at first.
         int number = stored ? executionCount.getAndIncrement() : executionCount.get();

