@@ -20,11 +20,15 @@ final class StartupArchive {
 
     /** The flags of a start that uses the archive; silent where it does not fit. */
     static List<String> use(Path archive) {
-        return List.of("-Xshare:auto", "-XX:SharedArchiveFile=" + archive, "-Xlog:disable", "-Xlog:all=error:stderr");
+        return List.of("-Xshare:auto", "-XX:SharedArchiveFile=" + archive, "-Xlog:disable");
     }
 
-    /** Makes the archive; false where this Java cannot. */
+    /** Makes the archive; false where this Java cannot, or ends abnormally while it writes it, twice. */
     static boolean make(KernelSpec spec) throws IOException {
+        return attempt(spec) || attempt(spec);
+    }
+
+    private static boolean attempt(KernelSpec spec) throws IOException {
         Path part = spec.folder().resolve("ladderwell.jsa.part");
         Path log = Files.createTempFile("ladderwell-install", ".log");
         try {
@@ -40,6 +44,10 @@ final class StartupArchive {
             if (!process.waitFor(LONGEST_SECONDS, TimeUnit.SECONDS)) {
                 process.destroyForcibly();
                 throw new IOException("the kernel did not end its first run within " + LONGEST_SECONDS + " s");
+            }
+            if (process.exitValue() > 128) {
+                // killed by a signal: a crash of the virtual machine while it dumped, not of the kernel
+                return false;
             }
             if (process.exitValue() != 0) {
                 throw new IOException("the kernel failed its first run: "
