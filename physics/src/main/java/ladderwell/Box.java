@@ -93,16 +93,6 @@ public record Box(Optional<Quantity> mass, Optional<Quantity> width) implements 
         return ClassicalOrbit.bouncing(position, momentum, energy, 0.5);
     }
 
-    @Override
-    public NumberState number(long n) {
-        return new NumberState(this, n);
-    }
-
-    @Override
-    public Superposition superposition(long... levels) {
-        return Superposition.equal(this, levels);
-    }
-
     /** A Gaussian packet with mean position and momentum and spread Δx; what sticks out of the walls is refused. */
     public Packet gaussian(Quantity position, Quantity momentum, Quantity spread) {
         return new Packet(this, position, momentum, spread);

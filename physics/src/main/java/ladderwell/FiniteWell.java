@@ -102,16 +102,6 @@ public record FiniteWell(Optional<Quantity> mass, Optional<Quantity> width, Quan
         return ClassicalOrbit.bouncing(position, momentum, energy, 0.5);
     }
 
-    @Override
-    public NumberState number(long n) {
-        return new NumberState(this, n);
-    }
-
-    @Override
-    public Superposition superposition(long... levels) {
-        return Superposition.equal(this, levels);
-    }
-
     /** A Gaussian packet with mean position and momentum and spread Δx; refused if the bound levels cannot carry it. */
     public Packet gaussian(Quantity position, Quantity momentum, Quantity spread) {
         return new Packet(this, position, momentum, spread);

@@ -129,16 +129,6 @@ public record Harmonic(Optional<Quantity> mass, Optional<Quantity> spacing) impl
         return ClassicalOrbit.harmonic(position, momentum);
     }
 
-    @Override
-    public NumberState number(long n) {
-        return new NumberState(this, n);
-    }
-
-    @Override
-    public Superposition superposition(long... levels) {
-        return Superposition.equal(this, levels);
-    }
-
     /** A coherent state of the given mean quanta n̄ = |α|², at phase 0; {@link Coherent#phase} turns it. */
     public Coherent coherent(double mean) {
         return Coherent.mean(this, mean);

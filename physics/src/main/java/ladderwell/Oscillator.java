@@ -58,8 +58,12 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell {
     List<Fact> given();
 
     /** Level n, counted from 0. */
-    State number(long n);
+    default NumberState number(long n) {
+        return new NumberState(this, n);
+    }
 
     /** A superposition of levels with equal weights and phases; {@link Superposition#weights} changes them. */
-    Superposition superposition(long... levels);
+    default Superposition superposition(long... levels) {
+        return Superposition.equal(this, levels);
+    }
 }

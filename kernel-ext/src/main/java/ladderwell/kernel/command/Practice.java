@@ -11,6 +11,7 @@ import ladderwell.Run;
 import ladderwell.kernel.magic.Animation;
 import ladderwell.kernel.magic.TableRead;
 import ladderwell.kernel.render.Renderings;
+import tech.tablesaw.api.Table;
 
 /**
  * Evolves, reads and draws a few states in the background after the kernel has connected, so that the first evolution a
@@ -28,6 +29,17 @@ final class Practice {
         Thread thread = new Thread(Practice::run, "practice");
         thread.setDaemon(true);
         thread.setPriority(Thread.MIN_PRIORITY);
+        thread.start();
+    }
+
+    /** The first table of a process looks through the class path for readers and writers, for up to a second. */
+    static void loadTablesInBackground() {
+        Thread thread = new Thread(
+                () -> {
+                    Table unused = Table.create("practice");
+                },
+                "tables");
+        thread.setDaemon(true);
         thread.start();
     }
 

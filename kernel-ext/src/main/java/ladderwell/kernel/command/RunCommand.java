@@ -51,6 +51,7 @@ final class RunCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws CommandException {
+        Practice.loadTablesInBackground();
         // The workbench takes the streams of the process for the cells; what is said here goes to the real one.
         PrintStream say = System.err;
         Path executed = output == null ? notebook : output;

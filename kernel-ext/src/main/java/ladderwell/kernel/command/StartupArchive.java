@@ -16,6 +16,8 @@ import java.util.concurrent.TimeUnit;
 final class StartupArchive {
     private static final long LONGEST_SECONDS = 180;
 
+    private static final int ATTEMPTS = 2;
+
     private StartupArchive() {}
 
     /** The flags of a start that uses the archive; silent where it does not fit. */
@@ -25,7 +27,12 @@ final class StartupArchive {
 
     /** Makes the archive; false where this Java cannot, or ends abnormally while it writes it, twice. */
     static boolean make(KernelSpec spec) throws IOException {
-        return attempt(spec) || attempt(spec);
+        for (int attempt = 0; attempt < ATTEMPTS; attempt++) {
+            if (attempt(spec)) {
+                return true;
+            }
+        }
+        return false;
     }
 
     private static boolean attempt(KernelSpec spec) throws IOException {
