@@ -119,21 +119,23 @@ final class DensityReading {
         return new Density(run, x, values, bound(run, values, sumError), "sum over levels");
     }
 
-    /** Adds what the discarded levels could do at one point: at most tail sum × the largest wave function. */
+    /**
+     * Adds what the discarded levels could do at one point: at most tail sum × the largest wave function. Guaranteed where the
+     * wave functions' own error is (box and well) and nothing lies above the bound levels; estimated for the harmonic
+     * oscillator's functions and for packets.
+     */
     private static Bound bound(Run run, double[][] values, double sumError) {
-        double tail = run.amplitudes().tailSum();
-        if (tail == 0) {
-            return Bound.guaranteed(sumError);
-        }
-        double highest = run.state().oscillator() instanceof Harmonic ? Math.pow(Math.PI, -0.25) : Math.sqrt(2);
+        boolean harmonic = run.state().oscillator() instanceof Harmonic;
+        double off = run.amplitudes().tailSum() * (harmonic ? Math.pow(Math.PI, -0.25) : Math.sqrt(2));
         double peak = 0;
         for (double[] frame : values) {
             for (double value : frame) {
                 peak = Math.max(peak, value);
             }
         }
-        double off = tail * highest;
-        return Bound.guaranteed(sumError + (2 * Math.sqrt(peak + sumError) + off) * off);
+        double size = sumError + (2 * Math.sqrt(peak + sumError) + off) * off;
+        boolean proved = !harmonic && !(run.state() instanceof Packet);
+        return proved ? Bound.guaranteed(size) : Bound.estimated(size);
     }
 
     /** All cores: the frames are the same whatever their number. */

@@ -5,6 +5,7 @@ import static ladderwell.quantity.Units.PERIOD;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import ladderwell.evidence.Certainty;
 import ladderwell.quantity.Quantity;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -48,6 +49,39 @@ class DensityTest {
                 assertEquals(1, total, 1e-9);
             }
         }
+    }
+
+    @Test
+    void aDensityIsCalledGuaranteedOnlyWhereItsWaveFunctionsAndItsTailAreProved() {
+        Box box = Oscillator.box().natural();
+        assertEquals(
+                Certainty.GUARANTEED,
+                box.superposition(0, 3)
+                        .evolve(1, PERIOD)
+                        .frames(2)
+                        .run()
+                        .density(50)
+                        .bound()
+                        .kind());
+        assertEquals(
+                Certainty.ESTIMATED,
+                mode.coherent(3)
+                        .evolve(1, PERIOD)
+                        .frames(2)
+                        .run()
+                        .density(50)
+                        .bound()
+                        .kind());
+        Run packet = Oscillator.finiteWell()
+                .natural(4000)
+                .gaussian(Quantity.of(0, ONE), Quantity.of(5, ONE), Quantity.of(0.06, ONE))
+                .evolve(1, PERIOD)
+                .frames(2)
+                .tolerance(1e-3)
+                .run();
+        assertEquals(Certainty.ESTIMATED, packet.density(50).bound().kind());
+        assertEquals(Certainty.ESTIMATED, packet.series(Observable.MOMENTUM).certainty());
+        assertEquals(Certainty.ESTIMATED, packet.series(Observable.ENERGY).certainty());
     }
 
     @Test

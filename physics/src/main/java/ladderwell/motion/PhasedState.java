@@ -88,7 +88,8 @@ public final class PhasedState {
 
     /** Whether nothing was discarded, so that the error lies within the kept levels. */
     boolean complete() {
-        return amplitudes.tailMoment(0) == 0;
+        // a packet may keep every bound level and still miss what lies above them
+        return amplitudes.tailMoment(0) == 0 && amplitudes.missingWeight() == 0;
     }
 
     double[] copyOfTimes() {
