@@ -181,8 +181,13 @@ public final class Run {
         return levels + " · " + method() + " · error of the state ≤ "
                 + Digits.pretty(Digits.significant(Math.nextUp(phased.error() * 1.05), 2))
                 + ", guaranteed · "
-                + Digits.significant(Math.max(secondsTaken * 1e3, 0.1), 2)
+                + milliseconds()
                 + " ms";
+    }
+
+    private String milliseconds() {
+        double taken = secondsTaken * 1e3;
+        return taken >= 100 ? String.valueOf(Math.round(taken)) : Digits.significant(Math.max(taken, 0.1), 2);
     }
 
     /** A scaled time in the readable unit of the run: "1.04 µs". */
