@@ -89,9 +89,8 @@ final class Cell {
      * @param tolerance fit over that size
      * @param thetaMost largest r² max|v − mean| in any case
      * @param eLow the mesh serves energies above this: a cell may be longer if the phase outruns theta
-     * @param bottom no level lies below
      */
-    static Attempt build(DoubleUnaryOperator v, double a, double b, double scale, double tolerance, double thetaMost, double eLow, double bottom) {
+    static Attempt build(DoubleUnaryOperator v, double a, double b, double scale, double tolerance, double thetaMost, double eLow) {
         int d = Chebyshev.DEGREE;
         double c = (a + b) / 2;
         double r = (b - a) / 2;
@@ -106,8 +105,9 @@ final class Cell {
             least = Math.min(least, f[j]);
         }
         double[] t = Chebyshev.coefficients(f);
-        // The second part is the rounding of x itself.
-        double eps = tolerance * size + 2e-16 * Math.max(Math.abs(a), Math.abs(b)) * (most - least) / (2 * r);
+        // The second part is the rounding of x itself; a cell so short that a jump would hide in it is none.
+        double rounding = 2e-16 * Math.max(Math.abs(a), Math.abs(b)) * (most - least) / (2 * r);
+        double eps = tolerance * size + Math.min(rounding, 1e-11 * size);
         if (!(Math.abs(t[d]) + Math.abs(t[d - 1]) <= eps)) {
             return new Attempt(null, 0.75);
         }
@@ -132,11 +132,6 @@ final class Cell {
         theta *= r * r;
         if (!(theta <= Math.max(thetaMost, fast))) {
             return new Attempt(null, Math.max(0.2, Math.min(0.9, 0.97 * Math.cbrt(Math.max(thetaMost, fast) / theta))));
-        }
-        // Growth over the cell must not overflow at the lowest energy.
-        double growth = r * Math.sqrt(Math.max(0, mean - Math.max(bottom, eLow)));
-        if (growth > 100) {
-            return new Attempt(null, Math.max(0.01, 90 / growth));
         }
         double[] q = Chebyshev.powers(t, n);
         for (double s : CHECKS) {
@@ -248,7 +243,7 @@ final class Cell {
 
     /** {y, dy/ds} at s for the solution with value yc and slope dc (in s) at the centre. */
     void at(double s, double z, double yc, double dc, double[] g, double[] out) {
-        EtaSeries.fill(z * s * s, terms, g);
+        int exponent = EtaSeries.fill(z * s * s, terms, g);
         double y = yc * g[0];
         double d = yc * z * s * g[1];
         double even = 1;
@@ -260,8 +255,8 @@ final class Cell {
             d += cs * odd * g[1 + m] + c * even * g[m];
             even = odd * s;
         }
-        out[0] = y;
-        out[1] = d;
+        out[0] = exponent == 0 ? y : Math.scalb(y, exponent);
+        out[1] = exponent == 0 ? d : Math.scalb(d, exponent);
     }
 
     /** v at s by the polynomial. */

@@ -60,8 +60,8 @@ final class CurveSurvey {
         singular = singularLeft();
         double[] found = lowest();
         bottom = found[1];
-        start = even ? 0 : singular ? left : found[0];
         length = naturalLength(found[0], found[1]);
+        start = even ? 0 : singular ? left : awayFromWalls(found[0]);
         if (!(bottom < threshold)) {
             throw new IllegalArgumentException(
                     "the potential has no well: nowhere does it lie below its value far out, " + threshold / 2);
@@ -72,11 +72,12 @@ final class CurveSurvey {
     double v(double x) {
         double value = curve.value(x);
         if (!(Math.abs(value) <= Double.MAX_VALUE)) {
-            if (value == Double.POSITIVE_INFINITY && (x == left || x == right)) {
-                return Double.MAX_VALUE;
+            if (value == Double.POSITIVE_INFINITY) {
+                // Overflow far up a flank, or a wall: no cell fits there.
+                return value;
             }
             throw new IllegalArgumentException(
-                    "the potential is " + (Double.isNaN(value) ? "not a number" : "infinite") + " at x = " + x);
+                    "the potential is " + (Double.isNaN(value) ? "not a number" : "minus infinity") + " at x = " + x);
         }
         return 2 * value;
     }
@@ -86,16 +87,22 @@ final class CurveSurvey {
             return Double.POSITIVE_INFINITY;
         }
         double last = Double.NaN;
-        for (double x : FAR) {
-            double value = curve.value(direction * x);
-            if (!Double.isNaN(value)) {
+        double before = Double.NaN;
+        for (int i = 0; i < FAR.length && Double.isNaN(before); i++) {
+            double value = curve.value(direction * FAR[i]);
+            if (Double.isNaN(last)) {
                 last = value;
-                break;
+            } else {
+                before = value;
             }
         }
         if (Double.isNaN(last)) {
             throw new IllegalArgumentException("the potential is not a number far to the " + (direction > 0 ? "right" : "left")
                     + ", for example at x = " + direction * 1e10);
+        }
+        // Still growing at such distances means without limit: powers and logarithms do, what tends to a constant does not.
+        if (Math.abs(last) > 1.001 * Math.abs(before)) {
+            return last > 0 ? Double.POSITIVE_INFINITY : Double.NEGATIVE_INFINITY;
         }
         return 2 * last;
     }
@@ -185,6 +192,14 @@ final class CurveSurvey {
         return new double[] {at, least};
     }
 
+    /** A wall itself where the lowest place is close to it: an edge just inside would resolve nothing. */
+    private double awayFromWalls(double at) {
+        if (at - left < 0.2 * length) {
+            return left;
+        }
+        return right - at < 0.2 * length ? right : at;
+    }
+
     /** The distance d at which v has risen by 1/d², to a quarter of a decade. */
     private double naturalLength(double at, double least) {
         double width = right - left;
@@ -217,7 +232,7 @@ final class CurveSurvey {
                 return Double.POSITIVE_INFINITY;
             }
             double width = Math.abs(far - origin);
-            for (int i = 0; i < PIECES; i++) {
+            for (int i = 0; i < PIECES && width > 0; i++) {
                 double x = origin + direction * width * (i + 0.5) / PIECES;
                 double value = 2 * curve.value(x);
                 if (value < e) {

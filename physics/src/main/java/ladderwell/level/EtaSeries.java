@@ -8,6 +8,7 @@ final class EtaSeries {
     /** Highest index ever asked for, with room for the extra ones of the power series. */
     static final int LAST = 44;
 
+    private static final double LN_2 = Math.log(2);
     private static final double[] ODD = new double[240];
 
     static {
@@ -24,17 +25,25 @@ final class EtaSeries {
         return new double[240];
     }
 
-    /** g[0] = ξ(Z), g[1 + m] = η_m(Z) for m = 0 … last. */
-    static void fill(double z, int last, double[] g) {
+    /**
+     * g[0] = ξ(Z), g[1 + m] = η_m(Z) for m = 0 … last, all divided by a power of two that keeps them from overflow.
+     *
+     * @return the exponent of that power, 0 unless Z exceeds 90 000
+     */
+    static int fill(double z, int last, double[] g) {
         if (Math.abs(z) > Math.max(120, last * last)) {
+            int exponent = 0;
             if (z < 0) {
                 double w = Math.sqrt(-z);
                 g[0] = Math.cos(w);
                 g[1] = Math.sin(w) / w;
             } else {
                 double w = Math.sqrt(z);
-                double grow = Math.exp(w);
-                double fall = 1 / grow;
+                if (w > 300) {
+                    exponent = (int) (w / LN_2);
+                }
+                double grow = Math.exp(w - exponent * LN_2);
+                double fall = exponent > 0 ? 0 : 1 / grow;
                 g[0] = (grow + fall) / 2;
                 g[1] = (grow - fall) / (2 * w);
             }
@@ -42,7 +51,7 @@ final class EtaSeries {
             for (int m = 1; m <= last; m++) {
                 g[m + 1] = (g[m - 1] - (2 * m - 1) * g[m]) * inverse;
             }
-            return;
+            return exponent;
         }
         double root = Math.sqrt(Math.abs(z));
         // A lower start of the downward recurrence loses digits for Z < −40.
@@ -61,5 +70,6 @@ final class EtaSeries {
             g[m] = (2 * m + 1) * g[m + 1] + z * g[m + 2];
         }
         g[0] = g[1] + z * g[2];
+        return 0;
     }
 }

@@ -46,11 +46,20 @@ final class LevelSearch {
 
     private double frequency(double e) {
         Cell c = mesh.cells()[Math.min(shot.mid, mesh.cells().length - 1)];
-        return Math.sqrt(Math.max(e - c.mean, 1 / (c.r * c.r)));
+        return Math.sqrt(Math.max(e - c.mean, 1 / Math.max(c.r * c.r, survey.length * survey.length)));
     }
 
-    private double unit(double e) {
-        return Math.max(1e-15 * Math.abs(e), Math.max(1e-17 * (e - survey.bottom), 1e-300));
+    private double deepest() {
+        double deep = survey.threshold;
+        for (Cell c : mesh.cells()) {
+            deep = Math.min(deep, c.mean);
+        }
+        return survey.threshold - deep;
+    }
+
+    /** What the energy can be resolved to: its own rounding and that of the angles. */
+    private static double unit(double e, double slope) {
+        return Math.max(1e-15 * Math.abs(e), Math.max(4e-16 / slope, 1e-300));
     }
 
     /** Level n of all, from a first guess. */
@@ -81,10 +90,11 @@ final class LevelSearch {
             }
             double step = Math.abs(f / slope);
             double best = e - f / slope;
-            double unit = unit(e);
+            double noise = 2e-16 * (8 + shot.to - shot.from);
+            double unit = unit(e, slope);
             if (Math.abs(f) < 0.1
-                    && (step <= 4 * unit || Math.abs(f) <= 1e-15 || step * Math.abs(slope / before - 1) < 0.4 * unit)) {
-                double delta = 8 * unit + 2e-15 / slope;
+                    && (step <= 4 * unit || Math.abs(f) <= noise || step * Math.abs(slope / before - 1) < 0.4 * unit)) {
+                double delta = 8 * unit + noise / slope;
                 if (shot.mismatch(best + delta, k, s, parity, false, true) < 0) {
                     a = Math.max(a, best + delta);
                 } else if (shot.mismatch(best - delta, k, s, parity, false, true) > 0) {
@@ -95,7 +105,9 @@ final class LevelSearch {
                 }
             }
             before = slope;
-            if (survey.threshold - a <= 4 * unit(a) && !bracketed) {
+            if (!bracketed
+                    && survey.threshold < Double.POSITIVE_INFINITY
+                    && survey.threshold - a <= 1e-14 * Math.min(survey.threshold - survey.bottom, deepest())) {
                 throw new IllegalArgumentException("the potential has no bound level " + n
                         + ": its continuum begins at " + survey.threshold / 2);
             }
@@ -107,9 +119,11 @@ final class LevelSearch {
                 shot.mismatch(e, k, s, parity, true, false);
                 return found(e, b - a + 8 * unit, shot.slope);
             }
+            double room = Math.max(e - survey.bottom, 1 / (survey.length * survey.length));
+            best = Math.min(best, e + room);
             if (!(best > a && best < b)) {
                 if (Double.isInfinite(b)) {
-                    best = e + Math.max(Math.max(2 / slope, 0.3 * (e - survey.bottom)), 1e-3 / (survey.length * survey.length));
+                    best = e + Math.min(room, Math.max(2 / slope, 0.1 * room));
                 } else {
                     best = a + 0.5 * (b - a);
                 }
@@ -118,7 +132,7 @@ final class LevelSearch {
             }
             e = best;
         }
-        throw new PhysicsException.NotConverged("level n = " + n, shot.count - first, (b - a) / 2, unit(e) / 2);
+        throw new PhysicsException.NotConverged("level n = " + n, shot.count - first, (b - a) / 2, 1e-15 * Math.abs(e));
     }
 
     private Found found(double e, double delta, double slope) {

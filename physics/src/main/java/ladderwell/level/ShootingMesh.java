@@ -138,11 +138,12 @@ final class ShootingMesh {
             }
             Cell.Attempt attempt = attempt(x, y, size);
             Cell cell = attempt.cell();
+            boolean trouble = false;
             if (cell == null) {
                 h = attempt.shorter() * Math.abs(y - x);
                 if (h < wanted / 200 || h < 1e-10 * Math.abs(x)) {
                     cell = upToTrouble(x, direction, h, Math.abs(y - x), size);
-                    h = wanted / 2;
+                    trouble = true;
                     if (cell == null) {
                         // Trouble at x itself: step over it.
                         cell = past(x, direction, wanted, size);
@@ -165,7 +166,7 @@ final class ShootingMesh {
             x = direction > 0 ? cell.b : cell.a;
             double grow = 0.97 * Math.cbrt(THETA / (cell.theta + 1e-3));
             h = cut ? Math.max(h, 2 * cell.r) * 1.2 : 2 * cell.r * Math.max(1.02, Math.min(2, grow));
-            h = Math.max(h, 1e-12 * Math.abs(x));
+            h = Math.max(trouble ? wanted : h, 1e-12 * Math.abs(x));
             wanted = h;
             depth = cell.low > e ? depth + fall(cell, e) : 0;
         }
@@ -179,7 +180,7 @@ final class ShootingMesh {
 
     private Cell.Attempt attempt(double x, double y, double size) {
         return Cell.build(
-                survey::v, Math.min(x, y), Math.max(x, y), Math.max(0.1 * size, smallest), TOLERANCE, THETA, eLow, survey.bottom);
+                survey::v, Math.min(x, y), Math.max(x, y), Math.max(0.1 * size, smallest), TOLERANCE, THETA, eLow);
     }
 
     /** The longest cell from x that fits: up to a jump or kink; null where there is none longer than rounding. */
@@ -228,7 +229,7 @@ final class ShootingMesh {
             double to = x + direction * h;
             Cell.Attempt attempt = Cell.build(
                     t -> survey.v(direction * (t - from) < 0 ? from : t),
-                    Math.min(x, to), Math.max(x, to), Math.max(0.1 * size, smallest), TOLERANCE, THETA, eLow, survey.bottom);
+                    Math.min(x, to), Math.max(x, to), Math.max(0.1 * size, smallest), TOLERANCE, THETA, eLow);
             Cell cell = attempt.cell();
             if (cell != null) {
                 return cell;

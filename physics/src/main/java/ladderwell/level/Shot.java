@@ -75,8 +75,10 @@ final class Shot {
         int lastMean = 0;
         for (int i = 0; i < m; i++) {
             if (i > 0 || !even) {
-                if (cells[i].mean < deep) {
-                    deep = cells[i].mean;
+                // Deep and not too short a cell.
+                double depthOfCell = cells[i].mean + 1 / (cells[i].r * cells[i].r);
+                if (depthOfCell < deep) {
+                    deep = depthOfCell;
                     mid = i;
                 }
             }
@@ -217,7 +219,7 @@ final class Shot {
         Cell c = cells[i];
         double r = c.r;
         double z = c.z(e);
-        EtaSeries.fill(z, c.terms + 1, g);
+        int grown = EtaSeries.fill(z, c.terms + 1, g);
         c.end(-direction, z, g, derivative, in);
         c.end(direction, z, g, derivative, out);
         double d = r * p;
@@ -240,10 +242,11 @@ final class Shot {
         if (keep) {
             centreValue[i] = ym;
             centreSlope[i] = dm;
-            scale[i] = exponent;
+            scale[i] = exponent + grown;
         }
         y = yo;
         p = po / r;
+        exponent += 2 * grown;
         if (Math.abs(y) > BIG || Math.abs(p) > BIG) {
             y *= 1 / BIG;
             p *= 1 / BIG;
@@ -285,7 +288,9 @@ final class Shot {
             pass(i, -1, e, true, false);
             double h = 1 / Math.hypot(y, p);
             double jump = Math.abs(a[i] * p * h - b[i] * y * h) / (norm[i] + (y * pE - p * yE) * h * h);
-            if (jump < least) {
+            // In a forbidden region one of the two has lost the level to its growing part.
+            boolean allowed = cells[i].mean < e || cells[i - 1].mean < e;
+            if (allowed && jump < least) {
                 least = jump;
                 best = i;
             }
