@@ -18,6 +18,7 @@ final class Shot {
     private static final double BIG = 0x1p300;
 
     private final ShootingMesh mesh;
+    private final CurveSurvey survey;
     private final boolean even;
     private final boolean openLeft;
     private final boolean openRight;
@@ -59,6 +60,7 @@ final class Shot {
 
     Shot(ShootingMesh mesh, CurveSurvey survey) {
         this.mesh = mesh;
+        this.survey = survey;
         even = survey.even;
         openLeft = !even && Double.isInfinite(survey.left);
         openRight = Double.isInfinite(survey.right);
@@ -68,19 +70,17 @@ final class Shot {
     void range(double e, double depth, int forced) {
         cells = mesh.cells();
         int m = cells.length;
+        double usual = survey.length;
         double deep = Double.POSITIVE_INFINITY;
         mid = mesh.startIndex();
         int first = m;
         int last = 0;
         int lastMean = 0;
         for (int i = 0; i < m; i++) {
-            if (i > 0 || !even) {
-                // Deep and not too short a cell.
-                double depthOfCell = cells[i].mean + 1 / (cells[i].r * cells[i].r);
-                if (depthOfCell < deep) {
-                    deep = depthOfCell;
-                    mid = i;
-                }
+            // Deep and not too short a cell.
+            if (cells[i].mean < deep && cells[i].r > 0.02 * usual) {
+                deep = cells[i].mean;
+                mid = i;
             }
             if (cells[i].mean < e) {
                 lastMean = i;
