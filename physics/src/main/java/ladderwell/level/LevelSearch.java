@@ -62,8 +62,13 @@ final class LevelSearch {
         return Math.max(1e-15 * Math.abs(e), Math.max(4e-16 / slope, 1e-300));
     }
 
-    /** Level n of all, from a first guess. */
-    Found solve(long n, double guess) {
+    /**
+     * Level n of all, from a first guess.
+     *
+     * @param spacing distance expected to the level before of the same parity, NaN where unknown: where the matching angle rises as that says,
+     *     Newton's iteration cannot have stopped on a steep step and the enclosure is left out
+     */
+    Found solve(long n, double guess, double spacing) {
         int parity = (int) (n & 1);
         int k = (int) (survey.even ? n / 2 : n);
         int forced = -1;
@@ -95,6 +100,9 @@ final class LevelSearch {
             if (Math.abs(f) < 0.1
                     && (step <= 4 * unit || Math.abs(f) <= noise || step * Math.abs(slope / before - 1) < 0.4 * unit)) {
                 double delta = 8 * unit + noise / slope;
+                if (Math.abs(slope * spacing - 1) < 0.3) {
+                    return found(best, delta, slope);
+                }
                 if (shot.mismatch(best + delta, k, s, parity, false, true) < 0) {
                     a = Math.max(a, best + delta);
                 } else if (shot.mismatch(best - delta, k, s, parity, false, true) > 0) {

@@ -29,6 +29,25 @@ record Wave(
         return cells[to - 1].b;
     }
 
+    /** Mean potential of the cell at x. */
+    double mean(double x) {
+        return cells[x <= left() ? from : x >= right() ? to - 1 : cell(x)].mean;
+    }
+
+    private int cell(double x) {
+        int low = from;
+        int high = to - 1;
+        while (low < high) {
+            int middle = (low + high + 1) >>> 1;
+            if (cells[middle].a <= x) {
+                low = middle;
+            } else {
+                high = middle - 1;
+            }
+        }
+        return low;
+    }
+
     /** {φ, φ′} at x into out. */
     void at(double x, double[] g, double[] out) {
         if (x >= right()) {
@@ -58,16 +77,7 @@ record Wave(
             out[1] = kappa * value;
             return;
         }
-        int low = from;
-        int high = to - 1;
-        while (low < high) {
-            int middle = (low + high + 1) >>> 1;
-            if (cells[middle].a <= x) {
-                low = middle;
-            } else {
-                high = middle - 1;
-            }
-        }
+        int low = cell(x);
         Cell c = cells[low];
         c.at((x - c.centre) / c.r, c.z(e), values[low], slopes[low], g, out);
         out[1] /= c.r;

@@ -1,0 +1,3 @@
+package ladderwell.level;
+
+public final class PeriodicLevels { PeriodicLevels(PotentialCurve c, double period, double phase) { } }
