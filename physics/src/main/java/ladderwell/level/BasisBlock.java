@@ -42,22 +42,29 @@ final class BasisBlock {
         }
     }
 
-    /** Levels 0 … count − 1 in a basis large enough that what leaks out of it is below rounding. */
-    static BasisBlock of(Polynomial polynomial, int count) {
+    /**
+     * Levels 0 … count − 1 in a basis large enough that what leaks out of it changes energies by less than rounding.
+     *
+     * @param vectors whether the vectors are to be as good: they are off by the leak, energies by its square
+     */
+    static BasisBlock of(Polynomial polynomial, int count, boolean vectors) {
         double energy = polynomial.energyOf(count);
         double left = polynomial.turning(energy, -1);
         double right = polynomial.turning(energy, 1);
         double centre = polynomial.even() ? 0 : rounded((left + right) / 2, right - left);
         double omega = 0.92 * Math.sqrt(2 * (energy - polynomial.bottom())) / ((right - left) / 2);
-        int size = (int) (1.5 * count + 5.2 * Math.sqrt(count) + 10 + 2 * (polynomial.degree() - 2));
+        int size = (int) (1.5 * count + 3.5 * Math.sqrt(count) + 4 + 2 * (polynomial.degree() - 2));
+        if (vectors) {
+            size += 20 + size / 5;
+        }
         if (polynomial.degree() == 2) {
             omega = Math.sqrt(2 * polynomial.coefficient(2));
             centre = -polynomial.coefficient(1) / (2 * polynomial.coefficient(2));
-            size = count + 6;
+            size = count + 8;
         }
         while (true) {
             BasisBlock block = new BasisBlock(polynomial, OscillatorBasis.of(polynomial, size, omega, centre), count);
-            if (block.closed() || size >= LARGEST) {
+            if (block.closed(vectors) || size >= LARGEST) {
                 return block;
             }
             size += 10 + size / 5;
@@ -96,11 +103,11 @@ final class BasisBlock {
     }
 
     /** Whether the highest level, and the lowest where the potential has side wells, leak out of the basis by less than rounding. */
-    private boolean closed() {
-        return closed(count - 1) && (count == 1 || closed(0));
+    private boolean closed(boolean strict) {
+        return closed(count - 1, strict) && (count == 1 || closed(0, strict));
     }
 
-    private boolean closed(int n) {
+    private boolean closed(int n, boolean strict) {
         int part = part(n);
         double[][] band = rows[part];
         int size = band[0].length;
@@ -120,7 +127,7 @@ final class BasisBlock {
             square += sum * sum;
         }
         double gap = values[part][place + 1] - value;
-        return square <= 0x1p-54 * gap * Math.max(gap, Math.abs(value));
+        return square <= (strict ? 0x1p-94 * gap * gap : 0x1p-54 * gap * Math.max(gap, Math.abs(value)));
     }
 
     synchronized Proved proved() {

@@ -68,7 +68,7 @@ final class PolynomialLevels implements Levels {
         int power = Math.max(SMALLEST, 64 - Long.numberOfLeadingZeros(n));
         BasisBlock block = blocks[power];
         if (block == null) {
-            block = BasisBlock.of(polynomial, 1 << power);
+            block = BasisBlock.of(polynomial, 1 << power, true);
             blocks[power] = block;
         }
         return block;
@@ -114,7 +114,7 @@ final class PolynomialLevels implements Levels {
         double[] energies = new double[count];
         int few = (int) Math.max(0, Math.min(count, BASIS - first));
         if (few > 0) {
-            BasisBlock block = BasisBlock.of(polynomial, (int) first + few);
+            BasisBlock block = BasisBlock.of(polynomial, (int) first + few, false);
             for (int i = 0; i < few; i++) {
                 energies[i] = block.value((int) first + i);
             }
