@@ -52,8 +52,9 @@ final class BasisBlock {
         double left = polynomial.turning(energy, -1);
         double right = polynomial.turning(energy, 1);
         double centre = polynomial.even() ? 0 : rounded((left + right) / 2, right - left);
-        double omega = 0.92 * Math.sqrt(2 * (energy - polynomial.bottom())) / ((right - left) / 2);
-        int size = (int) (1.5 * count + 3.5 * Math.sqrt(count) + 4 + 2 * (polynomial.degree() - 2));
+        double omega = Math.sqrt(2 * (energy - polynomial.bottom())) / ((right - left) / 2);
+        // What was needed for x⁴ and x⁶; other polynomials may take a second try.
+        int size = (int) (1.23 * count + 46 + 14 * Math.max(0, polynomial.degree() - 4));
         if (vectors) {
             size += 20 + size / 5;
         }

@@ -108,7 +108,7 @@ final class Polynomial {
     }
 
     /** Even with no negative coefficient: the minimum is at 0. */
-    private boolean monotone() {
+    boolean monotone() {
         if (!even) {
             return false;
         }

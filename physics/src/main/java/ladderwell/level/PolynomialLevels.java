@@ -10,7 +10,7 @@ import org.jspecify.annotations.Nullable;
  * wave function where it is tiny.
  */
 final class PolynomialLevels implements Levels {
-    /** Up to here the basis is quicker than shooting. */
+    /** Up to here the basis is quicker than shooting(). */
     static final int BASIS = 128;
 
     /** A basis serves 8, 16, 32, 64 or 128 levels. */
@@ -18,11 +18,10 @@ final class PolynomialLevels implements Levels {
 
     private final Polynomial polynomial;
     private final @Nullable BasisBlock[] blocks = new BasisBlock[8];
-    private final ShootingLevels shooting;
+    private @Nullable ShootingLevels shooting;
 
     PolynomialLevels(double[] coefficients) {
         polynomial = new Polynomial(coefficients);
-        shooting = new ShootingLevels(new Curve(polynomial));
     }
 
     private record Curve(Polynomial polynomial) implements PotentialCurve {
@@ -64,6 +63,15 @@ final class PolynomialLevels implements Levels {
         return Long.MAX_VALUE;
     }
 
+    private synchronized ShootingLevels shooting() {
+        ShootingLevels made = shooting;
+        if (made == null) {
+            made = new ShootingLevels(new Curve(polynomial));
+            shooting = made;
+        }
+        return made;
+    }
+
     private synchronized BasisBlock block(long n) {
         int power = Math.max(SMALLEST, 64 - Long.numberOfLeadingZeros(n));
         BasisBlock block = blocks[power];
@@ -81,7 +89,7 @@ final class PolynomialLevels implements Levels {
 
     @Override
     public double energyHigh(long n) {
-        return small(n) ? block(n).proved().quotient()[(int) n] : shooting.energyHigh(n);
+        return small(n) ? block(n).proved().quotient()[(int) n] : shooting().energyHigh(n);
     }
 
     @Override
@@ -98,14 +106,14 @@ final class PolynomialLevels implements Levels {
     @Override
     public Bound energyBound(long n) {
         if (!small(n)) {
-            return shooting.energyBound(n);
+            return shooting().energyBound(n);
         }
         double error = block(n).proved().error()[(int) n];
         if (error < Double.POSITIVE_INFINITY) {
             return Bound.guaranteed(error);
         }
         // Not to be proved in this basis: the distance from what shooting finds, and its estimate.
-        return shooting.energyBound(n).plus(Math.abs(energyHigh(n) - shooting.energyHigh(n)));
+        return shooting().energyBound(n).plus(Math.abs(energyHigh(n) - shooting().energyHigh(n)));
     }
 
     @Override
@@ -114,20 +122,23 @@ final class PolynomialLevels implements Levels {
         double[] energies = new double[count];
         int few = (int) Math.max(0, Math.min(count, BASIS - first));
         if (few > 0) {
-            BasisBlock block = BasisBlock.of(polynomial, (int) first + few, false);
+            // The quick values are as good only where the matrix grows steadily from its lowest element on.
+            boolean quick = polynomial.monotone();
+            BasisBlock block = quick ? BasisBlock.of(polynomial, (int) first + few, false) : block(first + few - 1);
             for (int i = 0; i < few; i++) {
-                energies[i] = block.value((int) first + i);
+                int n = (int) first + i;
+                energies[i] = quick ? block.value(n) : block.proved().quotient()[n];
             }
         }
         if (few < count) {
-            System.arraycopy(shooting.energies(first + few, count - few), 0, energies, few, count - few);
+            System.arraycopy(shooting().energies(first + few, count - few), 0, energies, few, count - few);
         }
         return energies;
     }
 
     @Override
     public long countBelow(double energy) {
-        return shooting.countBelow(energy);
+        return shooting().countBelow(energy);
     }
 
     @Override
@@ -161,7 +172,7 @@ final class PolynomialLevels implements Levels {
                 return simple;
             }
         }
-        return shooting.splitting(n);
+        return shooting().splitting(n);
     }
 
     @Override
@@ -172,30 +183,30 @@ final class PolynomialLevels implements Levels {
                 return simple;
             }
         }
-        return shooting.splittingBound(n);
+        return shooting().splittingBound(n);
     }
 
     @Override
     public Cluster cluster(long n) {
         boolean proved = small(n) && block(n).proved().error()[(int) n] < Double.POSITIVE_INFINITY;
-        return proved ? Levels.super.cluster(n) : shooting.cluster(n);
+        return proved ? Levels.super.cluster(n) : shooting().cluster(n);
     }
 
     @Override
     public double[][] waveFunctions(long first, int count, double[] x) {
         Points.check(first, count, Long.MAX_VALUE, x);
         long last = first + count - 1;
-        return small(last) ? block(last).waves((int) first, count, x) : shooting.waveFunctions(first, count, x);
+        return small(last) ? block(last).waves((int) first, count, x) : shooting().waveFunctions(first, count, x);
     }
 
     @Override
     public double waveFunctionError(long last) {
-        return small(last) ? block(last).waveError((int) last) : shooting.waveFunctionError(last);
+        return small(last) ? block(last).waveError((int) last) : shooting().waveFunctionError(last);
     }
 
     @Override
     public double reach(long n, double drop) {
-        return shooting.reach(n, drop);
+        return shooting().reach(n, drop);
     }
 
     @Override
@@ -206,7 +217,7 @@ final class PolynomialLevels implements Levels {
             last = Math.max(last, n);
         }
         if (!small(last)) {
-            return shooting.elements(levels);
+            return shooting().elements(levels);
         }
         int[] list = new int[levels.length];
         for (int i = 0; i < list.length; i++) {
@@ -219,7 +230,7 @@ final class PolynomialLevels implements Levels {
 
     @Override
     public Element element(long m, long n, DoubleUnaryOperator f) {
-        return shooting.element(m, n, f);
+        return shooting().element(m, n, f);
     }
 
     @Override
