@@ -277,7 +277,8 @@ final class BasisBlock {
                 errors[2] = Math.max(errors[2], (off + u) * Math.max(ownP[i], ownP[j]));
                 double wide = Math.max(ownX[i], ownX[j]) + Math.abs(x0);
                 errors[1] = Math.max(errors[1], (off + u) * wide * wide * 2);
-                errors[3] = Math.max(errors[3], (off + u) * Math.max(ownP[i], ownP[j]) * Math.max(ownP[i], ownP[j]) * 2);
+                errors[3] =
+                        Math.max(errors[3], (off + u) * Math.max(ownP[i], ownP[j]) * Math.max(ownP[i], ownP[j]) * 2);
             }
         }
         return result;

@@ -45,7 +45,16 @@ final class Cell {
      */
     record Attempt(@Nullable Cell cell, double shorter) {}
 
-    private Cell(double a, double b, double mean, double theta, double fit, double size, double[][] ofU, double[][] ofV, int terms) {
+    private Cell(
+            double a,
+            double b,
+            double mean,
+            double theta,
+            double fit,
+            double size,
+            double[][] ofU,
+            double[][] ofV,
+            int terms) {
         this.a = a;
         this.b = b;
         centre = (a + b) / 2;
@@ -90,7 +99,8 @@ final class Cell {
      * @param thetaMost largest r² max|v − mean| in any case
      * @param eLow the mesh serves energies above this: a cell may be longer if the phase outruns theta
      */
-    static Attempt build(DoubleUnaryOperator v, double a, double b, double scale, double tolerance, double thetaMost, double eLow) {
+    static Attempt build(
+            DoubleUnaryOperator v, double a, double b, double scale, double tolerance, double thetaMost, double eLow) {
         int d = Chebyshev.DEGREE;
         double c = (a + b) / 2;
         double r = (b - a) / 2;

@@ -8,7 +8,9 @@ import java.util.TreeSet;
  * below. All energies here are e = 2E and all values v = 2V.
  */
 final class CurveSurvey {
-    private static final double[] FAR = {1e300, 1e200, 1e150, 1e100, 1e75, 1e50, 1e30, 1e20, 1e15, 1e12, 1e10, 1e8, 1e6, 1e5};
+    private static final double[] FAR = {
+        1e300, 1e200, 1e150, 1e100, 1e75, 1e50, 1e30, 1e20, 1e15, 1e12, 1e10, 1e8, 1e6, 1e5
+    };
     private static final int PIECES = 256;
 
     final double left;
@@ -34,7 +36,8 @@ final class CurveSurvey {
         right = curve.right();
         even = curve.isEven();
         if (!(left < right) || left == Double.POSITIVE_INFINITY || right == Double.NEGATIVE_INFINITY) {
-            throw new IllegalArgumentException("the left end of a potential must lie left of its right end, got " + left + " and " + right);
+            throw new IllegalArgumentException(
+                    "the left end of a potential must lie left of its right end, got " + left + " and " + right);
         }
         if (even && left != -right) {
             throw new IllegalArgumentException("an even potential has ends at ±x, got " + left + " and " + right);
@@ -55,7 +58,8 @@ final class CurveSurvey {
         threshold = Math.min(limit(1, right), even ? Double.POSITIVE_INFINITY : limit(-1, left));
         if (threshold == Double.NEGATIVE_INFINITY) {
             throw new IllegalArgumentException("the potential falls without limit towards "
-                    + (limit(1, right) == Double.NEGATIVE_INFINITY ? "the right" : "the left") + ": it has no lowest level");
+                    + (limit(1, right) == Double.NEGATIVE_INFINITY ? "the right" : "the left")
+                    + ": it has no lowest level");
         }
         singular = singularLeft();
         double[] found = lowest();
@@ -97,14 +101,15 @@ final class CurveSurvey {
             }
         }
         if (Double.isNaN(last)) {
-            throw new IllegalArgumentException("the potential is not a number far to the " + (direction > 0 ? "right" : "left")
-                    + ", for example at x = " + direction * 1e10);
+            throw new IllegalArgumentException("the potential is not a number far to the "
+                    + (direction > 0 ? "right" : "left") + ", for example at x = " + direction * 1e10);
         }
-        // Still growing at such distances means without limit: powers and logarithms do, what tends to a constant does not.
+        // Still growing at such distances means without limit: powers and logarithms do, what tends to a constant does
+        // not.
         if (Math.abs(last) > 1.001 * Math.abs(before)) {
             return last > 0 ? Double.POSITIVE_INFINITY : Double.NEGATIVE_INFINITY;
         }
-        return 2 * last;
+        return 2 * last + 0.0;
     }
 
     /** Whether v grows without bound, as 1/x or 1/x², at a finite left end. */
@@ -162,7 +167,8 @@ final class CurveSurvey {
             }
         }
         if (Double.isNaN(at)) {
-            throw new IllegalArgumentException("the potential is infinite everywhere between " + from + " and " + right);
+            throw new IllegalArgumentException(
+                    "the potential is infinite everywhere between " + from + " and " + right);
         }
         if (even && 2 * curve.value(0) <= least) {
             least = 2 * curve.value(0);

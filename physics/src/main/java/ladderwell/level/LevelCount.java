@@ -21,7 +21,8 @@ final class LevelCount {
      */
     static int below(double energy, OscillatorBasis like, int part) {
         double floor = like.omega() * 0.5 - like.excess();
-        int first = (int) Math.max(4, Math.ceil((energy + 0.05 * Math.abs(energy) + 2 * like.omega() - floor) / like.omega()));
+        int first = (int)
+                Math.max(4, Math.ceil((energy + 0.05 * Math.abs(energy) + 2 * like.omega() - floor) / like.omega()));
         for (int attempt = 0; attempt < 4 && first < LARGEST / 4; attempt++) {
             Interruption.check();
             int found = attempt(energy, like, part, first, 3 * first + 40);
@@ -48,7 +49,8 @@ final class LevelCount {
         for (int n = 0; n < angle.length; n++) {
             angle[n] = n >= size ? Math.PI / 2 : Math.PI / 2 * angle[n] / total;
         }
-        // Row sums of |L|, sizes of the rows for the rounding; the border rows beyond the basis have their largest sums inside.
+        // Row sums of |L|, sizes of the rows for the rounding; the border rows beyond the basis have their largest sums
+        // inside.
         double[] lost = new double[size + degree];
         double largest = 0;
         for (int q = 0; q <= degree; q++) {

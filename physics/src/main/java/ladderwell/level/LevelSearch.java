@@ -116,8 +116,8 @@ final class LevelSearch {
             if (!bracketed
                     && survey.threshold < Double.POSITIVE_INFINITY
                     && survey.threshold - a <= 1e-14 * Math.min(survey.threshold - survey.bottom, deepest())) {
-                throw new IllegalArgumentException("the potential has no bound level " + n
-                        + ": its continuum begins at " + survey.threshold / 2);
+                throw new IllegalArgumentException(
+                        "the potential has no bound level " + n + ": its continuum begins at " + survey.threshold / 2);
             }
             if (b - a <= 2 * unit) {
                 e = 0.5 * (a + b);

@@ -95,7 +95,9 @@ public final class PeriodicLevels {
                 for (int q = last + 1; q < m / 4; q++) {
                     rest += 2 * Math.hypot(a[q], b[q]);
                 }
-                return new double[][] {Arrays.copyOf(a, last + 1), Arrays.copyOf(b, last + 1), {Math.min(rest, 1e-15 * largest)}};
+                return new double[][] {
+                    Arrays.copyOf(a, last + 1), Arrays.copyOf(b, last + 1), {Math.min(rest, 1e-15 * largest)}
+                };
             }
         }
         throw new IllegalArgumentException(
@@ -185,14 +187,16 @@ public final class PeriodicLevels {
 
     private synchronized Solution solved(int n) {
         if (n < 0 || n >= MOST_LEVELS) {
-            throw new IllegalArgumentException("levels of a periodic potential are computed for n = 0 … " + (MOST_LEVELS - 1) + ", got " + n);
+            throw new IllegalArgumentException(
+                    "levels of a periodic potential are computed for n = 0 … " + (MOST_LEVELS - 1) + ", got " + n);
         }
         if (n < solution.energy.length) {
             return solution;
         }
         int count = Math.max(16, Integer.highestOneBit(n) * 2);
         double unit = 2 * Math.PI / period;
-        int reach = (int) (count / 2 + 1.5 * Math.sqrt(2 * size) / unit + 2 * Math.sqrt(Math.sqrt(size) / unit) + 12 + re.length);
+        int reach = (int)
+                (count / 2 + 1.5 * Math.sqrt(2 * size) / unit + 2 * Math.sqrt(Math.sqrt(size) / unit) + 12 + re.length);
         List<Level> levels = new ArrayList<>();
         boolean split = even && (phase == 0 || Math.abs(phase) == Math.PI);
         for (int parity = 0; parity < (split ? 2 : 1); parity++) {
@@ -268,7 +272,8 @@ public final class PeriodicLevels {
                 rows[2 * q][2 * i] = own;
                 rows[2 * q][2 * i + 1] = own;
                 if (q > 0) {
-                    // H(i, i+q) = V̂_{−q} = a − i b: the real part couples to the imaginary one with +b, the other way with −b.
+                    // H(i, i+q) = V̂_{−q} = a − i b: the real part couples to the imaginary one with +b, the other way
+                    // with −b.
                     rows[2 * q + 1][2 * i] = im[q];
                     rows[2 * q - 1][2 * i + 1] = -im[q];
                 }

@@ -220,7 +220,9 @@ final class Polynomial {
             if (q[2] == 0 && q[1] == 0) {
                 return q[0];
             }
-            return q[2] < 0 ? (q[0] - q[1] * q[1] / (4 * q[2])) + 0x1p-40 * (Math.abs(q[0]) + 1) : Double.POSITIVE_INFINITY;
+            return q[2] < 0
+                    ? (q[0] - q[1] * q[1] / (4 * q[2])) + 0x1p-40 * (Math.abs(q[0]) + 1)
+                    : Double.POSITIVE_INFINITY;
         }
         double reach = 0;
         for (int k = 0; k < degree; k++) {

@@ -13,7 +13,7 @@ final class PolynomialLevels implements Levels {
     /** Up to here the basis is quicker than shooting(). */
     static final int BASIS = 128;
 
-    /** A basis serves 8, 16, 32, 64 or 128 levels. */
+    /** A basis serves 8, 16, 32, 64 or 128 levels; steeper walls begin with more, whose frequency suits them better. */
     private static final int SMALLEST = 3;
 
     private final Polynomial polynomial;
@@ -73,7 +73,8 @@ final class PolynomialLevels implements Levels {
     }
 
     private synchronized BasisBlock block(long n) {
-        int power = Math.max(SMALLEST, 64 - Long.numberOfLeadingZeros(n));
+        int steep = Math.min(2, Math.max(0, polynomial.degree() / 2 - 3));
+        int power = Math.max(SMALLEST + steep, 64 - Long.numberOfLeadingZeros(n));
         BasisBlock block = blocks[power];
         if (block == null) {
             block = BasisBlock.of(polynomial, 1 << power, true);
@@ -113,7 +114,9 @@ final class PolynomialLevels implements Levels {
             return Bound.guaranteed(error);
         }
         // Not to be proved in this basis: the distance from what shooting finds, and its estimate.
-        return shooting().energyBound(n).plus(Math.abs(energyHigh(n) - shooting().energyHigh(n)));
+        return shooting()
+                .energyBound(n)
+                .plus(Math.abs(energyHigh(n) - shooting().energyHigh(n)));
     }
 
     @Override
@@ -196,7 +199,9 @@ final class PolynomialLevels implements Levels {
     public double[][] waveFunctions(long first, int count, double[] x) {
         Points.check(first, count, Long.MAX_VALUE, x);
         long last = first + count - 1;
-        return small(last) ? block(last).waves((int) first, count, x) : shooting().waveFunctions(first, count, x);
+        return small(last)
+                ? block(last).waves((int) first, count, x)
+                : shooting().waveFunctions(first, count, x);
     }
 
     @Override
@@ -238,7 +243,10 @@ final class PolynomialLevels implements Levels {
         StringBuilder text = new StringBuilder("levels of p²/2");
         for (int k = 0; k <= polynomial.degree(); k++) {
             if (polynomial.coefficient(k) != 0) {
-                text.append(" + ").append(polynomial.coefficient(k)).append(" x^").append(k);
+                text.append(" + ")
+                        .append(polynomial.coefficient(k))
+                        .append(" x^")
+                        .append(k);
             }
         }
         return text.toString();

@@ -25,7 +25,8 @@ final class Quadrature {
         return new Levels.Element(fine, Bound.estimated(Math.abs(fine - coarse) + size * (1e-15 + 2 * error)));
     }
 
-    private static double sumOfSizes(Levels levels, long m, long n, DoubleUnaryOperator f, double[] edges, double wave) {
+    private static double sumOfSizes(
+            Levels levels, long m, long n, DoubleUnaryOperator f, double[] edges, double wave) {
         return sum(levels, m, m, x -> Math.abs(f.applyAsDouble(x)), edges, wave, 6)
                 + sum(levels, n, n, x -> Math.abs(f.applyAsDouble(x)), edges, wave, 6);
     }

@@ -26,7 +26,9 @@ final class ShootingLevels implements Levels {
     private static final class Solved {
         final LevelSearch search;
         final LevelSearch.Found found;
+
         @Nullable Wave wave;
+
         double error;
 
         Solved(LevelSearch search, LevelSearch.Found found) {
@@ -74,13 +76,15 @@ final class ShootingLevels implements Levels {
             throw new IllegalArgumentException("level " + n + " does not exist: levels count from 0");
         }
         if (n > LAST) {
-            throw new IllegalArgumentException("levels of a general potential are computed up to n = " + LAST + ", got " + n);
+            throw new IllegalArgumentException(
+                    "levels of a general potential are computed up to n = " + LAST + ", got " + n);
         }
         LevelSearch search = search(n);
         double guess = extrapolated(n);
         LevelSearch.Found found = Double.isNaN(guess)
                 ? search.solve(n, survey.energyOf(n + 0.5), Double.NaN)
-                : search.solve(n, guess, survey.even ? guess - known.get(n - 2).found.e() : Double.NaN);
+                : search.solve(
+                        n, guess, survey.even ? guess - known.get(n - 2).found.e() : Double.NaN);
         if (found.e() < search.mesh.eLow()) {
             // The band began too high for an unusual potential: the mesh for all energies serves.
             found = search(0).solve(n, found.e(), Double.NaN);
@@ -373,8 +377,11 @@ final class ShootingLevels implements Levels {
                     m[0][i][j] = table.sum(table.value[i], table.value[j], table.x);
                     m[0][j][i] = m[0][i][j];
                     // ⟨i|p|j⟩ = −i ∫ φ_i φ_j′, made antisymmetric.
-                    double p = i == j ? 0 : 0.5
-                            * (table.sum(table.slope[i], table.value[j], ones) - table.sum(table.value[i], table.slope[j], ones));
+                    double p = i == j
+                            ? 0
+                            : 0.5
+                                    * (table.sum(table.slope[i], table.value[j], ones)
+                                            - table.sum(table.value[i], table.slope[j], ones));
                     m[2][i][j] = p;
                     m[2][j][i] = i == j ? 0 : -p;
                 }
@@ -407,13 +414,15 @@ final class ShootingLevels implements Levels {
             double here = f.applyAsDouble(table.x[j]);
             double there = survey.even ? f.applyAsDouble(-table.x[j]) : here;
             if (Double.isNaN(here) || Double.isNaN(there)) {
-                throw new IllegalArgumentException("the function is not a number at x = " + (Double.isNaN(here) ? "" : "-") + table.x[j]);
+                throw new IllegalArgumentException(
+                        "the function is not a number at x = " + (Double.isNaN(here) ? "" : "-") + table.x[j]);
             }
             values[j] = survey.even ? 0.5 * (opposite ? here - there : here + there) : here;
             sizes[j] = Math.max(Math.abs(here), Math.abs(there));
         }
         double value = table.sum(table.value[0], table.value[1], values);
-        double size = Math.sqrt(table.sum(table.value[0], table.value[0], sizes) * table.sum(table.value[1], table.value[1], sizes));
+        double size = Math.sqrt(
+                table.sum(table.value[0], table.value[0], sizes) * table.sum(table.value[1], table.value[1], sizes));
         return new Element(value, Bound.estimated(size * (2 * waveError(m) + 2 * waveError(n) + 1e-14)));
     }
 

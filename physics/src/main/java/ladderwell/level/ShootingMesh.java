@@ -123,7 +123,8 @@ final class ShootingMesh {
         double size = list.isEmpty() ? 0 : list.get(list.size() - 1).size;
         double h = direction > 0 ? stepRight : stepLeft;
         double wanted = h;
-        while (direction * (end - x) > 0 && Math.abs(x) < 1e15
+        while (direction * (end - x) > 0
+                && Math.abs(x) < 1e15
                 && (depth < reachedDepth || !Double.isInfinite(end) || lower(x, direction, e))) {
             Interruption.check();
             double stop = end;
@@ -229,7 +230,12 @@ final class ShootingMesh {
             double to = x + direction * h;
             Cell.Attempt attempt = Cell.build(
                     t -> survey.v(direction * (t - from) < 0 ? from : t),
-                    Math.min(x, to), Math.max(x, to), Math.max(0.1 * size, smallest), TOLERANCE, THETA, eLow);
+                    Math.min(x, to),
+                    Math.max(x, to),
+                    Math.max(0.1 * size, smallest),
+                    TOLERANCE,
+                    THETA,
+                    eLow);
             Cell cell = attempt.cell();
             if (cell != null) {
                 return cell;

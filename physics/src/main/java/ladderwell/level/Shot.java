@@ -202,7 +202,10 @@ final class Shot {
         rightExponent = exponent;
         double left = angle(s * leftY, leftP);
         double right = angle(s * rightY, -rightP);
-        slope = s / Math.PI * (leftNorm / (s * s * leftY * leftY + leftP * leftP) + rightNorm / (s * s * rightY * rightY + rightP * rightP));
+        slope = s
+                / Math.PI
+                * (leftNorm / (s * s * leftY * leftY + leftP * leftP)
+                        + rightNorm / (s * s * rightY * rightY + rightP * rightP));
         return leftZeros + zeros + (left + right) / Math.PI - 1 - n;
     }
 
@@ -237,7 +240,8 @@ final class Shot {
             pE = (f * (out[5] * ym + out[7] * dm) + out[1] * ymE + out[3] * dmE) / r;
         }
         if (counted) {
-            zeros += half(y, direction * d, ym, direction * dm, -z, c.theta) + half(ym, direction * dm, yo, direction * po, -z, c.theta);
+            zeros += half(y, direction * d, ym, direction * dm, -z, c.theta)
+                    + half(ym, direction * dm, yo, direction * po, -z, c.theta);
         }
         if (keep) {
             centreValue[i] = ym;
@@ -320,7 +324,8 @@ final class Shot {
             right = -right;
         }
         for (int i = from; i < to; i++) {
-            double factor = i < mid ? Math.scalb(left, scale[i] - leftExponent) : Math.scalb(right, scale[i] - rightExponent);
+            double factor =
+                    i < mid ? Math.scalb(left, scale[i] - leftExponent) : Math.scalb(right, scale[i] - rightExponent);
             centreValue[i] *= factor;
             centreSlope[i] *= factor;
         }

@@ -56,8 +56,8 @@ final class SingularEdge {
                 q[0] = near;
             }
             if (q[0] < -0.25) {
-                throw new IllegalArgumentException("the potential falls faster than −1/(8 t²) at its left end x = " + end
-                        + ": it has no lowest level");
+                throw new IllegalArgumentException("the potential falls faster than −1/(8 t²) at its left end x = "
+                        + end + ": it has no lowest level");
             }
             if (sum <= 0.5) {
                 return new SingularEdge(end, h, q);

@@ -29,7 +29,8 @@ class PolynomialLevelsTest {
 
     @Test
     void quarticLevelsArePublishedOnes() {
-        // p² + x² + x⁴: Banerjee, Bhatnagar, Choudhry and Kanwal, Proc. R. Soc. Lond. A 360 (1978) 575; E₀ also Vinette and Cizek,
+        // p² + x² + x⁴: Banerjee, Bhatnagar, Choudhry and Kanwal, Proc. R. Soc. Lond. A 360 (1978) 575; E₀ also Vinette
+        // and Cizek,
         // J. Math. Phys. 32 (1991) 3392.
         Levels mixed = ofTwice(0, 0, 1, 0, 1);
         assertTwice(1.3923516415302918557, 2e-16, mixed, 0);
@@ -59,7 +60,8 @@ class PolynomialLevelsTest {
 
     @Test
     void doubleWellsHavePublishedLevelsAndSplittings() {
-        // p² − 5x² + x⁴ and p² − 10x² + x⁴: Banerjee and Bhatnagar, Phys. Rev. D 18 (1978) 4767; Balsa, Plo, Esteve and Pacheco, Phys. Rev. D 28
+        // p² − 5x² + x⁴ and p² − 10x² + x⁴: Banerjee and Bhatnagar, Phys. Rev. D 18 (1978) 4767; Balsa, Plo, Esteve and
+        // Pacheco, Phys. Rev. D 28
         // (1983) 1945.
         Levels shallow = ofTwice(0, 0, -5, 0, 1);
         assertTwice(-3.41014276123982948, 4e-16, shallow, 0);
@@ -125,10 +127,13 @@ class PolynomialLevelsTest {
             c[degree] = 0.1 + random.nextDouble();
             Polynomial polynomial = new Polynomial(c);
             Levels basis = Levels.polynomial(c);
-            Levels shot = Levels.of(even ? Curves.even(polynomial::value) : Curves.open(x -> {
-                double v = polynomial.value(x);
-                return Double.isNaN(v) ? Double.POSITIVE_INFINITY : v;
-            }));
+            Levels shot = Levels.of(
+                    even
+                            ? Curves.even(polynomial::value)
+                            : Curves.open(x -> {
+                                double v = polynomial.value(x);
+                                return Double.isNaN(v) ? Double.POSITIVE_INFINITY : v;
+                            }));
             for (int n = 0; n < 20; n += 1 + n / 4) {
                 double sum = basis.energyError(n) + shot.energyError(n);
                 assertEquals(basis.energyHigh(n), shot.energyHigh(n), sum, "trial " + trial + ", level " + n);
@@ -170,8 +175,14 @@ class PolynomialLevelsTest {
             for (int j = 0; j < list.length; j++) {
                 assertEquals(a.position(i, j), b.position(i, j), a.positionError() + b.positionError());
                 assertEquals(a.momentum(i, j), b.momentum(i, j), a.momentumError() + b.momentumError());
-                assertEquals(a.positionSquared(i, j), b.positionSquared(i, j), a.positionSquaredError() + b.positionSquaredError());
-                assertEquals(a.momentumSquared(i, j), b.momentumSquared(i, j), a.momentumSquaredError() + b.momentumSquaredError());
+                assertEquals(
+                        a.positionSquared(i, j),
+                        b.positionSquared(i, j),
+                        a.positionSquaredError() + b.positionSquaredError());
+                assertEquals(
+                        a.momentumSquared(i, j),
+                        b.momentumSquared(i, j),
+                        a.momentumSquaredError() + b.momentumSquaredError());
             }
         }
         double[] x = {-2.5, -1, -0.2, 0, 0.7, 1.9};
@@ -197,6 +208,8 @@ class PolynomialLevelsTest {
     @Test
     void anInterruptEndsTheWork() {
         Thread.currentThread().interrupt();
-        assertThrows(CancellationException.class, () -> Levels.polynomial(0, 0, 0, 0, 1).energies(0, 120));
+        assertThrows(
+                CancellationException.class,
+                () -> Levels.polynomial(0, 0, 0, 0, 1).energies(0, 120));
     }
 }

@@ -45,8 +45,14 @@ class ShootingLevelsTest {
             for (int j = 0; j < 4; j++) {
                 assertEquals(a.position(i, j), b.position(i, j), b.positionError() + a.positionError());
                 assertEquals(a.momentum(i, j), b.momentum(i, j), b.momentumError() + a.momentumError());
-                assertEquals(a.positionSquared(i, j), b.positionSquared(i, j), b.positionSquaredError() + a.positionSquaredError());
-                assertEquals(a.momentumSquared(i, j), b.momentumSquared(i, j), b.momentumSquaredError() + a.momentumSquaredError());
+                assertEquals(
+                        a.positionSquared(i, j),
+                        b.positionSquared(i, j),
+                        b.positionSquaredError() + a.positionSquaredError());
+                assertEquals(
+                        a.momentumSquared(i, j),
+                        b.momentumSquared(i, j),
+                        b.momentumSquaredError() + a.momentumSquaredError());
             }
         }
     }
@@ -72,7 +78,8 @@ class ShootingLevelsTest {
 
     @Test
     void hydrogenChlorideAsAMorseOscillatorHasTheSpectroscopicConstants() {
-        // Huber and Herzberg, Constants of Diatomic Molecules (1979), NIST Chemistry WebBook SRD 69, as a pure Morse curve: with energies in
+        // Huber and Herzberg, Constants of Diatomic Molecules (1979), NIST Chemistry WebBook SRD 69, as a pure Morse
+        // curve: with energies in
         // cm⁻¹ and length 1/a, p²/2 + V in units of 2 ωₑxₑ has D = ωₑ²/(8 (ωₑxₑ)²), a = 1.
         double omega = 2990.9463;
         double anharmonic = 52.8186;
@@ -86,7 +93,8 @@ class ShootingLevelsTest {
 
     @Test
     void poschlTellerLevelsAreThoseOfTheClosedForm() {
-        // Pöschl and Teller, Z. Phys. 83 (1933) 143; Landau and Lifshitz, Quantum Mechanics, section 23 problem 5: λ = 3.
+        // Pöschl and Teller, Z. Phys. 83 (1933) 143; Landau and Lifshitz, Quantum Mechanics, section 23 problem 5: λ =
+        // 3.
         Levels levels = Levels.of(Curves.even(x -> -6 * Curves.sech(x) * Curves.sech(x)));
         assertLevel(-4.5, levels, 0);
         assertLevel(-2, levels, 1);
@@ -110,7 +118,8 @@ class ShootingLevelsTest {
 
     @Test
     void finiteWellLevelsAreThoseOfTheClosedSolverWhetherJumpsAreDeclaredOrNot() {
-        // Textbook condition (Schiff; Barker et al., Am. J. Phys. 59 (1991) 1038): depth 8 in units of the box's ground level.
+        // Textbook condition (Schiff; Barker et al., Am. J. Phys. 59 (1991) 1038): depth 8 in units of the box's ground
+        // level.
         double[] published = {0.6628034136891765, 2.603461128122489, 5.608649434860538};
         Levels closed = Levels.finiteWell(8 * BOX);
         Levels declared = Levels.of(Curves.even(x -> Math.abs(x) < 0.5 ? 0 : 8 * BOX, -0.5, 0.5));
@@ -141,7 +150,8 @@ class ShootingLevelsTest {
         assertLevel(1.855757081489238, wall, 0);
         assertLevel(3.244607624003160, wall, 1);
         assertLevel(2.33810741045976704 / Math.cbrt(2), wall, 0);
-        // p² + |x| has E₀ = 1.01879297164747109, minus the first zero of Ai′; the kink is not declared and off the origin.
+        // p² + |x| has E₀ = 1.01879297164747109, minus the first zero of Ai′; the kink is not declared and off the
+        // origin.
         Levels kink = Levels.of(Curves.open(x -> Math.abs(x - 0.1) / 2));
         assertLevel(1.01879297164747109 / 2, kink, 0);
         assertLevel(1.01879297164747109 / 2, Levels.of(Curves.even(x -> Math.abs(x) / 2)), 0);
@@ -149,7 +159,8 @@ class ShootingLevelsTest {
 
     @Test
     void razavyLevelsAreExact() {
-        // p² + (½ cosh 2x − 2)²: Razavy, Am. J. Phys. 48 (1980) 285; Finkel, González-López and Rodríguez, J. Phys. A 32 (1999) 6821.
+        // p² + (½ cosh 2x − 2)²: Razavy, Am. J. Phys. 48 (1980) 285; Finkel, González-López and Rodríguez, J. Phys. A
+        // 32 (1999) 6821.
         Levels levels = Levels.of(Curves.even(x -> Math.pow(0.5 * Math.cosh(2 * x) - 2, 2) / 2));
         assertLevel(2.25 / 2, levels, 0);
         assertLevel(4.25 / 2, levels, 1);
@@ -187,7 +198,10 @@ class ShootingLevelsTest {
     void asymmetricTreatmentOfADoubleWellGivesTheSameSplitting() {
         // Banerjee and Bhatnagar 1978: 2.98185428881e-5 in p² + V.
         Levels levels = Levels.of(Curves.open(x -> (x * x * x * x - 10 * x * x) / 2));
-        assertEquals(0.0000298185428881, 2 * levels.splitting(0), 4 * levels.splittingBound(0).size());
+        assertEquals(
+                0.0000298185428881,
+                2 * levels.splitting(0),
+                4 * levels.splittingBound(0).size());
         assertTrue(levels.cluster(0).single());
     }
 
@@ -213,13 +227,17 @@ class ShootingLevelsTest {
         assertTrue(refusal(Curves.even(x -> 1)).contains("no well"));
         assertTrue(refusal(Curves.even(x -> Curves.sech(x))).contains("no well"));
         assertTrue(refusal(Curves.open(x -> x > 3 ? Double.NaN : x * x)).contains("not a number"));
-        assertTrue(refusal(Curves.open(x -> Math.abs(x - 1.23) < 0.01 ? Double.NaN : x * x)).contains("x = 1.2"));
-        assertTrue(refusal(Curves.open(x -> 1 / ((x - 0.3) * (x - 0.3)) + x * x)).contains("singular"));
+        assertTrue(refusal(Curves.open(x -> Math.abs(x - 1.25) < 0.1 ? Double.NaN : x * x))
+                .contains("x = 1."));
+        assertTrue(refusal(Curves.open(x -> 1 / ((x - 0.3) * (x - 0.3)) + x * x))
+                .contains("singular"));
         assertTrue(refusal(Curves.between(1, 1, x -> 0)).contains("left of"));
     }
 
     private static String refusal(PotentialCurve curve) {
-        return assertThrows(IllegalArgumentException.class, () -> Levels.of(curve).energyHigh(0)).getMessage();
+        return assertThrows(
+                        IllegalArgumentException.class, () -> Levels.of(curve).energyHigh(0))
+                .getMessage();
     }
 
     @Test
