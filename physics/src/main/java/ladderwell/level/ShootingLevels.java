@@ -1,10 +1,10 @@
 package ladderwell.level;
 
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.Map;
 import java.util.function.DoubleUnaryOperator;
 import ladderwell.evidence.Bound;
-import ladderwell.evidence.Certainty;
 import ladderwell.numeric.Interruption;
 import org.jspecify.annotations.Nullable;
 
@@ -81,10 +81,11 @@ final class ShootingLevels implements Levels {
         }
         LevelSearch search = search(n);
         double guess = extrapolated(n);
+        Solved twin = known.get(n - 2);
+        double spacing = survey.even && twin != null ? guess - twin.found.e() : Double.NaN;
         LevelSearch.Found found = Double.isNaN(guess)
                 ? search.solve(n, survey.energyOf(n + 0.5), Double.NaN)
-                : search.solve(
-                        n, guess, survey.even ? guess - known.get(n - 2).found.e() : Double.NaN);
+                : search.solve(n, guess, spacing);
         if (found.e() < search.mesh.eLow()) {
             // The band began too high for an unusual potential: the mesh for all energies serves.
             found = search(0).solve(n, found.e(), Double.NaN);
@@ -233,7 +234,7 @@ final class ShootingLevels implements Levels {
         odd.at(0, EtaSeries.room(), out);
         WaveTable table = new WaveTable(new Wave[] {even, odd});
         double[] ones = new double[table.x.length];
-        java.util.Arrays.fill(ones, 1);
+        Arrays.fill(ones, 1);
         return Math.abs(value * out[1] / table.sum(table.value[0], table.value[1], ones)) / 2;
     }
 
@@ -345,63 +346,13 @@ final class ShootingLevels implements Levels {
     @Override
     public Elements elements(long[] levels) {
         Points.checkList(levels, Long.MAX_VALUE);
-        int size = levels.length;
-        double[][][] m = new double[4][size][size];
-        double[] errors = new double[4];
-        if (size > 0) {
-            fill(levels, m, errors);
-        }
-        return new Elements(levels, m[0], m[1], m[2], m[3], errors, Certainty.ESTIMATED);
-    }
-
-    private void fill(long[] levels, double[][][] m, double[] errors) {
-        int size = levels.length;
-        Wave[] waves = new Wave[size];
-        double[] off = new double[size];
-        for (int i = 0; i < size; i++) {
+        Wave[] waves = new Wave[levels.length];
+        double[] off = new double[levels.length];
+        for (int i = 0; i < levels.length; i++) {
             waves[i] = wave(levels[i]);
             off[i] = waveError(levels[i]);
         }
-        WaveTable table = new WaveTable(waves);
-        double[] ones = new double[table.x.length];
-        double[] square = new double[table.x.length];
-        for (int j = 0; j < ones.length; j++) {
-            ones[j] = 1;
-            square[j] = table.x[j] * table.x[j];
-        }
-        for (int i = 0; i < size; i++) {
-            Interruption.check();
-            for (int j = 0; j <= i; j++) {
-                boolean same = ((levels[i] ^ levels[j]) & 1) == 0;
-                if (!survey.even || !same) {
-                    m[0][i][j] = table.sum(table.value[i], table.value[j], table.x);
-                    m[0][j][i] = m[0][i][j];
-                    // ⟨i|p|j⟩ = −i ∫ φ_i φ_j′, made antisymmetric.
-                    double p = i == j
-                            ? 0
-                            : 0.5
-                                    * (table.sum(table.slope[i], table.value[j], ones)
-                                            - table.sum(table.value[i], table.slope[j], ones));
-                    m[2][i][j] = p;
-                    m[2][j][i] = i == j ? 0 : -p;
-                }
-                if (!survey.even || same) {
-                    m[1][i][j] = table.sum(table.value[i], table.value[j], square);
-                    m[1][j][i] = m[1][i][j];
-                    m[3][i][j] = table.sum(table.slope[i], table.slope[j], ones);
-                    m[3][j][i] = m[3][i][j];
-                }
-            }
-        }
-        for (int i = 0; i < size; i++) {
-            double xx = table.sum(table.value[i], table.value[i], square);
-            double pp = table.sum(table.slope[i], table.slope[i], ones);
-            double part = 2 * off[i] + 4e-15;
-            errors[0] = Math.max(errors[0], part * Math.sqrt(xx));
-            errors[1] = Math.max(errors[1], 2 * part * xx);
-            errors[2] = Math.max(errors[2], part * Math.sqrt(pp));
-            errors[3] = Math.max(errors[3], 2 * part * pp);
-        }
+        return WaveTable.elements(levels, waves, off, survey.even);
     }
 
     @Override
