@@ -1,6 +1,7 @@
 package ladderwell.level;
 
 import ladderwell.evidence.Bound;
+import ladderwell.evidence.Certainty;
 
 /**
  * Transition elements between a list of levels, as real matrices [i][j] over the list.
@@ -28,15 +29,26 @@ public final class Elements {
             double[][] momentum,
             double[][] momentumSquared,
             double[] errors) {
+        this(levels, position, positionSquared, momentum, momentumSquared, errors, Certainty.GUARANTEED);
+    }
+
+    Elements(
+            long[] levels,
+            double[][] position,
+            double[][] positionSquared,
+            double[][] momentum,
+            double[][] momentumSquared,
+            double[] errors,
+            Certainty certainty) {
         this.levels = levels.clone();
         this.position = position;
         this.positionSquared = positionSquared;
         this.momentum = momentum;
         this.momentumSquared = momentumSquared;
-        positionBound = Bound.guaranteed(errors[0]);
-        positionSquaredBound = Bound.guaranteed(errors[1]);
-        momentumBound = Bound.guaranteed(errors[2]);
-        momentumSquaredBound = Bound.guaranteed(errors[3]);
+        positionBound = new Bound(certainty, errors[0]);
+        positionSquaredBound = new Bound(certainty, errors[1]);
+        momentumBound = new Bound(certainty, errors[2]);
+        momentumSquaredBound = new Bound(certainty, errors[3]);
     }
 
     /** Number of levels in the list. */

@@ -35,6 +35,12 @@ final class Points {
         }
     }
 
+    static void checkEnergy(double energy) {
+        if (!(Math.abs(energy) <= Double.MAX_VALUE)) {
+            throw new IllegalArgumentException("levels are counted below a finite energy, got " + energy);
+        }
+    }
+
     static void checkDrop(double drop) {
         if (!(drop > 0 && drop <= Double.MAX_VALUE)) {
             throw new IllegalArgumentException("the value to drop below must be positive and finite, got " + drop);

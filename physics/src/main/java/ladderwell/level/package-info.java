@@ -6,8 +6,11 @@
  *
  * <p>Sign of the wave functions: φ_n is real, has parity (−1)^n, and is positive beyond its outermost zero towards +x.
  *
- * <p>Read {@link ladderwell.level.Levels} first, then {@link ladderwell.level.Elements}, then the three kinds of
- * levels; {@code WellEquation} holds the one equation that has to be solved.
+ * <p>Read {@link ladderwell.level.Levels} first, then {@link ladderwell.level.Elements}, then the closed kinds of levels; {@code
+ * WellEquation} holds the one equation of the finite well. Polynomials: {@code Polynomial}, {@code OscillatorBasis}, {@code BandSpectrum},
+ * {@code BasisProof}, {@code LevelCount}, {@code BasisBlock}. Anything else: {@link ladderwell.level.PotentialCurve}, {@code CurveSurvey},
+ * {@code Cell}, {@code ShootingMesh}, {@code Shot}, {@code LevelSearch}, {@code Wave}. What repeats:
+ * {@link ladderwell.level.PeriodicLevels}.
  */
 @NullMarked
 package ladderwell.level;

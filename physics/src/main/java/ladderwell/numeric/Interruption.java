@@ -3,7 +3,7 @@ package ladderwell.numeric;
 import java.util.concurrent.CancellationException;
 
 /** The interrupt flag, looked at from long loops. */
-final class Interruption {
+public final class Interruption {
     private Interruption() {}
 
     /**
@@ -11,7 +11,7 @@ final class Interruption {
      *
      * @throws CancellationException if it was
      */
-    static void check() {
+    public static void check() {
         if (Thread.interrupted()) {
             throw new CancellationException("the computation was interrupted");
         }

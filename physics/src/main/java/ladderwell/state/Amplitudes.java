@@ -151,6 +151,9 @@ public final class Amplitudes {
                         "a packet is expanded in the levels of a box or a finite well, not in harmonic levels");
             case BOX -> state.inBox();
             case FINITE_WELL -> state.inWell();
+            case GENERAL ->
+                throw new IllegalArgumentException(
+                        "a packet is expanded in the levels of a box or a finite well, not in " + levels);
         };
     }
 

@@ -1,0 +1,276 @@
+package ladderwell.level;
+
+import java.util.Arrays;
+import java.util.function.DoubleUnaryOperator;
+import org.jspecify.annotations.Nullable;
+
+/**
+ * One cell of the shooting mesh for −y″ + v y = e y, v = 2V, e = 2E. With s = (x − centre)/r in [−1, 1], the two solutions that start from the
+ * centre are u = ξ + Σ C_m(s) s^(2m+1) η_m(Z s²) and v = Σ C_m(s) s^(2m+1) η_m(Z s²), Z = r² (mean − e), where the polynomials C_m do not
+ * depend on e (constant perturbation method: Ixaru 1984; Ledoux, Van Daele and Vanden Berghe 2005; here all orders at once by
+ * C_{m+1}[k] = ((r²Δv C_m)[k] − (k+2)(k+1) C_m[k+2]) / (2 (k+m+1))).
+ */
+final class Cell {
+    /** Longest sum over η. */
+    static final int TERMS = 40;
+
+    private static final int LONGEST = 80;
+    private static final double[] CHECKS = {-1, -0.97, -0.31, 0.55, 0.93, 1};
+
+    final double a;
+    final double b;
+    final double centre;
+    final double r;
+    final double mean;
+    /** At least r² max |v − mean|. */
+    final double theta;
+    /** At least max |v − polynomial| where sampled. */
+    final double fit;
+    /** Lower bound of v. */
+    final double low;
+    /** Largest |v| met. */
+    final double size;
+
+    final int terms;
+    private final double[][] ofU;
+    private final double[][] ofV;
+    /** Rows u, u′, v, v′ at s = 1, then at s = −1, each over ξ, η₀ … */
+    private final double[] ends;
+
+    /**
+     * A try.
+     *
+     * @param cell the cell, null where refused
+     * @param shorter by what factor to shorten then
+     */
+    record Attempt(@Nullable Cell cell, double shorter) {}
+
+    private Cell(
+            double a,
+            double b,
+            double mean,
+            double theta,
+            double fit,
+            double size,
+            double[][] ofU,
+            double[][] ofV,
+            int terms) {
+        this.a = a;
+        this.b = b;
+        centre = (a + b) / 2;
+        r = (b - a) / 2;
+        this.mean = mean;
+        this.theta = theta;
+        this.fit = fit;
+        this.size = size;
+        low = mean - theta / (r * r);
+        this.terms = terms;
+        this.ofU = ofU;
+        this.ofV = ofV;
+        int w = terms + 1;
+        ends = new double[8 * w];
+        double[] last = new double[4];
+        for (int f = 0; f < 2; f++) {
+            for (int m = terms - 1; m >= 0; m--) {
+                double[] p = f == 0 ? ofU[m] : ofV[m];
+                for (int side = 0; side < 2; side++) {
+                    double s = 1 - 2 * side;
+                    double value = Chebyshev.value(p, s);
+                    int y = (4 * side + 2 * f) * w;
+                    int d = y + w;
+                    ends[y + 1 + m] = s * value;
+                    // The derivative of s^(2m+1) η_m is s^(2m) η_{m−1}.
+                    ends[d + 1 + m] = s * Chebyshev.slope(p, s) + (m + 1 < terms ? last[2 * f + side] : 0);
+                    last[2 * f + side] = value;
+                    if (m == 0) {
+                        ends[d] = value;
+                        ends[y] = f == 0 ? 1 : 0;
+                    }
+                }
+            }
+        }
+    }
+
+    /**
+     * The cell on [a, b], unless v does not fit or varies too much.
+     *
+     * @param scale size of v that the fit may refer to besides the values in the cell
+     * @param tolerance fit over that size
+     * @param thetaMost largest r² max|v − mean| in any case
+     * @param eLow the mesh serves energies above this: a cell may be longer if the phase outruns theta
+     */
+    static Attempt build(
+            DoubleUnaryOperator v, double a, double b, double scale, double tolerance, double thetaMost, double eLow) {
+        int d = Chebyshev.DEGREE;
+        double c = (a + b) / 2;
+        double r = (b - a) / 2;
+        double[] f = new double[d + 1];
+        double size = scale;
+        double most = Double.NEGATIVE_INFINITY;
+        double least = Double.POSITIVE_INFINITY;
+        for (int j = 0; j <= d; j++) {
+            f[j] = v.applyAsDouble(c + r * Chebyshev.NODE[j]);
+            size = Math.max(size, Math.abs(f[j]));
+            most = Math.max(most, f[j]);
+            least = Math.min(least, f[j]);
+        }
+        double[] t = Chebyshev.coefficients(f);
+        // The second part is the rounding of x itself; a cell so short that a jump would hide in it is none.
+        double rounding = 2e-16 * Math.max(Math.abs(a), Math.abs(b)) * (most - least) / (2 * r);
+        double eps = tolerance * size + Math.min(rounding, 1e-11 * size);
+        if (!(Math.abs(t[d]) + Math.abs(t[d - 1]) <= eps)) {
+            return new Attempt(null, 0.75);
+        }
+        int n = d;
+        while (n > 0 && Math.abs(t[n]) <= 0.4 * eps) {
+            n--;
+        }
+        double fit = 0;
+        for (int i = n + 1; i <= d; i++) {
+            fit += Math.abs(t[i]);
+        }
+        double mean = t[0];
+        for (int i = 2; i <= n; i += 2) {
+            mean -= t[i] / (i * i - 1.0);
+        }
+        t[0] -= mean;
+        double theta = 0;
+        for (int i = 0; i <= n; i++) {
+            theta += Math.abs(t[i]);
+        }
+        double fast = Math.sqrt(Math.max(0, r * r * (eLow - mean - theta)));
+        theta *= r * r;
+        if (!(theta <= Math.max(thetaMost, fast))) {
+            return new Attempt(null, Math.max(0.2, Math.min(0.9, 0.97 * Math.cbrt(Math.max(thetaMost, fast) / theta))));
+        }
+        double[] q = Chebyshev.powers(t, n);
+        for (double s : CHECKS) {
+            double x = s == -1 ? Math.nextUp(a) : s == 1 ? Math.nextDown(b) : c + r * s;
+            fit = Math.max(fit, Math.abs(mean + Chebyshev.value(q, s) - v.applyAsDouble(x)));
+        }
+        if (!(fit <= 4 * eps)) {
+            return new Attempt(null, 0.75);
+        }
+        for (int j = 0; j <= n; j++) {
+            q[j] *= r * r;
+        }
+        double[][] ofU = new double[TERMS + 1][];
+        double[][] ofV = new double[TERMS + 1][];
+        double[] first = new double[n + 2];
+        for (int j = 0; j <= n; j++) {
+            first[j + 1] = 0.5 * q[j] / (j + 1);
+        }
+        ofU[0] = first;
+        ofV[0] = new double[] {1};
+        double odd = 1;
+        double base = Math.max(fast, 1e-9);
+        double power = base;
+        int m = 0;
+        while (true) {
+            ofU[m + 1] = next(ofU[m], q, m);
+            ofV[m + 1] = next(ofV[m], q, m);
+            odd *= 2 * m + 3;
+            power *= base;
+            if (m + 2 >= TERMS) {
+                return new Attempt(null, 0.75);
+            }
+            if (m > 1 && Math.max(bound(ofU[m + 1]), bound(ofV[m + 1])) < 2e-17 * Math.max(odd, power)) {
+                break;
+            }
+            m++;
+        }
+        return new Attempt(new Cell(a, b, mean, theta, fit, size, ofU, ofV, m + 1), 1);
+    }
+
+    private static double[] next(double[] p, double[] q, int m) {
+        int length = Math.min(p.length + q.length - 1, LONGEST);
+        double[] o = new double[length];
+        for (int i = 0; i < p.length; i++) {
+            double factor = p[i];
+            if (factor != 0) {
+                for (int j = 0; j < q.length && i + j < length; j++) {
+                    o[i + j] += factor * q[j];
+                }
+            }
+        }
+        for (int k = 0; k < length; k++) {
+            if (k + 2 < p.length) {
+                o[k] -= (k + 2.0) * (k + 1) * p[k + 2];
+            }
+            o[k] /= 2.0 * (k + m + 1);
+        }
+        while (length > 1 && Math.abs(o[length - 1]) < 1e-19) {
+            length--;
+        }
+        return Arrays.copyOf(o, length);
+    }
+
+    private static double bound(double[] p) {
+        double sum = 0;
+        for (int i = 0; i < p.length; i++) {
+            sum += Math.abs(p[i]) * (1 + i);
+        }
+        return sum;
+    }
+
+    /** Z at an energy. */
+    double z(double e) {
+        return r * r * (mean - e);
+    }
+
+    /**
+     * The eight numbers u, u′, v, v′ at s = side (out[0 … 3]) and their derivatives by Z (out[4 … 7]).
+     *
+     * @param g η at Z, up to index {@link #terms} + 1
+     */
+    void end(int side, double z, double[] g, boolean slopes, double[] out) {
+        int w = terms + 1;
+        int at = side > 0 ? 0 : 4 * w;
+        double extra = side * z * g[1];
+        out[0] = dot(at, g, 0);
+        out[1] = dot(at + w, g, 0) + extra;
+        out[2] = dot(at + 2 * w, g, 0);
+        out[3] = dot(at + 3 * w, g, 0);
+        if (slopes) {
+            // d(Z η₀)/dZ = (ξ + η₀)/2, dξ/dZ = η₀/2
+            out[4] = 0.5 * dot(at, g, 1);
+            out[5] = 0.5 * (dot(at + w, g, 1) + side * (g[0] + g[1]));
+            out[6] = 0.5 * dot(at + 2 * w, g, 1);
+            out[7] = 0.5 * dot(at + 3 * w, g, 1);
+        }
+    }
+
+    private double dot(int at, double[] g, int shift) {
+        double even = 0;
+        double odd = 0;
+        int i = 0;
+        for (; i < terms; i += 2) {
+            even += ends[at + i] * g[i + shift];
+            odd += ends[at + i + 1] * g[i + 1 + shift];
+        }
+        return i == terms ? even + odd + ends[at + i] * g[i + shift] : even + odd;
+    }
+
+    /** {y, dy/ds} at s for the solution with value yc and slope dc (in s) at the centre. */
+    void at(double s, double z, double yc, double dc, double[] g, double[] out) {
+        int exponent = EtaSeries.fill(z * s * s, terms, g);
+        double y = yc * g[0];
+        double d = yc * z * s * g[1];
+        double even = 1;
+        for (int m = 0; m < terms; m++) {
+            double odd = even * s;
+            double c = yc * Chebyshev.value(ofU[m], s) + dc * Chebyshev.value(ofV[m], s);
+            double cs = yc * Chebyshev.slope(ofU[m], s) + dc * Chebyshev.slope(ofV[m], s);
+            y += c * odd * g[1 + m];
+            d += cs * odd * g[1 + m] + c * even * g[m];
+            even = odd * s;
+        }
+        out[0] = exponent == 0 ? y : Math.scalb(y, exponent);
+        out[1] = exponent == 0 ? d : Math.scalb(d, exponent);
+    }
+
+    /** v at s by the polynomial. */
+    double potential(double s) {
+        return mean + 2 * Chebyshev.slope(ofU[0], s) / (r * r);
+    }
+}

@@ -1,0 +1,384 @@
+package ladderwell.level;
+
+import java.util.Arrays;
+import java.util.HashMap;
+import java.util.Map;
+import java.util.function.DoubleUnaryOperator;
+import ladderwell.evidence.Bound;
+import ladderwell.numeric.Interruption;
+import org.jspecify.annotations.Nullable;
+
+/**
+ * Levels of any potential by shooting: single levels are found when asked for and kept. Levels 128, 256, … begin new meshes whose cells are
+ * as long as the higher energies allow. Energies inside are e = 2E.
+ */
+final class ShootingLevels implements Levels {
+    private static final long LAST = 50_000_000;
+    private static final int FIRST_BAND = 7;
+    private static final int REMEMBERED = 20_000;
+
+    private final CurveSurvey survey;
+    private final Map<Integer, LevelSearch> bands = new HashMap<>();
+    private final Map<Long, Solved> known = new HashMap<>();
+    private long count = -1;
+
+    /** A level; the wave and with it the error are added when asked for. */
+    private static final class Solved {
+        final LevelSearch search;
+        final LevelSearch.Found found;
+
+        @Nullable Wave wave;
+
+        double error;
+
+        Solved(LevelSearch search, LevelSearch.Found found) {
+            this.search = search;
+            this.found = found;
+        }
+    }
+
+    ShootingLevels(PotentialCurve curve) {
+        survey = new CurveSurvey(curve);
+    }
+
+    @Override
+    public Kind kind() {
+        return Kind.GENERAL;
+    }
+
+    private static int band(long n) {
+        return Math.max(FIRST_BAND - 1, 63 - Long.numberOfLeadingZeros(Math.max(1, n)));
+    }
+
+    private LevelSearch search(long n) {
+        int band = band(n);
+        LevelSearch search = bands.get(band);
+        if (search == null) {
+            double low = band < FIRST_BAND ? Double.NEGATIVE_INFINITY : survey.energyOf(0.9 * (1L << band));
+            double high = survey.singular ? Math.max(Math.abs(survey.energyOf(1.1 * (2L << band))), nearBottom()) : 0;
+            search = new LevelSearch(survey, low, high);
+            bands.put(band, search);
+        }
+        return search;
+    }
+
+    /** Size of the lowest energies at a singular end. */
+    private double nearBottom() {
+        return Math.min(Math.abs(survey.energyOf(0.6)) * 4, Math.abs(survey.bottom));
+    }
+
+    private synchronized Solved solved(long n) {
+        Solved level = known.get(n);
+        if (level != null) {
+            return level;
+        }
+        if (n < 0) {
+            throw new IllegalArgumentException("level " + n + " does not exist: levels count from 0");
+        }
+        if (n > LAST) {
+            throw new IllegalArgumentException(
+                    "levels of a general potential are computed up to n = " + LAST + ", got " + n);
+        }
+        LevelSearch search = search(n);
+        double guess = extrapolated(n);
+        Solved twin = known.get(n - 2);
+        double spacing = survey.even && twin != null ? guess - twin.found.e() : Double.NaN;
+        LevelSearch.Found found = Double.isNaN(guess)
+                ? search.solve(n, survey.energyOf(n + 0.5), Double.NaN)
+                : search.solve(n, guess, spacing);
+        if (found.e() < search.mesh.eLow()) {
+            // The band began too high for an unusual potential: the mesh for all energies serves.
+            found = search(0).solve(n, found.e(), Double.NaN);
+            search = search(0);
+        }
+        level = new Solved(search, found);
+        if (known.size() >= REMEMBERED) {
+            known.clear();
+        }
+        known.put(n, level);
+        return level;
+    }
+
+    /** From four neighbours below; NaN where they are not all known. */
+    private double extrapolated(long n) {
+        double[] e = new double[4];
+        for (int i = 0; i < 4; i++) {
+            Solved neighbour = known.get(n - 1 - i);
+            if (neighbour == null) {
+                return Double.NaN;
+            }
+            e[i] = neighbour.found.e();
+        }
+        double guess = 4 * e[0] - 6 * e[1] + 4 * e[2] - e[3];
+        return guess > e[0] ? guess : Double.NaN;
+    }
+
+    private synchronized Wave wave(long n) {
+        Solved level = solved(n);
+        Wave wave = level.wave;
+        if (wave == null) {
+            Interruption.check();
+            wave = level.search.wave(n, level.found);
+            level.wave = wave;
+            level.error = level.found.rounding() + wave.fitError() + level.search.tailError(wave);
+        }
+        return wave;
+    }
+
+    private double error(long n) {
+        wave(n);
+        return solved(n).error;
+    }
+
+    @Override
+    public synchronized long count() {
+        if (count < 0) {
+            count = counted();
+        }
+        return count;
+    }
+
+    private long counted() {
+        double top = survey.threshold;
+        if (Double.isInfinite(top)) {
+            return Long.MAX_VALUE;
+        }
+        double depth = Math.min(top - survey.bottom, Math.abs(top - survey.energyOf(0.5)) * 10);
+        LevelSearch search = search(0);
+        long some = search.below(top - 1e-6 * depth);
+        long more = search.below(top - 1e-9 * depth);
+        if (more > 2 * some + 10) {
+            // A tail like 1/x carries levels without end.
+            return Long.MAX_VALUE;
+        }
+        return search.below(top - 1e-13 * depth);
+    }
+
+    @Override
+    public double energyHigh(long n) {
+        return solved(n).found.e() / 2;
+    }
+
+    @Override
+    public double energyLow(long n) {
+        Points.checkLevel(n, Long.MAX_VALUE);
+        return 0;
+    }
+
+    @Override
+    public double energyError(long n) {
+        return error(n) / 2;
+    }
+
+    @Override
+    public Bound energyBound(long n) {
+        return Bound.estimated(energyError(n));
+    }
+
+    @Override
+    public synchronized double[] energies(long first, int count) {
+        Points.check(first, count, Long.MAX_VALUE, new double[0]);
+        double[] energies = new double[count];
+        for (int i = 0; i < count; i++) {
+            energies[i] = energyHigh(first + i);
+        }
+        return energies;
+    }
+
+    @Override
+    public synchronized long countBelow(double energy) {
+        Points.checkEnergy(energy);
+        double e = 2 * energy;
+        if (e <= survey.bottom) {
+            return 0;
+        }
+        if (e >= survey.threshold) {
+            return count();
+        }
+        double about = survey.action(e);
+        return search(about > 200 ? (long) (0.4 * about) : 0).below(e);
+    }
+
+    @Override
+    public double threshold() {
+        return survey.threshold / 2;
+    }
+
+    @Override
+    public double binding(long n) {
+        return survey.threshold / 2 - energyHigh(n);
+    }
+
+    @Override
+    public double decay(long n) {
+        return Math.sqrt(survey.threshold - 2 * energyHigh(n));
+    }
+
+    @Override
+    public double decayError(long n) {
+        return Double.isInfinite(survey.threshold) ? 0 : energyError(n) / (2 * binding(n));
+    }
+
+    @Override
+    public double splitting(long n) {
+        double simple = Levels.super.splitting(n);
+        if (!survey.even || (n & 1) == 1) {
+            return simple;
+        }
+        // y_e(0) y_o′(0) = (e_o − e_e) ∫₀ y_e y_o, without cancellation.
+        Wave even = wave(n);
+        Wave odd = wave(n + 1);
+        double[] out = new double[2];
+        even.at(0, EtaSeries.room(), out);
+        double value = out[0];
+        odd.at(0, EtaSeries.room(), out);
+        WaveTable table = new WaveTable(new Wave[] {even, odd});
+        double[] ones = new double[table.x.length];
+        Arrays.fill(ones, 1);
+        return Math.abs(value * out[1] / table.sum(table.value[0], table.value[1], ones)) / 2;
+    }
+
+    @Override
+    public Bound splittingBound(long n) {
+        if (!survey.even || (n & 1) == 1) {
+            return Levels.super.splittingBound(n);
+        }
+        // What an error of the potential or the energy does to the action under the barrier.
+        Wave wave = wave(n);
+        double relative = 2e-14 + waveError(n) + waveError(n + 1);
+        for (int i = wave.from(); i < wave.to(); i++) {
+            Cell c = wave.cells()[i];
+            double above = c.mean - wave.e();
+            if (above > 0) {
+                relative += 2 * c.r * (c.fit + error(n) + error(n + 1)) / Math.max(Math.sqrt(above), 1 / c.r);
+            }
+        }
+        return Bound.estimated(relative * splitting(n));
+    }
+
+    @Override
+    public Cluster cluster(long n) {
+        Points.checkLevel(n, count());
+        long first = n;
+        long last = n;
+        if (!survey.even) {
+            while (first > 0 && together(first - 1)) {
+                first--;
+            }
+            while (last + 1 < count() && together(last)) {
+                last++;
+            }
+        }
+        double spread = energyHigh(last) - energyHigh(first) + energyError(first) + energyError(last);
+        return new Cluster(first, last, first == last ? Bound.exact() : Bound.estimated(spread));
+    }
+
+    private boolean together(long n) {
+        return energyHigh(n + 1) - energyHigh(n) <= 4 * (energyError(n) + energyError(n + 1));
+    }
+
+    /** Estimated norm error of a wave function: its energy's error over the distance to the levels it can mix with. */
+    private double waveError(long n) {
+        int step = survey.even ? 2 : 1;
+        double gap = Double.POSITIVE_INFINITY;
+        if (n >= step) {
+            gap = 2 * (energyHigh(n) - energyHigh(n - step));
+        }
+        if (n + step < count()) {
+            gap = Math.min(gap, 2 * (energyHigh(n + step) - energyHigh(n)));
+        }
+        if (survey.threshold < Double.POSITIVE_INFINITY) {
+            gap = Math.min(gap, survey.threshold - 2 * energyHigh(n));
+        }
+        return gap > 0 ? Math.min(2, 4 * error(n) / gap + 4e-15) : 2;
+    }
+
+    @Override
+    public double[][] waveFunctions(long first, int count, double[] x) {
+        Points.check(first, count, Long.MAX_VALUE, x);
+        double[][] table = new double[count][x.length];
+        double[] g = EtaSeries.room();
+        double[] out = new double[2];
+        double scale = survey.even ? Math.sqrt(0.5) : 1;
+        for (int row = 0; row < count; row++) {
+            Interruption.check();
+            Wave wave = wave(first + row);
+            boolean odd = ((first + row) & 1) == 1;
+            for (int i = 0; i < x.length; i++) {
+                if (x[i] <= survey.left || x[i] >= survey.right) {
+                    continue;
+                }
+                wave.at(survey.even ? Math.abs(x[i]) : x[i], g, out);
+                table[row][i] = survey.even && odd && x[i] < 0 ? -scale * out[0] : scale * out[0];
+            }
+        }
+        return table;
+    }
+
+    @Override
+    public double waveFunctionError(long last) {
+        double worst = 0;
+        for (long n = Math.max(0, last - 3); n <= last; n++) {
+            // |f|² ≤ ‖f‖ ‖f′‖ for the error f, whose slope is that of the highest level.
+            worst = Math.max(worst, waveError(n));
+        }
+        double slope = Math.sqrt(Math.max(2 * energyHigh(last) - survey.bottom, 1 / (survey.length * survey.length)));
+        return 2 * worst * Math.sqrt(slope);
+    }
+
+    @Override
+    public double reach(long n, double drop) {
+        Points.checkDrop(drop);
+        Wave wave = wave(n);
+        double right = beyond(wave.right(), wave.tail(), wave.cells()[wave.to() - 1].mean - wave.e(), drop);
+        if (survey.even) {
+            return right;
+        }
+        double left = beyond(-wave.left(), wave.head(), wave.cells()[wave.from()].mean - wave.e(), drop);
+        double wall = Double.isInfinite(survey.left) ? left : Math.abs(survey.left);
+        return Math.max(Math.abs(right), Math.max(Math.abs(left), wall));
+    }
+
+    private static double beyond(double end, double value, double square, double drop) {
+        return value > drop && square > 0 ? end + Math.log(value / drop) / Math.sqrt(square) : end;
+    }
+
+    @Override
+    public Elements elements(long[] levels) {
+        Points.checkList(levels, Long.MAX_VALUE);
+        Wave[] waves = new Wave[levels.length];
+        double[] off = new double[levels.length];
+        for (int i = 0; i < levels.length; i++) {
+            waves[i] = wave(levels[i]);
+            off[i] = waveError(levels[i]);
+        }
+        return WaveTable.elements(levels, waves, off, survey.even);
+    }
+
+    @Override
+    public Element element(long m, long n, DoubleUnaryOperator f) {
+        WaveTable table = new WaveTable(new Wave[] {wave(m), wave(n)});
+        boolean opposite = ((m ^ n) & 1) == 1;
+        double[] values = new double[table.x.length];
+        double[] sizes = new double[table.x.length];
+        for (int j = 0; j < values.length; j++) {
+            double here = f.applyAsDouble(table.x[j]);
+            double there = survey.even ? f.applyAsDouble(-table.x[j]) : here;
+            if (Double.isNaN(here) || Double.isNaN(there)) {
+                throw new IllegalArgumentException(
+                        "the function is not a number at x = " + (Double.isNaN(here) ? "" : "-") + table.x[j]);
+            }
+            values[j] = survey.even ? 0.5 * (opposite ? here - there : here + there) : here;
+            sizes[j] = Math.max(Math.abs(here), Math.abs(there));
+        }
+        double value = table.sum(table.value[0], table.value[1], values);
+        double size = Math.sqrt(
+                table.sum(table.value[0], table.value[0], sizes) * table.sum(table.value[1], table.value[1], sizes));
+        return new Element(value, Bound.estimated(size * (2 * waveError(m) + 2 * waveError(n) + 1e-14)));
+    }
+
+    @Override
+    public String toString() {
+        return "levels of a general potential";
+    }
+}
