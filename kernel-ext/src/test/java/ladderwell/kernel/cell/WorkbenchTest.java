@@ -257,6 +257,8 @@ class WorkbenchTest {
     }
 
     private CellEnd interrupted(String code, int afterMillis) throws Exception {
+        // as the kernel does: on a busy machine the interrupt may come before the cell's thread has begun
+        bench.announceCell();
         CompletableFuture<CellEnd> running = CompletableFuture.supplyAsync(() -> run(code));
         Thread.sleep(afterMillis);
         bench.interrupt();
