@@ -97,10 +97,15 @@ final class LevelSearch {
             double best = e - f / slope;
             double noise = 2e-16 * (8 + shot.to - shot.from);
             double unit = unit(e, slope);
-            if (Math.abs(f) < 0.1
-                    && (step <= 4 * unit || Math.abs(f) <= noise || step * Math.abs(slope / before - 1) < 0.4 * unit)) {
+            // In a sweep the slope is known to change by about 1/n from level to level: Newton's next error is step · f / n.
+            boolean smooth = Math.abs(slope * spacing - 1) < 0.3;
+            boolean settled = step <= 4 * unit
+                    || Math.abs(f) <= noise
+                    || step * Math.abs(slope / before - 1) < 0.4 * unit
+                    || smooth && Math.abs(f) < 1e-5 && step * Math.abs(f) < 0.1 * n * unit;
+            if (Math.abs(f) < 0.1 && settled) {
                 double delta = 8 * unit + noise / slope;
-                if (Math.abs(slope * spacing - 1) < 0.3) {
+                if (smooth) {
                     return found(best, delta, slope);
                 }
                 if (shot.mismatch(best + delta, k, s, parity, false, true) < 0) {
