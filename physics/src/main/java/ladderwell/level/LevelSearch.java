@@ -58,8 +58,10 @@ final class LevelSearch {
     }
 
     /** What the energy can be resolved to: its own rounding and that of the angles. */
-    private static double unit(double e, double slope) {
-        return Math.max(1e-15 * Math.abs(e), Math.max(4e-16 / slope, 1e-300));
+    private double unit(double e, double slope) {
+        // A slope next to nothing says that the edge lies badly, not that the energy cannot be resolved.
+        double phase = Math.min(4e-16 / slope, 1e-12 * (Math.abs(e) + Math.abs(e - survey.bottom)));
+        return Math.max(1e-15 * Math.abs(e), Math.max(phase, 1e-300));
     }
 
     /**
@@ -87,6 +89,9 @@ final class LevelSearch {
             s = frequency(e);
             double f = shot.mismatch(e, k, s, parity, true, true);
             double slope = shot.slope;
+            if (Double.isNaN(f)) {
+                break;
+            }
             if (f > 0) {
                 b = Math.min(b, e);
                 bracketed = true;
@@ -145,7 +150,12 @@ final class LevelSearch {
             }
             e = best;
         }
-        throw new PhysicsException.NotConverged("level n = " + n, shot.count - first, (b - a) / 2, 1e-15 * Math.abs(e));
+        double open = b - a;
+        throw new PhysicsException.NotConverged(
+                "level n = " + n,
+                shot.count - first,
+                Double.isNaN(open) ? Double.POSITIVE_INFINITY : open / 2,
+                Double.isFinite(e) ? 1e-15 * Math.abs(e) : 0);
     }
 
     private Found found(double e, double delta, double slope) {
