@@ -102,7 +102,8 @@ final class LevelSearch {
             double best = e - f / slope;
             double noise = 2e-16 * (8 + shot.to - shot.from);
             double unit = unit(e, slope);
-            // In a sweep the slope is known to change by about 1/n from level to level: Newton's next error is step · f / n.
+            // In a sweep the slope is known to change by about 1/n from level to level: Newton's next error is step · f
+            // / n.
             boolean smooth = Math.abs(slope * spacing - 1) < 0.3;
             boolean settled = step <= 4 * unit
                     || Math.abs(f) <= noise

@@ -124,8 +124,7 @@ final class PolynomialLevels implements Levels {
             few = 0;
         }
         if (few > 0) {
-            BasisBlock block =
-                    quick ? BasisBlock.of(polynomial, (int) first + few, false) : block(first + few - 1);
+            BasisBlock block = quick ? BasisBlock.of(polynomial, (int) first + few, false) : block(first + few - 1);
             for (int i = 0; i < few; i++) {
                 int n = (int) first + i;
                 energies[i] = quick ? block.value(n) : block.proved().quotient()[n];

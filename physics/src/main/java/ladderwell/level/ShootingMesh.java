@@ -118,7 +118,7 @@ final class ShootingMesh {
      */
     private double scale(double x, double size) {
         double usual = survey.length;
-        boolean near = edge == null && Math.min(Math.abs(x - start), Math.abs(x - survey.bottomAt)) < 2 * usual;
+        boolean near = edge == null && Math.min(Math.abs(x - start), Math.abs(x - survey.bottomAt)) < 6 * usual;
         return Math.max(near ? 1 / (usual * usual) : 0, Math.max(0.1 * size, smallest));
     }
 
@@ -193,8 +193,7 @@ final class ShootingMesh {
     }
 
     private Cell.Attempt attempt(double x, double y, double size) {
-        return Cell.build(
-                survey::v, Math.min(x, y), Math.max(x, y), scale(x, size), TOLERANCE, THETA, eLow);
+        return Cell.build(survey::v, Math.min(x, y), Math.max(x, y), scale(x, size), TOLERANCE, THETA, eLow);
     }
 
     /** The longest cell from x that fits: up to a jump or kink; null where there is none longer than rounding. */
@@ -237,7 +236,8 @@ final class ShootingMesh {
     /** A cell from x that looks at the potential beyond a trouble at x itself: its first sliver continues the rest. */
     private Cell past(double x, int direction, double wanted, double size) {
         double least = 1e-13 * survey.length + 1e-15 * Math.abs(x);
-        // A kink may lie a little ahead of x, where cells up to it are too short to tell; skipping it costs slope · sliver².
+        // A kink may lie a little ahead of x, where cells up to it are too short to tell; skipping it costs slope ·
+        // sliver².
         for (double sliver = least; sliver < 1e-8 * survey.length; sliver *= 8) {
             double from = x + direction * sliver;
             double step = Math.abs(survey.v(from) - survey.v(direction > 0 ? Math.nextUp(x) : Math.nextDown(x)));

@@ -49,18 +49,16 @@ final class Tasks {
                         }),
                 farUpTheLadder(),
                 quartic("50 levels of p²/2 + x⁴", 0.10, "values", PotentialLevels::fifty),
-                quartic("50 levels of p²/2 + x⁴ with vectors, ours with proofs", 0.20, "vectors", PotentialLevels::fiftyWithVectors),
-                quartic("1000 levels of p²/2 + x⁴", 0.05, "thousand", PotentialLevels::thousand),
-                new Task(
-                        "all levels of a piecewise well",
-                        1,
+                quartic(
+                        "50 levels of p²/2 + x⁴ with vectors, ours with proofs",
                         0.20,
-                        1e-12,
-                        Script.of("piecewise_well.py"),
-                        () -> {
-                            PotentialLevels levels = new PotentialLevels();
-                            return new Work(levels::well, levels::wellError);
-                        }),
+                        "vectors",
+                        PotentialLevels::fiftyWithVectors),
+                quartic("1000 levels of p²/2 + x⁴", 0.05, "thousand", PotentialLevels::thousand),
+                new Task("all levels of a piecewise well", 1, 0.20, 1e-12, Script.of("piecewise_well.py"), () -> {
+                    PotentialLevels levels = new PotentialLevels();
+                    return new Work(levels::well, levels::wellError);
+                }),
                 farUpTheQuartic());
     }
 
