@@ -90,15 +90,6 @@ final class BasisBlock {
         return n / parts;
     }
 
-    /** For messages. */
-    String show() {
-        return "basis of " + basis.size() + " with frequency " + basis.omega();
-    }
-
-    int count() {
-        return count;
-    }
-
     double value(int n) {
         return values[part(n)][place(n)];
     }
