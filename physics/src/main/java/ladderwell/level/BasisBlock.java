@@ -8,7 +8,7 @@ import org.jspecify.annotations.Nullable;
 /** The lowest levels of a polynomial in one oscillator basis, by parity where the polynomial is even; bounds when asked for. */
 final class BasisBlock {
     /** Beyond this the bases grow without need: shooting is quicker. */
-    private static final int LARGEST = 1500;
+    private static final int LARGEST = 600;
 
     private final Polynomial polynomial;
     private final OscillatorBasis basis;
@@ -65,7 +65,7 @@ final class BasisBlock {
         }
         while (true) {
             BasisBlock block = new BasisBlock(polynomial, OscillatorBasis.of(polynomial, size, omega, centre), count);
-            if (block.closed(vectors) || size >= LARGEST) {
+            if (block.closed(vectors) || size > LARGEST) {
                 return block;
             }
             size += 10 + size / 5;
@@ -88,15 +88,6 @@ final class BasisBlock {
 
     private int place(int n) {
         return n / parts;
-    }
-
-    /** For messages. */
-    String show() {
-        return "basis of " + basis.size() + " with frequency " + basis.omega();
-    }
-
-    int count() {
-        return count;
     }
 
     double value(int n) {
@@ -138,6 +129,19 @@ final class BasisBlock {
             proved = done;
         }
         return done;
+    }
+
+    /** Whether all bounds are proved, to better than shooting would estimate. */
+    boolean isProved() {
+        if (basis.size() > LARGEST) {
+            return false;
+        }
+        for (double error : proved().error) {
+            if (!(error < Double.POSITIVE_INFINITY)) {
+                return false;
+            }
+        }
+        return true;
     }
 
     private Proved prove() {

@@ -23,6 +23,8 @@ final class CurveSurvey {
     final double length;
     /** Lowest v met. */
     final double bottom;
+    /** Where; on the right side for an even potential. */
+    final double bottomAt;
     /** Where the continuum begins; infinite where it does not. */
     final double threshold;
 
@@ -64,6 +66,7 @@ final class CurveSurvey {
         singular = singularLeft();
         double[] found = lowest();
         bottom = found[1];
+        bottomAt = found[0];
         length = naturalLength(found[0], found[1]);
         start = even ? 0 : singular ? left : awayFromWalls(found[0]);
         if (!(bottom < threshold)) {
@@ -250,7 +253,7 @@ final class CurveSurvey {
     }
 
     private double turning(double e, int direction) {
-        double d = length;
+        double d = Math.max(length, direction * (bottomAt - start));
         int above = 0;
         double last = d;
         // The last sample below e, as long as none of the next ten is.

@@ -28,7 +28,7 @@ final class EtaSeries {
     /**
      * g[0] = ξ(Z), g[1 + m] = η_m(Z) for m = 0 … last, all divided by a power of two that keeps them from overflow.
      *
-     * @return the exponent of that power, 0 unless Z exceeds 90 000
+     * @return the exponent of that power, 0 unless Z exceeds 10 000
      */
     static int fill(double z, int last, double[] g) {
         if (Math.abs(z) > Math.max(120, last * last)) {
@@ -39,7 +39,7 @@ final class EtaSeries {
                 g[1] = Math.sin(w) / w;
             } else {
                 double w = Math.sqrt(z);
-                if (w > 300) {
+                if (w > 100) {
                     exponent = (int) (w / LN_2);
                 }
                 double grow = Math.exp(w - exponent * LN_2);

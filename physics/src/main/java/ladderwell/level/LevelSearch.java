@@ -58,8 +58,10 @@ final class LevelSearch {
     }
 
     /** What the energy can be resolved to: its own rounding and that of the angles. */
-    private static double unit(double e, double slope) {
-        return Math.max(1e-15 * Math.abs(e), Math.max(4e-16 / slope, 1e-300));
+    private double unit(double e, double slope) {
+        // A slope next to nothing says that the edge lies badly, not that the energy cannot be resolved.
+        double phase = Math.min(4e-16 / slope, 1e-12 * (Math.abs(e) + Math.abs(e - survey.bottom)));
+        return Math.max(1e-15 * Math.abs(e), Math.max(phase, 1e-300));
     }
 
     /**
@@ -87,6 +89,9 @@ final class LevelSearch {
             s = frequency(e);
             double f = shot.mismatch(e, k, s, parity, true, true);
             double slope = shot.slope;
+            if (Double.isNaN(f)) {
+                break;
+            }
             if (f > 0) {
                 b = Math.min(b, e);
                 bracketed = true;
@@ -97,10 +102,16 @@ final class LevelSearch {
             double best = e - f / slope;
             double noise = 2e-16 * (8 + shot.to - shot.from);
             double unit = unit(e, slope);
-            if (Math.abs(f) < 0.1
-                    && (step <= 4 * unit || Math.abs(f) <= noise || step * Math.abs(slope / before - 1) < 0.4 * unit)) {
+            // In a sweep the slope is known to change by about 1/n from level to level: Newton's next error is step · f
+            // / n.
+            boolean smooth = Math.abs(slope * spacing - 1) < 0.3;
+            boolean settled = step <= 4 * unit
+                    || Math.abs(f) <= noise
+                    || step * Math.abs(slope / before - 1) < 0.4 * unit
+                    || smooth && Math.abs(f) < 1e-5 && step * Math.abs(f) < 0.1 * n * unit;
+            if (Math.abs(f) < 0.1 && settled) {
                 double delta = 8 * unit + noise / slope;
-                if (Math.abs(slope * spacing - 1) < 0.3) {
+                if (smooth) {
                     return found(best, delta, slope);
                 }
                 if (shot.mismatch(best + delta, k, s, parity, false, true) < 0) {
@@ -140,7 +151,12 @@ final class LevelSearch {
             }
             e = best;
         }
-        throw new PhysicsException.NotConverged("level n = " + n, shot.count - first, (b - a) / 2, 1e-15 * Math.abs(e));
+        double open = b - a;
+        throw new PhysicsException.NotConverged(
+                "level n = " + n,
+                shot.count - first,
+                Double.isNaN(open) ? Double.POSITIVE_INFINITY : open / 2,
+                Double.isFinite(e) ? 1e-15 * Math.abs(e) : 0);
     }
 
     private Found found(double e, double delta, double slope) {

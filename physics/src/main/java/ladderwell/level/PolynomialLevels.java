@@ -83,9 +83,10 @@ final class PolynomialLevels implements Levels {
         return block;
     }
 
-    private static boolean small(long n) {
+    /** Whether the basis serves the levels up to n: few enough, and their bounds proved. */
+    private boolean small(long n) {
         Points.checkLevel(n, Long.MAX_VALUE);
-        return n < BASIS;
+        return n < BASIS && block(n).isProved();
     }
 
     @Override
@@ -109,24 +110,20 @@ final class PolynomialLevels implements Levels {
         if (!small(n)) {
             return shooting().energyBound(n);
         }
-        double error = block(n).proved().error()[(int) n];
-        if (error < Double.POSITIVE_INFINITY) {
-            return Bound.guaranteed(error);
-        }
-        // Not to be proved in this basis: the distance from what shooting finds, and its estimate.
-        return shooting()
-                .energyBound(n)
-                .plus(Math.abs(energyHigh(n) - shooting().energyHigh(n)));
+        return Bound.guaranteed(block(n).proved().error()[(int) n]);
     }
 
     @Override
     public double[] energies(long first, int count) {
         Points.check(first, count, Long.MAX_VALUE, new double[0]);
         double[] energies = new double[count];
+        // The quick values are as good only where the matrix grows steadily from its lowest element on.
+        boolean quick = polynomial.monotone();
         int few = (int) Math.max(0, Math.min(count, BASIS - first));
+        if (few > 0 && !quick && !small(first + few - 1)) {
+            few = 0;
+        }
         if (few > 0) {
-            // The quick values are as good only where the matrix grows steadily from its lowest element on.
-            boolean quick = polynomial.monotone();
             BasisBlock block = quick ? BasisBlock.of(polynomial, (int) first + few, false) : block(first + few - 1);
             for (int i = 0; i < few; i++) {
                 int n = (int) first + i;
@@ -191,8 +188,7 @@ final class PolynomialLevels implements Levels {
 
     @Override
     public Cluster cluster(long n) {
-        boolean proved = small(n) && block(n).proved().error()[(int) n] < Double.POSITIVE_INFINITY;
-        return proved ? Levels.super.cluster(n) : shooting().cluster(n);
+        return small(n) ? Levels.super.cluster(n) : shooting().cluster(n);
     }
 
     @Override

@@ -91,9 +91,12 @@ final class ShootingMesh {
 
     /** Whether v falls below e again farther out, by samples. */
     private boolean lower(double x, int direction, double e) {
+        if (direction * (survey.bottomAt - x) > 0 && survey.bottom < e) {
+            return true;
+        }
         double end = direction > 0 ? survey.right : survey.left;
         double d = 0.05 * (Math.abs(x - start) + survey.length);
-        for (int i = 0; i < 120; i++, d *= 1.1) {
+        for (int i = 0; i < 180; i++, d *= 1.1) {
             if (direction * (end - (x + direction * d)) <= 0) {
                 break;
             }
@@ -107,6 +110,16 @@ final class ShootingMesh {
             }
         }
         return false;
+    }
+
+    /**
+     * The size of v that a fit at x may refer to. At the bottom of a well v may vanish by cancellation, and its rounding does not: there it is
+     * at least the energy of the well's own length.
+     */
+    private double scale(double x, double size) {
+        double usual = survey.length;
+        boolean near = edge == null && Math.min(Math.abs(x - start), Math.abs(x - survey.bottomAt)) < 6 * usual;
+        return Math.max(near ? 1 / (usual * usual) : 0, Math.max(0.1 * size, smallest));
     }
 
     private static double fall(Cell cell, double e) {
@@ -180,8 +193,7 @@ final class ShootingMesh {
     }
 
     private Cell.Attempt attempt(double x, double y, double size) {
-        return Cell.build(
-                survey::v, Math.min(x, y), Math.max(x, y), Math.max(0.1 * size, smallest), TOLERANCE, THETA, eLow);
+        return Cell.build(survey::v, Math.min(x, y), Math.max(x, y), scale(x, size), TOLERANCE, THETA, eLow);
     }
 
     /** The longest cell from x that fits: up to a jump or kink; null where there is none longer than rounding. */
@@ -221,26 +233,37 @@ final class ShootingMesh {
         return best;
     }
 
-    /** A cell from x that looks at the potential beyond a trouble at x itself: its first sliver is taken to continue the rest. */
+    /** A cell from x that looks at the potential beyond a trouble at x itself: its first sliver continues the rest. */
     private Cell past(double x, int direction, double wanted, double size) {
-        double sliver = 1e-13 * survey.length + 1e-15 * Math.abs(x);
-        double h = wanted;
-        for (int i = 0; i < 200 && h > 1e3 * sliver; i++) {
+        double least = 1e-13 * survey.length + 1e-15 * Math.abs(x);
+        // A kink may lie a little ahead of x, where cells up to it are too short to tell; skipping it costs slope ·
+        // sliver².
+        for (double sliver = least; sliver < 1e-8 * survey.length; sliver *= 8) {
             double from = x + direction * sliver;
-            double to = x + direction * h;
-            Cell.Attempt attempt = Cell.build(
-                    t -> survey.v(direction * (t - from) < 0 ? from : t),
-                    Math.min(x, to),
-                    Math.max(x, to),
-                    Math.max(0.1 * size, smallest),
-                    TOLERANCE,
-                    THETA,
-                    eLow);
-            Cell cell = attempt.cell();
-            if (cell != null) {
-                return cell;
+            double step = Math.abs(survey.v(from) - survey.v(direction > 0 ? Math.nextUp(x) : Math.nextDown(x)));
+            if (sliver > least && !(step * sliver <= 1e-15 * (size + step) * survey.length)) {
+                break;
             }
-            h *= attempt.shorter();
+            double value = survey.v(from);
+            double next = from + direction * Math.max(1e-5 * wanted, 10 * sliver);
+            double slope = (survey.v(next) - value) / (next - from);
+            double h = wanted;
+            for (int i = 0; i < 200 && h > 1e3 * sliver; i++) {
+                double to = x + direction * h;
+                Cell.Attempt attempt = Cell.build(
+                        t -> direction * (t - from) < 0 ? value + (t - from) * slope : survey.v(t),
+                        Math.min(x, to),
+                        Math.max(x, to),
+                        scale(x, size),
+                        TOLERANCE,
+                        THETA,
+                        eLow);
+                Cell cell = attempt.cell();
+                if (cell != null) {
+                    return cell;
+                }
+                h *= attempt.shorter();
+            }
         }
         throw new IllegalArgumentException("the potential cannot be followed at x = " + x
                 + ": it is singular there; declare a wall or keep to one side of it");

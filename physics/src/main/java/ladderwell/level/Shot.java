@@ -90,7 +90,8 @@ final class Shot {
                 first = Math.min(first, i);
             }
         }
-        if (even) {
+        // Half way out, where that is not under a barrier.
+        if (even && m > 0 && cells[(lastMean + 1) / 2].mean < e) {
             mid = Math.max(mid, (lastMean + 1) / 2);
         }
         mid = Math.max(1, Math.min(m - 1, mid));

@@ -5,7 +5,9 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.Random;
 import java.util.concurrent.CancellationException;
+import java.util.function.DoubleUnaryOperator;
 import org.junit.jupiter.api.Test;
 
 class ShootingLevelsTest {
@@ -203,6 +205,47 @@ class ShootingLevelsTest {
                 2 * levels.splitting(0),
                 4 * levels.splittingBound(0).size());
         assertTrue(levels.cluster(0).single());
+    }
+
+    @Test
+    void farApartAndVeryDeepWellsAreFoundFromTheMiddle() {
+        // Wells of depth 1e8 at ±10.6 with nothing at 0 but a hump: harmonic to first order around the minimum.
+        DoubleUnaryOperator v = x -> {
+            double s = x * x;
+            return ((0.83 * s - 156.8) * s + 31.9) * s * s + 92.3 * s;
+        };
+        Levels levels = Levels.of(Curves.even(v));
+        double at = 10.6;
+        for (int i = 0; i < 40; i++) {
+            double h = 1e-3;
+            double slope = (v.applyAsDouble(at + h) - v.applyAsDouble(at - h)) / (2 * h);
+            double bend = (v.applyAsDouble(at + h) - 2 * v.applyAsDouble(at) + v.applyAsDouble(at - h)) / (h * h);
+            at -= slope / bend;
+        }
+        double bend = (v.applyAsDouble(at + 1e-3) - 2 * v.applyAsDouble(at) + v.applyAsDouble(at - 1e-3)) / 1e-6;
+        double bottom = v.applyAsDouble(at);
+        double frequency = Math.sqrt(bend);
+        assertEquals(0.5, (levels.energyHigh(0) - bottom) / frequency, 0.01);
+        assertEquals(0.5, (levels.energyHigh(1) - bottom) / frequency, 0.01);
+        assertEquals(1.5, (levels.energyHigh(2) - bottom) / frequency, 0.02);
+        assertEquals(2, levels.countBelow(bottom + frequency));
+    }
+
+    @Test
+    void shiftingAnEvenPotentialChangesNoLevel() {
+        Random random = new Random(3);
+        for (int trial = 0; trial < 8; trial++) {
+            double shift = random.nextDouble() * 3;
+            double dip = 1 + 3 * random.nextDouble();
+            DoubleUnaryOperator v = x -> Math.abs(x) + dip * Math.cos(2 * x) + (Math.abs(x) < 0.7 ? -dip : 0);
+            Levels even = Levels.of(Curves.even(v, -0.7, 0, 0.7));
+            Levels moved = Levels.of(Curves.open(x -> v.applyAsDouble(x - shift)));
+            for (int n = 0; n < 12; n++) {
+                double sum = even.energyError(n) + moved.energyError(n);
+                assertEquals(even.energyHigh(n), moved.energyHigh(n), sum, "trial " + trial + ", level " + n);
+                assertTrue(sum < 1e-11, "trial " + trial + ", level " + n + " has " + sum);
+            }
+        }
     }
 
     @Test

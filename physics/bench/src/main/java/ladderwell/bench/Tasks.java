@@ -3,6 +3,7 @@ package ladderwell.bench;
 import java.util.List;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
+import java.util.function.Consumer;
 import ladderwell.bench.Task.Ours;
 import ladderwell.bench.Task.Script;
 import ladderwell.bench.Task.Work;
@@ -46,7 +47,19 @@ final class Tasks {
                             OscillatorFunctions functions = new OscillatorFunctions();
                             return new Work(functions::single, functions::singleError);
                         }),
-                farUpTheLadder());
+                farUpTheLadder(),
+                quartic("50 levels of p²/2 + x⁴", 0.10, "values", PotentialLevels::fifty),
+                quartic(
+                        "50 levels of p²/2 + x⁴ with vectors, ours with proofs",
+                        0.20,
+                        "vectors",
+                        PotentialLevels::fiftyWithVectors),
+                quartic("1000 levels of p²/2 + x⁴", 0.05, "thousand", PotentialLevels::thousand),
+                new Task("all levels of a piecewise well", 1, 0.20, 1e-12, Script.of("piecewise_well.py"), () -> {
+                    PotentialLevels levels = new PotentialLevels();
+                    return new Work(levels::well, levels::wellError);
+                }),
+                farUpTheQuartic());
     }
 
     private static Task densityFrames(int threads) {
@@ -75,6 +88,27 @@ final class Tasks {
                 1e-10,
                 new Ours(() -> new Work(low::run, low::error)),
                 () -> new Work(high::run, high::error));
+    }
+
+    private static Task quartic(String name, double goal, String variant, Consumer<PotentialLevels> run) {
+        return new Task(name, 1, goal, 1e-12, Script.of("quartic_levels.py", variant), () -> {
+            PotentialLevels levels = new PotentialLevels();
+            return new Work(() -> run.accept(levels), levels::quarticError);
+        });
+    }
+
+    /** One level alone, the partner is a low one. */
+    private static Task farUpTheQuartic() {
+        PotentialLevels low = new PotentialLevels();
+        PotentialLevels high = new PotentialLevels();
+        return new Task(
+                "level 100000 of p²/2 + x⁴ alone, against level 100",
+                1,
+                5,
+                // What the semiclassical series it is held against leaves open, with the scale taken from level 1000.
+                1e-11,
+                new Ours(() -> new Work(() -> low.alone(100), () -> low.aloneError(100))),
+                () -> new Work(() -> high.alone(100_000), () -> high.aloneError(100_000)));
     }
 
     private static ExecutorService pool(int threads) {
