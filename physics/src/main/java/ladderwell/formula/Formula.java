@@ -229,7 +229,7 @@ public final class Formula {
      * Points in (left, right) where the value, the slope or a higher derivative may jump, found from step, sign, abs, min,
      * max and if in the tree, ascending. Arguments that are polynomials between the breaks inside them are solved; any
      * other argument is sampled at 1024 points of the range and its turning points, so that sign changes closer than that
-     * can be missed. The ends may be infinite; then such arguments are sampled in every decade.
+     * can be missed. A point where a switch turns over without a trace is listed as HIGHER. The ends may be infinite; then such arguments are sampled in every decade.
      *
      * @throws IllegalArgumentException for more than 1000 breaks or an empty range
      */
@@ -250,26 +250,29 @@ public final class Formula {
     }
 
     /**
-     * Compares limits from both sides, each extrapolated along its slope over a small step d; what is left is of second
-     * order in d. The first d for which value and slope settle decides.
+     * Compares limits from both sides, extrapolated over a small step d: the value along its slope, the slope along its
+     * differences. What is left over is of second order in d and is measured beside it.
      */
     private Break.Kind kind(Program slope, double at, double gap, double t) {
         double size = Math.abs(at) > 0 ? Math.abs(at) : natural ? 1 : 1e-9;
-        double d = 1e-6 * Math.min(size, gap);
-        d = Math.max(d, 16 * Math.ulp(at));
-        double s0 = slope.value(at - d, t);
-        double s1 = slope.value(at + d, t);
+        double d = Math.max(1e-6 * Math.min(size, gap), 16 * Math.ulp(at));
+        double[] low = new double[3];
+        double[] high = new double[3];
+        for (int i = 0; i < 3; i++) {
+            low[i] = slope.value(at - (i + 1) * d, t);
+            high[i] = slope.value(at + (i + 1) * d, t);
+        }
         double v0 = program.value(at - d, t);
         double v1 = program.value(at + d, t);
-        double jump = Math.abs((v1 - s1 * d) - (v0 + s0 * d));
-        double change = Math.abs(v1 - program.value(at + 2 * d, t)) + Math.abs(v0 - program.value(at - 2 * d, t));
-        double rounding = 1e-14 * (Math.abs(v0) + Math.abs(v1)) + 1e-4 * change;
-        if (!(jump <= rounding)) {
+        double jump = Math.abs((v1 - high[0] * d) - (v0 + low[0] * d));
+        double bend = Math.abs(high[1] - high[0]) + Math.abs(low[1] - low[0]);
+        if (!(jump <= 1e-14 * (Math.abs(v0) + Math.abs(v1)) + bend * d)) {
             return Break.Kind.VALUE;
         }
-        double bend = Math.abs(slope.value(at + 2 * d, t) - s1) + Math.abs(slope.value(at - 2 * d, t) - s0);
-        double slopes = 1e-9 * (Math.abs(s0) + Math.abs(s1)) + 4 * bend;
-        return Math.abs(s1 - s0) > slopes ? Break.Kind.SLOPE : Break.Kind.HIGHER;
+        double kink = Math.abs((2 * high[0] - high[1]) - (2 * low[0] - low[1]));
+        double twist = Math.abs(high[2] - 2 * high[1] + high[0]) + Math.abs(low[2] - 2 * low[1] + low[0]);
+        double rounding = 1e-13 * (Math.abs(high[0]) + Math.abs(low[0]) + bend);
+        return kink > rounding + 2 * twist ? Break.Kind.SLOPE : Break.Kind.HIGHER;
     }
 
     /**
@@ -285,12 +288,6 @@ public final class Formula {
             throw new IllegalArgumentException("a formula is checked on a finite range, not from " + left + " to " + right);
         }
         for (Hazard hazard : hazards) {
-            if (hazard.argument().isFixed() && hazard.argument().value(0, 0) == 0) {
-                if (!Double.isFinite(value(0.5 * (left + right), t))) {
-                    return Optional.of(fault(hazard, 0.5 * (left + right), t));
-                }
-                continue;
-            }
             for (double zero : zeros(hazard, t, left, right)) {
                 OptionalDouble bad = singular(zero, t, left, right);
                 if (bad.isPresent()) {

@@ -500,7 +500,16 @@ final class Parser {
     }
 
     private void hazard(Node argument, String words, int start, int end) {
-        hazards.add(new Hazard(argument, words + " '" + text.substring(start, end) + "'", start, end));
+        String what = words + " '" + text.substring(start, end) + "'";
+        if (argument.isFixed()) {
+            double value = argument.value(0, 0);
+            boolean root = words.endsWith("sqrt");
+            if (value == 0 && !root || value < 0 && (root || words.endsWith("log"))) {
+                throw new FormulaException(what + (value == 0 ? " is 0" : " is negative"), text, start, end);
+            }
+            return;
+        }
+        hazards.add(new Hazard(argument, what, start, end));
     }
 
     private void value(Part part) {

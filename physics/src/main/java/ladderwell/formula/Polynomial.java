@@ -186,11 +186,27 @@ final class Polynomial {
             return bound == 0 && n % 2 == 1 && left < 0 && right > 0 ? new double[] {0} : new double[0];
         }
         double[] turns = signChanges(derivative(Arrays.copyOf(p, n + 1)), lo, hi);
+        // a zero at a turning point counts only where the sign differs on its two sides
         List<Double> roots = new ArrayList<>();
         double from = lo;
+        double sign = Math.signum(value(p, lo));
+        double zero = sign == 0 ? lo : Double.NaN;
         for (int i = 0; i <= turns.length; i++) {
             double to = i < turns.length ? turns[i] : hi;
-            Roots.between(x -> value(p, x), from, to).ifPresent(roots::add);
+            double next = Math.signum(value(p, to));
+            if (next == 0) {
+                zero = Double.isNaN(zero) ? to : zero;
+                continue;
+            }
+            if (sign != 0 && next != sign) {
+                if (Double.isNaN(zero)) {
+                    Roots.between(x -> value(p, x), from, to).ifPresent(roots::add);
+                } else {
+                    roots.add(zero);
+                }
+            }
+            sign = next;
+            zero = Double.NaN;
             from = to;
         }
         return Roots.inside(roots, left, right);
