@@ -107,7 +107,9 @@ final class Algebra {
             // 2*x/2 is x; only where the quotient of the two numbers is whole and so free of rounding
             if (a.op == Op.MULTIPLY && a.args[0].isConstant()) {
                 double quotient = a.args[0].value / b.value;
-                if (quotient == Math.rint(quotient) && Math.abs(quotient) < 1e15 && quotient * b.value == a.args[0].value) {
+                if (quotient == Math.rint(quotient)
+                        && Math.abs(quotient) < 1e15
+                        && quotient * b.value == a.args[0].value) {
                     Node[] factors = a.args.clone();
                     factors[0] = Node.constant(quotient);
                     return multiply(factors);
@@ -127,10 +129,14 @@ final class Algebra {
         if (base.isConstant() && exponent.isConstant()) {
             return Node.constant(Math.pow(base.value, exponent.value));
         }
-        if (base.op == Op.POWER && Program.isWhole(base.args[1]) && Program.isWhole(exponent)
-                && base.args[1].isConstant() && exponent.isConstant()
+        if (base.op == Op.POWER
+                && Program.isWhole(base.args[1])
+                && Program.isWhole(exponent)
+                && base.args[1].isConstant()
+                && exponent.isConstant()
                 && Math.abs(base.args[1].value * exponent.value) < 1e6
-                && base.args[1].value > 0 && exponent.value > 0) {
+                && base.args[1].value > 0
+                && exponent.value > 0) {
             return power(base.args[0], Node.constant(base.args[1].value * exponent.value));
         }
         return Node.of(Op.POWER, base, exponent);

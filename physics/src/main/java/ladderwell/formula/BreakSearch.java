@@ -81,8 +81,8 @@ final class BreakSearch {
         }
         found.addAll(more);
         if (found.size() > MOST) {
-            throw new IllegalArgumentException("the formula has more than " + MOST
-                    + " jumps or kinks; give a narrower range of x");
+            throw new IllegalArgumentException(
+                    "the formula has more than " + MOST + " jumps or kinks; give a narrower range of x");
         }
     }
 
@@ -149,13 +149,15 @@ final class BreakSearch {
         if (!node.usesX()) {
             return new double[0];
         }
-        Optional<double[]> polynomial = Polynomial.of(node).map(p -> {
-            Node[] now = new Node[p.length];
-            for (int i = 0; i < now.length; i++) {
-                now[i] = Node.constant(p[i].value(0, t));
-            }
-            return now;
-        }).flatMap(Polynomial::numbers);
+        Optional<double[]> polynomial = Polynomial.of(node)
+                .map(p -> {
+                    Node[] now = new Node[p.length];
+                    for (int i = 0; i < now.length; i++) {
+                        now[i] = Node.constant(p[i].value(0, t));
+                    }
+                    return now;
+                })
+                .flatMap(Polynomial::numbers);
         return polynomial.isPresent()
                 ? Polynomial.signChanges(polynomial.orElseThrow(), from, to)
                 : sampled(node, t, from, to);

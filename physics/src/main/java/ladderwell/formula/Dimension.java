@@ -195,7 +195,11 @@ public record Dimension(int mass, int length, int time) {
         int size = Math.abs(exponent);
         if (size % ONE != 0) {
             int common = gcd(size, ONE);
-            to.append("^(").append(size / common).append('/').append(ONE / common).append(')');
+            to.append("^(")
+                    .append(size / common)
+                    .append('/')
+                    .append(ONE / common)
+                    .append(')');
         } else if (size != ONE) {
             to.append('^').append(size / ONE);
         }

@@ -91,8 +91,7 @@ public final class Formula {
      */
     public static Formula lab(String text, Parameters parameters) {
         Parser.Result read = new Parser(text, parameters, false, true).parse();
-        return new Formula(
-                text.strip(), read.node(), read.dimension(), false, read.hazards(), read.parameters());
+        return new Formula(text.strip(), read.node(), read.dimension(), false, read.hazards(), read.parameters());
     }
 
     /**
@@ -266,12 +265,14 @@ public final class Formula {
         double v1 = program.value(at + d, t);
         double jump = Math.abs((v1 - high[0] * d) - (v0 + low[0] * d));
         double bend = Math.abs(high[1] - high[0]) + Math.abs(low[1] - low[0]);
-        if (!(jump <= 1e-14 * (Math.abs(v0) + Math.abs(v1)) + bend * d)) {
+        // rounding of the values, of the position, and the second order
+        double steep = (Math.abs(low[0]) + Math.abs(high[0])) * Math.ulp(at);
+        if (!(jump <= 1e-14 * (Math.abs(v0) + Math.abs(v1)) + 8 * steep + bend * d)) {
             return Break.Kind.VALUE;
         }
         double kink = Math.abs((2 * high[0] - high[1]) - (2 * low[0] - low[1]));
         double twist = Math.abs(high[2] - 2 * high[1] + high[0]) + Math.abs(low[2] - 2 * low[1] + low[0]);
-        double rounding = 1e-13 * (Math.abs(high[0]) + Math.abs(low[0]) + bend);
+        double rounding = 1e-13 * (Math.abs(high[0]) + Math.abs(low[0]) + bend) + 8 * bend / d * Math.ulp(at);
         return kink > rounding + 2 * twist ? Break.Kind.SLOPE : Break.Kind.HIGHER;
     }
 
@@ -285,7 +286,8 @@ public final class Formula {
     public Optional<Fault> check(double t, double left, double right) {
         requireRange(left, right);
         if (Double.isInfinite(left) || Double.isInfinite(right)) {
-            throw new IllegalArgumentException("a formula is checked on a finite range, not from " + left + " to " + right);
+            throw new IllegalArgumentException(
+                    "a formula is checked on a finite range, not from " + left + " to " + right);
         }
         for (Hazard hazard : hazards) {
             for (double zero : zeros(hazard, t, left, right)) {
@@ -309,7 +311,8 @@ public final class Formula {
 
     private static double[] zeros(Hazard hazard, double t, double left, double right) {
         TreeSet<Double> zeros = new TreeSet<>();
-        Arrays.stream(BreakSearch.of(Node.of(Op.ABS, hazard.argument()), t, left, right)).forEach(zeros::add);
+        Arrays.stream(BreakSearch.of(Node.of(Op.ABS, hazard.argument()), t, left, right))
+                .forEach(zeros::add);
         // touching zeros, such as that of x^2, change no sign; the slope does there
         Node slope = Derivative.of(hazard.argument(), Node.USES_X);
         Arrays.stream(BreakSearch.of(Node.of(Op.ABS, slope), t, left, right)).forEach(zeros::add);
@@ -344,8 +347,7 @@ public final class Formula {
     private Fault fault(Hazard hazard, double x, double t) {
         double argument = hazard.argument().value(x, t);
         String found = Double.isNaN(argument) ? "has no value" : argument < -1e-6 ? "is negative" : "is 0";
-        return new Fault(
-                x, hazard.words() + " " + found + " at x = " + place(x), hazard.start(), hazard.end());
+        return new Fault(x, hazard.words() + " " + found + " at x = " + place(x), hazard.start(), hazard.end());
     }
 
     private Fault fault(double x, double t, double value) {
@@ -370,8 +372,8 @@ public final class Formula {
 
     private static void requireRange(double left, double right) {
         if (!(left < right)) {
-            throw new IllegalArgumentException("the range of x runs from " + left + " to " + right
-                    + "; expected a left end below the right end");
+            throw new IllegalArgumentException(
+                    "the range of x runs from " + left + " to " + right + "; expected a left end below the right end");
         }
     }
 

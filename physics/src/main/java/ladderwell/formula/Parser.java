@@ -58,7 +58,10 @@ final class Parser {
         this.variables = variables;
         if (text.length() > LONGEST) {
             throw new FormulaException(
-                    "a formula may have " + LONGEST + " characters, not " + text.length(), text, LONGEST, text.length());
+                    "a formula may have " + LONGEST + " characters, not " + text.length(),
+                    text,
+                    LONGEST,
+                    text.length());
         }
         tokens = Token.read(text);
     }
@@ -341,7 +344,10 @@ final class Parser {
         at = read.next();
         if (!Double.isFinite(read.value())) {
             throw new FormulaException(
-                    "this quantity is too large to compute with", text, token.start(), tokens.get(at - 1).end());
+                    "this quantity is too large to compute with",
+                    text,
+                    token.start(),
+                    tokens.get(at - 1).end());
         }
         return new Part(
                 Node.constant(read.value()),
@@ -429,7 +435,10 @@ final class Parser {
         boolean many = op == Op.MIN || op == Op.MAX;
         if (many ? args.size() < 2 : args.size() != op.arguments()) {
             throw new FormulaException(
-                    name + " takes " + (many ? "two or more values" : op.arguments() + (op.arguments() == 1 ? " value" : " values"))
+                    name + " takes "
+                            + (many
+                                    ? "two or more values"
+                                    : op.arguments() + (op.arguments() == 1 ? " value" : " values"))
                             + ", not " + args.size() + ": " + Names.signature(op),
                     text,
                     token.start(),
@@ -533,7 +542,8 @@ final class Parser {
     /** Trees are walked by recursion later on: no deeper than the stack of any thread bears. */
     private Node deep(Node node, int start, int end) {
         if (node.depth > 3 * DEEPEST) {
-            throw new FormulaException("the formula is nested too deeply; name parts of it as parameters", text, start, end);
+            throw new FormulaException(
+                    "the formula is nested too deeply; name parts of it as parameters", text, start, end);
         }
         return node;
     }

@@ -80,7 +80,8 @@ record Token(Kind kind, String text, int start, int end) {
             case '²', '³' ->
                 throw new FormulaException(
                         "a power is written with ^, such as x^" + (c == '²' ? 2 : 3), text, start, end);
-            case '=' -> throw new FormulaException("conditions compare with <, <=, > or >=, not with =", text, start, end);
+            case '=' ->
+                throw new FormulaException("conditions compare with <, <=, > or >=, not with =", text, start, end);
             case '[', '{', ']', '}' ->
                 throw new FormulaException("only round brackets ( ) group a formula", text, start, end);
             default -> {

@@ -42,7 +42,9 @@ final class UnitReader {
     /** In natural units there are none. */
     Optional<Read> none() {
         Token token = tokens.get(at);
-        if (token.kind() == Token.Kind.NAME && !declared.test(token.text()) && unit(token.text()).isPresent()) {
+        if (token.kind() == Token.Kind.NAME
+                && !declared.test(token.text())
+                && unit(token.text()).isPresent()) {
             throw new FormulaException(
                     "in natural units a number has no unit; leave out '" + token.text() + "'",
                     text,
@@ -167,7 +169,10 @@ final class UnitReader {
             return dimension.times(one.power(power));
         } catch (IllegalArgumentException e) {
             FormulaException located = new FormulaException(
-                    "powers of units beyond 1000 are not known", text, token.start(), tokens.get(at - 1).end());
+                    "powers of units beyond 1000 are not known",
+                    text,
+                    token.start(),
+                    tokens.get(at - 1).end());
             located.initCause(e);
             throw located;
         }

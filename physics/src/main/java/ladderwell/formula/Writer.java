@@ -86,7 +86,8 @@ final class Writer {
     private void sum(Node node) {
         for (int i = 0; i < node.args.length; i++) {
             Node term = node.args[i];
-            boolean minus = term.op == Op.NEGATE || term.isConstant() && term.value < 0
+            boolean minus = term.op == Op.NEGATE
+                    || term.isConstant() && term.value < 0
                     || term.op == Op.MULTIPLY && term.args[0].isConstant() && term.args[0].value < 0;
             if (i > 0) {
                 out.append(minus ? " - " : " + ");

@@ -22,8 +22,7 @@ final class FormulaPotential implements Potential {
     private final Scale scale;
     private final String text;
 
-    private FormulaPotential(
-            Formula source, Scale scale, double left, double right, double minimum, double edge) {
+    private FormulaPotential(Formula source, Scale scale, double left, double right, double minimum, double edge) {
         double l = scale.length();
         formula = scale.isNatural() ? source : source.scaled(l, scale.time(), scale.energy());
         slope = formula.slope();
@@ -44,19 +43,14 @@ final class FormulaPotential implements Potential {
         double far = 1e3 * scale.length();
         formula.check(0, -far, far).ifPresent(FormulaPotential::refuse);
         return new FormulaPotential(
-                formula,
-                scale,
-                Double.NEGATIVE_INFINITY,
-                Double.POSITIVE_INFINITY,
-                0,
-                Double.POSITIVE_INFINITY);
+                formula, scale, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, 0, Double.POSITIVE_INFINITY);
     }
 
     static FormulaPotential of(Formula formula, Given given, double left, double right) {
         requireStatic(formula, given);
         if (!(left < right)) {
-            throw new IllegalArgumentException("the range of x runs from " + left + " to " + right
-                    + "; expected a left end below the right end");
+            throw new IllegalArgumentException(
+                    "the range of x runs from " + left + " to " + right + "; expected a left end below the right end");
         }
         Optional<double[]> polynomial = formula.polynomial();
         if (polynomial.isPresent() && polynomial.orElseThrow().length > 1) {
@@ -67,10 +61,6 @@ final class FormulaPotential implements Potential {
                 .toArray();
         DoubleUnaryOperator v = formula::value;
         Survey survey = new Survey(v, left, right, hints);
-        double kinetic = given.hbar() / given.mass() * given.hbar();
-        Scale scale = given.scale(given.isNatural() ? 1 : survey.length(kinetic));
-        double length = given.isNatural() ? survey.length(kinetic) : scale.length();
-        requireValues(formula, survey, left, right, length);
         double edge = Double.POSITIVE_INFINITY;
         for (int side = -1; side <= 1; side += 2) {
             if (Double.isInfinite(side < 0 ? left : right)) {
@@ -81,6 +71,10 @@ final class FormulaPotential implements Potential {
                 edge = Math.min(edge, limit);
             }
         }
+        double kinetic = given.hbar() / given.mass() * given.hbar();
+        Scale scale = given.scale(given.isNatural() ? 1 : survey.length(kinetic));
+        double length = given.isNatural() ? survey.length(kinetic) : scale.length();
+        requireValues(formula, survey, left, right, length);
         requireStable(v, left, right, length, kinetic);
         return new FormulaPotential(formula, scale, left, right, survey.minimum(), edge);
     }
@@ -90,8 +84,8 @@ final class FormulaPotential implements Potential {
             throw new IllegalArgumentException("formula and mass must both be in lab units or both in natural units");
         }
         if (formula.dependsOnTime()) {
-            throw new IllegalArgumentException("the potential '" + formula.text()
-                    + "' depends on time and has no levels; expected one without t");
+            throw new IllegalArgumentException(
+                    "the potential '" + formula.text() + "' depends on time and has no levels; expected one without t");
         }
     }
 
@@ -109,8 +103,8 @@ final class FormulaPotential implements Potential {
             }
             for (double x : new double[] {from, to}) {
                 if (Double.isNaN(formula.value(x))) {
-                    throw new IllegalArgumentException(
-                            "the potential has no value at x = " + Digits.significant(x, 6) + "; expected one everywhere");
+                    throw new IllegalArgumentException("the potential has no value at x = " + Digits.significant(x, 6)
+                            + "; expected one everywhere");
                 }
             }
         }
@@ -122,8 +116,7 @@ final class FormulaPotential implements Potential {
     }
 
     /** At a singular end nothing is bound below if V falls faster than −ħ²/(8mx²). */
-    private static void requireStable(
-            DoubleUnaryOperator v, double left, double right, double length, double kinetic) {
+    private static void requireStable(DoubleUnaryOperator v, double left, double right, double length, double kinetic) {
         for (int side = -1; side <= 1; side += 2) {
             double end = side < 0 ? left : right;
             double step = 1e-6 * length;

@@ -42,8 +42,9 @@ record Given(double mass, double hbar) {
     double positive(String what, Amount amount, Dimension dimension) {
         Dimension wanted = isNatural() ? Dimension.NONE : dimension;
         if (!amount.dimension().equals(wanted)) {
-            throw new IllegalArgumentException("the " + what + " is " + amount.dimension().word() + " (" + amount
-                    + "); expected " + wanted.word() + (isNatural() ? " in natural units" : ""));
+            throw new IllegalArgumentException(
+                    "the " + what + " is " + amount.dimension().word() + " (" + amount + "); expected " + wanted.word()
+                            + (isNatural() ? " in natural units" : ""));
         }
         if (!(amount.value() > 0)) {
             throw new IllegalArgumentException("the " + what + " must be above 0, not " + amount);

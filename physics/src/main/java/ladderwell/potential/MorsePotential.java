@@ -13,7 +13,8 @@ record MorsePotential(double depth, double a, Scale scale, String text) implemen
 
     MorsePotential {
         if (!(depth > 0 && a > 0 && Double.isFinite(depth) && Double.isFinite(a))) {
-            throw new IllegalArgumentException("depth " + depth + " and range " + a + " of a Morse potential must be above 0");
+            throw new IllegalArgumentException(
+                    "depth " + depth + " and range " + a + " of a Morse potential must be above 0");
         }
     }
 

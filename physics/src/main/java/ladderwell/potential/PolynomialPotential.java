@@ -39,8 +39,7 @@ final class PolynomialPotential implements Potential {
 
     static PolynomialPotential of(Scale scale, double[] coefficients, String name) {
         String text = name.equals("polynomial") ? written(coefficients) : name;
-        return new PolynomialPotential(
-                coefficients, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, scale, text);
+        return new PolynomialPotential(coefficients, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, scale, text);
     }
 
     private static String written(double[] coefficients) {

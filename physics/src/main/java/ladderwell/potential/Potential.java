@@ -256,10 +256,7 @@ public sealed interface Potential
         Scale scale = given.isNatural() ? Scale.natural() : Scale.of(inertia, 1);
         double height = inertia * omega / given.hbar() * (inertia * omega / given.hbar());
         return new CosinePotential(
-                height,
-                1,
-                scale,
-                "m r^2 w^2 (1 - cos x), r = " + arm.plain() + ", w from " + frequency.plain());
+                height, 1, scale, "m r^2 w^2 (1 - cos x), r = " + arm.plain() + ", w from " + frequency.plain());
     }
 
     /**
@@ -288,8 +285,7 @@ public sealed interface Potential
      * @param josephson E_J, likewise
      */
     static Potential junction(Quantity charging, Quantity josephson) {
-        if ((charging.kind() == Kind.NUMBER)
-                != (josephson.kind() == Kind.NUMBER)) {
+        if ((charging.kind() == Kind.NUMBER) != (josephson.kind() == Kind.NUMBER)) {
             throw new IllegalArgumentException("give both energies of a junction with units, or neither");
         }
         boolean natural = charging.kind() == Kind.NUMBER;
@@ -329,7 +325,8 @@ public sealed interface Potential
                 repulsion,
                 attraction,
                 scale,
-                "Lennard-Jones " + repulsion + "-" + attraction + ", depth " + depth.plain() + ", sigma " + sigma.plain());
+                "Lennard-Jones " + repulsion + "-" + attraction + ", depth " + depth.plain() + ", sigma "
+                        + sigma.plain());
     }
 
     /**
@@ -367,8 +364,7 @@ public sealed interface Potential
      *     nothing
      */
     static Potential of(Formula formula, Quantity mass) {
-        return FormulaPotential.of(
-                formula, Given.mass(mass), Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
+        return FormulaPotential.of(formula, Given.mass(mass), Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
     }
 
     /**

@@ -23,16 +23,19 @@ final class Survey {
         double[] x = points(hints);
         int best = -1;
         double low = Double.POSITIVE_INFINITY;
+        int missing = 0;
         for (int i = 0; i < x.length; i++) {
             double value = v.applyAsDouble(x[i]);
+            missing += Double.isNaN(value) ? 1 : 0;
             // among equal ones the nearest to the origin
             if (value < low || value == low && best >= 0 && Math.abs(x[i]) < Math.abs(x[best])) {
                 low = value;
                 best = i;
             }
         }
-        if (best < 0) {
-            throw new IllegalArgumentException("the potential has no value anywhere on its range");
+        if (best < 0 || 2 * missing > x.length) {
+            throw new IllegalArgumentException(
+                    "the potential has no value at most places of its range; expected one everywhere");
         }
         double refined = refine(x, best);
         minimum = v.applyAsDouble(refined) <= low ? refined : x[best];
@@ -158,8 +161,10 @@ final class Survey {
         boolean highIn = high <= right;
         double down = lowIn ? v.applyAsDouble(low) - least : 0;
         double up = highIn ? v.applyAsDouble(high) - least : 0;
-        double rise = lowIn && highIn ? 0.5 * (down + up) : down + up;
-        return Double.isNaN(rise) ? 0 : rise;
+        if (Double.isNaN(down) || Double.isNaN(up)) {
+            return Double.isNaN(down) ? Double.isNaN(up) ? 0 : up : down;
+        }
+        return lowIn && highIn ? 0.5 * (down + up) : down + up;
     }
 
     /** The limit of V at an open side, +∞ where it keeps rising, −∞ where it falls without bound. */
@@ -178,16 +183,22 @@ final class Survey {
             seen[seen.length - 1] = value;
             last = value;
         }
-        if (seen.length < 20) {
+        if (seen.length < 30) {
             return last;
         }
         double earlier = seen[seen.length - 11];
-        double floor = Double.isFinite(least) ? Math.abs(least) : 0;
-        // what still moves by more than 1e-6 of itself over the last ten decades has no limit
-        if (Math.abs(last - earlier) > 1e-6 * Math.abs(last) && Math.abs(last - earlier) > 1e-9 * floor) {
-            return last > earlier ? Double.POSITIVE_INFINITY : Double.NEGATIVE_INFINITY;
+        double change = last - earlier;
+        double size = Math.abs(last) + (Double.isFinite(least) ? Math.abs(least) : 0);
+        // towards a limit every ten decades change less than those before; a logarithm changes as much, a power more
+        if (Math.abs(change) <= 1e-9 * size || Math.abs(change) < 0.85 * Math.abs(earlier - seen[seen.length - 21])) {
+            return last;
         }
-        return last;
+        double[] before = Arrays.copyOf(seen, seen.length - 10);
+        if (change < 0) {
+            return last < least - 1e-3 * Math.abs(least) ? Double.NEGATIVE_INFINITY : last;
+        }
+        // what swings to and fro for ever, a wave, is open at its least
+        return last > Arrays.stream(before).max().orElse(last) ? Double.POSITIVE_INFINITY : least;
     }
 
     static void requireBounded(double[] coefficients, double left, double right) {

@@ -37,8 +37,9 @@ final class TabulatedPotential implements Potential {
             Given given, Unit lengthUnit, double[] x, Unit energyUnit, double[] v, double[] uncertainty) {
         int n = x.length;
         if (n < 4 || v.length != n || uncertainty.length != 0 && uncertainty.length != n) {
-            throw new IllegalArgumentException("a tabulated potential needs at least 4 points, each with a value; found "
-                    + n + " positions, " + v.length + " values and " + uncertainty.length + " uncertainties");
+            throw new IllegalArgumentException(
+                    "a tabulated potential needs at least 4 points, each with a value; found " + n + " positions, "
+                            + v.length + " values and " + uncertainty.length + " uncertainties");
         }
         double[] at = converted("position", x, lengthUnit, given, Dimension.LENGTH);
         double[] value = converted("value", v, energyUnit, given, Dimension.ENERGY);

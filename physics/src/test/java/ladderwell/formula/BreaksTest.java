@@ -82,7 +82,9 @@ class BreaksTest {
         for (int k = 1; k <= 31; k++) {
             assertEquals(k * Math.PI, breaks.get(k - 1).position(), 2 * Math.ulp(k * Math.PI));
         }
-        assertThrows(IllegalArgumentException.class, () -> natural("step(sin(10000*x))").breaks(0, 10));
+        assertThrows(
+                IllegalArgumentException.class,
+                () -> natural("step(sin(10000*x))").breaks(0, 10));
     }
 
     @Test
@@ -114,7 +116,9 @@ class BreaksTest {
 
     @Test
     void guardedDivisorsAreNoFault() {
-        assertTrue(natural("if(x > 1, 1/x, 1) + 1/(1 + x^2) + x^-0").check(0, -3, 4).isEmpty());
+        assertTrue(natural("if(x > 1, 1/x, 1) + 1/(1 + x^2) + x^-0")
+                .check(0, -3, 4)
+                .isEmpty());
         assertTrue(natural("1/x").check(0, 0.5, 4).isEmpty());
         assertThrows(IllegalArgumentException.class, () -> natural("x").check(0, 0, INFINITE));
     }

@@ -24,7 +24,8 @@ class FormulaTest {
     private static final double EV = Constants.ELEMENTARY_CHARGE;
 
     private static Formula natural(String text) {
-        return Formula.natural(text, Parameters.none().with("a", Amount.number(3)).with("b", Amount.number(0.5)));
+        return Formula.natural(
+                text, Parameters.none().with("a", Amount.number(3)).with("b", Amount.number(0.5)));
     }
 
     @ParameterizedTest
@@ -108,7 +109,8 @@ class FormulaTest {
             })
     void mistakesArePointedAt(String marked, String reason) {
         String text = marked.replace("«", "").replace("»", "");
-        Parameters parameters = Parameters.none().with("alpha", Amount.number(1)).with("k", Amount.number(1));
+        Parameters parameters =
+                Parameters.none().with("alpha", Amount.number(1)).with("k", Amount.number(1));
         FormulaException e = assertThrows(FormulaException.class, () -> Formula.natural(text, parameters));
         if (reason != null) {
             assertEquals(reason, e.reason());
@@ -178,8 +180,8 @@ class FormulaTest {
                 "D*(1 - exp(-k*x))^2 | 3.8205",
             })
     void labUnitsAreComputedInSi(String text, double electronvolts) {
-        Parameters parameters = Parameters.of(Map.of(
-                        "m", Quantity.of(1, Units.ATOMIC_MASS), "w", Quantity.of(1, Units.TERAHERTZ)))
+        Parameters parameters = Parameters.of(
+                        Map.of("m", Quantity.of(1, Units.ATOMIC_MASS), "w", Quantity.of(1, Units.TERAHERTZ)))
                 .with("D", "5.12 eV")
                 .with("k", "1 /nm");
         double expected = electronvolts > 1e10 ? Constants.HBAR * 6.241509e18 : electronvolts * EV;
@@ -215,14 +217,14 @@ class FormulaTest {
     void rootsOfDimensionsAreDimensions() {
         Formula formula = Formula.lab("sqrt(x)*x^(1/2)*x^0.25*x^(3/4)", Parameters.none());
         assertEquals(Dimension.LENGTH.power(2), formula.dimension());
-        assertEquals("m^(1/2)", Formula.lab("sqrt(x)", Parameters.none()).dimension().unit());
+        assertEquals(
+                "m^(1/2)", Formula.lab("sqrt(x)", Parameters.none()).dimension().unit());
     }
 
     @Test
     void parametersCannotTakeNamesOfTheLanguage() {
         for (String name : new String[] {"x", "t", "pi", "hbar", "exp", "and", "if", "2a", "", "a b"}) {
-            assertThrows(
-                    IllegalArgumentException.class, () -> Parameters.none().with(name, Amount.number(1)), name);
+            assertThrows(IllegalArgumentException.class, () -> Parameters.none().with(name, Amount.number(1)), name);
         }
     }
 
@@ -312,8 +314,16 @@ class FormulaTest {
     @Test
     void writtenDerivativesReadBackAsTheSameFunction() {
         String[] texts = {
-            "a*x^4 - b*x^2", "exp(-(x - 1)^2/2)*-3", "x/(1 + x)/(2*x)", "if(x < 1 and x > 0 or x <= -1, x, -x^2)",
-            "(-x)^2", "-(x + 1)*(x - -2)", "2^-x", "(x^2)^b", "min(x, 2)-max(x, 1, a)", "x - (x - (1 - x))"
+            "a*x^4 - b*x^2",
+            "exp(-(x - 1)^2/2)*-3",
+            "x/(1 + x)/(2*x)",
+            "if(x < 1 and x > 0 or x <= -1, x, -x^2)",
+            "(-x)^2",
+            "-(x + 1)*(x - -2)",
+            "2^-x",
+            "(x^2)^b",
+            "min(x, 2)-max(x, 1, a)",
+            "x - (x - (1 - x))"
         };
         for (String text : texts) {
             Formula slope = natural(text).slope();
@@ -328,16 +338,20 @@ class FormulaTest {
     @Test
     void polynomialsAreMultipliedOut() {
         assertArrayEquals(
-                new double[] {9, 0, -6, 0, 1}, natural("(x^2 - a)^2").polynomial().orElseThrow());
+                new double[] {9, 0, -6, 0, 1},
+                natural("(x^2 - a)^2").polynomial().orElseThrow());
         assertArrayEquals(
-                new double[] {0, 1, 0.25}, natural("x*(1 + b*x/2) + 0*t").polynomial().orElseThrow());
+                new double[] {0, 1, 0.25},
+                natural("x*(1 + b*x/2) + 0*t").polynomial().orElseThrow());
         assertArrayEquals(new double[] {1}, natural("x - x + 1").polynomial().orElseThrow());
         assertFalse(natural("x^0.5").isPolynomial());
         assertFalse(natural("x*sin(t)").isPolynomial());
         assertFalse(natural("exp(x)").isPolynomial());
         assertFalse(natural("(x^40)^2").isPolynomial());
         assertTrue(natural("exp(a)*x^2").isPolynomial());
-        assertEquals("sin(t)", natural("x*sin(t) + x^3").coefficients().orElseThrow().get(1).text());
+        assertEquals(
+                "sin(t)",
+                natural("x*sin(t) + x^3").coefficients().orElseThrow().get(1).text());
     }
 
     @Test
