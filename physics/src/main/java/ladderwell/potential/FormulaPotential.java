@@ -61,6 +61,16 @@ final class FormulaPotential implements Potential {
                 .toArray();
         DoubleUnaryOperator v = formula::value;
         Survey survey = new Survey(v, left, right, hints);
+        if (survey.mostlyMissing()) {
+            double around = survey.minimum() == 0 ? 1 : Math.abs(survey.minimum());
+            formula.check(
+                            0,
+                            Math.max(left, survey.minimum() - 3 * around),
+                            Math.min(right, survey.minimum() + 3 * around))
+                    .ifPresent(FormulaPotential::refuse);
+            throw new IllegalArgumentException(
+                    "the potential has no value at most places of its range; expected one everywhere");
+        }
         double edge = Double.POSITIVE_INFINITY;
         for (int side = -1; side <= 1; side += 2) {
             if (Double.isInfinite(side < 0 ? left : right)) {

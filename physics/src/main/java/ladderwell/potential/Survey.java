@@ -15,6 +15,7 @@ final class Survey {
     private final double right;
     private final double minimum;
     private final double least;
+    private final boolean mostlyMissing;
 
     Survey(DoubleUnaryOperator v, double left, double right, double... hints) {
         this.v = v;
@@ -33,10 +34,10 @@ final class Survey {
                 best = i;
             }
         }
-        if (best < 0 || 2 * missing > x.length) {
-            throw new IllegalArgumentException(
-                    "the potential has no value at most places of its range; expected one everywhere");
+        if (best < 0) {
+            throw new IllegalArgumentException("the potential has no value anywhere on its range");
         }
+        mostlyMissing = 2 * missing > x.length;
         double refined = refine(x, best);
         minimum = v.applyAsDouble(refined) <= low ? refined : x[best];
         least = Math.min(low, v.applyAsDouble(minimum));
@@ -101,6 +102,11 @@ final class Survey {
     /** Position of the least value found. */
     double minimum() {
         return minimum;
+    }
+
+    /** True where more than half of all points looked at have no value. */
+    boolean mostlyMissing() {
+        return mostlyMissing;
     }
 
     /** The least value found; −∞ at a singular end. */

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
+import java.util.Random;
 import ladderwell.formula.Amount;
 import ladderwell.formula.Formula;
 import ladderwell.formula.Parameters;
@@ -382,5 +383,77 @@ class PotentialTest {
         double[] mixed = {0.8, 1.0, 0.9, 1.3, 1.5, 2, 3};
         assertTrue(message(() -> Potential.tabulated(ATOM, Units.ANGSTROM, mixed, Units.PER_CENTIMETRE, v, error))
                 .contains("row 3 has 0.9 after 1.0"));
+    }
+
+    @Test
+    void scaledValuesAreThoseOfTheFormula() {
+        Parameters parameters = Parameters.none()
+                .with("a", "2 eV/angstrom^4")
+                .with("b", "1 eV/angstrom^2")
+                .with("c", Quantity.of(0.2, Units.ANGSTROM));
+        String text = "a*x^4 - b*x^2 + 0.1 eV*gauss(x, c, 0.1 angstrom) + if(x > c, 3 meV, 0)";
+        Formula lab = Formula.potential(text, parameters);
+        Potential v = Potential.of(lab, ATOM);
+        assertEquals(1, v.breaks().length);
+        double l = v.scale().length();
+        double e = v.scale().energy();
+        for (double x = -1.13e-10; x < 1.2e-10; x += 0.0371e-10) {
+            double size = Math.abs(lab.value(x)) + 0.1 * Constants.ELEMENTARY_CHARGE;
+            assertEquals(lab.value(x), v.value(x / l) * e, 1e-14 * size);
+            assertEquals(lab.slope().value(x) * l, v.slope(x / l) * e, 1e-13 * size * (1 + l / 1e-11));
+        }
+        // minima of a x⁴ − b x² lie at ±√(b/2a) = ±0.5 angstrom; the left one is lower by what is added on the right
+        assertEquals(-0.5e-10, v.minimum() * l, 1e-13);
+    }
+
+    @Test
+    void everyRandomFormulaGivesAPotentialOrASentence() {
+        Random random = new Random(77);
+        int taken = 0;
+        for (int i = 0; i < 600; i++) {
+            String text = i % 2 == 0 ? term(random, 4) : "x^4 + " + term(random, 3);
+            try {
+                Potential v = natural(text);
+                taken++;
+                assertTrue(v.minimum() >= v.left() && v.minimum() <= v.right(), text);
+                double low = v.value(v.minimum());
+                assertTrue(Double.isFinite(low), text);
+                for (double x : new double[] {-3.7, -1.1, -0.2, 0.45, 0.9, 2.6}) {
+                    assertTrue(v.value(x) >= low - 1e-9 * (1 + Math.abs(low)), text + " at " + x);
+                }
+                double before = Double.NEGATIVE_INFINITY;
+                for (double at : v.breaks()) {
+                    assertTrue(at > before, text);
+                    before = at;
+                }
+            } catch (IllegalArgumentException e) {
+                assertTrue(e.getMessage().length() > 20, text + ": " + e);
+            } catch (RuntimeException e) {
+                throw new AssertionError(text + " gave " + e, e);
+            }
+        }
+        // the generator must reach both outcomes
+        assertTrue(taken > 100 && taken < 550, "taken: " + taken);
+    }
+
+    private static String term(Random random, int depth) {
+        String a = depth == 0 ? "x" : term(random, depth - 1);
+        String b = depth == 0 ? "1.5" : term(random, depth - 1);
+        return switch (random.nextInt(depth == 0 ? 4 : 16)) {
+            case 0, 1, 2 -> "x";
+            case 3 -> String.valueOf(random.nextInt(9) / 2.0);
+            case 4 -> "(" + a + " + " + b + ")";
+            case 5 -> "(" + a + " - " + b + ")";
+            case 6 -> a + "*" + b;
+            case 7 -> "(" + a + ")^" + (1 + random.nextInt(4));
+            case 8 -> "(" + a + ")/(1 + (" + b + ")^2)";
+            case 9 -> "abs(" + a + ")";
+            case 10 -> "step(" + a + ")";
+            case 11 -> "min(" + a + ", " + b + ")";
+            case 12 -> "if(" + a + " < " + b + ", " + a + ", x^2)";
+            case 13 -> "gauss(" + a + ", 1, 0.5)";
+            case 14 -> "sin(" + a + ")";
+            default -> "sqrt(abs(" + a + "))";
+        };
     }
 }
