@@ -26,8 +26,11 @@ final class Program {
     private final double[] start;
 
     private final int result;
+    /** The first instructions, which do not depend on x. */
+    private final int leading;
 
-    private Program(List<Step> steps, double[] start, int result) {
+    private Program(List<Step> steps, int leading, double[] start, int result) {
+        this.leading = leading;
         int n = steps.size();
         ops = new Op[n];
         a = new int[n];
@@ -62,6 +65,8 @@ final class Program {
 
     static Program of(Node node) {
         Compiler compiler = new Compiler();
+        compiler.timeOnly(node, new IdentityHashMap<>());
+        compiler.leading = compiler.steps.size();
         int result = compiler.register(node);
         return compiler.finish(result);
     }
@@ -72,6 +77,21 @@ final class Program {
         private final Map<Double, Integer> numbers = new HashMap<>();
         private final List<Double> fixed = new ArrayList<>();
         private final List<Step> steps = new ArrayList<>();
+        private int leading;
+
+        /** Parts that vary with t alone come first: many points at one time need them only once. */
+        void timeOnly(Node node, Map<Node, Boolean> done) {
+            if (!node.usesT() || done.put(node, true) != null) {
+                return;
+            }
+            if (!node.usesX()) {
+                register(node);
+                return;
+            }
+            for (Node arg : node.args) {
+                timeOnly(arg, done);
+            }
+        }
 
         /** Registers before the number of fixed ones is known: x is 0, t is 1, fixed k is −1 − k, step k is 2 + k. */
         int register(Node node) {
@@ -140,6 +160,7 @@ final class Program {
                 use(lastUse, step.c, i);
             }
             use(lastUse, result, steps.size());
+            Arrays.fill(lastUse, 0, leading, steps.size());
             int[] place = new int[steps.size()];
             List<Integer> free = new ArrayList<>();
             List<Step> placed = new ArrayList<>();
@@ -163,7 +184,7 @@ final class Program {
             for (int i = 0; i < fixed.size(); i++) {
                 start[2 + i] = fixed.get(i);
             }
-            return new Program(placed, start, placed(place, result));
+            return new Program(placed, leading, start, placed(place, result));
         }
 
         private static void use(int[] lastUse, int register, int at) {
@@ -185,27 +206,33 @@ final class Program {
         double[] r = start.clone();
         r[0] = x;
         r[1] = t;
-        for (int i = 0; i < ops.length; i++) {
-            double u = r[a[i]];
-            r[to[i]] = ops[i] == Op.WHOLE_POWER ? Op.wholePower(u, b[i]) : ops[i].apply(u, r[b[i]], r[c[i]]);
-        }
+        run(r, 0, ops.length);
         return r[result];
+    }
+
+    private void run(double[] r, int from, int to) {
+        for (int i = from; i < to; i++) {
+            double u = r[a[i]];
+            r[this.to[i]] = ops[i] == Op.WHOLE_POWER ? Op.wholePower(u, b[i]) : ops[i].apply(u, r[b[i]], r[c[i]]);
+        }
     }
 
     /** The values at many points; {@code out} may be {@code x}. */
     void values(double[] x, double t, double[] out) {
         int width = Math.min(BLOCK, x.length);
-        double[][] r = new double[start.length][];
-        for (int k = 0; k < r.length; k++) {
-            r[k] = new double[width];
-            if (k >= 1 && (k == 1 || start[k] != 0)) {
-                Arrays.fill(r[k], k == 1 ? t : start[k]);
+        double[] first = start.clone();
+        first[1] = t;
+        run(first, 0, leading);
+        double[][] r = new double[start.length][width];
+        for (int k = 1; k < r.length; k++) {
+            if (first[k] != 0) {
+                Arrays.fill(r[k], first[k]);
             }
         }
         for (int from = 0; from < x.length; from += width) {
             int n = Math.min(width, x.length - from);
             System.arraycopy(x, from, r[0], 0, n);
-            for (int i = 0; i < ops.length; i++) {
+            for (int i = leading; i < ops.length; i++) {
                 if (ops[i] == Op.WHOLE_POWER) {
                     wholePowers(r[a[i]], b[i], r[to[i]], n);
                 } else {
@@ -272,6 +299,36 @@ final class Program {
             case COS:
                 for (int i = 0; i < n; i++) {
                     to[i] = Math.cos(u[i]);
+                }
+                return;
+            case SQRT:
+                for (int i = 0; i < n; i++) {
+                    to[i] = Math.sqrt(u[i]);
+                }
+                return;
+            case ABS:
+                for (int i = 0; i < n; i++) {
+                    to[i] = Math.abs(u[i]);
+                }
+                return;
+            case LESS:
+                for (int i = 0; i < n; i++) {
+                    to[i] = u[i] < v[i] ? 1 : 0;
+                }
+                return;
+            case LESS_EQUAL:
+                for (int i = 0; i < n; i++) {
+                    to[i] = u[i] <= v[i] ? 1 : 0;
+                }
+                return;
+            case IF:
+                for (int i = 0; i < n; i++) {
+                    to[i] = u[i] != 0 ? v[i] : w[i];
+                }
+                return;
+            case GAUSS:
+                for (int i = 0; i < n; i++) {
+                    to[i] = Op.gauss(u[i], v[i], w[i]);
                 }
                 return;
             default:

@@ -238,8 +238,9 @@ class FormulaTest {
 
     @Test
     void blocksOfPointsGiveTheSameBitsAsSinglePoints() {
-        Formula formula = natural("a*x^4 - b*x^3 + gauss(x, b, 2)/cosh(x) + if(x < b or x > 2, sin(x), tanh(x)*x^-2)"
-                + " + min(x, 1, x^2) - abs(x)*step(t - 1) + exp(-x^2)*exp(-x^2)*x^20");
+        Formula formula = natural(
+                "a*x^4 - b*x^3 + gauss(x, b, 2)/cosh(x) + if(x < b or x > 2, sin(x), tanh(x)*x^-2)"
+                        + " + min(x, 1, x^2) - abs(x)*step(t - 1) + exp(-x^2)*exp(-x^2)*x^20 + cos(2*t)*x*sin(cos(2*t)) + t^2 + sqrt(abs(x) + t)");
         Random random = new Random(3);
         double[] x = random.doubles(1000, -3, 3).toArray();
         double[] out = formula.values(x, 2, new double[1000]);
