@@ -111,6 +111,17 @@ public final class Formula {
         return new Formula(text.strip(), read.node(), Dimension.NONE, true, read.hazards(), read.parameters());
     }
 
+    /** The functions as they are written, such as "gauss(x, centre, width)"; for completion and help. */
+    public static List<String> functions() {
+        List<String> all = new ArrayList<>();
+        for (Op op : Op.values()) {
+            if (op.isFunction()) {
+                all.add(Names.signature(op));
+            }
+        }
+        return List.copyOf(all);
+    }
+
     /** As typed; of a derivative or a scaled formula: written from its tree, numbers in SI. */
     public String text() {
         return text;

@@ -41,7 +41,7 @@ final class FormulaPotential implements Potential {
     static FormulaPotential open(Formula formula, Given given, Scale scale) {
         requireStatic(formula, given);
         double far = 1e3 * scale.length();
-        formula.check(0, -far, far).ifPresent(FormulaPotential::refuse);
+        requireValues(formula, -far, far);
         return new FormulaPotential(
                 formula, scale, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, 0, Double.POSITIVE_INFINITY);
     }
@@ -103,10 +103,14 @@ final class FormulaPotential implements Potential {
         double far = 1e3 * length;
         double from = Double.isInfinite(left) ? Math.min(survey.minimum(), right) - far : left + 1e-9 * length;
         double to = Double.isInfinite(right) ? Math.max(survey.minimum(), left) + far : right - 1e-9 * length;
+        requireValues(formula, from, to);
+    }
+
+    private static void requireValues(Formula formula, double from, double to) {
         Optional<Fault> fault = formula.check(0, from, to);
         if (fault.isPresent()) {
-            double at = formula.value(fault.orElseThrow().position());
-            boolean wall = at == Double.POSITIVE_INFINITY
+            // a steep rise beyond the largest number is a wall like any other
+            boolean wall = formula.value(fault.orElseThrow().position()) == Double.POSITIVE_INFINITY
                     && fault.orElseThrow().reason().contains("too large");
             if (!wall) {
                 refuse(fault.orElseThrow());

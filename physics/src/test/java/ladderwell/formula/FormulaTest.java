@@ -362,4 +362,11 @@ class FormulaTest {
         assertEquals(2 * 9 * Math.cos(0.5), scaled.value(3, 0.5), 1e-13);
         assertTrue(scaled.isNatural());
     }
+
+    @Test
+    void functionsAreListedAsTheyAreWritten() {
+        assertEquals(16, Formula.functions().size());
+        assertTrue(Formula.functions().contains("gauss(x, centre, width)"));
+        assertTrue(Formula.functions().contains("exp(…)"));
+    }
 }
