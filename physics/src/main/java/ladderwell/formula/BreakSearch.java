@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeSet;
+import java.util.concurrent.CancellationException;
 import java.util.function.DoubleUnaryOperator;
 
 /**
@@ -18,7 +19,7 @@ final class BreakSearch {
     /** More breaks than this are refused. */
     private static final int MOST = 1000;
 
-    private static final int SAMPLES = 1024;
+    static final int SAMPLES = 1024;
 
     private final double t;
     private final double left;
@@ -37,6 +38,9 @@ final class BreakSearch {
         List<Node> arguments = new ArrayList<>();
         search.collect(node, arguments, new IdentityHashMap<>());
         for (Node argument : arguments) {
+            if (Thread.interrupted()) {
+                throw new CancellationException("the computation was interrupted");
+            }
             search.solve(argument);
         }
         return search.found.stream().mapToDouble(Double::doubleValue).toArray();
@@ -70,11 +74,12 @@ final class BreakSearch {
         }
         List<Double> ends = new ArrayList<>(found);
         ends.add(right);
+        int count = Math.max(16, 2 * SAMPLES / ends.size());
         double from = left;
         TreeSet<Double> more = new TreeSet<>();
         for (double to : ends) {
             Node smooth = settled(argument, inside(from, to), t, new IdentityHashMap<>());
-            for (double root : signChanges(smooth, t, from, to)) {
+            for (double root : signChanges(smooth, t, from, to, count)) {
                 more.add(root);
             }
             from = to;
@@ -145,30 +150,22 @@ final class BreakSearch {
     }
 
     /** Sign changes of a smooth tree in (from, to). */
-    static double[] signChanges(Node node, double t, double from, double to) {
+    private static double[] signChanges(Node node, double t, double from, double to, int count) {
         if (!node.usesX()) {
             return new double[0];
         }
-        Optional<double[]> polynomial = Polynomial.of(node)
-                .map(p -> {
-                    Node[] now = new Node[p.length];
-                    for (int i = 0; i < now.length; i++) {
-                        now[i] = Node.constant(p[i].value(0, t));
-                    }
-                    return now;
-                })
-                .flatMap(Polynomial::numbers);
+        Optional<double[]> polynomial = Polynomial.of(Scaling.at(t, node)).flatMap(Polynomial::numbers);
         return polynomial.isPresent()
                 ? Polynomial.signChanges(polynomial.orElseThrow(), from, to)
-                : sampled(node, t, from, to);
+                : sampled(node, t, from, to, count);
     }
 
-    private static double[] sampled(Node node, double t, double from, double to) {
+    private static double[] sampled(Node node, double t, double from, double to, int count) {
         Program value = Program.of(node);
         Program slope = Program.of(Derivative.of(node, Node.USES_X));
         DoubleUnaryOperator f = x -> value.value(x, t);
         DoubleUnaryOperator d = x -> slope.value(x, t);
-        double[] x = samples(from, to);
+        double[] x = samples(from, to, count);
         List<Double> roots = new ArrayList<>();
         for (int i = 1; i < x.length; i++) {
             double a = f.applyAsDouble(x[i - 1]);
@@ -191,11 +188,11 @@ final class BreakSearch {
     }
 
     /** Even points of a finite range; of an infinite one points of every decade from 1e-18 on, on either side. */
-    static double[] samples(double from, double to) {
+    static double[] samples(double from, double to, int count) {
         if (!Double.isInfinite(from) && !Double.isInfinite(to)) {
-            double[] x = new double[SAMPLES + 1];
-            for (int i = 0; i <= SAMPLES; i++) {
-                double s = i / (double) SAMPLES;
+            double[] x = new double[count + 1];
+            for (int i = 0; i <= count; i++) {
+                double s = i / (double) count;
                 x[i] = from * (1 - s) + to * s;
             }
             return x;

@@ -238,7 +238,7 @@ public final class Formula {
     /**
      * Points in (left, right) where the value, the slope or a higher derivative may jump, found from step, sign, abs, min,
      * max and if in the tree, ascending. Arguments that are polynomials between the breaks inside them are solved; any
-     * other argument is sampled at 1024 points of the range and its turning points, so that sign changes closer than that
+     * other argument is sampled at 16 to 2048 points between known breaks and its turning points, so that sign changes closer than that
      * can be missed. A point where a switch turns over without a trace is listed as HIGHER. The ends may be infinite; then such arguments are sampled in every decade.
      *
      * @throws IllegalArgumentException for more than 1000 breaks or an empty range
@@ -309,7 +309,7 @@ public final class Formula {
             }
         }
         TreeSet<Double> points = new TreeSet<>();
-        Arrays.stream(BreakSearch.samples(left, right)).forEach(points::add);
+        Arrays.stream(BreakSearch.samples(left, right, BreakSearch.SAMPLES)).forEach(points::add);
         Arrays.stream(BreakSearch.of(node, t, left, right)).forEach(points::add);
         for (double x : points) {
             double value = value(x, t);

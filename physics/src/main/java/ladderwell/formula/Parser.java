@@ -24,6 +24,13 @@ final class Parser {
     static final int DEEPEST = 100;
 
     static final int LONGEST = 20_000;
+
+    /** Factors of one product; a derivative has as many terms, each of as many factors. */
+    static final int MOST_FACTORS = 128;
+
+    /** Values of one min or max; each pair may cross. */
+    static final int MOST_CHOICES = 32;
+
     private static final Set<String> WORDS = Set.of("x", "t", "pi", "hbar", "and", "or");
 
     /** A part that has no value for some arguments. */
@@ -444,6 +451,10 @@ final class Parser {
                     token.start(),
                     end);
         }
+        if (args.size() > MOST_CHOICES) {
+            throw new FormulaException(
+                    name + " takes at most " + MOST_CHOICES + " values, not " + args.size(), text, token.start(), end);
+        }
         Dimension dimension = check(op, args);
         hazards(op, args);
         Node[] nodes = args.stream().map(Part::node).toArray(Node[]::new);
@@ -544,6 +555,14 @@ final class Parser {
         if (node.depth > 3 * DEEPEST) {
             throw new FormulaException(
                     "the formula is nested too deeply; name parts of it as parameters", text, start, end);
+        }
+        if (node.op == Op.MULTIPLY && node.args.length > MOST_FACTORS) {
+            throw new FormulaException(
+                    "a product may have " + MOST_FACTORS + " factors, not " + node.args.length
+                            + "; write powers with ^",
+                    text,
+                    start,
+                    end);
         }
         return node;
     }

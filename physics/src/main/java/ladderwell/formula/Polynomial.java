@@ -20,7 +20,7 @@ final class Polynomial {
      */
     static Optional<Node[]> of(Node node) {
         if (!node.usesX()) {
-            return Optional.of(new Node[] {node});
+            return Optional.of(trimmed(new Node[] {node}));
         }
         switch (node.op) {
             case X:
@@ -117,7 +117,14 @@ final class Polynomial {
         while (n > 1 && p[n - 1].is(0)) {
             n--;
         }
-        return Arrays.copyOf(p, n);
+        // coefficients that do not vary become numbers at once: trees of products of sums would grow without end
+        Node[] result = Arrays.copyOf(p, n);
+        for (int i = 0; i < n; i++) {
+            if (result[i].isFixed() && !result[i].isConstant()) {
+                result[i] = Node.constant(result[i].value(0, 0));
+            }
+        }
+        return result;
     }
 
     /** The numbers, where no coefficient depends on t; trailing zeros dropped. */

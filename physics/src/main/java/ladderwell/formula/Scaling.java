@@ -3,16 +3,25 @@ package ladderwell.formula;
 import java.util.IdentityHashMap;
 import java.util.Map;
 
-/** Puts a·x in place of x and b·t in place of t. */
+/** Puts a·x in place of x, and b·t or a number in place of t. */
 final class Scaling {
 
     private final Node x;
     private final Node t;
     private final Map<Node, Node> known = new IdentityHashMap<>();
 
+    private Scaling(Node x, Node t) {
+        this.x = x;
+        this.t = t;
+    }
+
     Scaling(double length, double time) {
-        x = Algebra.multiply(Node.constant(length), Node.X);
-        t = Algebra.multiply(Node.constant(time), Node.T);
+        this(Algebra.multiply(Node.constant(length), Node.X), Algebra.multiply(Node.constant(time), Node.T));
+    }
+
+    /** The tree at one time. */
+    static Node at(double time, Node node) {
+        return node.usesT() ? new Scaling(Node.X, Node.constant(time)).of(node) : node;
     }
 
     Node of(Node node) {

@@ -142,6 +142,13 @@ class MalformedFormulasTest {
             readOrRefuse("1" + "*x/1 nm".repeat(60));
             readOrRefuse("x" + "/2".repeat(9000));
             readOrRefuse("x".repeat(30_000));
+            readOrRefuse("1" + "*x".repeat(9000));
+            readOrRefuse("min(x" + ",x".repeat(9000) + ")");
+            readOrRefuse("x" + "+abs(sin(x/1 nm))*1 m".repeat(200));
+            readOrRefuse("(a*x + a*x^2/1 m)^31*(a + a*x*sin(t/1 s)/1 m)^32");
+            readOrRefuse("abs(a*x^3 - a*(x - 1 nm*cos(t/1 s))^3)^0.5");
+            readOrRefuse("step((x - 1 nm*cos(t/1 s))^64)");
+            readOrRefuse("if(x<0,x,".repeat(99) + "x" + ")".repeat(99));
         });
     }
 
