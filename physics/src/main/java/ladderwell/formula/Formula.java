@@ -238,8 +238,9 @@ public final class Formula {
     /**
      * Points in (left, right) where the value, the slope or a higher derivative may jump, found from step, sign, abs, min,
      * max and if in the tree, ascending. Arguments that are polynomials between the breaks inside them are solved; any
-     * other argument is sampled at 16 to 2048 points between known breaks and its turning points, so that sign changes closer than that
-     * can be missed. A point where a switch turns over without a trace is listed as HIGHER. The ends may be infinite; then such arguments are sampled in every decade.
+     * other argument is sampled, at 16 to 2048 points between known breaks (in every decade towards an infinite end), and
+     * its turning points are looked at, so that sign changes closer than that can be missed. A point where a switch turns
+     * over without a trace is listed as HIGHER.
      *
      * @throws IllegalArgumentException for more than 1000 breaks or an empty range
      */

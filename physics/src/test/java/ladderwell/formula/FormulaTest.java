@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.List;
 import java.util.Map;
 import java.util.Random;
 import java.util.Set;
@@ -368,5 +369,21 @@ class FormulaTest {
         assertEquals(16, Formula.functions().size());
         assertTrue(Formula.functions().contains("gauss(x, centre, width)"));
         assertTrue(Formula.functions().contains("exp(…)"));
+    }
+
+    @Test
+    void coefficientsThatVaryWithTimeRebuildTheFormula() {
+        Formula formula = natural("(x + sin(t))^12 - x^3*cos(t)/(1 + t)");
+        double x = 0.8;
+        double t = 0.4;
+        double sum = 0;
+        List<Formula> coefficients = formula.coefficients().orElseThrow();
+        for (int k = coefficients.size() - 1; k >= 0; k--) {
+            sum = sum * x + coefficients.get(k).value(0, t);
+        }
+        assertEquals(13, coefficients.size());
+        // all terms of the power are positive: a few dozen roundings
+        assertEquals(formula.value(x, t), sum, 1e-14 * Math.pow(x + Math.sin(t), 12));
+        assertEquals(61, natural("(x + sin(t))^60").coefficients().orElseThrow().size());
     }
 }
