@@ -46,6 +46,12 @@ class RoomsTest {
     static final ArchRule quantity = only("quantity", "numeric");
 
     @ArchTest
+    static final ArchRule formula = only("formula", "quantity", "numeric");
+
+    @ArchTest
+    static final ArchRule potential = only("potential", "formula", "quantity", "numeric");
+
+    @ArchTest
     static final ArchRule evidence = only("evidence", "quantity", "numeric");
 
     @ArchTest
