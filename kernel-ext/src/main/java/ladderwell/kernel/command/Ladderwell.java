@@ -20,6 +20,6 @@ public final class Ladderwell {
 
     /** Serves a kernel until it is shut down; why it could not be started is said on standard error. */
     static int serve(Path connectionFile) {
-        return KernelMain.serve(connectionFile, new Declarations(), new Renderings());
+        return KernelMain.serve(connectionFile, new Declarations(), new Renderings(), Practice::rehearseInBackground);
     }
 }

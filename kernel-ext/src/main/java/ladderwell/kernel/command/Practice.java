@@ -8,7 +8,9 @@ import ladderwell.Harmonic;
 import ladderwell.Observable;
 import ladderwell.Oscillator;
 import ladderwell.Run;
+import ladderwell.kernel.cell.Rehearsal;
 import ladderwell.kernel.magic.Animation;
+import ladderwell.kernel.magic.Declarations;
 import ladderwell.kernel.magic.TableRead;
 import ladderwell.kernel.render.Renderings;
 import tech.tablesaw.api.Table;
@@ -25,11 +27,30 @@ final class Practice {
 
     private Practice() {}
 
+    /** What a first cell is likely to say, in small. */
+    private static final String FIRST_CELL = """
+            %%declare
+            oscillator trap: harmonic, mass 40 u, frequency 1.2 MHz
+            state psi: coherent in trap, mean 9.5, phase 30 deg
+            evolve run: psi for 2 periods, frames 20
+            """;
+
     static void startInBackground() {
         Thread thread = new Thread(Practice::run, "practice");
         thread.setDaemon(true);
         thread.setPriority(Thread.MIN_PRIORITY);
         thread.start();
+    }
+
+    /** Runs a small first cell aside, in the moment that a client takes before it sends its own. */
+    static void rehearseInBackground() {
+        Thread thread = new Thread(Practice::rehearse, "rehearsal");
+        thread.setDaemon(true);
+        thread.start();
+    }
+
+    static void rehearse() {
+        Rehearsal.run(FIRST_CELL, new Declarations(), new Renderings());
     }
 
     /** The first table of a process looks through the class path for readers and writers, for up to a second. */

@@ -38,9 +38,11 @@ public final class KernelMain {
      * @param connectionFile the file that names ports and key, as a Jupyter client writes it
      * @param sentences the declarations language
      * @param renderer shows what cells return
+     * @param onceKnown run once, when a client has been told what kernel this is: then it usually takes a breath before its
+     *     first cell
      * @return the exit code for the process; threads of cells may still be there, so exit with it
      */
-    public static int serve(Path connectionFile, Sentences sentences, Renderer renderer) {
+    public static int serve(Path connectionFile, Sentences sentences, Renderer renderer, Runnable onceKnown) {
         Optional<String> unfit = unfitJava();
         if (unfit.isPresent()) {
             return refuse(unfit.get());
@@ -55,7 +57,7 @@ public final class KernelMain {
         }
         Workbench workbench = new Workbench(sentences, renderer);
         CountDownLatch ended = new CountDownLatch(1);
-        CellKernel kernel = new CellKernel(workbench, ended::countDown);
+        CellKernel kernel = new CellKernel(workbench, ended::countDown, onceKnown);
         kernel.becomeHandlerForConnection(connection);
         try {
             pollFast(connection);
