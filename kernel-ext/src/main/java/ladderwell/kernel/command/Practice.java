@@ -3,6 +3,7 @@ package ladderwell.kernel.command;
 import static ladderwell.quantity.Units.PERIOD;
 
 import java.util.concurrent.CancellationException;
+import java.util.function.BooleanSupplier;
 import ladderwell.FiniteWell;
 import ladderwell.Harmonic;
 import ladderwell.Observable;
@@ -20,8 +21,10 @@ import tech.tablesaw.api.Table;
  * user asks for finds its classes loaded and its loops compiled. Values it makes are thrown away.
  */
 final class Practice {
-    /** The first cell, and the Java session's start, come before it. */
+    /** A client's first cell comes before it. */
     private static final int FIRST_PAUSE_MILLIS = 600;
+
+    private static final int PAUSE_MILLIS = 10;
 
     private static final int ROUNDS = 12;
 
@@ -35,20 +38,22 @@ final class Practice {
             evolve run: psi for 2 periods, frames 20
             """;
 
-    static void startInBackground() {
-        Thread thread = new Thread(Practice::run, "practice");
+    /**
+     * Rehearses a first cell at once, and the rest in pauses.
+     *
+     * @param idle whether nobody waits for anything
+     */
+    static void startInBackground(BooleanSupplier idle) {
+        Thread rehearsal = new Thread(Practice::rehearse, "rehearsal");
+        rehearsal.setDaemon(true);
+        rehearsal.start();
+        Thread thread = new Thread(() -> run(idle), "practice");
         thread.setDaemon(true);
         thread.setPriority(Thread.MIN_PRIORITY);
         thread.start();
     }
 
     /** Runs a small first cell aside, in the moment that a client takes before it sends its own. */
-    static void rehearseInBackground() {
-        Thread thread = new Thread(Practice::rehearse, "rehearsal");
-        thread.setDaemon(true);
-        thread.start();
-    }
-
     static void rehearse() {
         Rehearsal.run(FIRST_CELL, new Declarations(), new Renderings());
     }
@@ -64,12 +69,14 @@ final class Practice {
         thread.start();
     }
 
-    private static void run() {
+    private static void run(BooleanSupplier idle) {
         try {
             Thread.sleep(FIRST_PAUSE_MILLIS);
             for (int round = 0; round < ROUNDS; round++) {
+                do {
+                    Thread.sleep(PAUSE_MILLIS);
+                } while (!idle.getAsBoolean());
                 once(10 + 20 * round);
-                Thread.sleep(10);
             }
         } catch (InterruptedException | CancellationException e) {
             Thread.currentThread().interrupt();

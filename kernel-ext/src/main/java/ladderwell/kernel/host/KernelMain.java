@@ -14,6 +14,8 @@ import java.security.GeneralSecurityException;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.CountDownLatch;
+import java.util.function.BooleanSupplier;
+import java.util.function.Consumer;
 import java.util.logging.Level;
 import java.util.logging.Logger;
 import ladderwell.kernel.cell.Renderer;
@@ -38,11 +40,12 @@ public final class KernelMain {
      * @param connectionFile the file that names ports and key, as a Jupyter client writes it
      * @param sentences the declarations language
      * @param renderer shows what cells return
-     * @param onceKnown run once, when a client has been told what kernel this is: then it usually takes a breath before its
-     *     first cell
+     * @param onceKnown called once, when a client has been told what kernel this is: then it usually takes a breath before
+     *     its first cell; it is given what tells whether nobody waits for anything
      * @return the exit code for the process; threads of cells may still be there, so exit with it
      */
-    public static int serve(Path connectionFile, Sentences sentences, Renderer renderer, Runnable onceKnown) {
+    public static int serve(
+            Path connectionFile, Sentences sentences, Renderer renderer, Consumer<BooleanSupplier> onceKnown) {
         Optional<String> unfit = unfitJava();
         if (unfit.isPresent()) {
             return refuse(unfit.get());
@@ -57,7 +60,7 @@ public final class KernelMain {
         }
         Workbench workbench = new Workbench(sentences, renderer);
         CountDownLatch ended = new CountDownLatch(1);
-        CellKernel kernel = new CellKernel(workbench, ended::countDown, onceKnown);
+        CellKernel kernel = new CellKernel(workbench, ended::countDown, () -> onceKnown.accept(workbench::isIdle));
         kernel.becomeHandlerForConnection(connection);
         try {
             pollFast(connection);
