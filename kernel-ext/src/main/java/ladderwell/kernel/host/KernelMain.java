@@ -11,6 +11,7 @@ import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
 import java.security.GeneralSecurityException;
+import java.security.NoSuchAlgorithmException;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.CountDownLatch;
@@ -18,6 +19,7 @@ import java.util.function.BooleanSupplier;
 import java.util.function.Consumer;
 import java.util.logging.Level;
 import java.util.logging.Logger;
+import javax.crypto.Mac;
 import ladderwell.kernel.cell.Renderer;
 import ladderwell.kernel.cell.Sentences;
 import ladderwell.kernel.cell.Workbench;
@@ -50,6 +52,7 @@ public final class KernelMain {
         if (unfit.isPresent()) {
             return refuse(unfit.get());
         }
+        prepareSignatures();
         // The base library logs every message; nothing of it may reach a cell's streams.
         Logger.getLogger("").setLevel(Level.OFF);
         JupyterConnection connection;
@@ -82,6 +85,21 @@ public final class KernelMain {
         // The sockets stay open: a cell that heeds no interrupt may still hold them, and the process ends anyway.
         kernel.drain();
         return 0;
+    }
+
+    /** Looking for what signs messages loads every provider of security there is; meanwhile the rest can start. */
+    private static void prepareSignatures() {
+        Thread thread = new Thread(
+                () -> {
+                    try {
+                        Mac unused = Mac.getInstance("HmacSHA256");
+                    } catch (NoSuchAlgorithmException e) {
+                        throw new IllegalStateException("every Java has HmacSHA256", e);
+                    }
+                },
+                "signatures");
+        thread.setDaemon(true);
+        thread.start();
     }
 
     private static int refuse(String why) {
