@@ -131,6 +131,11 @@ final class ShootingLevels implements Levels {
     }
 
     @Override
+    public boolean alternates() {
+        return survey.even;
+    }
+
+    @Override
     public synchronized long count() {
         if (count < 0) {
             count = counted();
@@ -329,14 +334,21 @@ final class ShootingLevels implements Levels {
     @Override
     public double reach(long n, double drop) {
         Points.checkDrop(drop);
+        double[] extent = extent(n, drop);
+        double wall = Double.isInfinite(survey.left) ? 0 : Math.abs(survey.left);
+        return Math.max(Math.abs(extent[1]), Math.max(Math.abs(extent[0]), wall));
+    }
+
+    @Override
+    public double[] extent(long n, double drop) {
+        Points.checkDrop(drop);
         Wave wave = wave(n);
         double right = beyond(wave.right(), wave.tail(), wave.cells()[wave.to() - 1].mean - wave.e(), drop);
         if (survey.even) {
-            return right;
+            return new double[] {-right, right};
         }
         double left = beyond(-wave.left(), wave.head(), wave.cells()[wave.from()].mean - wave.e(), drop);
-        double wall = Double.isInfinite(survey.left) ? left : Math.abs(survey.left);
-        return Math.max(Math.abs(right), Math.max(Math.abs(left), wall));
+        return new double[] {-left, right};
     }
 
     private static double beyond(double end, double value, double square, double drop) {
