@@ -20,6 +20,8 @@ final class DensityReading {
     /** Height of the last wave function at the edge of the grid. */
     private static final double DROP = 1e-4;
 
+    private static final double INVISIBLE = 1e-6;
+
     private DensityReading() {}
 
     static Density of(Run run, int points) {
@@ -54,12 +56,30 @@ final class DensityReading {
             return new double[] {-half, half};
         }
         Oscillator oscillator = run.state().oscillator();
-        double[] extent = oscillator.levels().extent(run.phased().lastLevel(), DROP);
+        double[] extent = oscillator.levels().extent(highestThatShows(run), DROP);
         if (oscillator instanceof Box || oscillator instanceof FiniteWell) {
             double half = Math.max(0.55, Math.min(extent[1], 2));
             return new double[] {-half, half};
         }
         return extent;
+    }
+
+    /** The level above which less of the state lies than a picture could show; the last one of a harmonic oscillator. */
+    private static long highestThatShows(Run run) {
+        Amplitudes amplitudes = run.amplitudes();
+        if (run.state().oscillator() instanceof Harmonic) {
+            return run.phased().lastLevel();
+        }
+        double above = 0;
+        for (int s = amplitudes.segments() - 1; s >= 0; s--) {
+            for (int i = amplitudes.length(s) - 1; i >= 0; i--) {
+                above += amplitudes.re(s, i) * amplitudes.re(s, i) + amplitudes.im(s, i) * amplitudes.im(s, i);
+                if (above > INVISIBLE) {
+                    return amplitudes.first(s) + i;
+                }
+            }
+        }
+        return run.phased().lastLevel();
     }
 
     /** π^{−1/2} e^{−(x−x₀)²} at each point; on a grid coarser than the packet, its mean over one grid spacing. */

@@ -30,7 +30,7 @@ public record LevelOf(Oscillator oscillator, Oscillator source, long n, Quantity
     public LevelOf {
         Superposition.checkLevel(source, n);
         boolean natural = oscillator.scale().isNatural();
-        Checks.kind("shift", shift, natural ? Kind.NUMBER : Kind.LENGTH);
+        Checks.kind("shift", shift, oscillator.scale().position());
         Checks.finite("shift", shift.si());
         if (natural != source.scale().isNatural()) {
             throw new IllegalArgumentException(
@@ -45,7 +45,10 @@ public record LevelOf(Oscillator oscillator, Oscillator source, long n, Quantity
 
     static LevelOf of(Oscillator oscillator, Oscillator source, long n) {
         return new LevelOf(
-                oscillator, source, n, Quantity.of(0, oscillator.scale().isNatural() ? ONE : Units.METRE));
+                oscillator,
+                source,
+                n,
+                Quantity.of(0, Units.si(oscillator.scale().position())));
     }
 
     /** The same with the source's origin moved to the right. */

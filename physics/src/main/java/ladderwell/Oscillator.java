@@ -6,6 +6,7 @@ import ladderwell.level.Levels;
 import ladderwell.potential.Potential;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
+import tech.tablesaw.api.Table;
 
 /**
  * What the system is: one mode with its levels and its scale. Made by {@link #harmonic()}, {@link #box()}, {@link #finiteWell()} or
@@ -96,6 +97,20 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialW
 
     /** The inputs as they were given, for the record: key → value with unit, in declaration order. */
     List<Fact> given();
+
+    /**
+     * The lowest levels as a table: n, energy, spacing to the next, each with its error and how sure it is.
+     *
+     * @throws IllegalArgumentException if there are fewer bound levels
+     */
+    default Table levelTable(int count) {
+        return LevelColumns.of(this, LevelColumns.lowest(count));
+    }
+
+    /** These levels as a table. */
+    default Table levelTable(long... levels) {
+        return LevelColumns.of(this, levels);
+    }
 
     /** Level n, counted from 0. */
     default NumberState number(long n) {

@@ -23,9 +23,9 @@ public record Packet(Oscillator oscillator, Quantity position, Quantity momentum
 
     public Packet {
         boolean natural = oscillator.scale().isNatural();
-        Checks.kind("position", position, natural ? Kind.NUMBER : Kind.LENGTH);
+        Checks.kind("position", position, oscillator.scale().position());
         Checks.kind("momentum", momentum, natural ? Kind.NUMBER : Kind.MOMENTUM);
-        Checks.positive("spread", spread, natural ? Kind.NUMBER : Kind.LENGTH);
+        Checks.positive("spread", spread, oscillator.scale().position());
     }
 
     @Override

@@ -22,10 +22,12 @@ import ladderwell.quantity.Scale;
  *
  * @param kind the trade's name: "morse", "double well", …; "potential" for a formula
  * @param potential the potential
+ * @param formula the potential in one line, with its parameters
  * @param given what was typed, for the record: mass and parameters
  * @param levels the levels, made from the potential
  */
-public record PotentialWell(String kind, Potential potential, List<Fact> given, Levels levels) implements Oscillator {
+public record PotentialWell(String kind, Potential potential, String formula, List<Fact> given, Levels levels)
+        implements Oscillator {
 
     public PotentialWell {
         given = List.copyOf(given);
@@ -54,12 +56,12 @@ public record PotentialWell(String kind, Potential potential, List<Fact> given, 
         if (levels.count() == 0) {
             throw new IllegalArgumentException("the potential " + potential.text() + " has no bound level");
         }
-        return new PotentialWell(kind, potential, given, levels);
+        return new PotentialWell(kind, potential, potential.text(), given, levels);
     }
 
-    /** The same with the mass, a kind word and parameters as they were given, for card and record. */
-    public PotentialWell declared(String kind, List<Fact> given) {
-        return new PotentialWell(kind, potential, given, levels);
+    /** The same with its kind, its formula and what was given in the words of a declaration, for card and record. */
+    public PotentialWell declared(String kind, String formula, List<Fact> given) {
+        return new PotentialWell(kind, potential, formula, given, levels);
     }
 
     /** The potential as level solvers and classical orbits see it. */
@@ -112,11 +114,6 @@ public record PotentialWell(String kind, Potential potential, List<Fact> given, 
     @Override
     public double potential(double x) {
         return potential.value(x);
-    }
-
-    @Override
-    public String formula() {
-        return potential.text();
     }
 
     @Override

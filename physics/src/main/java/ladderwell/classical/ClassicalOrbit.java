@@ -12,6 +12,11 @@ public interface ClassicalOrbit {
     /** The outermost position on the +x side. */
     double turningPoint();
 
+    /** The outermost position on the −x side; the mirror image of the other unless it is said otherwise. */
+    default double leftTurningPoint() {
+        return -turningPoint();
+    }
+
     /** The harmonic orbit (H = (p² + x²)/2) through the given point. */
     static ClassicalOrbit harmonic(double position, double momentum) {
         return new Harmonic(position, momentum);
@@ -66,6 +71,11 @@ public interface ClassicalOrbit {
 
         @Override
         public double turningPoint() {
+            return at;
+        }
+
+        @Override
+        public double leftTurningPoint() {
             return at;
         }
     }

@@ -87,4 +87,9 @@ final class LeavingOrbit implements ClassicalOrbit {
     public double turningPoint() {
         return Math.min(v.right(), Double.MAX_VALUE);
     }
+
+    @Override
+    public double leftTurningPoint() {
+        return Math.max(v.left(), -Double.MAX_VALUE);
+    }
 }

@@ -40,4 +40,9 @@ final class SwingingOrbit implements ClassicalOrbit {
     public double turningPoint() {
         return swing.right();
     }
+
+    @Override
+    public double leftTurningPoint() {
+        return swing.left();
+    }
 }

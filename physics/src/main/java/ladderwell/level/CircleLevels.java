@@ -24,6 +24,11 @@ final class CircleLevels implements Levels {
     }
 
     @Override
+    public boolean hasWaveFunctions() {
+        return real;
+    }
+
+    @Override
     public long count() {
         return PeriodicLevels.MOST_LEVELS;
     }

@@ -100,6 +100,11 @@ public sealed interface Levels
         return false;
     }
 
+    /** Whether wave functions are real and given; if not there are energies only. */
+    default boolean hasWaveFunctions() {
+        return true;
+    }
+
     /** How many bound levels there are; {@code Long.MAX_VALUE} where there is no last one. */
     long count();
 

@@ -32,6 +32,11 @@ final class UncertainLevels implements Levels {
     }
 
     @Override
+    public boolean hasWaveFunctions() {
+        return levels.hasWaveFunctions();
+    }
+
+    @Override
     public long count() {
         return levels.count();
     }

@@ -31,6 +31,7 @@ final class ShapeState {
     private final double tolerance;
     private final long count;
     private final Deque<Block> blocks = new ArrayDeque<>();
+    private final double allowed;
     private double difference;
 
     /** Overlaps with consecutive levels. */
@@ -53,13 +54,13 @@ final class ShapeState {
         this.shape = shape;
         this.tolerance = tolerance;
         count = levels.count();
+        allowed = tolerance * tolerance / 64;
     }
 
     Amplitudes expand() {
         long centre = Math.min(count, levels.countBelow(Math.min(shape.energy(), levels.threshold())));
         long start = Math.max(0, Math.min(centre - BLOCK / 2, count - BLOCK));
         blocks.add(block(start, (int) Math.min(BLOCK, count - start)));
-        double allowed = tolerance * tolerance / 64;
         double low = tail(true);
         double high = tail(false);
         while (low > allowed || high > allowed) {
@@ -103,12 +104,12 @@ final class ShapeState {
         List<Block> ordered = new ArrayList<>(blocks);
         Block before = ordered.get(below ? 1 : ordered.size() - 2);
         double weight = last.weight();
-        double floor = BLOCK * 1e-31;
-        if (weight <= floor) {
-            return weight;
-        }
         double ratio = weight / Math.max(before.weight(), Double.MIN_NORMAL);
-        return ratio < 0.5 ? 4 * weight * ratio / (1 - ratio) + 1e-3 * weight : 1;
+        if (ratio < 0.5) {
+            return 4 * weight * ratio / (1 - ratio) + 1e-3 * weight;
+        }
+        // Both at the level of rounding, which falls no further.
+        return Math.max(weight, before.weight()) <= allowed / 16 ? 16 * weight : 1;
     }
 
     private Block block(long first, int size) {
