@@ -6,6 +6,7 @@ import ladderwell.level.Levels;
 import ladderwell.potential.Potential;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
+import tech.tablesaw.api.Table;
 
 /**
  * What the system is: one mode with its levels and its scale. Made by {@link #harmonic()}, {@link #box()}, {@link #finiteWell()} or
@@ -96,6 +97,16 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialW
 
     /** The inputs as they were given, for the record: key → value with unit, in declaration order. */
     List<Fact> given();
+
+    /**
+     * Transition elements between these levels as a table: for every pair m ≤ n and every coupling ⟨m|A|n⟩ with its error; of the momentum the
+     * imaginary part, its real part is 0.
+     *
+     * @throws IllegalArgumentException if a level is not bound or a function has no value somewhere
+     */
+    default Table elementTable(long[] levels, Coupling... couplings) {
+        return ElementColumns.of(this, levels, List.of(couplings));
+    }
 
     /** Level n, counted from 0. */
     default NumberState number(long n) {

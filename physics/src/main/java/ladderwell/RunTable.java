@@ -67,7 +67,8 @@ final class RunTable {
                         head("± " + name, unit) + " (" + series.certainty().word() + ")", errors));
     }
 
-    private static String head(String name, Unit unit) {
+    /** "position / nm". */
+    static String head(String name, Unit unit) {
         return unit.symbol().isEmpty() ? name : name + " / " + unit.symbol();
     }
 }
