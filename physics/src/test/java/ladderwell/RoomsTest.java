@@ -49,6 +49,9 @@ class RoomsTest {
     static final ArchRule formula = only("formula", "quantity", "numeric");
 
     @ArchTest
+    static final ArchRule operator = only("operator", "formula", "quantity", "numeric");
+
+    @ArchTest
     static final ArchRule potential = only("potential", "formula", "quantity", "numeric");
 
     @ArchTest
