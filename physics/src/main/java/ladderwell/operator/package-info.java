@@ -6,7 +6,8 @@
  * left of every a. Coefficients are kept in double-double arithmetic, so that integers up to 2^106 and the 1/√2 of x and p leave no
  * trace of rounding in the doubles that are read.
  *
- * <p>Reading order: {@link ladderwell.operator.LadderPolynomial}.
+ * <p>Reading order: {@link ladderwell.operator.LadderPolynomial}, {@link ladderwell.operator.OperatorFormula},
+ * {@link ladderwell.operator.Boundedness}.
  */
 @NullMarked
 package ladderwell.operator;
