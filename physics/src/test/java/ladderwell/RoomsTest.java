@@ -52,6 +52,9 @@ class RoomsTest {
     static final ArchRule operator = only("operator", "formula", "quantity", "numeric");
 
     @ArchTest
+    static final ArchRule mode = only("mode", "operator", "formula", "quantity", "numeric");
+
+    @ArchTest
     static final ArchRule potential = only("potential", "formula", "quantity", "numeric");
 
     @ArchTest

@@ -190,6 +190,11 @@ public final class Formula {
         return new Formula(Writer.text(derived), derived, dimension.over(by), natural, hazards, parameters);
     }
 
+    /** True if both are the same function, written the same way with the same numbers; very long formulas never are. */
+    public boolean isSame(Formula other) {
+        return natural == other.natural && Node.same(node, other.node, new int[] {4000});
+    }
+
     /**
      * The product of two formulas.
      *

@@ -94,6 +94,26 @@ final class Node {
         return (uses & USES_LADDER) != 0;
     }
 
+    /** Whether two trees are the same, number by number; counts down the nodes that may be looked at. */
+    static boolean same(Node a, Node b, int[] budget) {
+        if (a == b) {
+            return true;
+        }
+        if (--budget[0] < 0
+                || a.op != b.op
+                || a.args.length != b.args.length
+                || Double.compare(a.value, b.value) != 0
+                || !a.name.equals(b.name)) {
+            return false;
+        }
+        for (int i = 0; i < a.args.length; i++) {
+            if (!same(a.args[i], b.args[i], budget)) {
+                return false;
+            }
+        }
+        return true;
+    }
+
     /** The value at one point, by walking the tree; for the rare points where no compiled program is at hand. */
     double value(double x, double t) {
         switch (op) {

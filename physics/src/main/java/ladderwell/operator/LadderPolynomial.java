@@ -236,6 +236,16 @@ public final class LadderPolynomial {
         return plus(adjoint()).times(0.5);
     }
 
+    /** The terms with as many a† as a, diagonal in the number of quanta. */
+    public LadderPolynomial diagonalPart() {
+        Coefficients result = new Coefficients(c.rows, c.columns);
+        for (int j = 0; j < Math.min(c.rows, c.columns); j++) {
+            int i = c.at(j, j);
+            result.set(i, c.re(i), c.im(i));
+        }
+        return new LadderPolynomial(result);
+    }
+
     /** This with a replaced by a + α, α = re + i im: D(α)† P D(α) with D(α) = exp(α a† − α* a). */
     public LadderPolynomial shifted(double re, double im) {
         return shifted(DoubleDouble.of(re), DoubleDouble.of(im));

@@ -3,9 +3,7 @@ package ladderwell.operator;
 import static java.util.Objects.requireNonNull;
 
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import java.util.SplittableRandom;
 import java.util.function.UnaryOperator;
@@ -154,7 +152,7 @@ public final class OperatorFormula {
     private static OperatorFormula built(OperatorExpression read, double position, double momentum) {
         try {
             Sum sum = read.in(new Sums(position, momentum));
-            return new OperatorFormula(read.text(), sum.constant, List.copyOf(sum.varying.values()));
+            return new OperatorFormula(read.text(), sum.constant, sum.varying);
         } catch (FormulaException e) {
             throw e;
         } catch (IllegalArgumentException e) {
@@ -179,23 +177,26 @@ public final class OperatorFormula {
     }
 
     /** Sum gathered while an expression is read: equal factors share one polynomial. */
-    private record Sum(LadderPolynomial constant, Map<String, Term> varying) {
+    private record Sum(LadderPolynomial constant, List<Term> varying) {
         static Sum of(LadderPolynomial constant) {
-            return new Sum(constant, Map.of());
+            return new Sum(constant, List.of());
         }
 
-        static void add(Map<String, Term> all, Term term) {
+        static void add(List<Term> all, Term term) {
             if (term.operator.isZero()) {
                 return;
             }
-            // texts that were cut short say nothing
-            String key = term.factor.text().endsWith("…") ? term.factor.text() + all.size() : term.factor.text();
-            Term there = all.get(key);
-            all.put(key, there == null ? term : new Term(there.factor, there.operator.plus(term.operator)));
+            for (int i = 0; i < all.size(); i++) {
+                Term there = all.get(i);
+                if (there.factor.isSame(term.factor)) {
+                    all.set(i, new Term(there.factor, there.operator.plus(term.operator)));
+                    return;
+                }
+            }
+            all.add(term);
         }
 
-        static LadderPolynomial addFolded(
-                LadderPolynomial constant, Map<String, Term> all, Formula f, LadderPolynomial p) {
+        static LadderPolynomial addFolded(LadderPolynomial constant, List<Term> all, Formula f, LadderPolynomial p) {
             if (f.dependsOnTime()) {
                 add(all, new Term(f, p));
                 return constant;
@@ -204,21 +205,21 @@ public final class OperatorFormula {
         }
 
         Sum plus(Sum other) {
-            Map<String, Term> all = new LinkedHashMap<>(varying);
-            other.varying.values().forEach(term -> add(all, term));
-            all.values().removeIf(term -> term.operator.isZero());
+            List<Term> all = new ArrayList<>(varying);
+            other.varying.forEach(term -> add(all, term));
+            all.removeIf(term -> term.operator.isZero());
             return new Sum(constant.plus(other.constant), all);
         }
 
         Sum times(Sum other) {
-            Map<String, Term> all = new LinkedHashMap<>();
+            List<Term> all = new ArrayList<>();
             LadderPolynomial product = constant.times(other.constant);
-            for (Term left : varying.values()) {
+            for (Term left : varying) {
                 add(all, new Term(left.factor, left.operator.times(other.constant)));
             }
-            for (Term right : other.varying.values()) {
+            for (Term right : other.varying) {
                 add(all, new Term(right.factor, constant.times(right.operator)));
-                for (Term left : varying.values()) {
+                for (Term left : varying) {
                     product = addFolded(
                             product, all, left.factor.times(right.factor), left.operator.times(right.operator));
                 }
@@ -235,7 +236,7 @@ public final class OperatorFormula {
 
         @Override
         public Sum factor(Formula factor) {
-            Map<String, Term> one = new LinkedHashMap<>();
+            List<Term> one = new ArrayList<>();
             LadderPolynomial rest =
                     Sum.addFolded(LadderPolynomial.zero(), one, factor, LadderPolynomial.constant(1, 0));
             return new Sum(rest, one);
@@ -266,13 +267,13 @@ public final class OperatorFormula {
     }
 
     private Sum sum() {
-        Map<String, Term> all = new LinkedHashMap<>();
+        List<Term> all = new ArrayList<>();
         terms.forEach(term -> Sum.add(all, term));
         return new Sum(constant, all);
     }
 
     private static OperatorFormula of(String text, Sum sum) {
-        return new OperatorFormula(text, sum.constant, List.copyOf(sum.varying.values()));
+        return new OperatorFormula(text, sum.constant, sum.varying);
     }
 
     /** As typed, or written from the parts. */
@@ -310,7 +311,7 @@ public final class OperatorFormula {
 
     /** d/dt, exact away from jumps of the factors. */
     public OperatorFormula derivative() {
-        Map<String, Term> all = new LinkedHashMap<>();
+        List<Term> all = new ArrayList<>();
         LadderPolynomial rest = LadderPolynomial.zero();
         for (Term term : terms) {
             rest = Sum.addFolded(rest, all, term.factor.derivative(Formula.Variable.TIME), term.operator);
