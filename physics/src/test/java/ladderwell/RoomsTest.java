@@ -55,6 +55,9 @@ class RoomsTest {
     static final ArchRule mode = only("mode", "operator", "formula", "quantity", "numeric");
 
     @ArchTest
+    static final ArchRule gaussian = only("gaussian", "mode", "operator", "formula", "evidence", "quantity", "numeric");
+
+    @ArchTest
     static final ArchRule potential = only("potential", "formula", "quantity", "numeric");
 
     @ArchTest

@@ -290,6 +290,17 @@ public final class Formula {
     }
 
     /**
+     * Times in (from, to) where the formula at x = 0, its rate of change or a higher derivative may jump; found as in
+     * {@link #breaks(double, double, double)}. For factors f(t).
+     *
+     * @throws IllegalArgumentException for more than 1000 breaks or an empty range
+     */
+    public double[] breakTimes(double from, double to) {
+        requireRange(from, to);
+        return BreakSearch.of(Scaling.alongTime(node), 0, from, to);
+    }
+
+    /**
      * Compares limits from both sides, extrapolated over a small step d: the value along its slope, the slope along its
      * differences. What is left over is of second order in d and is measured beside it.
      */
