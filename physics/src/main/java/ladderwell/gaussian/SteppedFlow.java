@@ -180,7 +180,8 @@ final class SteppedFlow {
             double covarianceError =
                     (2 * norm + flowError) * flowError * size + amplification * amplification * noiseResidual;
             double allowed = 0.1 * tolerance * h / last;
-            double floor = U * (1 + length + size);
+            // below this the residual is rounding, which shorter steps do not lessen
+            double floor = 64 * U * (1 + length + size);
             double worst = Math.max(meanError, covarianceError);
             if (worst > Math.max(allowed, floor)) {
                 steps[0] = h * Math.max(0.25, 0.8 * Math.pow(allowed / worst, 1.0 / NODES));

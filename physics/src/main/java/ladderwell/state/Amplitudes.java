@@ -190,19 +190,9 @@ public final class Amplitudes {
         }
         checkTolerance(tolerance);
         // D(α) S(ξ) is D(|α|) S(ξ e^{−2i arg α}) turned by arg α
-        SqueezedWindow window = new SqueezedWindow(mean, r, DoubleDouble.sum(phi, -2 * phase), tolerance);
-        turn(window.first, 0, phase, window.re, window.im);
-        return met(
-                "the squeezed state",
-                tolerance,
-                new Amplitudes(
-                        new long[] {window.first},
-                        new double[][] {window.re},
-                        new double[][] {window.im},
-                        window.error + (phase == 0 ? 0 : TURNED),
-                        window.tailMoments,
-                        window.tailSum,
-                        window.tailMoments[0]));
+        KeptWindow window = new SqueezedWindow(mean, r, DoubleDouble.sum(phi, -2 * phase), tolerance).kept();
+        turn(window.first(), 0, phase, window.re(), window.im());
+        return met("the squeezed state", tolerance, window.amplitudes(phase == 0 ? 0 : TURNED));
     }
 
     /**
@@ -292,20 +282,9 @@ public final class Amplitudes {
         if (mean == 0) {
             return level(level);
         }
-        DisplacedNumberWindow window = new DisplacedNumberWindow(level, mean, tolerance);
-        double[] im = new double[window.values.length];
-        turn(window.first, level, phase, window.values, im);
-        return met(
-                "the displaced number state",
-                tolerance,
-                new Amplitudes(
-                        new long[] {window.first},
-                        new double[][] {window.values},
-                        new double[][] {im},
-                        window.error + (phase == 0 ? 0 : TURNED),
-                        window.tailMoments,
-                        window.tailSum,
-                        window.tailMoments[0]));
+        KeptWindow window = new DisplacedNumberWindow(level, mean, tolerance).kept();
+        turn(window.first(), level, phase, window.re(), window.im());
+        return met("the displaced number state", tolerance, window.amplitudes(phase == 0 ? 0 : TURNED));
     }
 
     /**

@@ -15,12 +15,8 @@ import ladderwell.numeric.Interruption;
  * @source de Oliveira, Kim, Knight and Buzek, Phys. Rev. A 41 (1990) 2645; Cahill and Glauber, Phys. Rev. 177 (1969) 1857
  */
 final class DisplacedNumberWindow {
-    final long first;
-    final double[] values;
-    final double error;
-    final double[] tailMoments = new double[Amplitudes.MOMENTS];
-    final double tailSum;
-
+    private final long first;
+    private final KeptWindow kept;
     private final double mean;
     private final long level;
 
@@ -48,7 +44,7 @@ final class DisplacedNumberWindow {
             throw Amplitudes.tooManyLevels("this displaced number state", end - first);
         }
         int size = Math.max(2, (int) (end - first));
-        values = new double[size];
+        double[] values = new double[size];
         double[] low = new double[size];
         join(values, low);
         double norm = Math.sqrt(weight(values));
@@ -56,8 +52,14 @@ final class DisplacedNumberWindow {
         for (int i = 0; i < size; i++) {
             values[i] /= norm;
         }
-        error = residual < 0.2 ? 1.02 * residual + 0x1p-51 : 2;
-        tailSum = tail.outside(first, first + size, tailMoments);
+        double error = residual < 0.2 ? 1.02 * residual + 0x1p-51 : 2;
+        double[] moments = new double[Amplitudes.MOMENTS];
+        double sum = tail.outside(first, first + size, moments);
+        kept = new KeptWindow(first, values, new double[size], error, moments, sum).trimmed(tolerance);
+    }
+
+    KeptWindow kept() {
+        return kept;
     }
 
     /** √(α² n), which couples n − 1 and n. */

@@ -21,15 +21,9 @@ final class SqueezedWindow {
     /** Largest r: the tail then falls by tanh² r per level pair, which takes some 1e5 levels. */
     static final double LARGEST_SQUEEZING = 5;
 
-    long first;
-    double[] re = new double[0];
-    double[] im = new double[0];
-    /** ‖φ − ψ‖ with its phase. */
-    final double error;
-
-    final double[] tailMoments = new double[Amplitudes.MOMENTS];
-    final double tailSum;
-
+    private long first;
+    private double[] re = new double[0];
+    private double[] im = new double[0];
     private final DoubleDouble mu;
     private final DoubleDouble nuRe;
     private final DoubleDouble nuIm;
@@ -37,6 +31,7 @@ final class SqueezedWindow {
     private final DoubleDouble betaIm;
     private double[] reLow = new double[0];
     private double[] imLow = new double[0];
+    private final KeptWindow kept;
 
     /**
      * The state.
@@ -62,12 +57,17 @@ final class SqueezedWindow {
                 * (1 + 2 * Math.sqrt(mu.hi()));
         double weight = Math.max(1e-60, Math.pow(tolerance / (8 * lift), 2));
         double reached = fill(tail, mean, weight);
-        for (int again = 0; again < 3 && reached > tolerance; again++) {
+        for (int again = 0; again < 3 && reached > 0.5 * tolerance; again++) {
             weight *= 1e-3;
             reached = fill(tail, mean, weight);
         }
-        error = reached;
-        tailSum = tail.outside(first, first + re.length, tailMoments);
+        double[] moments = new double[Amplitudes.MOMENTS];
+        double sum = tail.outside(first, first + re.length, moments);
+        kept = new KeptWindow(first, re, im, reached, moments, sum).trimmed(tolerance);
+    }
+
+    KeptWindow kept() {
+        return kept;
     }
 
     /** Amplitudes on the window that leaves out the weight; returns the norm error. */

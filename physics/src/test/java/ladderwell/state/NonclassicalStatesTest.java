@@ -164,6 +164,14 @@ class NonclassicalStatesTest {
         return out;
     }
 
+    private static double distance(Amplitudes one, Amplitudes other) {
+        int size = (int) (one.first(0) + one.length(0));
+        double[][] dense = new double[2][size];
+        System.arraycopy(one.reals(0), 0, dense[0], (int) one.first(0), one.length(0));
+        System.arraycopy(one.imaginaries(0), 0, dense[1], (int) one.first(0), one.length(0));
+        return distance(dense, other);
+    }
+
     private static double distance(double[][] dense, Amplitudes state) {
         double sum = 0;
         for (int n = 0; n < dense[0].length; n++) {
@@ -247,9 +255,10 @@ class NonclassicalStatesTest {
                             "moment " + k + " of " + mean + ", " + r);
                 }
                 assertTrue(sum <= pair[0].tailSum() * (1 + 1e-9) + 1e-9);
-                double[] overlap = overlap(pair[1], pair[0]);
-                double gap = Math.sqrt(Math.max(0, 2 - 2 * overlap[0]));
-                assertTrue(gap <= pair[0].normError() + 3e-7, "off by " + gap + " > " + pair[0].normError());
+                double gap = distance(pair[1], pair[0]);
+                assertTrue(gap <= pair[0].normError() + TIGHT, "off by " + gap + " > " + pair[0].normError());
+                // and it is no looser than it need be
+                assertTrue(pair[0].normError() <= 1e-3 && pair[0].normError() <= 20 * gap, gap + " " + pair[0].normError());
             }
         }
     }
