@@ -4,7 +4,6 @@ import java.util.Locale;
 import ladderwell.evidence.PhysicsException;
 import ladderwell.level.Levels;
 import ladderwell.numeric.DoubleDouble;
-import ladderwell.numeric.DoubleDoubleFunctions;
 
 /**
  * A pure state on levels: complex amplitudes on sorted segments of consecutive levels, parts kept apart (re, im).
@@ -190,7 +189,9 @@ public final class Amplitudes {
         }
         checkTolerance(tolerance);
         // D(α) S(ξ) is D(|α|) S(ξ e^{−2i arg α}) turned by arg α
-        KeptWindow window = new SqueezedWindow(mean, r, DoubleDouble.sum(phi, -2 * phase), tolerance).kept();
+        KeptWindow window = new SqueezedWindow(
+                        DoubleDouble.of(mean).sqrt(), false, r, DoubleDouble.sum(phi, -2 * phase), tolerance)
+                .kept();
         turn(window.first(), 0, phase, window.re(), window.im());
         return met("the squeezed state", tolerance, window.amplitudes(phase == 0 ? 0 : TURNED));
     }
@@ -203,7 +204,7 @@ public final class Amplitudes {
      * @param phase arg γ in radians
      * @param r squeezing, 0 … 5
      * @param phi φ in radians
-     * @param tolerance norm error allowed, 1e-14 … 0.1; rounding of α adds some 1e-16 |α|, which is included
+     * @param tolerance norm error allowed, 1e-14 … 0.1
      * @throws IllegalArgumentException as {@link #displacedSqueezed}
      */
     public static Amplitudes squeezedDisplaced(double mean, double phase, double r, double phi, double tolerance) {
@@ -214,39 +215,12 @@ public final class Amplitudes {
             throw new IllegalArgumentException(
                     "the squeezing r must lie between 0 and " + SqueezedWindow.LARGEST_SQUEEZING + ", got " + r);
         }
-        double size = Math.sqrt(mean);
-        DoubleDoubleFunctions.Pair hyperbolic = DoubleDoubleFunctions.coshSinh(r);
-        DoubleDoubleFunctions.Pair direct = DoubleDoubleFunctions.cosSin(DoubleDouble.of(phase));
-        DoubleDoubleFunctions.Pair mirrored = DoubleDoubleFunctions.cosSin(DoubleDouble.sum(phi, -phase));
-        double re = hyperbolic
-                        .first()
-                        .times(direct.first())
-                        .minus(hyperbolic.second().times(mirrored.first()))
-                        .value()
-                * size;
-        double im = hyperbolic
-                        .first()
-                        .times(direct.second())
-                        .minus(hyperbolic.second().times(mirrored.second()))
-                        .value()
-                * size;
-        double alpha = Math.hypot(re, im);
-        // mean, phase and root are rounded: a displacement off by δ moves the amplitudes by at most δ √(2 ⟨n⟩ + 1) +
-        // its phase
-        double quanta = alpha * alpha + Math.pow(Math.sinh(r), 2);
-        double off = 0x1p-50 * alpha * (2 * Math.sqrt(2 * quanta + 1) + 2 * alpha);
-        Amplitudes state = displacedSqueezed(alpha * alpha, Math.atan2(im, re), r, phi, tolerance);
-        return met(
-                "the squeezed state",
-                tolerance,
-                new Amplitudes(
-                        state.firsts,
-                        state.re,
-                        state.im,
-                        state.normError + off,
-                        state.tailMoments,
-                        state.tailSum,
-                        state.missingWeight));
+        checkTolerance(tolerance);
+        KeptWindow window = new SqueezedWindow(
+                        DoubleDouble.of(mean).sqrt(), true, r, DoubleDouble.sum(phi, -2 * phase), tolerance)
+                .kept();
+        turn(window.first(), 0, phase, window.re(), window.im());
+        return met("the squeezed state", tolerance, window.amplitudes(phase == 0 ? 0 : TURNED));
     }
 
     /**

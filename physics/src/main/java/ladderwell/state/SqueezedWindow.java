@@ -6,9 +6,10 @@ import ladderwell.numeric.DoubleDoubleFunctions;
 import ladderwell.numeric.Interruption;
 
 /**
- * Amplitudes of D(α) S(ξ) |0⟩ for α ≥ 0 real, ξ = r e^{iψ}.
+ * Amplitudes of D(α) S(ξ) |0⟩ for α ≥ 0 real, and of S(ξ) D(β) |0⟩ for β ≥ 0 real; ξ = r e^{iψ}.
  *
- * <p>The state is annihilated by b = μ a + ν a† − β, μ = cosh r, ν = e^{iψ} sinh r, β = α (μ + ν): μ √(n+1) c_{n+1} = β c_n − ν √n c_{n−1}. Upwards
+ * <p>Either is annihilated by b = μ a + ν a† − β, μ = cosh r, ν = e^{iψ} sinh r, with β = μ α + ν α* and so α = μ β − ν β*: μ √(n+1) c_{n+1} = β
+ * c_n − ν √n c_{n−1}. Upwards
  * the amplitudes are the dominant solution, so the recurrence is stable, and started anywhere below the window it forgets its start.
  *
  * <p>Error. b†b has the levels 0, 1, 2, …, so that a normalised vector φ is at most ‖b φ‖ away from the ray of the state: one number that
@@ -29,6 +30,8 @@ final class SqueezedWindow {
     private final DoubleDouble nuIm;
     private final DoubleDouble betaRe;
     private final DoubleDouble betaIm;
+    private final DoubleDouble alphaRe;
+    private final DoubleDouble alphaIm;
     private double[] reLow = new double[0];
     private double[] imLow = new double[0];
     private final KeptWindow kept;
@@ -36,21 +39,28 @@ final class SqueezedWindow {
     /**
      * The state.
      *
-     * @param mean α²
+     * @param size √(α*α), or √(β*β) where squeezing comes last
+     * @param squeezedLast whether the displacement is squeezed too
      * @param psi ψ, as a sum of two doubles
      * @param tolerance norm error wanted
      */
-    SqueezedWindow(double mean, double r, DoubleDouble psi, double tolerance) {
+    SqueezedWindow(DoubleDouble size, boolean squeezedLast, double r, DoubleDouble psi, double tolerance) {
         DoubleDoubleFunctions.Pair hyperbolic = DoubleDoubleFunctions.coshSinh(r);
         DoubleDoubleFunctions.Pair turn = DoubleDoubleFunctions.cosSin(psi);
         mu = hyperbolic.first();
         nuRe = hyperbolic.second().times(turn.first());
         nuIm = hyperbolic.second().times(turn.second());
-        DoubleDouble alpha = DoubleDouble.of(mean).sqrt();
-        betaRe = alpha.times(mu.plus(nuRe));
-        betaIm = alpha.times(nuIm);
+        betaRe = squeezedLast ? size : size.times(mu.plus(nuRe));
+        betaIm = squeezedLast ? DoubleDouble.ZERO : size.times(nuIm);
+        alphaRe = squeezedLast ? size.times(mu.minus(nuRe)) : size;
+        alphaIm = squeezedLast ? size.times(nuIm).negated() : DoubleDouble.ZERO;
+        double mean = alphaRe.hi() * alphaRe.hi() + alphaIm.hi() * alphaIm.hi();
+        if (!(mean <= Amplitudes.LARGEST_MEAN)) {
+            throw new IllegalArgumentException(
+                    "squeezing brings the displacement to " + mean + " quanta; states are carried up to 1e12");
+        }
 
-        QuantaTail tail = tail(mean, r, psi.hi());
+        QuantaTail tail = tail(r, psi);
         // a weight w outside leaves edges of size √w, which b lifts by up to this, and the phase by √μ more
         double lift = (mu.hi() + Math.hypot(nuRe.hi(), nuIm.hi()))
                 * Math.sqrt(mean + mu.hi() * mu.hi() + 1)
@@ -105,13 +115,15 @@ final class SqueezedWindow {
     }
 
     /** ln G of the Gaussian state, from the Weyl symbol of e^{wn}; α along x turned by the squeezing angle ψ/2. */
-    private static QuantaTail tail(double mean, double r, double psi) {
+    private QuantaTail tail(double r, DoubleDouble psi) {
+        double mean = alphaRe.hi() * alphaRe.hi() + alphaIm.hi() * alphaIm.hi();
         double small = Math.exp(-2 * r);
         double large = Math.exp(2 * r);
-        double c = Math.cos(psi / 2);
-        double s = Math.sin(psi / 2);
-        double along = 2 * mean * c * c;
-        double across = 2 * mean * s * s;
+        DoubleDoubleFunctions.Pair half = DoubleDoubleFunctions.cosSin(psi.times(0.5));
+        double c = half.first().value();
+        double s = half.second().value();
+        double along = 2 * Math.pow(c * alphaRe.hi() + s * alphaIm.hi(), 2);
+        double across = 2 * Math.pow(c * alphaIm.hi() - s * alphaRe.hi(), 2);
         // G is finite up to tanh(w/2) = e^{−2r}
         double largest = r == 0 ? Double.POSITIVE_INFINITY : Math.log1p(2 * small / (1 - small));
         double sinh = Math.sinh(r);
@@ -255,10 +267,40 @@ final class SqueezedWindow {
         DoubleDouble b = DoubleDouble.ZERO;
         long from = Math.max(first, coherent.first());
         long to = Math.min(first + re.length, coherent.first() + roots.length);
+        // e^{−iθn} with e^{iθ} = α/|α|, in double-double: n of its roundings are nothing
+        DoubleDouble length =
+                alphaRe.times(alphaRe).plus(alphaIm.times(alphaIm)).sqrt();
+        boolean turned = alphaIm.hi() != 0;
+        DoubleDouble stepRe = turned ? alphaRe.dividedBy(length) : DoubleDouble.ONE;
+        DoubleDouble stepIm = turned ? alphaIm.dividedBy(length).negated() : DoubleDouble.ZERO;
+        DoubleDouble turnRe = DoubleDouble.ONE;
+        DoubleDouble turnIm = DoubleDouble.ZERO;
+        for (int bit = 62; turned && bit >= 0; bit--) {
+            DoubleDouble square = turnRe.times(turnRe).minus(turnIm.times(turnIm));
+            turnIm = turnRe.times(turnIm).times(2.0);
+            turnRe = square;
+            if ((from >> bit & 1) == 1) {
+                DoubleDouble next = turnRe.times(stepRe).minus(turnIm.times(stepIm));
+                turnIm = turnRe.times(stepIm).plus(turnIm.times(stepRe));
+                turnRe = next;
+            }
+        }
         for (long n = from; n < to; n++) {
             double root = roots[(int) (n - coherent.first())];
-            a = a.plus(root * re[(int) (n - first)]);
-            b = b.plus(root * im[(int) (n - first)]);
+            double x = root * re[(int) (n - first)];
+            double y = root * im[(int) (n - first)];
+            if (!turned) {
+                a = a.plus(x);
+                b = b.plus(y);
+                continue;
+            }
+            double c = turnRe.hi();
+            double s = turnIm.hi();
+            a = a.plus(c * x - s * y);
+            b = b.plus(c * y + s * x);
+            DoubleDouble next = turnRe.times(stepRe).minus(turnIm.times(stepIm));
+            turnIm = turnRe.times(stepIm).plus(turnIm.times(stepRe));
+            turnRe = next;
         }
         double size = Math.hypot(a.hi(), b.hi());
         if (!(size > 0)) {
@@ -272,7 +314,7 @@ final class SqueezedWindow {
             re[i] = c * x + s * im[i];
             im[i] = c * im[i] - s * x;
         }
-        // tails of 1e-16 on both sides, the coherent amplitudes, one rounding of each product
-        return 2e-16 + PoissonWindow.RELATIVE_ERROR + 0x1p-52;
+        // tails of 1e-16 on both sides, the coherent amplitudes, a few roundings of each product
+        return 2e-16 + PoissonWindow.RELATIVE_ERROR + 0x1p-50;
     }
 }

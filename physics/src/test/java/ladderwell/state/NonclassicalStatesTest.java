@@ -258,7 +258,9 @@ class NonclassicalStatesTest {
                 double gap = distance(pair[1], pair[0]);
                 assertTrue(gap <= pair[0].normError() + TIGHT, "off by " + gap + " > " + pair[0].normError());
                 // and it is no looser than it need be
-                assertTrue(pair[0].normError() <= 1e-3 && pair[0].normError() <= 20 * gap, gap + " " + pair[0].normError());
+                assertTrue(
+                        pair[0].normError() <= 1e-3 && pair[0].normError() <= 20 * gap,
+                        gap + " " + pair[0].normError());
             }
         }
     }
@@ -323,6 +325,22 @@ class NonclassicalStatesTest {
         if (level == 1) {
             assertEquals(1, overlap(lower, Amplitudes.coherent(mean, phase, 1e-12))[0], 1e-10);
         }
+    }
+
+    @Test
+    void bothOrdersOfALargeStateAreOneState() {
+        double gamma = 1000;
+        double phi = 0.8;
+        double r = 0.6;
+        // α = γ cosh r − γ e^{iφ} sinh r
+        double re = gamma * (Math.cosh(r) - Math.cos(phi) * Math.sinh(r));
+        double im = -gamma * Math.sin(phi) * Math.sinh(r);
+        Amplitudes last = Amplitudes.squeezedDisplaced(gamma * gamma, 0, r, phi, 1e-11);
+        Amplitudes first = Amplitudes.displacedSqueezed(re * re + im * im, Math.atan2(im, re), r, phi, 1e-11);
+        // mean and phase of α are rounded: 1e-16 of 1e6 quanta
+        double[] overlap = overlap(last, first);
+        assertEquals(1, overlap[0], 1e-10);
+        assertEquals(0, overlap[1], 1e-9);
     }
 
     @Test
