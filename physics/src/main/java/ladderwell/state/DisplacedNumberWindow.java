@@ -40,8 +40,8 @@ final class DisplacedNumberWindow {
         double weight = Math.max(1e-70, Math.pow(tolerance / (8 * lift), 2));
         first = tail.below(weight);
         long end = tail.above(weight);
-        if (end - first > Amplitudes.MOST_LEVELS) {
-            throw Amplitudes.tooManyLevels("this displaced number state", end - first);
+        if (end - first > HarmonicStates.MOST_LEVELS) {
+            throw HarmonicStates.tooManyLevels("this displaced number state", end - first);
         }
         int size = Math.max(2, (int) (end - first));
         double[] values = new double[size];

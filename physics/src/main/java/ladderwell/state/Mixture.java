@@ -64,7 +64,7 @@ public final class Mixture {
             Interruption.check();
             weights[m] = quanta == 0 ? 1 : Math.exp(-m * falls) / (quanta + 1);
             // half the tolerance for the tail, half for the states: 2.1 errors each in trace norm
-            states.add(Amplitudes.displacedNumber(m, mean, phase, Math.max(1e-14, Math.min(0.1, tolerance / 6))));
+            states.add(HarmonicStates.displacedNumber(m, mean, phase, Math.max(1e-14, Math.min(0.1, tolerance / 6))));
         }
         double missing = quanta == 0 ? 0 : Math.exp(-count * falls) * (1 + 1e-9);
         return new Mixture(mean == 0 ? "thermal state" : "displaced thermal state", states, weights, missing);

@@ -84,8 +84,8 @@ final class SqueezedWindow {
     private double fill(QuantaTail tail, double mean, double weight) {
         long start = tail.below(weight * 1e-8);
         long end = tail.above(weight);
-        if (end - start > Amplitudes.MOST_LEVELS) {
-            throw Amplitudes.tooManyLevels("this squeezed state", end - start);
+        if (end - start > HarmonicStates.MOST_LEVELS) {
+            throw HarmonicStates.tooManyLevels("this squeezed state", end - start);
         }
         int size = (int) (end - start);
         double[] upRe = new double[size];

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import java.util.SplittableRandom;
 import ladderwell.state.Amplitudes;
 import ladderwell.state.DensityOperator;
+import ladderwell.state.HarmonicStates;
 import ladderwell.state.Mixture;
 import org.junit.jupiter.api.Test;
 
@@ -32,8 +33,8 @@ class GaussianAgainstNumbersTest {
                     ? GaussianState.coherent(re, im).squeezed(r, phi)
                     : GaussianState.vacuum().squeezed(r, phi).displaced(re, im);
             Amplitudes state = squeezedLast
-                    ? Amplitudes.squeezedDisplaced(mean, phase, r, phi, STATE)
-                    : Amplitudes.displacedSqueezed(mean, phase, r, phi, STATE);
+                    ? HarmonicStates.squeezedDisplaced(mean, phase, r, phi, STATE)
+                    : HarmonicStates.displacedSqueezed(mean, phase, r, phi, STATE);
             double quanta = 0;
             double square = 0;
             double parity = 0;
@@ -124,7 +125,7 @@ class GaussianAgainstNumbersTest {
                 rho.traceNormError() + point.parity().bound().size());
         assertEquals(point.purity().value(), rho.purity(), 2 * rho.traceNormError() + 1e-15);
         // fidelity with a pure state is ⟨ψ|ρ|ψ⟩
-        Amplitudes psi = Amplitudes.displacedSqueezed(0.5, 0, 0.6, 1.2, 1e-12);
+        Amplitudes psi = HarmonicStates.displacedSqueezed(0.5, 0, 0.6, 1.2, 1e-12);
         double value = 0;
         for (int m = 0; m < rho.size(); m++) {
             for (int n = 0; n < rho.size(); n++) {

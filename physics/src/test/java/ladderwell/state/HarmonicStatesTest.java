@@ -11,7 +11,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
-class NonclassicalStatesTest {
+class HarmonicStatesTest {
     private static final double TIGHT = 1e-13;
 
     private static double weight(Amplitudes state, long n) {
@@ -57,41 +57,42 @@ class NonclassicalStatesTest {
     @Test
     void squeezedVacuumHasItsPopulations() {
         // S-SQ-01: Walls and Milburn, Quantum Optics, ch. 2; Yuen, Phys. Rev. A 13 (1976) 2226
-        assertEquals(0.6480542736638854, weight(Amplitudes.squeezedVacuum(1, 0, TIGHT), 0), 5e-16);
+        assertEquals(0.6480542736638854, weight(HarmonicStates.squeezedVacuum(1, 0, TIGHT), 0), 5e-16);
         // S-FQ-01b: ground state of ω = 1 in the levels of ω = 3, r = ½ ln 3: Husimi 1953; Janszky and Yushin 1986
-        assertEquals(0.108253175473055, weight(Amplitudes.squeezedVacuum(Math.log(3) / 2, 0, TIGHT), 2), 5e-16);
+        assertEquals(0.108253175473055, weight(HarmonicStates.squeezedVacuum(Math.log(3) / 2, 0, TIGHT), 2), 5e-16);
     }
 
     @Test
     void squeezedCoherentStateHasItsPopulations() {
         // S-SC-01c: Yuen 1976 eq. (3.23); Gong and Aravind, Am. J. Phys. 58 (1990) 1003
-        Amplitudes state = Amplitudes.displacedSqueezed(4, 0, 0.5, 0, TIGHT);
+        Amplitudes state = HarmonicStates.displacedSqueezed(4, 0, 0.5, 0, TIGHT);
         assertEquals(0.246962001495588, weight(state, 5), 1e-15);
         // S-SC-01a: Loudon and Knight, J. Mod. Opt. 34 (1987) 709
         double mean = moment(state, 1);
         assertEquals(-0.493843783085530, (variance(state) - mean) / mean, 1e-13);
         // S-OV-02: Scutaru, J. Phys. A 31 (1998) 3659
-        double[] overlap = overlap(Amplitudes.coherent(4, 0, TIGHT), Amplitudes.displacedSqueezed(1, 0, 0.8, 0, TIGHT));
+        double[] overlap =
+                overlap(Amplitudes.coherent(4, 0, TIGHT), HarmonicStates.displacedSqueezed(1, 0, 0.8, 0, TIGHT));
         assertEquals(0.141594161545450, overlap[0] * overlap[0] + overlap[1] * overlap[1], 1e-14);
     }
 
     @Test
     void displacedNumberStateHasItsElements() {
         // S-DM-01: Cahill and Glauber, Phys. Rev. 177 (1969) 1857, eq. B4: ⟨3|D(1)|2⟩
-        Amplitudes state = Amplitudes.displacedNumber(2, 1, 0, TIGHT);
+        Amplitudes state = HarmonicStates.displacedNumber(2, 1, 0, TIGHT);
         assertEquals(0.1750903198284251, state.re(0, (int) (3 - state.first(0))), 5e-16);
         // S-DF-01: de Oliveira, Kim, Knight and Buzek, Phys. Rev. A 41 (1990) 2645: Fano factor of D(2)|1⟩
-        Amplitudes one = Amplitudes.displacedNumber(1, 4, 0.7, TIGHT);
+        Amplitudes one = HarmonicStates.displacedNumber(1, 4, 0.7, TIGHT);
         assertEquals(2.4, variance(one) / moment(one, 1), 1e-12);
     }
 
     @Test
     void catsHaveTheirQuanta() {
         // S-CAT-01a, S-CAT-01b, S-CAT-02a: Buzek, Vidiella-Barranco and Knight, Phys. Rev. A 45 (1992) 6570; Gerry 1993
-        Amplitudes even = Amplitudes.cat(1, 0, 2, 0, TIGHT);
+        Amplitudes even = HarmonicStates.cat(1, 0, 2, 0, TIGHT);
         assertEquals(0.7615941559557649, moment(even, 1), 1e-15);
         assertEquals(0.55144112954357, (variance(even) - moment(even, 1)) / moment(even, 1), 1e-14);
-        assertEquals(1.313035285499331, moment(Amplitudes.cat(1, 0, 2, 1, TIGHT), 1), 2e-15);
+        assertEquals(1.313035285499331, moment(HarmonicStates.cat(1, 0, 2, 1, TIGHT), 1), 2e-15);
     }
 
     @Test
@@ -99,7 +100,7 @@ class NonclassicalStatesTest {
         // S-KER-03: Yurke and Stoler, Phys. Rev. Lett. 57 (1986) 13: H = χ n², α = 2, χt = π/2: fidelity 1 with χ = π/2
         // between
         Amplitudes start = Amplitudes.coherent(4, 0, TIGHT);
-        Amplitudes cat = Amplitudes.phasedCat(4, 0, 2, Math.PI / 2, TIGHT);
+        Amplitudes cat = HarmonicStates.phasedCat(4, 0, 2, Math.PI / 2, TIGHT);
         double re = 0;
         double im = 0;
         for (int i = 0; i < start.length(0); i++) {
@@ -204,9 +205,9 @@ class NonclassicalStatesTest {
             vacuum[0][0] = 1;
             double[][] number = new double[2][size];
             number[0][level] = 1;
-            Amplitudes first = Amplitudes.displacedSqueezed(mean, phase, r, phi, tolerance);
-            Amplitudes second = Amplitudes.squeezedDisplaced(mean, phase, r, phi, tolerance);
-            Amplitudes third = Amplitudes.displacedNumber(level, mean, phase, tolerance);
+            Amplitudes first = HarmonicStates.displacedSqueezed(mean, phase, r, phi, tolerance);
+            Amplitudes second = HarmonicStates.squeezedDisplaced(mean, phase, r, phi, tolerance);
+            Amplitudes third = HarmonicStates.displacedNumber(level, mean, phase, tolerance);
             double gap1 = distance(exponential(exponential(vacuum, 120, squeeze), 40, displace), first);
             double gap2 = distance(exponential(exponential(vacuum, 40, displace), 120, squeeze), second);
             double gap3 = distance(exponential(number, 40, displace), third);
@@ -227,12 +228,14 @@ class NonclassicalStatesTest {
             double phi = random.nextDouble(-3, 3);
             Amplitudes[][] pairs = {
                 {
-                    Amplitudes.displacedSqueezed(mean, 0.3, r, phi, 1e-3),
-                    Amplitudes.displacedSqueezed(mean, 0.3, r, phi, TIGHT)
+                    HarmonicStates.displacedSqueezed(mean, 0.3, r, phi, 1e-3),
+                    HarmonicStates.displacedSqueezed(mean, 0.3, r, phi, TIGHT)
                 },
-                {Amplitudes.displacedNumber(trial, mean, 0.3, 1e-3), Amplitudes.displacedNumber(trial, mean, 0.3, TIGHT)
+                {
+                    HarmonicStates.displacedNumber(trial, mean, 0.3, 1e-3),
+                    HarmonicStates.displacedNumber(trial, mean, 0.3, TIGHT)
                 },
-                {Amplitudes.cat(mean + 0.1, 0.3, 3, 1, 1e-3), Amplitudes.cat(mean + 0.1, 0.3, 3, 1, TIGHT)}
+                {HarmonicStates.cat(mean + 0.1, 0.3, 3, 1, 1e-3), HarmonicStates.cat(mean + 0.1, 0.3, 3, 1, TIGHT)}
             };
             for (Amplitudes[] pair : pairs) {
                 double[] moments = new double[Amplitudes.MOMENTS];
@@ -269,7 +272,7 @@ class NonclassicalStatesTest {
     @CsvSource({"1e2, 1", "1e4, 0.7", "1e6, 1.5", "1e8, 0.3", "1e4, 3", "0, 4.5", "1e-20, 0.1", "25, 0"})
     void squeezedStatesOfAnySizeHaveTheirMoments(double mean, double r) {
         for (double phi : new double[] {0, 2.1, Math.PI}) {
-            Amplitudes state = Amplitudes.displacedSqueezed(mean, 0, r, phi, 1e-10);
+            Amplitudes state = HarmonicStates.displacedSqueezed(mean, 0, r, phi, 1e-10);
             // ⟨n⟩ = |α|² + sinh² r; Var n = |α cosh r − α* e^{iφ} sinh r|² + 2 sinh² r cosh² r (Loudon and Knight 1987)
             double s = Math.sinh(r);
             double c = Math.cosh(r);
@@ -295,9 +298,9 @@ class NonclassicalStatesTest {
     @ParameterizedTest
     @CsvSource({"1, 1e4, 0", "3, 1e6, 0.5", "10, 400, -2", "200, 50, 1", "2, 1e8, 1e9", "5, 1e-12, 0"})
     void displacedNumberStatesOfAnySizeAreRaisedCoherentOnes(long level, double mean, double phase) {
-        Amplitudes state = Amplitudes.displacedNumber(level, mean, phase, 1e-10);
+        Amplitudes state = HarmonicStates.displacedNumber(level, mean, phase, 1e-10);
         // (a − α) lowers: √m D|m − 1⟩
-        Amplitudes lower = Amplitudes.displacedNumber(level - 1, mean, phase, 1e-10);
+        Amplitudes lower = HarmonicStates.displacedNumber(level - 1, mean, phase, 1e-10);
         double alphaRe = Math.sqrt(mean) * Math.cos(phase);
         double alphaIm = Math.sqrt(mean) * Math.sin(phase);
         double sum = 0;
@@ -335,8 +338,8 @@ class NonclassicalStatesTest {
         // α = γ cosh r − γ e^{iφ} sinh r
         double re = gamma * (Math.cosh(r) - Math.cos(phi) * Math.sinh(r));
         double im = -gamma * Math.sin(phi) * Math.sinh(r);
-        Amplitudes last = Amplitudes.squeezedDisplaced(gamma * gamma, 0, r, phi, 1e-11);
-        Amplitudes first = Amplitudes.displacedSqueezed(re * re + im * im, Math.atan2(im, re), r, phi, 1e-11);
+        Amplitudes last = HarmonicStates.squeezedDisplaced(gamma * gamma, 0, r, phi, 1e-11);
+        Amplitudes first = HarmonicStates.displacedSqueezed(re * re + im * im, Math.atan2(im, re), r, phi, 1e-11);
         // mean and phase of α are rounded: 1e-16 of 1e6 quanta
         double[] overlap = overlap(last, first);
         assertEquals(1, overlap[0], 1e-10);
@@ -346,7 +349,7 @@ class NonclassicalStatesTest {
     @Test
     void phasesOfCatsFollowTheirComponents() {
         double chi = 0.8;
-        Amplitudes cat = Amplitudes.phasedCat(2, 0.4, 3, chi, TIGHT);
+        Amplitudes cat = HarmonicStates.phasedCat(2, 0.4, 3, chi, TIGHT);
         double[][] sum = new double[2][60];
         for (int j = 0; j < 3; j++) {
             Amplitudes part = Amplitudes.coherent(2, 0.4 + 2 * Math.PI * j / 3, 1e-14);
@@ -368,24 +371,24 @@ class NonclassicalStatesTest {
         }
         assertTrue(distance(sum, cat) <= cat.normError() + 1e-14);
         // all phases alike: the class n ≡ 0
-        assertTrue(distance(sum, Amplitudes.cat(2, 0.4, 3, 0, TIGHT)) > 0.1);
-        double[] same = overlap(Amplitudes.phasedCat(2, 0.4, 3, 0, TIGHT), Amplitudes.cat(2, 0.4, 3, 0, TIGHT));
+        assertTrue(distance(sum, HarmonicStates.cat(2, 0.4, 3, 0, TIGHT)) > 0.1);
+        double[] same = overlap(HarmonicStates.phasedCat(2, 0.4, 3, 0, TIGHT), HarmonicStates.cat(2, 0.4, 3, 0, TIGHT));
         assertEquals(1, same[0], 1e-14);
     }
 
     @Test
     void smallCatsOfHighClassAreStillStates() {
         // four components, n ≡ 3: |3⟩ for a small mean
-        Amplitudes cat = Amplitudes.cat(1e-3, 0, 4, 3, 1e-9);
+        Amplitudes cat = HarmonicStates.cat(1e-3, 0, 4, 3, 1e-9);
         assertEquals(1, weight(cat, 3), 1e-9);
         assertEquals(3, moment(cat, 1), 1e-9);
         IllegalArgumentException nothing =
-                assertThrows(IllegalArgumentException.class, () -> Amplitudes.cat(0, 0, 2, 1, 1e-9));
+                assertThrows(IllegalArgumentException.class, () -> HarmonicStates.cat(0, 0, 2, 1, 1e-9));
         assertEquals(
                 "at 0 quanta per component nothing is left of this cat; give it some quanta or another parity",
                 nothing.getMessage());
-        assertThrows(IllegalArgumentException.class, () -> Amplitudes.cat(1e-30, 0, 20, 19, 1e-9));
-        assertEquals(0, Amplitudes.cat(0, 0, 2, 0, 1e-9).first(0));
+        assertThrows(IllegalArgumentException.class, () -> HarmonicStates.cat(1e-30, 0, 20, 19, 1e-9));
+        assertEquals(0, HarmonicStates.cat(0, 0, 2, 0, 1e-9).first(0));
     }
 
     @Test
@@ -418,16 +421,16 @@ class NonclassicalStatesTest {
 
     @Test
     void badNumbersAreRefused() {
-        assertThrows(IllegalArgumentException.class, () -> Amplitudes.displacedSqueezed(-1, 0, 1, 0, 1e-9));
-        assertThrows(IllegalArgumentException.class, () -> Amplitudes.displacedSqueezed(1, 0, -1, 0, 1e-9));
-        assertThrows(IllegalArgumentException.class, () -> Amplitudes.displacedSqueezed(1, 0, 6, 0, 1e-9));
-        assertThrows(IllegalArgumentException.class, () -> Amplitudes.squeezedVacuum(1, Double.NaN, 1e-9));
-        assertThrows(IllegalArgumentException.class, () -> Amplitudes.displacedNumber(-1, 1, 0, 1e-9));
-        assertThrows(IllegalArgumentException.class, () -> Amplitudes.cat(1, 0, 1, 0, 1e-9));
-        assertThrows(IllegalArgumentException.class, () -> Amplitudes.cat(1, 0, 2, 2, 1e-9));
+        assertThrows(IllegalArgumentException.class, () -> HarmonicStates.displacedSqueezed(-1, 0, 1, 0, 1e-9));
+        assertThrows(IllegalArgumentException.class, () -> HarmonicStates.displacedSqueezed(1, 0, -1, 0, 1e-9));
+        assertThrows(IllegalArgumentException.class, () -> HarmonicStates.displacedSqueezed(1, 0, 6, 0, 1e-9));
+        assertThrows(IllegalArgumentException.class, () -> HarmonicStates.squeezedVacuum(1, Double.NaN, 1e-9));
+        assertThrows(IllegalArgumentException.class, () -> HarmonicStates.displacedNumber(-1, 1, 0, 1e-9));
+        assertThrows(IllegalArgumentException.class, () -> HarmonicStates.cat(1, 0, 1, 0, 1e-9));
+        assertThrows(IllegalArgumentException.class, () -> HarmonicStates.cat(1, 0, 2, 2, 1e-9));
         assertThrows(IllegalArgumentException.class, () -> Mixture.thermal(-1, 1e-9));
-        IllegalArgumentException large =
-                assertThrows(IllegalArgumentException.class, () -> Amplitudes.displacedSqueezed(1e12, 0, 4, 3.1, 1e-9));
+        IllegalArgumentException large = assertThrows(
+                IllegalArgumentException.class, () -> HarmonicStates.displacedSqueezed(1e12, 0, 4, 3.1, 1e-9));
         assertTrue(large.getMessage().startsWith("this squeezed state needs about "), large.getMessage());
         PhysicsException.TooLarge heavy = assertThrows(
                 PhysicsException.TooLarge.class,
