@@ -84,6 +84,16 @@ public record Box(Optional<Quantity> mass, Optional<Quantity> width) implements 
     }
 
     @Override
+    public double left() {
+        return -0.5;
+    }
+
+    @Override
+    public double right() {
+        return 0.5;
+    }
+
+    @Override
     public double classicalPeriod(double energy) {
         return 2 / Math.sqrt(2 * energy);
     }
@@ -91,11 +101,6 @@ public record Box(Optional<Quantity> mass, Optional<Quantity> width) implements 
     @Override
     public ClassicalOrbit orbit(double position, double momentum, double energy) {
         return ClassicalOrbit.bouncing(position, momentum, energy, 0.5);
-    }
-
-    /** A Gaussian packet with mean position and momentum and spread Δx; what sticks out of the walls is refused. */
-    public Packet gaussian(Quantity position, Quantity momentum, Quantity spread) {
-        return new Packet(this, position, momentum, spread);
     }
 
     @Override

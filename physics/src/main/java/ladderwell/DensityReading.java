@@ -20,6 +20,8 @@ final class DensityReading {
     /** Height of the last wave function at the edge of the grid. */
     private static final double DROP = 1e-4;
 
+    private static final double INVISIBLE = 1e-6;
+
     private DensityReading() {}
 
     static Density of(Run run, int points) {
@@ -32,21 +34,52 @@ final class DensityReading {
                 "a density of " + run.times() + " times and " + points + " points",
                 Double.BYTES * (run.times() * (points + 2 * levels) + levels * points),
                 "ask for fewer frames or fewer points");
-        double half = halfWidth(run);
-        double[] x = new double[points];
-        for (int i = 0; i < points; i++) {
-            x[i] = half * (2 * i - (points - 1)) / (points - 1);
-        }
+        double[] x = grid(run, points);
         return closed ? closedForm(run, (Coherent) run.state(), x) : sumOverLevels(run, x);
     }
 
-    private static double halfWidth(Run run) {
+    /** Mirror symmetric, bit by bit, where the levels are. */
+    private static double[] grid(Run run, int points) {
+        double[] ends = extent(run);
+        double middle = ends[0] == -ends[1] ? 0 : (ends[0] + ends[1]) / 2;
+        double half = (ends[1] - ends[0]) / 2;
+        double[] x = new double[points];
+        for (int i = 0; i < points; i++) {
+            x[i] = middle + half * (2 * i - (points - 1)) / (points - 1);
+        }
+        return x;
+    }
+
+    private static double[] extent(Run run) {
         if (run.state() instanceof Coherent coherent) {
-            return Math.sqrt(2 * coherent.mean()) + MARGIN;
+            double half = Math.sqrt(2 * coherent.mean()) + MARGIN;
+            return new double[] {-half, half};
         }
         Oscillator oscillator = run.state().oscillator();
-        double reach = oscillator.levels().reach(run.phased().lastLevel(), DROP);
-        return oscillator instanceof Harmonic ? reach : Math.max(0.55, Math.min(reach, 2));
+        double[] extent = oscillator.levels().extent(highestThatShows(run), DROP);
+        if (oscillator instanceof Box || oscillator instanceof FiniteWell) {
+            double half = Math.max(0.55, Math.min(extent[1], 2));
+            return new double[] {-half, half};
+        }
+        return extent;
+    }
+
+    /** The level above which less of the state lies than a picture could show; the last one of a harmonic oscillator. */
+    private static long highestThatShows(Run run) {
+        Amplitudes amplitudes = run.amplitudes();
+        if (run.state().oscillator() instanceof Harmonic) {
+            return run.phased().lastLevel();
+        }
+        double above = 0;
+        for (int s = amplitudes.segments() - 1; s >= 0; s--) {
+            for (int i = amplitudes.length(s) - 1; i >= 0; i--) {
+                above += amplitudes.re(s, i) * amplitudes.re(s, i) + amplitudes.im(s, i) * amplitudes.im(s, i);
+                if (above > INVISIBLE) {
+                    return amplitudes.first(s) + i;
+                }
+            }
+        }
+        return run.phased().lastLevel();
     }
 
     /** π^{−1/2} e^{−(x−x₀)²} at each point; on a grid coarser than the packet, its mean over one grid spacing. */
@@ -90,7 +123,8 @@ final class DensityReading {
         double sumError;
         if (amplitudes.segments() == 1) {
             double[][] functions = levels.waveFunctions(amplitudes.first(0), amplitudes.length(0), x);
-            DensityFrames frames = DensityFrames.alternating(functions);
+            DensityFrames frames =
+                    levels.alternates() ? DensityFrames.alternating(functions) : DensityFrames.of(functions);
             values = frames.of(state.phases(0), workers());
             sumError = frames.errorBound(coefficientError, functionError, 1 + coefficientError);
         } else {
@@ -121,12 +155,20 @@ final class DensityReading {
 
     /**
      * Adds what the discarded levels could do at one point: at most tail sum × the largest wave function. Guaranteed where the
-     * wave functions' own error is (box and well) and nothing lies above the bound levels; estimated for the harmonic
-     * oscillator's functions and for packets.
+     * wave functions' own error is (box and well) and nothing lies above the bound levels; estimated for all other
+     * functions and for packets.
      */
     private static Bound bound(Run run, double[][] values, double sumError) {
-        boolean harmonic = run.state().oscillator() instanceof Harmonic;
-        double off = run.amplitudes().tailSum() * (harmonic ? Math.pow(Math.PI, -0.25) : Math.sqrt(2));
+        Oscillator oscillator = run.state().oscillator();
+        double largest = 0;
+        if (run.amplitudes().tailSum() > 0) {
+            largest = switch (oscillator.levels().kind()) {
+                case HARMONIC -> Math.pow(Math.PI, -0.25);
+                case BOX, FINITE_WELL -> Math.sqrt(2);
+                case GENERAL -> largest(oscillator.levels(), run.phased().lastLevel());
+            };
+        }
+        double off = run.amplitudes().tailSum() * largest;
         double peak = 0;
         for (double[] frame : values) {
             for (double value : frame) {
@@ -134,8 +176,23 @@ final class DensityReading {
             }
         }
         double size = sumError + (2 * Math.sqrt(peak + sumError) + off) * off;
-        boolean proved = !harmonic && !(run.state() instanceof Packet);
-        return proved ? Bound.guaranteed(size) : Bound.estimated(size);
+        boolean proved =
+                (oscillator instanceof Box || oscillator instanceof FiniteWell) && !(run.state() instanceof Packet);
+        return proved ? new Bound(run.phased().certainty(), size) : Bound.estimated(size);
+    }
+
+    /** Twice the largest value of the last kept function: those above are larger only near the turning points, and little. */
+    private static double largest(Levels levels, long last) {
+        double reach = levels.reach(last, DROP);
+        double[] x = new double[4001];
+        for (int i = 0; i < x.length; i++) {
+            x[i] = reach * (i - 2000) / 2000.0;
+        }
+        double largest = 0;
+        for (double value : levels.waveFunctions(last, 1, x)[0]) {
+            largest = Math.max(largest, Math.abs(value));
+        }
+        return 2 * largest;
     }
 
     /** All cores: the frames are the same whatever their number. */

@@ -90,6 +90,11 @@ public record FiniteWell(Optional<Quantity> mass, Optional<Quantity> width, Quan
     }
 
     @Override
+    public double[] breaks() {
+        return new double[] {-0.5, 0.5};
+    }
+
+    @Override
     public double classicalPeriod(double energy) {
         if (energy >= scaledDepth()) {
             throw new IllegalArgumentException("at this energy the classical particle leaves the well");
@@ -100,11 +105,6 @@ public record FiniteWell(Optional<Quantity> mass, Optional<Quantity> width, Quan
     @Override
     public ClassicalOrbit orbit(double position, double momentum, double energy) {
         return ClassicalOrbit.bouncing(position, momentum, energy, 0.5);
-    }
-
-    /** A Gaussian packet with mean position and momentum and spread Δx; refused if the bound levels cannot carry it. */
-    public Packet gaussian(Quantity position, Quantity momentum, Quantity spread) {
-        return new Packet(this, position, momentum, spread);
     }
 
     @Override

@@ -3,13 +3,16 @@ package ladderwell;
 import java.util.List;
 import ladderwell.classical.ClassicalOrbit;
 import ladderwell.level.Levels;
+import ladderwell.potential.Potential;
+import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
+import tech.tablesaw.api.Table;
 
 /**
- * What the system is: one mode with its levels and its scale. Made by {@link #harmonic()}, {@link #box()} or
- * {@link #finiteWell()}; states are prepared in it by {@link #number}, {@link #coherent}, {@link #superposition} ….
+ * What the system is: one mode with its levels and its scale. Made by {@link #harmonic()}, {@link #box()}, {@link #finiteWell()} or
+ * {@link #in}; states are prepared in it by {@link #number}, {@link #gaussian}, {@link #superposition} ….
  */
-public sealed interface Oscillator permits Harmonic, Box, FiniteWell {
+public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialWell {
 
     /** A harmonic oscillator: give the mass and one of ν, ω, wavenumber or level spacing, or {@code natural()}. */
     static Harmonic.Declaring harmonic() {
@@ -26,7 +29,25 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell {
         return new FiniteWell.Declaring();
     }
 
-    /** The trade's name of the kind: "harmonic", "box", "finite well". */
+    /**
+     * A particle in any potential: {@code Oscillator.in(Potential.morse(…))}, {@code Oscillator.in(Potential.of("a*x^4", …))}.
+     *
+     * @throws IllegalArgumentException if the potential binds nothing
+     */
+    static PotentialWell in(Potential potential) {
+        return in(potential, 0);
+    }
+
+    /**
+     * A particle in a potential that repeats, at a boundary phase in rad: 2π n_g for a junction with offset charge n_g.
+     *
+     * @throws IllegalArgumentException if the potential binds nothing
+     */
+    static PotentialWell in(Potential potential, double boundaryPhase) {
+        return PotentialWell.of("potential", potential, boundaryPhase, List.of());
+    }
+
+    /** The trade's name of the kind: "harmonic", "box", "finite well", "morse" …. */
     String kind();
 
     /** What 1 means inside: ħ = 1 and the mass and length of this oscillator. */
@@ -37,6 +58,26 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell {
 
     /** Potential energy at scaled position x, in scaled units; infinite outside a box. */
     double potential(double x);
+
+    /** The potential in one line with its parameters, where the kind and {@link #given} do not say it all; else empty. */
+    default String formula() {
+        return "";
+    }
+
+    /** Scaled positions where the potential jumps or has a kink, ascending. */
+    default double[] breaks() {
+        return new double[0];
+    }
+
+    /** Scaled position of the wall on the left, −∞ where there is none. */
+    default double left() {
+        return Double.NEGATIVE_INFINITY;
+    }
+
+    /** Scaled position of the wall on the right, +∞ where there is none. */
+    default double right() {
+        return Double.POSITIVE_INFINITY;
+    }
 
     /**
      * The classical period at scaled energy E, in scaled time.
@@ -57,9 +98,38 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell {
     /** The inputs as they were given, for the record: key → value with unit, in declaration order. */
     List<Fact> given();
 
+    /**
+     * The lowest levels as a table: n, energy, spacing to the next, each with its error and how sure it is.
+     *
+     * @throws IllegalArgumentException if there are fewer bound levels
+     */
+    default Table levelTable(int count) {
+        return LevelColumns.of(this, LevelColumns.lowest(count));
+    }
+
+    /** These levels as a table. */
+    default Table levelTable(long... levels) {
+        return LevelColumns.of(this, levels);
+    }
+
     /** Level n, counted from 0. */
     default NumberState number(long n) {
         return new NumberState(this, n);
+    }
+
+    /** A Gaussian packet with mean position and momentum and spread Δx; refused if the bound levels cannot carry it. */
+    default Packet gaussian(Quantity position, Quantity momentum, Quantity spread) {
+        return new Packet(this, position, momentum, spread);
+    }
+
+    /** Level n of another oscillator of the same particle, found in this one after a sudden change. */
+    default LevelOf levelOf(Oscillator source, long n) {
+        return LevelOf.of(this, source, n);
+    }
+
+    /** The ground state of another oscillator of the same particle, found in this one after a sudden change. */
+    default LevelOf groundOf(Oscillator source) {
+        return LevelOf.of(this, source, 0);
     }
 
     /** A superposition of levels with equal weights and phases; {@link Superposition#weights} changes them. */

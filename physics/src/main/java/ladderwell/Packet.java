@@ -10,10 +10,12 @@ import ladderwell.quantity.Scale;
 import ladderwell.state.Amplitudes;
 
 /**
- * A Gaussian packet in a box or a finite well: mean position and momentum, and the spread Δx; Δx Δp = ħ/2 at time 0.
+ * A Gaussian packet: mean position and momentum, and the spread Δx; Δx Δp = ħ/2 at time 0.
  *
- * @param oscillator a box or a finite well
- * @param position mean position, measured from the middle
+ * <p>In a box or a finite well the error of its expansion is guaranteed, elsewhere it is estimated.
+ *
+ * @param oscillator any oscillator
+ * @param position mean position, from the oscillator's origin (the middle of box and well)
  * @param momentum mean momentum
  * @param spread Δx
  */
@@ -21,9 +23,9 @@ public record Packet(Oscillator oscillator, Quantity position, Quantity momentum
 
     public Packet {
         boolean natural = oscillator.scale().isNatural();
-        Checks.kind("position", position, natural ? Kind.NUMBER : Kind.LENGTH);
+        Checks.kind("position", position, oscillator.scale().position());
         Checks.kind("momentum", momentum, natural ? Kind.NUMBER : Kind.MOMENTUM);
-        Checks.positive("spread", spread, natural ? Kind.NUMBER : Kind.LENGTH);
+        Checks.positive("spread", spread, oscillator.scale().position());
     }
 
     @Override
@@ -33,14 +35,14 @@ public record Packet(Oscillator oscillator, Quantity position, Quantity momentum
 
     @Override
     public Amplitudes amplitudes(double tolerance) {
-        Scale scale = oscillator.scale();
+        GaussianShape shape = shape();
         try {
-            return Amplitudes.packet(
-                    oscillator.levels(),
-                    position.si() / scale.length(),
-                    momentum.si() / scale.momentum(),
-                    spread.si() / scale.length(),
-                    tolerance);
+            return switch (oscillator.levels().kind()) {
+                case BOX, FINITE_WELL ->
+                    Amplitudes.packet(
+                            oscillator.levels(), shape.position(), shape.momentum(), shape.width(), tolerance);
+                case HARMONIC, GENERAL -> Amplitudes.expanded(oscillator.levels(), shape, tolerance);
+            };
         } catch (PhysicsException.NotCarried scaled) {
             // the room speaks of scaled units; the user typed these
             throw new PhysicsException.NotCarried(
@@ -52,13 +54,28 @@ public record Packet(Oscillator oscillator, Quantity position, Quantity momentum
         }
     }
 
-    /** ⟨p²⟩/2m of the free packet; the walls change it only through what leaks into them. */
+    private GaussianShape shape() {
+        Scale scale = oscillator.scale();
+        return new GaussianShape(
+                oscillator,
+                position.si() / scale.length(),
+                momentum.si() / scale.momentum(),
+                spread.si() / scale.length());
+    }
+
+    /**
+     * ⟨p²⟩/2m of the free packet in box and well, whose walls change it only through what leaks into them; elsewhere with the mean
+     * potential energy.
+     */
     @Override
     public double meanEnergy() {
         Scale scale = oscillator.scale();
         double p = momentum.si() / scale.momentum();
         double dp = 0.5 / (spread.si() / scale.length());
-        return (p * p + dp * dp) / 2;
+        return switch (oscillator.levels().kind()) {
+            case BOX, FINITE_WELL -> (p * p + dp * dp) / 2;
+            case HARMONIC, GENERAL -> shape().energy();
+        };
     }
 
     @Override
@@ -72,7 +89,7 @@ public record Packet(Oscillator oscillator, Quantity position, Quantity momentum
                 Kind.MOMENTUM,
                 0.5 * scale.length() / spread.si() * scale.momentum(),
                 0));
-        facts.add(shown.energy("mean energy", "⟨p²⟩/2m", meanEnergy(), oscillator));
+        facts.add(shown.energy("mean energy", "⟨H⟩", meanEnergy(), oscillator));
         return List.copyOf(facts);
     }
 

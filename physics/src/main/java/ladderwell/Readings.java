@@ -74,15 +74,15 @@ final class Readings {
         }
         if (o.equals(Observable.RETURN_PROBABILITY)) {
             Returns r = returns();
-            return along(o, r::probability, r::probabilityError, Certainty.GUARANTEED);
+            return along(o, r::probability, r::probabilityError, state.certainty());
         }
         if (o.equals(Observable.RETURN_AMPLITUDE_REAL)) {
             Returns r = returns();
-            return along(o, r::re, j -> r.error(), Certainty.GUARANTEED);
+            return along(o, r::re, j -> r.error(), state.certainty());
         }
         if (o.equals(Observable.RETURN_AMPLITUDE_IMAGINARY)) {
             Returns r = returns();
-            return along(o, r::im, j -> r.error(), Certainty.GUARANTEED);
+            return along(o, r::im, j -> r.error(), state.certainty());
         }
         throw new IllegalArgumentException("'" + o.name() + "' is no observable of a run; known are "
                 + String.join(
@@ -115,7 +115,7 @@ final class Readings {
         }
         double ratio = p.levelVariance() / mean;
         double error = (p.levelVarianceBound().size() + ratio * meanError) / (mean - meanError) + 4 * Math.ulp(ratio);
-        return constant(o, ratio - 1, Bound.guaranteed(error));
+        return constant(o, ratio - 1, new Bound(p.levelVarianceBound().kind(), error));
     }
 
     private void requireHarmonic(Observable o) {

@@ -92,7 +92,7 @@ public final class Run {
 
     /** Largest ‖ψ − ψ̃‖ over the run: discarded tail, rounding, and the errors of the levels acting all the time. */
     public Bound stateError() {
-        return Bound.guaranteed(phased.error());
+        return new Bound(phased.certainty(), phased.error());
     }
 
     /** The method in a few words. */
@@ -120,9 +120,17 @@ public final class Run {
                 .size("last level", phased.lastLevel())
                 .size("times", times())
                 .bound("state", stateError());
+        askWords(record, "oscillator.formula", state().oscillator().formula());
+        askWords(record, "state.origin", state().origin());
         ask(record, "oscillator.", state().oscillator().given());
         ask(record, "state.", state().given());
         return record.build();
+    }
+
+    private static void askWords(Record.Builder record, String key, String words) {
+        if (!words.isEmpty()) {
+            record.asked(key, words);
+        }
     }
 
     private static void ask(Record.Builder record, String prefix, List<Fact> given) {
@@ -180,7 +188,7 @@ public final class Run {
         String levels = first == phased.lastLevel() ? "level " + first : "levels " + first + "–" + phased.lastLevel();
         return levels + " · " + method() + " · error of the state ≤ "
                 + Digits.pretty(Digits.significant(Math.nextUp(phased.error() * 1.05), 2))
-                + ", guaranteed · "
+                + ", " + phased.certainty().word() + " · "
                 + milliseconds()
                 + " ms";
     }

@@ -6,12 +6,12 @@ import ladderwell.quantity.Unit;
 import ladderwell.state.Amplitudes;
 
 /** What the motion starts in: a pure state of one oscillator. */
-public sealed interface State permits NumberState, Coherent, Superposition, Packet {
+public sealed interface State permits NumberState, Coherent, Superposition, Packet, LevelOf {
 
     /** The oscillator it is prepared in. */
     Oscillator oscillator();
 
-    /** The trade's name of the kind: "number", "coherent", "superposition", "gaussian". */
+    /** The trade's name of the kind: "number", "coherent", "superposition", "gaussian", "level". */
     String kind();
 
     /**
@@ -30,6 +30,11 @@ public sealed interface State permits NumberState, Coherent, Superposition, Pack
 
     /** The inputs as they were given, for the record. */
     List<Fact> given();
+
+    /** What it is made from, in words, where {@link #given} does not say it all; else empty. */
+    default String origin() {
+        return "";
+    }
 
     /**
      * The classical period at the mean energy, in scaled time: what "1 period" means for this state.

@@ -1,6 +1,6 @@
 package ladderwell.classical;
 
-/** The orbit of a classical particle of mass 1: its position and momentum at any time, in closed form. */
+/** The orbit of a classical particle of mass 1: its position and momentum at any time. */
 public interface ClassicalOrbit {
 
     /** Position at time t. */
@@ -11,6 +11,11 @@ public interface ClassicalOrbit {
 
     /** The outermost position on the +x side. */
     double turningPoint();
+
+    /** The outermost position on the −x side; the mirror image of the other unless it is said otherwise. */
+    default double leftTurningPoint() {
+        return -turningPoint();
+    }
 
     /** The harmonic orbit (H = (p² + x²)/2) through the given point. */
     static ClassicalOrbit harmonic(double position, double momentum) {
@@ -25,6 +30,54 @@ public interface ClassicalOrbit {
         double start = Math.max(-half, Math.min(half, position));
         double speed = Math.sqrt(2 * energy);
         return new Bouncing(start, momentum < 0 ? -speed : speed, half);
+    }
+
+    /** The orbit through the given point of any potential. */
+    static ClassicalOrbit through(Landscape v, double position, double momentum) {
+        double energy = momentum * momentum / 2 + v.value(position);
+        if (momentum == 0 && v.slope(position) == 0) {
+            return new Resting(position);
+        }
+        return Swing.through(v, position, energy)
+                .<ClassicalOrbit>map(swing -> swing.period() > 0 && swing.right() > swing.left()
+                        ? new SwingingOrbit(swing, position, momentum)
+                        : new Resting(position))
+                .orElseGet(() -> new LeavingOrbit(v, position, momentum));
+    }
+
+    /**
+     * The period of the motion at an energy that passes a position.
+     *
+     * @throws IllegalArgumentException if the particle cannot be there at that energy, or leaves
+     */
+    static double period(Landscape v, double position, double energy) {
+        return Swing.through(v, position, energy)
+                .orElseThrow(() ->
+                        new IllegalArgumentException("at this energy the classical particle leaves the potential"))
+                .period();
+    }
+
+    /** No motion. */
+    record Resting(double at) implements ClassicalOrbit {
+        @Override
+        public double position(double time) {
+            return at;
+        }
+
+        @Override
+        public double momentum(double time) {
+            return 0;
+        }
+
+        @Override
+        public double turningPoint() {
+            return at;
+        }
+
+        @Override
+        public double leftTurningPoint() {
+            return at;
+        }
     }
 
     /** x = x₀ cos t + p₀ sin t. */

@@ -19,6 +19,11 @@ final class BoxLevels implements Levels {
     }
 
     @Override
+    public boolean alternates() {
+        return true;
+    }
+
+    @Override
     public long count() {
         return Long.MAX_VALUE;
     }

@@ -51,6 +51,25 @@ public final class Elements {
         momentumSquaredBound = new Bound(certainty, errors[3]);
     }
 
+    /** The same with every element off by this much more of the largest of its kind; statistical. */
+    Elements loosened(double relative) {
+        double[][][] all = {position, positionSquared, momentum, momentumSquared};
+        double[] errors = {
+            positionBound.size(), positionSquaredBound.size(), momentumBound.size(), momentumSquaredBound.size()
+        };
+        for (int k = 0; k < all.length; k++) {
+            double largest = 0;
+            for (double[] row : all[k]) {
+                for (double element : row) {
+                    largest = Math.max(largest, Math.abs(element));
+                }
+            }
+            errors[k] += relative * largest;
+        }
+        return new Elements(
+                levels, position, positionSquared, momentum, momentumSquared, errors, Certainty.STATISTICAL);
+    }
+
     /** Number of levels in the list. */
     public int size() {
         return levels.length;

@@ -20,6 +20,11 @@ final class HarmonicLevels implements Levels {
     }
 
     @Override
+    public boolean alternates() {
+        return true;
+    }
+
+    @Override
     public long count() {
         return Long.MAX_VALUE;
     }

@@ -8,7 +8,8 @@ import ladderwell.evidence.Bound;
  *
  * <p>Levels are computed when asked for; making a {@code Levels} of a very deep well costs nothing per level.
  */
-public sealed interface Levels permits HarmonicLevels, BoxLevels, WellLevels, PolynomialLevels, ShootingLevels {
+public sealed interface Levels
+        permits HarmonicLevels, BoxLevels, WellLevels, PolynomialLevels, ShootingLevels, CircleLevels, UncertainLevels {
 
     /** Harmonic levels E_n = n + 1/2; x² / 2 is the potential. */
     static Levels harmonic() {
@@ -59,6 +60,26 @@ public sealed interface Levels permits HarmonicLevels, BoxLevels, WellLevels, Po
         return new PeriodicLevels(curve, period, phase);
     }
 
+    /**
+     * The same levels of a potential that is known only within ±off at every place; errors are then statistical.
+     *
+     * @param off as large as the potential can be wrong anywhere, positive
+     */
+    default Levels within(double off) {
+        return new UncertainLevels(this, off);
+    }
+
+    /**
+     * Levels on a circle: a potential that repeats, φ(x + period) = e^{i phase} φ(x), seen over one turn from −period/2 to period/2. Where the
+     * potential is even and the phase 0 or π the wave functions are real; else there are energies only.
+     *
+     * @param period length of one turn, positive
+     * @param phase boundary phase, as in {@link #periodic}
+     */
+    static Levels onCircle(PotentialCurve curve, double period, double phase) {
+        return new CircleLevels(periodic(curve, period, phase), curve);
+    }
+
     /** The potential the levels belong to. */
     enum Kind {
         /** x² / 2. */
@@ -73,6 +94,16 @@ public sealed interface Levels permits HarmonicLevels, BoxLevels, WellLevels, Po
 
     /** The potential the levels belong to. */
     Kind kind();
+
+    /** Whether φ_n(−x) = (−1)^n φ_n(x) for all n. */
+    default boolean alternates() {
+        return false;
+    }
+
+    /** Whether wave functions are real and given; if not there are energies only. */
+    default boolean hasWaveFunctions() {
+        return true;
+    }
 
     /** How many bound levels there are; {@code Long.MAX_VALUE} where there is no last one. */
     long count();
@@ -214,6 +245,12 @@ public sealed interface Levels permits HarmonicLevels, BoxLevels, WellLevels, Po
 
     /** A distance beyond which |φ_n| stays below {@code drop} on both sides. */
     double reach(long n, double drop);
+
+    /** Left and right end of what {@link #reach} covers: {−reach, reach} where the two sides are alike. */
+    default double[] extent(long n, double drop) {
+        double reach = reach(n, drop);
+        return new double[] {-reach, reach};
+    }
 
     /** Transition elements of x, x², p, p² between the given levels, in the order given. */
     Elements elements(long[] levels);

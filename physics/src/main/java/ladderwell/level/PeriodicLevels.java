@@ -17,7 +17,7 @@ import ladderwell.numeric.Interruption;
  */
 public final class PeriodicLevels {
     private static final int MOST_SAMPLES = 4096;
-    private static final int MOST_LEVELS = 2000;
+    static final int MOST_LEVELS = 2000;
 
     private final double period;
     private final double phase;
@@ -145,6 +145,24 @@ public final class PeriodicLevels {
             }
         }
         return wave;
+    }
+
+    /** Slope of the real (0) or imaginary (1) part of {@link #waveFunction}. */
+    double[] slope(int n, double[] x, int part) {
+        Solution s = solved(n);
+        double[] slope = new double[x.length];
+        double scale = 1 / Math.sqrt(period);
+        for (int i = 0; i < x.length; i++) {
+            for (int j = -s.reach; j <= s.reach; j++) {
+                double k = wave(j);
+                double c = Math.cos(k * x[i]) * k * scale;
+                double d = Math.sin(k * x[i]) * k * scale;
+                double a = s.re[n][j + s.reach];
+                double b = s.im[n][j + s.reach];
+                slope[i] += part == 0 ? -a * d - b * c : a * c - b * d;
+            }
+        }
+        return slope;
     }
 
     /** ⟨m|p|n⟩ as {real part, imaginary part}. */

@@ -59,6 +59,16 @@ final class PolynomialLevels implements Levels {
     }
 
     @Override
+    public boolean alternates() {
+        return polynomial.even();
+    }
+
+    @Override
+    public double[] extent(long n, double drop) {
+        return polynomial.even() ? Levels.super.extent(n, drop) : shooting().extent(n, drop);
+    }
+
+    @Override
     public long count() {
         return Long.MAX_VALUE;
     }

@@ -15,6 +15,7 @@ import org.jspecify.annotations.Nullable;
 final class ShootingLevels implements Levels {
     private static final long LAST = 50_000_000;
     private static final int FIRST_BAND = 7;
+    private static final int SCANNED = 512;
     private static final int REMEMBERED = 20_000;
 
     private final CurveSurvey survey;
@@ -128,6 +129,11 @@ final class ShootingLevels implements Levels {
     private double error(long n) {
         wave(n);
         return solved(n).error;
+    }
+
+    @Override
+    public boolean alternates() {
+        return survey.even;
     }
 
     @Override
@@ -329,14 +335,40 @@ final class ShootingLevels implements Levels {
     @Override
     public double reach(long n, double drop) {
         Points.checkDrop(drop);
+        double[] extent = extent(n, drop);
+        double wall = Double.isInfinite(survey.left) ? 0 : Math.abs(survey.left);
+        return Math.max(Math.abs(extent[1]), Math.max(Math.abs(extent[0]), wall));
+    }
+
+    @Override
+    public double[] extent(long n, double drop) {
+        Points.checkDrop(drop);
         Wave wave = wave(n);
         double right = beyond(wave.right(), wave.tail(), wave.cells()[wave.to() - 1].mean - wave.e(), drop);
         if (survey.even) {
-            return right;
+            double reach = shrunk(wave, 0, right, drop);
+            return new double[] {-reach, reach};
         }
-        double left = beyond(-wave.left(), wave.head(), wave.cells()[wave.from()].mean - wave.e(), drop);
-        double wall = Double.isInfinite(survey.left) ? left : Math.abs(survey.left);
-        return Math.max(Math.abs(right), Math.max(Math.abs(left), wall));
+        double left = -beyond(-wave.left(), wave.head(), wave.cells()[wave.from()].mean - wave.e(), drop);
+        double middle = (left + right) / 2;
+        return new double[] {shrunk(wave, middle, left, drop), shrunk(wave, middle, right, drop)};
+    }
+
+    /** From an end towards the middle until |φ| reaches the drop; on the way it only grows. */
+    private double shrunk(Wave wave, double middle, double end, double drop) {
+        double scale = survey.even ? Math.sqrt(0.5) : 1;
+        double[] room = EtaSeries.room();
+        double[] out = new double[2];
+        for (int i = SCANNED; i > 0; i--) {
+            double x = middle + (end - middle) * i / SCANNED;
+            if (x > wave.left() && x < wave.right()) {
+                wave.at(x, room, out);
+                if (scale * Math.abs(out[0]) >= drop) {
+                    return middle + (end - middle) * Math.min(i + 1, SCANNED) / SCANNED;
+                }
+            }
+        }
+        return end;
     }
 
     private static double beyond(double end, double value, double square, double drop) {

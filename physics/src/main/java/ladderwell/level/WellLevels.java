@@ -30,6 +30,11 @@ final class WellLevels implements Levels {
     }
 
     @Override
+    public boolean alternates() {
+        return true;
+    }
+
+    @Override
     public long count() {
         return equation.count();
     }

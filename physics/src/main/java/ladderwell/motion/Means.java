@@ -56,7 +56,7 @@ public final class Means {
         // ⟨ψ|a|ψ⟩ − ⟨ψ̃|a|ψ̃⟩ = ⟨δψ|aψ⟩ + ⟨ψ̃|aδψ⟩
         double amplitudeError = rounding * (1 + 1e-9) + push + delta * (top + tail);
         Means means = new Means(
-                state.times(), Math.sqrt(2) * amplitudeError, Math.sqrt(2) * amplitudeError, Certainty.GUARANTEED);
+                state.times(), Math.sqrt(2) * amplitudeError, Math.sqrt(2) * amplitudeError, state.certainty());
         for (int j = 0; j < state.times(); j++) {
             means.ladderRow(j, sums, push, delta, amplitudeError);
         }
@@ -127,7 +127,7 @@ public final class Means {
                 state.times(),
                 x + size * 0x1p-51 * norm(elements.positionRows()),
                 p + size * 0x1p-51 * norm(elements.momentumRows()),
-                proved ? Certainty.GUARANTEED : Certainty.ESTIMATED);
+                proved ? state.certainty() : Certainty.ESTIMATED);
         double[] re = new double[size];
         double[] im = new double[size];
         double[][] rowRe = new double[1][];

@@ -1,5 +1,7 @@
 package ladderwell.motion;
 
+import ladderwell.evidence.Bound;
+import ladderwell.evidence.Certainty;
 import ladderwell.level.Levels;
 import ladderwell.numeric.ExactPhases;
 import ladderwell.state.Amplitudes;
@@ -11,13 +13,21 @@ public final class PhasedState {
     private final double[] times;
     private final ExactPhases[] phases;
     private final double error;
+    private final Certainty certainty;
 
-    private PhasedState(Levels levels, Amplitudes amplitudes, double[] times, ExactPhases[] phases, double error) {
+    private PhasedState(
+            Levels levels,
+            Amplitudes amplitudes,
+            double[] times,
+            ExactPhases[] phases,
+            double error,
+            Certainty certainty) {
         this.levels = levels;
         this.amplitudes = amplitudes;
         this.times = times;
         this.phases = phases;
         this.error = error;
+        this.certainty = certainty;
     }
 
     /** The state at the given scaled times; the array is copied. */
@@ -29,6 +39,7 @@ public final class PhasedState {
         ExactPhases[] phases = new ExactPhases[amplitudes.segments()];
         double rounding = 0;
         double energyDrift = 0;
+        Certainty certainty = amplitudes.certainty();
         for (int s = 0; s < phases.length; s++) {
             int count = amplitudes.length(s);
             double[] high = new double[count];
@@ -37,7 +48,9 @@ public final class PhasedState {
                 long n = amplitudes.first(s) + i;
                 high[i] = levels.energyHigh(n);
                 low[i] = levels.energyLow(n);
-                double drift = levels.energyError(n) * latest;
+                Bound off = levels.energyBound(n);
+                certainty = certainty.weaker(off.kind());
+                double drift = off.size() * latest;
                 double weight = amplitudes.re(s, i) * amplitudes.re(s, i) + amplitudes.im(s, i) * amplitudes.im(s, i);
                 energyDrift += weight * drift * drift;
             }
@@ -47,7 +60,7 @@ public final class PhasedState {
         // What was left out at time 0, the rounding of every phase, and the levels' own errors acting for the whole
         // time.
         double error = (amplitudes.normError() + rounding + Math.sqrt(energyDrift)) * (1 + 1e-12);
-        return new PhasedState(levels, amplitudes, times.clone(), phases, error);
+        return new PhasedState(levels, amplitudes, times.clone(), phases, error, certainty);
     }
 
     /** The levels. */
@@ -75,9 +88,14 @@ public final class PhasedState {
         return phases[segment];
     }
 
-    /** δ ≥ ‖ψ − ψ̃‖ at every time: guaranteed. */
+    /** δ ≥ ‖ψ − ψ̃‖ at every time, as sure as {@link #certainty}. */
     public double error() {
         return error;
+    }
+
+    /** How sure the error is: as sure as the amplitudes and the levels. */
+    public Certainty certainty() {
+        return certainty;
     }
 
     /** The last kept level. */

@@ -2,6 +2,7 @@ package ladderwell.motion;
 
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.Certainty;
+import ladderwell.level.Levels;
 import ladderwell.state.Amplitudes;
 
 /** What phases never change: populations, mean and variance of the level number, mean energy. @units scaled */
@@ -35,8 +36,7 @@ public final class Populations {
         double levelMean = meanError(level, delta) + amplitudes.tailMoment(1) + centre * tail0;
         double levelVariance =
                 squareError(level, delta) + amplitudes.tailMoment(2) + centre * centre * tail0 + levelMean * levelMean;
-        boolean ladder =
-                state.levels().count() == Long.MAX_VALUE && state.levels().energyHigh(0) == 0.5;
+        boolean ladder = state.levels().kind() == Levels.Kind.HARMONIC;
         double levelError = 0;
         for (int s = 0; s < amplitudes.segments(); s++) {
             levelError =
@@ -48,9 +48,9 @@ public final class Populations {
         double energyMean =
                 meanError(energy, delta) + levelError + (ladder ? amplitudes.tailMoment(1) + (centre + 1) * tail0 : 0);
         return new Populations(state, level, energy, new Bound[] {
-            Bound.guaranteed(levelMean),
-            Bound.guaranteed(levelVariance),
-            new Bound(proved ? Certainty.GUARANTEED : Certainty.ESTIMATED, energyMean)
+            new Bound(amplitudes.certainty(), levelMean),
+            new Bound(amplitudes.certainty(), levelVariance),
+            new Bound(proved ? state.certainty() : Certainty.ESTIMATED, energyMean)
         });
     }
 
@@ -156,6 +156,6 @@ public final class Populations {
     public Bound populationBound(long n) {
         double delta = state.amplitudes().normError();
         double p = population(n);
-        return Bound.guaranteed((2 * Math.sqrt(p) + delta) * delta + 4 * Math.ulp(p));
+        return new Bound(state.amplitudes().certainty(), (2 * Math.sqrt(p) + delta) * delta + 4 * Math.ulp(p));
     }
 }

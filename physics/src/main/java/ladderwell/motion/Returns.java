@@ -80,12 +80,12 @@ public final class Returns {
         return re[j] * re[j] + im[j] * im[j];
     }
 
-    /** Guaranteed error of A. */
+    /** Error of A, as sure as the state's. */
     public double error() {
         return error;
     }
 
-    /** Guaranteed error of |A|² at the j-th time. */
+    /** Error of |A|² at the j-th time. */
     public double probabilityError(int j) {
         return (2 * Math.hypot(re[j], im[j]) + error) * error;
     }

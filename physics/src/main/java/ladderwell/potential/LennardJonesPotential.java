@@ -2,7 +2,12 @@ package ladderwell.potential;
 
 import ladderwell.quantity.Scale;
 
-/** V = C depth ((σ/x)^p − (σ/x)^q), C such that the least value is −depth; x &gt; 0. */
+/**
+ * V = C depth ((σ/x)^p − (σ/x)^q), C such that the least value is −depth; x &gt; 0.
+ *
+ * <p>Where p is above 2 the domain begins where a wave of no energy has fallen by e^{−{@value #FALL}} on its way in from σ: nothing that a double
+ * can tell lies beyond.
+ */
 record LennardJonesPotential(double depth, double sigma, int p, int q, Scale scale, String text) implements Potential {
 
     LennardJonesPotential {
@@ -14,6 +19,8 @@ record LennardJonesPotential(double depth, double sigma, int p, int q, Scale sca
             throw new IllegalArgumentException("depth " + depth + " and sigma " + sigma + " must be above 0");
         }
     }
+
+    private static final double FALL = 60;
 
     private double factor() {
         double ratio = (double) p / q;
@@ -39,7 +46,17 @@ record LennardJonesPotential(double depth, double sigma, int p, int q, Scale sca
 
     @Override
     public double left() {
-        return 0;
+        if (p <= 2) {
+            return 0;
+        }
+        double fall = 0;
+        double x = sigma;
+        while (fall < FALL) {
+            double next = x * (1 - 1.0 / 128);
+            fall += (x - next) * Math.sqrt(2 * Math.max(0, value((x + next) / 2)));
+            x = next;
+        }
+        return x;
     }
 
     @Override

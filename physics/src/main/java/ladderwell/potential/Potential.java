@@ -12,6 +12,7 @@ import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
 import ladderwell.quantity.Unit;
+import tech.tablesaw.api.Table;
 
 /**
  * A potential V(x) of one coordinate, constant in time. Immutable.
@@ -253,7 +254,7 @@ public sealed interface Potential
         }
         double inertia = given.mass() * r * r;
         // an angle is the coordinate: the moment of inertia stands for the mass, 1 rad for the length
-        Scale scale = given.isNatural() ? Scale.natural() : Scale.of(inertia, 1);
+        Scale scale = given.isNatural() ? Scale.natural() : Scale.turning(inertia);
         double height = inertia * omega / given.hbar() * (inertia * omega / given.hbar());
         return new CosinePotential(
                 height, 1, scale, "m r^2 w^2 (1 - cos x), r = " + arm.plain() + ", w from " + frequency.plain());
@@ -292,7 +293,7 @@ public sealed interface Potential
         double ec = Given.anyOmega("charging energy", charging);
         double ej = Given.anyOmega("Josephson energy", josephson);
         // ħ²/m = 8 E_C at a length of 1 rad
-        Scale scale = natural ? Scale.natural() : Scale.of(Constants.HBAR / (8 * ec), 1);
+        Scale scale = natural ? Scale.natural() : Scale.turning(Constants.HBAR / (8 * ec));
         return new CosinePotential(
                 ej / (8 * ec),
                 1,
@@ -343,6 +344,16 @@ public sealed interface Potential
     static Potential tabulated(
             Quantity mass, Unit lengthUnit, double[] x, Unit energyUnit, double[] v, double[] uncertainty) {
         return TabulatedPotential.of(Given.mass(mass), lengthUnit, x, energyUnit, v, uncertainty);
+    }
+
+    /**
+     * Tabulated points from a table with columns for x, V and, if known, the uncertainty of V; in lab units the heads name the units:
+     * "x / nm", "V / eV".
+     *
+     * @throws IllegalArgumentException naming the column, the row and what was expected
+     */
+    static Potential tabulated(Quantity mass, Table table) {
+        return PointTable.potential(mass, table);
     }
 
     /**

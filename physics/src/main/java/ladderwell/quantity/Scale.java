@@ -8,10 +8,13 @@ package ladderwell.quantity;
  * @param mass kg, or 1 when natural; positive
  * @param length m, or 1 when natural; positive
  * @param hbar J s, or 1 when natural; positive
+ * @param angle whether the coordinate is an angle: the mass is then a moment of inertia in kg m², the length 1 rad
  */
-public record Scale(double mass, double length, double hbar) {
+public record Scale(double mass, double length, double hbar, boolean angle) {
 
-    private static final Scale NATURAL = new Scale(1, 1, 1);
+    private static final Scale NATURAL = new Scale(1, 1, 1, false);
+
+    private static final Unit ANGULAR_MOMENTUM = new Unit("ħ", Kind.MOMENTUM, Constants.HBAR, 0);
 
     /** Refuses what is not finite and positive, and scales whose energy or time would leave the range of doubles. */
     public Scale {
@@ -40,7 +43,21 @@ public record Scale(double mass, double length, double hbar) {
      * @param length m
      */
     public static Scale of(double mass, double length) {
-        return new Scale(mass, length, Constants.HBAR);
+        return new Scale(mass, length, Constants.HBAR, false);
+    }
+
+    /**
+     * Lab scale of a motion in an angle.
+     *
+     * @param inertia moment of inertia, kg m²
+     */
+    public static Scale turning(double inertia) {
+        return new Scale(inertia, 1, Constants.HBAR, true);
+    }
+
+    /** What a position measures: a length, an angle, or nothing in natural units. */
+    public Kind position() {
+        return isNatural() ? Kind.NUMBER : angle ? Kind.ANGLE : Kind.LENGTH;
     }
 
     /** ħ = m = length = 1; symbols are empty. */
@@ -123,6 +140,12 @@ public record Scale(double mass, double length, double hbar) {
                 case ANGLE, SQUEEZING, PERIODS, NUMBER -> Units.si(kind);
                 default -> Units.natural(kind);
             };
+        }
+        if (angle && kind == Kind.LENGTH) {
+            return Units.RADIAN;
+        }
+        if (angle && kind == Kind.MOMENTUM) {
+            return ANGULAR_MOMENTUM;
         }
         return Prefixes.display(kind, magnitude == 0 ? of(kind) : Math.abs(magnitude));
     }

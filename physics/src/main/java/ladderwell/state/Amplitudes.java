@@ -1,6 +1,7 @@
 package ladderwell.state;
 
 import java.util.Locale;
+import ladderwell.evidence.Certainty;
 import ladderwell.level.Levels;
 
 /**
@@ -23,6 +24,7 @@ public final class Amplitudes {
     private final double[] tailMoments;
     private final double tailSum;
     private final double missingWeight;
+    private final Certainty certainty;
 
     Amplitudes(
             long[] firsts,
@@ -32,6 +34,18 @@ public final class Amplitudes {
             double[] tailMoments,
             double tailSum,
             double missingWeight) {
+        this(firsts, re, im, normError, tailMoments, tailSum, missingWeight, Certainty.GUARANTEED);
+    }
+
+    Amplitudes(
+            long[] firsts,
+            double[][] re,
+            double[][] im,
+            double normError,
+            double[] tailMoments,
+            double tailSum,
+            double missingWeight,
+            Certainty certainty) {
         this.firsts = firsts;
         this.re = re;
         this.im = im;
@@ -39,6 +53,7 @@ public final class Amplitudes {
         this.tailMoments = tailMoments;
         this.tailSum = tailSum;
         this.missingWeight = missingWeight;
+        this.certainty = certainty;
     }
 
     /**
@@ -138,7 +153,7 @@ public final class Amplitudes {
      * @param width Δx
      * @param tolerance norm error allowed, 1e-14 … 0.1
      * @units scaled: lengths in the full width L, momentum in ħ/L
-     * @throws IllegalArgumentException if an argument is outside its range, the levels are harmonic, or too much of the packet lies
+     * @throws IllegalArgumentException if an argument is outside its range, the levels are of another kind, or too much of the packet lies
      *     beyond the walls of a box
      * @throws ladderwell.evidence.PhysicsException.NotCarried if the bound levels of a well miss more than the tolerance
      */
@@ -146,15 +161,24 @@ public final class Amplitudes {
         checkTolerance(tolerance);
         PacketState state = new PacketState(levels, new GaussianPacket(position, momentum, width), tolerance);
         return switch (levels.kind()) {
-            case HARMONIC ->
-                throw new IllegalArgumentException(
-                        "a packet is expanded in the levels of a box or a finite well, not in harmonic levels");
             case BOX -> state.inBox();
             case FINITE_WELL -> state.inWell();
-            case GENERAL ->
-                throw new IllegalArgumentException(
-                        "a packet is expanded in the levels of a box or a finite well, not in " + levels);
+            case HARMONIC, GENERAL ->
+                throw new IllegalArgumentException("a packet in " + levels + " is expanded as a shape, see expanded()");
         };
+    }
+
+    /**
+     * Any state given as a function of position, on any levels. Errors and tails are estimated.
+     *
+     * @param tolerance norm error allowed, 1e-14 … 0.1
+     * @throws ladderwell.evidence.PhysicsException.NotCarried if the bound levels miss more than the tolerance
+     * @throws ladderwell.evidence.PhysicsException.TooLarge if it needs more than 2000 levels
+     * @throws ladderwell.evidence.PhysicsException.NotConverged if the levels are not known well enough
+     */
+    public static Amplitudes expanded(Levels levels, Shape shape, double tolerance) {
+        checkTolerance(tolerance);
+        return new ShapeState(levels, shape, tolerance).expand();
     }
 
     static void checkTolerance(double tolerance) {
@@ -198,12 +222,17 @@ public final class Amplitudes {
         return im[segment];
     }
 
-    /** ‖ψ − ψ̃‖ ≤ this, guaranteed: ψ the state meant, ψ̃ the amplitudes kept (discarded tail and rounding). */
+    /** How sure errors, tails and missing weight are. */
+    public Certainty certainty() {
+        return certainty;
+    }
+
+    /** ‖ψ − ψ̃‖ ≤ this: ψ the state meant, ψ̃ the amplitudes kept (discarded tail and rounding). */
     public double normError() {
         return normError;
     }
 
-    /** Guaranteed upper bound of Σ (n+1)^k |c_n|² over the discarded levels, k = 0 … 4. */
+    /** Upper bound of Σ (n+1)^k |c_n|² over the discarded levels, k = 0 … 4. */
     public double tailMoment(int k) {
         if (k < 0 || k >= MOMENTS) {
             throw new IllegalArgumentException("tail moments are known for k = 0 … 4, got k = " + k);
@@ -211,7 +240,7 @@ public final class Amplitudes {
         return tailMoments[k];
     }
 
-    /** Guaranteed upper bound of Σ |c_n| over the discarded levels. */
+    /** Upper bound of Σ |c_n| over the discarded levels. */
     public double tailSum() {
         return tailSum;
     }

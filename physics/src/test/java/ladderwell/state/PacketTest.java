@@ -308,7 +308,7 @@ class PacketTest {
 
     @Test
     void badPacketsAreNamed() {
-        says("not in harmonic levels", () -> Amplitudes.packet(Levels.harmonic(), 0, 0, 0.1, 1e-6));
+        says("is expanded as a shape", () -> Amplitudes.packet(Levels.harmonic(), 0, 0, 0.1, 1e-6));
         says("must lie between the walls", () -> Amplitudes.packet(Levels.box(), 0.5, 0, 0.1, 1e-6));
         says("got NaN", () -> Amplitudes.packet(Levels.box(), Double.NaN, 0, 0.1, 1e-6));
         says("the momentum of a packet", () -> Amplitudes.packet(Levels.box(), 0, Double.POSITIVE_INFINITY, 0.1, 1e-6));

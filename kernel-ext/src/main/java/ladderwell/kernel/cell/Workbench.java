@@ -90,15 +90,18 @@ public final class Workbench implements AutoCloseable {
 
     private void practiseNow() {
         try {
-            WarmUp.practise(imports, () -> {
-                synchronized (phaseLock) {
-                    return runner == null;
-                }
-            });
+            WarmUp.practise(imports, this::isIdle);
         } catch (InterruptedException e) {
             Thread.currentThread().interrupt();
         } catch (RuntimeException | LinkageError e) {
             // Cells will be slower for a while, that is all.
+        }
+    }
+
+    /** Whether nobody waits for anything: no cell runs, and the Java session is not just being started. */
+    public boolean isIdle() {
+        synchronized (phaseLock) {
+            return runner == null && !cellAnnounced && (java == null || java.isDone());
         }
     }
 

@@ -12,7 +12,6 @@ public final class Ladderwell {
     /** Runs a command and exits with its code. */
     public static void main(String[] arguments) {
         if (arguments.length == 2 && arguments[0].equals("kernel") && !arguments[1].startsWith("-")) {
-            Practice.startInBackground();
             System.exit(serve(Path.of(arguments[1])));
         }
         System.exit(CommandTable.run(arguments));
@@ -20,6 +19,6 @@ public final class Ladderwell {
 
     /** Serves a kernel until it is shut down; why it could not be started is said on standard error. */
     static int serve(Path connectionFile) {
-        return KernelMain.serve(connectionFile, new Declarations(), new Renderings());
+        return KernelMain.serve(connectionFile, new Declarations(), new Renderings(), Practice::startInBackground);
     }
 }

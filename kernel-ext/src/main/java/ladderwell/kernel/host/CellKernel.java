@@ -25,6 +25,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.concurrent.atomic.AtomicBoolean;
 import ladderwell.kernel.cell.CellEnd;
 import ladderwell.kernel.cell.Completeness;
 import ladderwell.kernel.cell.Completion;
@@ -36,6 +37,8 @@ import org.jspecify.annotations.Nullable;
 final class CellKernel extends BaseKernel {
     private final Workbench workbench;
     private final Runnable end;
+    private final Runnable onceKnown;
+    private final AtomicBoolean known = new AtomicBoolean();
     private final History history = new History();
     private @Nullable Publisher publisher;
     /** Requests written before this moment are not run: an earlier cell failed. */
@@ -46,10 +49,12 @@ final class CellKernel extends BaseKernel {
      *
      * @param workbench where cells are worked
      * @param end what ends the process, called when a client wants the kernel to shut down
+     * @param onceKnown called once, after the first reply to a client that asks what kernel this is
      */
-    CellKernel(Workbench workbench, Runnable end) {
+    CellKernel(Workbench workbench, Runnable end, Runnable onceKnown) {
         this.workbench = workbench;
         this.end = end;
+        this.onceKnown = onceKnown;
         setShouldReplaceStdStreams(false);
     }
 
@@ -73,7 +78,13 @@ final class CellKernel extends BaseKernel {
     public void becomeHandlerForConnection(JupyterConnection connection) {
         super.becomeHandlerForConnection(connection);
         publisher = new Publisher(connection.getIOPub());
-        answer(connection, MessageType.KERNEL_INFO_REQUEST, MessageType.KERNEL_INFO_REPLY, request -> kernelInfo());
+        connection.setHandler(
+                MessageType.KERNEL_INFO_REQUEST, guarded(MessageType.KERNEL_INFO_REPLY, (env, message) -> {
+                    env.reply(Messages.reply(MessageType.KERNEL_INFO_REPLY, message, kernelInfo()));
+                    if (known.compareAndSet(false, true)) {
+                        onceKnown.run();
+                    }
+                }));
         answer(connection, MessageType.COMPLETE_REQUEST, MessageType.COMPLETE_REPLY, this::complete);
         answer(connection, MessageType.INSPECT_REQUEST, MessageType.INSPECT_REPLY, this::inspect);
         answer(connection, MessageType.IS_COMPLETE_REQUEST, MessageType.IS_COMPLETE_REPLY, this::isComplete);

@@ -11,11 +11,15 @@ import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
 import java.security.GeneralSecurityException;
+import java.security.NoSuchAlgorithmException;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.CountDownLatch;
+import java.util.function.BooleanSupplier;
+import java.util.function.Consumer;
 import java.util.logging.Level;
 import java.util.logging.Logger;
+import javax.crypto.Mac;
 import ladderwell.kernel.cell.Renderer;
 import ladderwell.kernel.cell.Sentences;
 import ladderwell.kernel.cell.Workbench;
@@ -38,13 +42,17 @@ public final class KernelMain {
      * @param connectionFile the file that names ports and key, as a Jupyter client writes it
      * @param sentences the declarations language
      * @param renderer shows what cells return
+     * @param onceKnown called once, when a client has been told what kernel this is: then it usually takes a breath before
+     *     its first cell; it is given what tells whether nobody waits for anything
      * @return the exit code for the process; threads of cells may still be there, so exit with it
      */
-    public static int serve(Path connectionFile, Sentences sentences, Renderer renderer) {
+    public static int serve(
+            Path connectionFile, Sentences sentences, Renderer renderer, Consumer<BooleanSupplier> onceKnown) {
         Optional<String> unfit = unfitJava();
         if (unfit.isPresent()) {
             return refuse(unfit.get());
         }
+        prepareSignatures();
         // The base library logs every message; nothing of it may reach a cell's streams.
         Logger.getLogger("").setLevel(Level.OFF);
         JupyterConnection connection;
@@ -55,7 +63,7 @@ public final class KernelMain {
         }
         Workbench workbench = new Workbench(sentences, renderer);
         CountDownLatch ended = new CountDownLatch(1);
-        CellKernel kernel = new CellKernel(workbench, ended::countDown);
+        CellKernel kernel = new CellKernel(workbench, ended::countDown, () -> onceKnown.accept(workbench::isIdle));
         kernel.becomeHandlerForConnection(connection);
         try {
             pollFast(connection);
@@ -77,6 +85,21 @@ public final class KernelMain {
         // The sockets stay open: a cell that heeds no interrupt may still hold them, and the process ends anyway.
         kernel.drain();
         return 0;
+    }
+
+    /** Looking for what signs messages loads every provider of security there is; meanwhile the rest can start. */
+    private static void prepareSignatures() {
+        Thread thread = new Thread(
+                () -> {
+                    try {
+                        Mac unused = Mac.getInstance("HmacSHA256");
+                    } catch (NoSuchAlgorithmException e) {
+                        throw new IllegalStateException("every Java has HmacSHA256", e);
+                    }
+                },
+                "signatures");
+        thread.setDaemon(true);
+        thread.start();
     }
 
     private static int refuse(String why) {

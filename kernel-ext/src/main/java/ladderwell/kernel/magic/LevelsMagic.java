@@ -28,7 +28,7 @@ final class LevelsMagic implements Magic {
                     sentence.placeOf("count"));
         }
         long[] levels = LongStream.range(0, count).toArray();
-        LevelTable table = new LevelTable(sentence.name(), oscillator, LevelColumns.of(oscillator, levels), levels);
+        LevelTable table = new LevelTable(sentence.name(), oscillator, oscillator.levelTable(levels), levels);
         return new Outcome(table, table);
     }
 }

@@ -6,6 +6,8 @@ import ladderwell.Box;
 import ladderwell.FiniteWell;
 import ladderwell.Harmonic;
 import ladderwell.Oscillator;
+import ladderwell.PotentialWell;
+import ladderwell.kernel.sentence.MisreadSentence;
 import ladderwell.kernel.sentence.Sentence;
 import ladderwell.quantity.Quantity;
 
@@ -17,16 +19,16 @@ final class OscillatorMagic implements Magic {
     @Override
     public Optional<Promise> promise(Sentence sentence) {
         return Optional.of(new Promise(
-                sentence.name(), TYPES.getOrDefault(sentence.kind(), Oscillator.class), sentence.namePlace()));
+                sentence.name(), TYPES.getOrDefault(sentence.kind(), PotentialWell.class), sentence.namePlace()));
     }
 
     @Override
-    public Outcome carryOut(Sentence sentence, Things things) {
+    public Outcome carryOut(Sentence sentence, Things things) throws MisreadSentence {
         Oscillator oscillator = switch (sentence.kind()) {
             case "harmonic" -> harmonic(sentence);
             case "box" -> box(sentence);
             case "finite well" -> finiteWell(sentence);
-            default -> throw new IllegalStateException("no oscillator is made of kind " + sentence.kind());
+            default -> new Potentials(sentence).well();
         };
         // A mass and a length may be fine and their scale still outside the range of numbers: refused here, not later.
         oscillator.scale();

@@ -3,10 +3,9 @@ package ladderwell.kernel.magic;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import ladderwell.Box;
 import ladderwell.Coherent;
-import ladderwell.FiniteWell;
 import ladderwell.Harmonic;
+import ladderwell.LevelOf;
 import ladderwell.NumberState;
 import ladderwell.Oscillator;
 import ladderwell.Packet;
@@ -28,7 +27,9 @@ final class StateMagic implements Magic {
             "number", NumberState.class,
             "coherent", Coherent.class,
             "superposition", Superposition.class,
-            "gaussian", Packet.class);
+            "gaussian", Packet.class,
+            "ground", LevelOf.class,
+            "level", LevelOf.class);
 
     @Override
     public Optional<Promise> promise(Sentence sentence) {
@@ -44,6 +45,8 @@ final class StateMagic implements Magic {
             case "coherent" -> coherent(sentence, (Harmonic) oscillator);
             case "superposition" -> superposition(sentence, oscillator);
             case "gaussian" -> gaussian(sentence, oscillator);
+            case "ground" -> levelOf(sentence, things, oscillator, 0);
+            case "level" -> levelOf(sentence, things, oscillator, sentence.count("number"));
             default -> throw new IllegalStateException("no state is made of kind " + sentence.kind());
         };
         return new Outcome(new Declared(sentence.name(), "state", state), state);
@@ -91,14 +94,20 @@ final class StateMagic implements Magic {
     }
 
     private static Packet gaussian(Sentence sentence, Oscillator oscillator) {
-        Quantity position = orZero(sentence, "position", Units.METRE);
+        Quantity position =
+                orZero(sentence, "position", Units.si(oscillator.scale().position()));
         Quantity momentum = orZero(sentence, "momentum", Units.KILOGRAM_METRE_PER_SECOND);
         Quantity spread = sentence.quantity("spread");
-        Packet packet = oscillator instanceof Box box
-                ? box.gaussian(position, momentum, spread)
-                : ((FiniteWell) oscillator).gaussian(position, momentum, spread);
+        Packet packet = oscillator.gaussian(position, momentum, spread);
         // What the bound levels cannot carry even loosely is refused here; what they cannot carry closely, by the run.
         packet.amplitudes(LOOSEST_TOLERANCE);
         return packet;
+    }
+
+    private static LevelOf levelOf(Sentence sentence, Things things, Oscillator oscillator, long n) {
+        LevelOf state = oscillator.levelOf(things.oscillator(sentence.reference("of")), n);
+        LevelOf placed = sentence.has("shift") ? state.shifted(sentence.quantity("shift")) : state;
+        placed.amplitudes(LOOSEST_TOLERANCE);
+        return placed;
     }
 }

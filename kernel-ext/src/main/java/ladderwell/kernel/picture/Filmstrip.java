@@ -102,14 +102,14 @@ final class Filmstrip {
             }
             before = point;
         }
-        double reach = motion.reachAtMeanEnergy();
+        double[] span = motion.spanAtMeanEnergy();
         String height = tenth(up(motion, motion.meanEnergy()));
         return path.append("\"/><path class=\"dash\" d=\"M")
-                .append(tenth(across(motion, -reach)))
+                .append(tenth(across(motion, span[0])))
                 .append(' ')
                 .append(height)
                 .append("L")
-                .append(tenth(across(motion, reach)))
+                .append(tenth(across(motion, span[1])))
                 .append(' ')
                 .append(height)
                 .append("\"/>")
@@ -123,7 +123,7 @@ final class Filmstrip {
     }
 
     private static double up(Motion motion, double energy) {
-        return BOTTOM - (BOTTOM - TOP) * energy / motion.top();
+        return BOTTOM - (BOTTOM - TOP) * (energy - motion.floor()) / (motion.top() - motion.floor());
     }
 
     /** The density averaged over each pixel of a panel. */

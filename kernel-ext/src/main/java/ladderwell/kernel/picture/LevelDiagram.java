@@ -2,6 +2,7 @@ package ladderwell.kernel.picture;
 
 import java.util.Arrays;
 import ladderwell.Oscillator;
+import ladderwell.PotentialWell;
 import ladderwell.level.Levels;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Scale;
@@ -43,14 +44,18 @@ final class LevelDiagram {
         }
         Levels all = oscillator.levels();
         this.energies = Arrays.stream(levels).mapToDouble(all::energyHigh).toArray();
-        double half = half(oscillator, all, levels[levels.length - 1]);
+        double[] ends = ends(oscillator, all, levels[levels.length - 1]);
+        double middle = (ends[0] + ends[1]) / 2;
+        double half = (ends[1] - ends[0]) / 2;
         this.x = new double[POINTS];
+        double least = Double.POSITIVE_INFINITY;
         for (int i = 0; i < POINTS; i++) {
-            x[i] = half * (2 * i - (POINTS - 1)) / (POINTS - 1);
+            x[i] = middle + half * (2 * i - (POINTS - 1)) / (POINTS - 1);
+            least = Math.min(least, oscillator.potential(x[i]));
         }
-        this.waves = new double[levels.length][];
+        this.waves = new double[all.hasWaveFunctions() ? levels.length : 0][];
         double highest = 0;
-        for (int k = 0; k < levels.length; k++) {
+        for (int k = 0; k < waves.length; k++) {
             waves[k] = all.waveFunctions(levels[k], 1, x)[0];
             for (double value : waves[k]) {
                 highest = Math.max(highest, Math.abs(value));
@@ -58,22 +63,24 @@ final class LevelDiagram {
         }
         double last = energies[energies.length - 1];
         double first = energies[0];
-        double span = levels.length > 1 ? (last - first) / (levels.length - 1) : Math.max(last, 1e-300) / 2;
-        double least = span;
+        double span = levels.length > 1 ? (last - first) / (levels.length - 1) : Math.max(last - least, 1e-300) / 2;
+        double closest = span;
         for (int k = 1; k < levels.length; k++) {
-            least = Math.min(least, energies[k] - energies[k - 1]);
+            closest = Math.min(closest, energies[k] - energies[k - 1]);
         }
         // Curves of neighbours may touch but not cover each other, and stay large enough to be seen.
-        double amplitude = Math.max(0.62 * least, 0.34 * span);
+        double amplitude = Math.max(0.62 * closest, 0.34 * span);
         this.lift = highest > 0 ? amplitude / highest : 0;
         double rim = all.threshold();
         double above = last + 1.15 * amplitude;
-        this.top = rim < 1.6 * above ? Math.max(above, 1.04 * rim) : above;
+        boolean rimNear = rim - first < 1.6 * (above - first) + 0.6 * (first - least);
+        this.top = rimNear ? Math.max(above, rim + 0.04 * (rim - least)) : above;
         // From the bottom of the well where that leaves room for the curves; else from below the lowest one.
-        this.bottom = first < 4 * (top - first) ? Math.min(0, first - 1.1 * amplitude) : first - 1.6 * amplitude;
+        this.bottom =
+                first - least < 4 * (top - first) ? Math.min(least, first - 1.1 * amplitude) : first - 1.6 * amplitude;
         Scale scale = oscillator.scale();
-        this.length = scale.display(Kind.LENGTH, half * scale.length());
-        this.energy = scale.display(Kind.ENERGY, top * scale.energy());
+        this.length = scale.display(Kind.LENGTH, Math.max(Math.abs(ends[0]), Math.abs(ends[1])) * scale.length());
+        this.energy = scale.display(Kind.ENERGY, Math.max(Math.abs(bottom), Math.abs(top)) * scale.energy());
         this.lengthScale = length.fromSi(scale.length());
         this.energyScale = energy.fromSi(scale.energy());
     }
@@ -82,10 +89,43 @@ final class LevelDiagram {
         return new LevelDiagram(name, oscillator, levels);
     }
 
-    private static double half(Oscillator oscillator, Levels levels, long last) {
+    /** Where the picture begins and ends: a little outside the turning points of the topmost level. */
+    private static double[] ends(Oscillator oscillator, Levels levels, long last) {
+        if (oscillator instanceof PotentialWell well) {
+            return levels.hasWaveFunctions()
+                    ? ends(well, levels, last)
+                    : new double[] {oscillator.left(), oscillator.right()};
+        }
         double energy = levels.energyHigh(last);
         double turn = oscillator.orbit(0, Math.sqrt(2 * energy), energy).turningPoint();
-        return Math.max(1.12 * turn, Math.min(levels.reach(last, DROP), 2.2 * turn));
+        double half = Math.max(1.12 * turn, Math.min(levels.reach(last, DROP), 2.2 * turn));
+        return new double[] {-half, half};
+    }
+
+    /** Where the topmost wave function has fallen off; of a level just bound no more than shows the ones below it too. */
+    private static double[] ends(PotentialWell well, Levels levels, long last) {
+        double[] ends = levels.extent(last, DROP);
+        double[] top = allowed(well, ends, levels.energyHigh(last));
+        double[] middle = allowed(well, ends, levels.energyHigh(last / 2));
+        double margin = 0.6 * (top[1] - top[0]);
+        double most = 3 * (middle[1] - middle[0]);
+        return new double[] {
+            Math.max(ends[0], Math.max(top[0] - margin, middle[0] - most)),
+            Math.min(ends[1], Math.min(top[1] + margin, middle[1] + most))
+        };
+    }
+
+    /** The outermost places that a classical particle of that energy can be at. */
+    private static double[] allowed(PotentialWell well, double[] ends, double energy) {
+        double[] allowed = {Double.POSITIVE_INFINITY, Double.NEGATIVE_INFINITY};
+        for (int i = 0; i <= 4000; i++) {
+            double x = ends[0] + (ends[1] - ends[0]) * i / 4000;
+            if (well.potential(x) <= energy) {
+                allowed[0] = Math.min(allowed[0], x);
+                allowed[1] = Math.max(allowed[1], x);
+            }
+        }
+        return allowed[0] <= allowed[1] ? allowed : ends;
     }
 
     String name() {
@@ -133,7 +173,8 @@ final class LevelDiagram {
     double[] lifted(int k) {
         double[] out = new double[POINTS];
         for (int i = 0; i < POINTS; i++) {
-            out[i] = (energies[k] + lift * waves[k][i]) * energyScale;
+            double wave = waves.length == 0 ? 0 : waves[k][i];
+            out[i] = (energies[k] + lift * wave) * energyScale;
         }
         return out;
     }
@@ -175,9 +216,10 @@ final class LevelDiagram {
     String description() {
         String which = count() == 1 ? "Level " + levels[0] : "Levels " + levels[0] + " to " + levels[count() - 1];
         String part = asked > count() ? ", the lowest " + count() + " of " + asked + "," : "";
-        return which + " of " + name + " (" + oscillator.kind() + ")" + part + " with "
-                + (count() == 1 ? "its wave function" : "their wave functions")
-                + ", in the potential; energies from " + Written.number(energy(0), 4) + " to "
+        String curves =
+                waves.length == 0 ? "" : " with " + (count() == 1 ? "its wave function" : "their wave functions") + ",";
+        return which + " of " + name + " (" + oscillator.kind() + ")" + part + curves
+                + " in the potential; energies from " + Written.number(energy(0), 4) + " to "
                 + Written.number(energy(count() - 1), 4) + Written.behind(energyUnit()) + ".";
     }
 }

@@ -36,6 +36,7 @@ final class Motion {
     private final double energyScale;
     private final OptionalDouble period;
     private final double meanEnergy;
+    private final double floor;
     private final double top;
     private final ClassicalOrbit orbit;
 
@@ -48,10 +49,12 @@ final class Motion {
         Oscillator oscillator = run.state().oscillator();
         Scale scale = oscillator.scale();
         this.meanEnergy = run.state().meanEnergy();
-        this.top = top(oscillator, meanEnergy, density);
-        this.length = scale.display(Kind.LENGTH, Math.abs(density.position(0)) * scale.length());
+        this.floor = floor(oscillator, density);
+        this.top = floor + height(oscillator, meanEnergy - floor, density);
+        double last = Math.abs(density.position(density.points() - 1));
+        this.length = scale.display(Kind.LENGTH, Math.max(Math.abs(density.position(0)), last) * scale.length());
         this.time = scale.display(Kind.TIME, run.time(density.times() - 1) * scale.time());
-        this.energy = scale.display(Kind.ENERGY, top * scale.energy());
+        this.energy = scale.display(Kind.ENERGY, Math.max(Math.abs(top), Math.abs(floor)) * scale.energy());
         this.lengthScale = length.fromSi(scale.length());
         this.timeScale = time.fromSi(scale.time());
         this.energyScale = energy.fromSi(scale.energy());
@@ -72,15 +75,31 @@ final class Motion {
         }
     }
 
-    /** Top of the energy scale: about twice the mean energy; the rim of a well where that is near. */
-    private static double top(Oscillator oscillator, double meanEnergy, Density density) {
-        double rim = oscillator.levels().threshold();
-        if (rim < 5 * meanEnergy) {
+    /** The least of the potential in the picture: the energy scale begins there. */
+    private static double floor(Oscillator oscillator, Density density) {
+        double least = Double.POSITIVE_INFINITY;
+        for (int i = 0; i < density.points(); i++) {
+            least = Math.min(least, oscillator.potential(density.position(i)));
+        }
+        // The grid may miss the very bottom of a well that begins at 0.
+        double edge = Math.min(
+                oscillator.potential(density.position(0)),
+                oscillator.potential(density.position(density.points() - 1)));
+        return Math.abs(least) < 0.01 * Math.min(edge - least, 1) ? 0 : least;
+    }
+
+    /** Height of the energy scale: about twice the mean energy above the bottom; the rim of a well where that is near. */
+    private double height(Oscillator oscillator, double mean, Density density) {
+        double rim = oscillator.levels().threshold() - floor;
+        if (rim < 5 * mean) {
             return 1.12 * rim;
         }
-        double edge = oscillator.potential(density.position(density.points() - 1));
-        double twice = 2.1 * Math.max(meanEnergy, 1e-300);
-        return Double.isInfinite(edge) || edge <= 0 ? twice : Math.min(twice, Math.max(1.02 * edge, 1.2 * meanEnergy));
+        double edge = Math.min(
+                        oscillator.potential(density.position(0)),
+                        oscillator.potential(density.position(density.points() - 1)))
+                - floor;
+        double twice = 2.1 * Math.max(mean, 1e-300);
+        return Double.isInfinite(edge) || edge <= 0 ? twice : Math.min(twice, Math.max(1.02 * edge, 1.2 * mean));
     }
 
     String name() {
@@ -197,9 +216,12 @@ final class Motion {
         return line;
     }
 
-    /** The outermost classical position; the other one is its mirror image. */
-    double turningPoint() {
-        return orbit.turningPoint() * lengthScale;
+    /** Where the classical particle turns back, on the left and on the right; the edge of the picture where it does not. */
+    double[] turningPoints() {
+        return new double[] {
+            Math.max(orbit.leftTurningPoint(), density.position(0)) * lengthScale,
+            Math.min(orbit.turningPoint(), density.position(density.points() - 1)) * lengthScale
+        };
     }
 
     double meanEnergy() {
@@ -210,14 +232,33 @@ final class Motion {
         return top * energyScale;
     }
 
-    /** Half the length of the line at the mean energy: where the potential reaches it, or the edge of the picture. */
-    double reachAtMeanEnergy() {
-        double inside = 0;
-        double outside = density.position(density.points() - 1);
+    /** The lower end of the energy scale, the least of the potential. */
+    double floor() {
+        return floor * energyScale;
+    }
+
+    /** The ends of the line at the mean energy: where the potential reaches it, or the edges of the picture. */
+    double[] spanAtMeanEnergy() {
         Oscillator oscillator = run.state().oscillator();
-        if (oscillator.potential(outside) <= meanEnergy) {
-            return outside * lengthScale;
+        int lowest = 0;
+        for (int i = 1; i < density.points(); i++) {
+            if (oscillator.potential(density.position(i)) < oscillator.potential(density.position(lowest))) {
+                lowest = i;
+            }
         }
+        return new double[] {end(oscillator, lowest, -1) * lengthScale, end(oscillator, lowest, 1) * lengthScale};
+    }
+
+    private double end(Oscillator oscillator, int from, int step) {
+        int at = from;
+        while (at >= 0 && at < density.points() && oscillator.potential(density.position(at)) <= meanEnergy) {
+            at += step;
+        }
+        if (at < 0 || at >= density.points() || at == from) {
+            return density.position(Math.max(0, Math.min(density.points() - 1, at)));
+        }
+        double inside = density.position(at - step);
+        double outside = density.position(at);
         for (int i = 0; i < 60; i++) {
             double middle = (inside + outside) / 2;
             if (oscillator.potential(middle) > meanEnergy) {
@@ -226,12 +267,15 @@ final class Motion {
                 inside = middle;
             }
         }
-        return inside * lengthScale;
+        return inside;
     }
 
     Potential potential() {
         return Potential.of(
-                run.state().oscillator(), density.position(0), density.position(density.points() - 1), 1.1 * top);
+                run.state().oscillator(),
+                density.position(0),
+                density.position(density.points() - 1),
+                top + 0.1 * (top - floor));
     }
 
     double lengthScale() {

@@ -164,22 +164,24 @@ public final class MotionPicture {
                                 highest,
                                 4)
                         .build())
-                .yAxis2(Drawing.right(-RAIL * motion.top(), motion.top(), new double[] {0})
+                .yAxis2(Drawing.right(
+                                motion.floor() - RAIL * (motion.top() - motion.floor()),
+                                motion.top(),
+                                new double[] {motion.floor()})
                         .build())
                 .build();
-        double turn = motion.turningPoint();
-        double reach = motion.reachAtMeanEnergy();
+        double[] turn = motion.turningPoints();
         double rail = RAIL * highest;
         JsonArray traces = new JsonArray();
         traces.add(Drawing.trace(Drawing.line("density", 2).fill(ScatterTrace.Fill.TO_ZERO_Y)));
         traces.add(Drawing.trace(Drawing.right(Drawing.line("potential", 1))));
         traces.add(Drawing.with(
                 Drawing.trace(Drawing.right(Drawing.dashes("energy", 1.2))),
-                new double[] {-reach, reach},
+                motion.spanAtMeanEnergy(),
                 new double[] {motion.meanEnergy(), motion.meanEnergy()}));
         JsonObject turning = Drawing.with(
                 Drawing.trace(Drawing.line("turning", 1.3)),
-                new double[] {-turn, -turn, Double.NaN, turn, turn},
+                new double[] {turn[0], turn[0], Double.NaN, turn[1], turn[1]},
                 new double[] {-rail, 0, Double.NaN, -rail, 0});
         traces.add(turning);
         traces.add(Drawing.with(

@@ -16,11 +16,17 @@ record Potential(double[] x, double[] height) {
 
     static Potential of(Oscillator oscillator, double from, double to, double top) {
         List<double[]> line = new ArrayList<>();
+        double[] heights = new double[POINTS];
+        double least = top;
+        for (int i = 0; i < POINTS; i++) {
+            heights[i] = Math.min(oscillator.potential(from + (to - from) * i / (POINTS - 1)), top);
+            least = Math.min(least, heights[i]);
+        }
         double before = 0;
         for (int i = 0; i < POINTS; i++) {
             double x = from + (to - from) * i / (POINTS - 1);
-            double height = Math.min(oscillator.potential(x), top);
-            if (i > 0 && Math.abs(height - before) > top / 8) {
+            double height = heights[i];
+            if (i > 0 && Math.abs(height - before) > (top - least) / 8) {
                 jump(oscillator, from + (to - from) * (i - 1) / (POINTS - 1), x, top, line);
             }
             line.add(new double[] {x, height});

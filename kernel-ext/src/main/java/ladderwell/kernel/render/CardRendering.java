@@ -37,11 +37,11 @@ final class CardRendering {
     }
 
     static MimeBundle oscillator(String head, Oscillator oscillator) {
-        return card(head + ": " + oscillator.kind(), "", facts(oscillator.facts()), "");
+        return card(head + ": " + oscillator.kind(), oscillator.formula(), facts(oscillator.facts()), "");
     }
 
     static MimeBundle state(String head, State state) {
-        return card(head + ": " + state.kind(), "", facts(state.facts()), "");
+        return card(head + ": " + state.kind(), state.origin(), facts(state.facts()), "");
     }
 
     static MimeBundle run(String head, Run run) {

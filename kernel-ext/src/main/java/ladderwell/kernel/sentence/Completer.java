@@ -131,14 +131,38 @@ final class Completer {
                 }
                 case NONE -> {}
             }
-            if (noun.lead().isEmpty()) {
+            List<Key> leads = noun.leads(before.kind());
+            List<Clause> done = before.clauses();
+            boolean argumentDone = done.size() == 1
+                    && done.get(0).key().isPresent()
+                    && before.kind()
+                            .flatMap(NounKind::argument)
+                            .equals(done.get(0).key())
+                    && !done.get(0).value().isEmpty()
+                    && !touched(done.get(0).value().get(0));
+            boolean linkDone = !done.isEmpty()
+                    && done.get(done.size() - 1).key().map(Key::form).equals(Optional.of(Form.REFERENCE))
+                    && done.get(done.size() - 1).value().size() == 1
+                    && !touched(done.get(done.size() - 1).value().get(0));
+            if (leads.isEmpty()) {
                 return Offers.none(cursor);
             }
-            Key lead = noun.lead().get();
-            if (before.clauses().isEmpty()) {
-                return fitting(text, cursor, cursor, List.of(new Offer(lead.word(), "key")));
+            if (done.isEmpty() || argumentDone || linkDone) {
+                List<String> used = done.stream()
+                        .flatMap(clause -> clause.key().stream())
+                        .map(Key::word)
+                        .toList();
+                return fitting(
+                        text,
+                        cursor,
+                        cursor,
+                        leads.stream()
+                                .filter(lead -> !used.contains(lead.word()))
+                                .limit(1)
+                                .map(lead -> new Offer(lead.word(), "key"))
+                                .toList());
             }
-            return inClause(noun, before.clauses().get(before.clauses().size() - 1));
+            return inClause(noun, done.get(done.size() - 1));
         }
 
         private Offers inClause(Noun noun, Clause clause) {
@@ -170,7 +194,8 @@ final class Completer {
             }
             Optional<NounKind> kind = whole.kind().isPresent() ? whole.kind() : before.kind();
             if (at.joined()) {
-                return noun.lead().filter(lead -> !used.contains(lead.word())).stream()
+                return noun.leads(kind).stream()
+                        .filter(lead -> !used.contains(lead.word()))
                         .toList();
             }
             return noun.keys(kind).stream()

@@ -6,6 +6,10 @@ public enum Form {
     FLAG,
     /** A number with a unit; a plain number in natural units. */
     QUANTITY,
+    /** A number with a unit of any make, such as 2 eV/angstrom^4; a plain number in natural units. */
+    AMOUNT,
+    /** A text in quotes. */
+    TEXT,
     /** A real number without a unit. */
     NUMBER,
     /** A whole number. */

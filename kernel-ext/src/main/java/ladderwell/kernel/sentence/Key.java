@@ -54,6 +54,11 @@ public record Key(
         return new Key(word, Form.REFERENCE, List.of(), noun, 0, 0, example, meaning, "", "", word);
     }
 
+    /** The key of a parameter that a formula names. */
+    static Key parameter(String name) {
+        return of(name, Form.AMOUNT, "2 eV/angstrom^2", "a parameter of the formula");
+    }
+
     Key formula(String text) {
         return new Key(word, form, kinds, noun, least, most, example, meaning, text, standard, called);
     }
@@ -79,6 +84,8 @@ public record Key(
                 kinds.stream()
                         .map(kind -> kind.word() + " such as " + kind.example())
                         .collect(Collectors.joining(" or "));
+            case AMOUNT -> "a number with its unit such as " + example;
+            case TEXT -> "a text in quotes such as " + example;
             case NUMBER -> "a plain number such as " + example;
             case COUNT -> "a whole number such as " + example;
             case COMPLEX -> "a complex number such as " + example;

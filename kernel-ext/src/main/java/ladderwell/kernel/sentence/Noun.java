@@ -94,10 +94,20 @@ public record Noun(
                 .findFirst();
     }
 
-    /** Every key that a sentence of this noun and kind takes: the lead first, those of the kind, those of the noun. */
-    public List<Key> keys(Optional<NounKind> kind) {
+    /** The keys that follow the head without a comma, in their order: those of the kind, then the noun's. */
+    public List<Key> leads(Optional<NounKind> kind) {
         List<Key> all = new ArrayList<>();
+        kind.ifPresent(k -> all.addAll(k.links()));
         lead.ifPresent(all::add);
+        return all;
+    }
+
+    /**
+     * Every key that a sentence of this noun and kind takes: those that follow the head first, those of the kind, those of the
+     * noun.
+     */
+    public List<Key> keys(Optional<NounKind> kind) {
+        List<Key> all = new ArrayList<>(leads(kind));
         kind.ifPresent(k -> all.addAll(k.keys()));
         all.addAll(keys);
         return all;

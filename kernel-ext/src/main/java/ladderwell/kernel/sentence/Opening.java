@@ -126,7 +126,8 @@ record Opening(Grammar grammar, Place place, List<Piece> pieces, Outline outline
         Optional<String> near = nearTwo.or(() -> Words.nearest(head.get(0).text(), kinds));
         List<Piece> wrong = nearTwo.isPresent() ? two : head.subList(0, 1);
         throw new MisreadSentence(
-                Words.quoted(Outline.text(wrong)) + " is no kind of " + noun.word() + expected + Words.didYouMean(near),
+                Words.quoted(Outline.text(wrong)) + " is no kind of " + noun.word()
+                        + (near.isPresent() ? Words.didYouMean(near) : expected),
                 Outline.placeOf(wrong).orElse(behindColon));
     }
 }

@@ -38,6 +38,7 @@ record Outline(
      * @param value the pieces after the key; all of them where there is no key
      */
     record Clause(boolean joined, Optional<Piece> comma, Optional<Key> key, List<Piece> keyPieces, List<Piece> value) {
+        /** The key's pieces, or of a kind's own argument the kind's, and the value's. */
         List<Piece> pieces() {
             List<Piece> all = new ArrayList<>(keyPieces);
             all.addAll(value);
@@ -128,13 +129,32 @@ record Outline(
             List<Key> keys = noun.map(n -> n.keys(found)).orElse(List.of());
             List<Clause> clauses = new ArrayList<>();
             List<Piece> joined = opening.subList(head.size(), opening.size());
-            if (!joined.isEmpty() || (afterColon && form == Head.ITEMS)) {
-                clauses.add(clause(keys, form != Head.ITEMS, Optional.empty(), joined));
+            Optional<Key> argument = kind.flatMap(NounKind::argument);
+            List<String> leads = noun.map(n -> n.leads(found)).orElse(List.of()).stream()
+                    .map(Key::word)
+                    .toList();
+            if (argument.isPresent()) {
+                boolean missing = joined.isEmpty() || isLead(leads, joined.get(0));
+                List<Piece> value = joined.subList(0, missing ? 0 : 1);
+                clauses.add(new Clause(true, Optional.empty(), argument, head, value));
+                joined = joined.subList(value.size(), joined.size());
+            }
+            for (int from = 0; from < joined.size(); ) {
+                int to = from + 1;
+                while (to < joined.size() && !isLead(leads, joined.get(to))) {
+                    to++;
+                }
+                clauses.add(clause(keys, form != Head.ITEMS, Optional.empty(), joined.subList(from, to)));
+                from = to;
+            }
+            if (joined.isEmpty() && afterColon && form == Head.ITEMS) {
+                clauses.add(clause(keys, false, Optional.empty(), joined));
             }
             for (int at = first; at < pieces.size(); ) {
                 List<Piece> after = pieces.subList(at + 1, pieces.size());
                 int next = index(after, Sort.COMMA);
-                clauses.add(clause(keys, false, Optional.of(pieces.get(at)), after.subList(0, next)));
+                Clause clause = clause(keys, false, Optional.of(pieces.get(at)), after.subList(0, next));
+                clauses.add(kind.filter(NounKind::parameters).isPresent() ? named(clause) : clause);
                 at += 1 + next;
             }
             return new Outline(Optional.of(nounPiece), noun, subject, colon, head, kind, clauses);
@@ -161,6 +181,27 @@ record Outline(
                 }
             }
             return opening.size();
+        }
+
+        private static boolean isLead(List<String> leads, Piece piece) {
+            return leads.stream().anyMatch(piece::isWord);
+        }
+
+        /** A name with a value behind it, where any name may stand, is a parameter. */
+        private static Clause named(Clause clause) {
+            List<Piece> pieces = clause.value();
+            if (clause.key().isPresent()
+                    || pieces.size() < 2
+                    || !pieces.get(0).is(Sort.WORD)
+                    || !Character.isLetter(pieces.get(0).text().codePointAt(0))) {
+                return clause;
+            }
+            return new Clause(
+                    false,
+                    clause.comma(),
+                    Optional.of(Key.parameter(pieces.get(0).text())),
+                    pieces.subList(0, 1),
+                    pieces.subList(1, pieces.size()));
         }
 
         private static Clause clause(List<Key> keys, boolean joined, Optional<Piece> comma, List<Piece> pieces) {

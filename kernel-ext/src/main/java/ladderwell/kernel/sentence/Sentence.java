@@ -5,6 +5,8 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Collectors;
+import ladderwell.formula.Amount;
 import ladderwell.quantity.Quantity;
 
 /**
@@ -24,7 +26,7 @@ public final class Sentence {
     /**
      * The value of a key.
      *
-     * @param object a Quantity, Double, Long, Complex, String, a list of Long or Complex, or TRUE for a flag
+     * @param object a Quantity, Amount, Double, Long, Complex, String, a list of Long or Complex, or TRUE for a flag
      * @param places where its parts stand
      */
     record Value(Object object, List<Term> terms, Place place) {}
@@ -68,6 +70,11 @@ public final class Sentence {
         return kind.map(NounKind::word).orElse("");
     }
 
+    /** The formula of the kind; empty where there is none. */
+    public String kindFormula() {
+        return kind.map(NounKind::formula).orElse("");
+    }
+
     /** Whether it speaks of something in natural units. */
     public boolean natural() {
         return natural;
@@ -91,6 +98,33 @@ public final class Sentence {
     /** The quantity given for a key. */
     public Quantity quantity(String key) {
         return value(key, Quantity.class);
+    }
+
+    /** The number with its unit given for a key that takes any unit, or for a parameter of a formula. */
+    public Amount amount(String key) {
+        return value(key, Amount.class);
+    }
+
+    /** The text given for a key. */
+    public String text(String key) {
+        return value(key, String.class);
+    }
+
+    /** The value of a key as it was typed. */
+    public String typed(String key) {
+        Value value = values.get(key);
+        return value == null ? "" : value.terms().stream().map(Term::text).collect(Collectors.joining(" "));
+    }
+
+    /** The names that were given a value for a formula to use, in the order given. */
+    public List<String> parameters() {
+        List<String> known = noun.keys(kind).stream().map(Key::word).toList();
+        List<String> argument =
+                kind.flatMap(NounKind::argument).map(Key::word).stream().toList();
+        return values.keySet().stream()
+                .filter(key -> !known.contains(key) && !argument.contains(key))
+                .filter(key -> kind.map(NounKind::parameters).orElse(false))
+                .toList();
     }
 
     /** The number given for a key. */

@@ -71,7 +71,7 @@ final class SentenceReader {
         for (Clause clause : outline.clauses()) {
             if (clause.key().isPresent()) {
                 Key key = clause.key().get();
-                if (clause.joined() && !noun.lead().equals(Optional.of(key))) {
+                if (clause.joined() && !mayJoin(noun, key)) {
                     throw commaMissing(clause.keyPieces().get(0));
                 }
                 if (seen.put(key.word(), clause) != null) {
@@ -84,6 +84,11 @@ final class SentenceReader {
             }
             before = Optional.of(clause);
         }
+    }
+
+    private boolean mayJoin(Noun noun, Key key) {
+        return noun.leads(outline.kind()).contains(key)
+                || outline.kind().flatMap(NounKind::argument).equals(Optional.of(key));
     }
 
     private MisreadSentence noKey(Noun noun, Clause clause, Optional<Clause> before) {
@@ -103,7 +108,12 @@ final class SentenceReader {
         }
         Piece first = clause.value().get(0);
         if (clause.joined()) {
-            String lead = noun.lead().map(key -> " or '" + key.typed() + "'").orElse("");
+            String lead = noun.leads(outline.kind()).stream()
+                    .filter(key -> outline.clauses().stream()
+                            .noneMatch(other -> other.key().equals(Optional.of(key))))
+                    .findFirst()
+                    .map(key -> " or '" + key.typed() + "'")
+                    .orElse("");
             return new MisreadSentence(
                     Words.quoted(first.typed()) + " is too much here; expected a comma" + lead
                             + Words.didYouMean(Words.nearest(first.text(), keys)),
@@ -215,6 +225,9 @@ final class SentenceReader {
             Opening.checkIdentifier(name);
             return new Value(name.text(), List.of(), name.place());
         }
+        if (key.form() == Form.TEXT) {
+            return text(key, clause);
+        }
         List<Term> terms = terms(key, clause);
         Values reading = new Values(key, terms, new Values.Beyond() {
             @Override
@@ -229,6 +242,7 @@ final class SentenceReader {
         });
         Object object = switch (key.form()) {
             case QUANTITY -> reading.quantity(natural);
+            case AMOUNT -> reading.amount();
             case NUMBER -> reading.number();
             case COUNT -> reading.count();
             case COMPLEX -> reading.complex();
@@ -239,10 +253,37 @@ final class SentenceReader {
         return new Value(object, terms, Outline.placeOf(clause.value()).orElse(keyPlace));
     }
 
+    /** A text in quotes, or an expression that gives one. */
+    private Value text(Key key, Clause clause) throws MisreadSentence {
+        refuseNoValue(key, clause);
+        Piece piece = clause.value().get(0);
+        Term term = Term.word(piece);
+        if (clause.value().size() > 1) {
+            throw after(Term.word(clause.value().get(1)), piece.typed());
+        }
+        if (piece.is(Sort.JAVA)) {
+            Object given = expressions.value(piece.text().strip(), piece.place());
+            if (given == Values.UNKNOWN) {
+                return new Value("", List.of(term), piece.place());
+            }
+            if (given instanceof CharSequence typed) {
+                return new Value(typed.toString(), List.of(term), piece.place());
+            }
+        }
+        if (!piece.is(Sort.QUOTED)) {
+            throw new MisreadSentence(
+                    key.word() + " takes " + key.expected() + ", not " + Words.quoted(piece.typed()), piece.place());
+        }
+        return new Value(piece.text(), List.of(term), piece.place());
+    }
+
     private void refuseNoValue(Key key, Clause clause) throws MisreadSentence {
         if (clause.value().isEmpty()) {
+            String word = outline.kind().flatMap(NounKind::argument).equals(Optional.of(key))
+                    ? outline.kind().orElseThrow().word()
+                    : key.word();
             throw new MisreadSentence(
-                    "a value is missing after '" + key.word() + "'; expected " + key.expected(),
+                    "a value is missing after '" + word + "'; expected " + key.expected(),
                     Outline.placeOf(clause.keyPieces()).orElse(place).behind());
         }
     }
@@ -292,14 +333,14 @@ final class SentenceReader {
 
     private void refuseMissing(Noun noun, List<String> items) throws MisreadSentence {
         Place end = Outline.placeOf(pieces).orElse(place).behind();
-        if (noun.lead().isPresent()) {
-            Key lead = noun.lead().get();
+        for (Key lead : noun.leads(outline.kind())) {
             if (!values.containsKey(lead.word()) && lead.standard().isEmpty()) {
                 Place afterHead = Outline.placeOf(outline.head())
                         .orElseGet(() -> outline.subject().get(0).place());
                 throw new MisreadSentence(
                         "'" + lead.word() + "' is missing after " + Words.quoted(Outline.text(outline.head()))
-                                + ", as in '" + noun.example() + "'",
+                                + ", as in '"
+                                + (noun.lead().equals(Optional.of(lead)) ? noun.example() : lead.typed()) + "'",
                         afterHead.behind());
             }
         }

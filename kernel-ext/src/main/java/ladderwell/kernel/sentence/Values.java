@@ -4,6 +4,9 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import ladderwell.formula.Amount;
+import ladderwell.formula.FormulaException;
+import ladderwell.quantity.Digits;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Unit;
@@ -67,7 +70,7 @@ final class Values {
 
     private Quantity withoutUnit(double number, Term term, Optional<String> natural) throws MisreadSentence {
         if (natural.isPresent()) {
-            return made(number, key.kinds().contains(Kind.ANGLE) ? Units.RADIAN : Units.ONE, term.place());
+            return made(number, key.kinds().get(0) == Kind.ANGLE ? Units.RADIAN : Units.ONE, term.place());
         }
         throw new MisreadSentence(
                 "the unit is missing after " + Words.quoted(term.text()) + "; " + key.word() + " takes "
@@ -142,6 +145,38 @@ final class Values {
                 .or(() -> usual.filter(symbols::contains))
                 .or(() -> Words.nearest(typed, symbols))
                 .or(() -> usual);
+    }
+
+    /** A number with a unit of any make: "2 eV/angstrom^4", or an expression that gives a number or a quantity. */
+    Amount amount() throws MisreadSentence {
+        if (terms.stream().anyMatch(Term::isUnknown)) {
+            return Amount.number(1);
+        }
+        StringBuilder text = new StringBuilder();
+        for (Term term : terms) {
+            if (term.result().isPresent() && term.result().get() instanceof Quantity quantity) {
+                refuseMore(terms, 1);
+                return Amount.of(quantity);
+            }
+            if (term.result().isPresent()) {
+                text.append(Digits.shortest(resulting(term, term.result().get())));
+            } else if (term.word()) {
+                text.append(term.text());
+            } else {
+                throw notExpected(term);
+            }
+            text.append(' ');
+        }
+        Place place = terms.get(0).place().to(terms.get(terms.size() - 1).place());
+        try {
+            return Amount.read(text.toString().strip());
+        } catch (FormulaException e) {
+            throw new MisreadSentence(
+                    key.word() + " takes " + key.expected() + ", not "
+                            + Words.quoted(text.toString().strip()) + ": " + e.reason(),
+                    place,
+                    e);
+        }
     }
 
     /** A real number without a unit. */

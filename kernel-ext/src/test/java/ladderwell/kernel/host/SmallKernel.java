@@ -10,6 +10,6 @@ public final class SmallKernel {
 
     /** Serves the connection file named by the only argument. */
     public static void main(String[] arguments) {
-        System.exit(KernelMain.serve(Path.of(arguments[0]), new SmallSentences(), new SmallRenderer()));
+        System.exit(KernelMain.serve(Path.of(arguments[0]), new SmallSentences(), new SmallRenderer(), idle -> {}));
     }
 }

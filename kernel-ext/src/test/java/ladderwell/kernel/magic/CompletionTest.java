@@ -58,8 +58,24 @@ class CompletionTest {
 
     @Test
     void kindsFollowTheColon() {
-        assertEquals(List.of("harmonic", "box", "finite well"), offered("%oscillator x: |"));
-        assertEquals(List.of("harmonic", "box", "finite well"), offered("%oscillator x:|"));
+        List<String> kinds = List.of(
+                "harmonic",
+                "box",
+                "finite well",
+                "potential",
+                "quartic",
+                "sextic",
+                "double well",
+                "morse",
+                "poschl-teller",
+                "pendulum",
+                "lattice",
+                "junction",
+                "linear with wall",
+                "lennard-jones",
+                "tabulated");
+        assertEquals(kinds, offered("%oscillator x: |"));
+        assertEquals(kinds, offered("%oscillator x:|"));
         assertEquals("%oscillator x: finite well", completed("%oscillator x: finite w|"));
         assertEquals("%oscillator x: finite well", completed("%oscillator x: finite |"));
         assertEquals(List.of("kind"), kinds("%oscillator x: |"));

@@ -49,10 +49,10 @@ class MistakesTest {
                 "%oscillator trap «harmonic», natural | a colon is missing after 'trap'; the form is 'oscillator NAME: KIND, KEY VALUE UNIT, …'",
                 "%oscillator x«»| a colon is missing after 'x'; the form is 'oscillator NAME: KIND, KEY VALUE UNIT, …'",
                 // kinds
-                "%oscillator x:«»| a kind is missing after the colon; kinds of oscillator are harmonic, box and finite well",
-                "%oscillator x: «harmonik», mass 1 u | 'harmonik' is no kind of oscillator; kinds of oscillator are harmonic, box and finite well; did you mean 'harmonic'?",
-                "%oscillator x: «finit well», mass 1 u | 'finit well' is no kind of oscillator; kinds of oscillator are harmonic, box and finite well; did you mean 'finite well'?",
-                "%oscillator x: «quartic», mass 1 u | 'quartic' is no kind of oscillator; kinds of oscillator are harmonic, box and finite well",
+                "%oscillator x:«»| a kind is missing after the colon; kinds of oscillator are harmonic, box, finite well, potential, quartic, sextic, double well, morse, poschl-teller, pendulum, lattice, junction, linear with wall, lennard-jones and tabulated",
+                "%oscillator x: «harmonik», mass 1 u | 'harmonik' is no kind of oscillator; did you mean 'harmonic'?",
+                "%oscillator x: «finit well», mass 1 u | 'finit well' is no kind of oscillator; did you mean 'finite well'?",
+                "%oscillator x: «icosagon», mass 1 u | 'icosagon' is no kind of oscillator; kinds of oscillator are harmonic, box, finite well, potential, quartic, sextic, double well, morse, poschl-teller, pendulum, lattice, junction, linear with wall, lennard-jones and tabulated",
                 // keys
                 "%oscillator x: harmonic, «maas» 40 u, frequency 1 MHz | 'maas' is no key of a harmonic oscillator; expected mass, frequency, wavenumber, spacing or natural; did you mean 'mass'?",
                 "%oscillator x: harmonic, mass 40 u, «width» 3 nm | 'width' is no key of a harmonic oscillator; expected mass, frequency, wavenumber, spacing or natural",
@@ -101,7 +101,7 @@ class MistakesTest {
                 "%state x: coherent in «nowhere», mean 2 | there is no oscillator 'nowhere'",
                 "%state x: coherent in «psi», mean 2 | 'psi' is a state; 'in' takes an oscillator, such as unit",
                 "%state x: coherent in «well», mean 2 | a coherent state lives in a harmonic oscillator; 'well' is a finite well",
-                "%state x: gaussian in «trap», spread 2 nm | a Gaussian packet lives in a box or a finite well; 'trap' is a harmonic oscillator",
+                "%state x: level 2 of «trp» in trap | there is no oscillator 'trp'; did you mean 'trap'?",
                 "%state x: coherent«», mean 2 | 'in' is missing after 'coherent', as in 'state psi: coherent in trap, mean 9.5, phase 30 deg'",
                 "%state x: coherent in«», mean 2 | a value is missing after 'in'; expected the name of an oscillator",
                 "%state x: coherent in «{trap}», mean 2 | in takes the name of an oscillator, not '{trap}'",

@@ -57,10 +57,11 @@ class GrammarTest {
             for (NounKind kind : noun.kinds()) {
                 assertEquals(Optional.of(kind), noun.kind(kind.word().toUpperCase(Locale.ROOT)));
                 String home = kind.homes().contains("box") ? "hard" : "trap";
-                String head = noun.word() + " x: " + kind.word()
-                        + noun.lead()
-                                .map(lead -> " " + lead.word() + " " + home)
-                                .orElse("");
+                StringBuilder head = new StringBuilder(noun.word() + " x: " + kind.word());
+                kind.argument().ifPresent(key -> head.append(' ').append(key.example()));
+                for (Key lead : noun.leads(Optional.of(kind))) {
+                    head.append(' ').append(lead.word()).append(' ').append(home);
+                }
                 for (Way way : kind.ways()) {
                     // In natural units the depth is a plain number, and its example has a unit.
                     boolean natural = way.required().contains("natural");

@@ -1,0 +1,235 @@
+package ladderwell.state;
+
+import java.util.ArrayDeque;
+import java.util.ArrayList;
+import java.util.Deque;
+import java.util.List;
+import ladderwell.evidence.Certainty;
+import ladderwell.evidence.PhysicsException;
+import ladderwell.level.Levels;
+import ladderwell.numeric.Interruption;
+
+/**
+ * Expands any {@link Shape} in any levels: overlaps by Gauss–Legendre panels, block by block away from the mean energy until what falls
+ * off at both ends is too little to matter. The error is estimated: from the fall of the last blocks, a second quadrature, the errors of
+ * the wave functions, and what Σ|c|² leaves of 1.
+ */
+final class ShapeState {
+    private static final int NODES = 24;
+    private static final int BLOCK = 16;
+
+    /** The transition elements of as many levels still fit and are quick. */
+    private static final int MOST = 2000;
+
+    private static final double RADIANS = 6;
+
+    /** Σ|c|² misses 1 by as much through rounding alone. */
+    private static final double NOISE = 2e-14;
+
+    private final Levels levels;
+    private final Shape shape;
+    private final double tolerance;
+    private final long count;
+    private final Deque<Block> blocks = new ArrayDeque<>();
+    private final double allowed;
+    private double difference;
+
+    /** Overlaps with consecutive levels. */
+    private record Block(long first, double[] re, double[] im) {
+        double weight() {
+            double sum = 0;
+            for (int i = 0; i < re.length; i++) {
+                sum += re[i] * re[i] + im[i] * im[i];
+            }
+            return sum;
+        }
+
+        long end() {
+            return first + re.length;
+        }
+    }
+
+    ShapeState(Levels levels, Shape shape, double tolerance) {
+        this.levels = levels;
+        this.shape = shape;
+        this.tolerance = tolerance;
+        count = levels.count();
+        allowed = tolerance * tolerance / 64;
+    }
+
+    Amplitudes expand() {
+        long centre = Math.min(count, levels.countBelow(Math.min(shape.energy(), levels.threshold())));
+        long start = Math.max(0, Math.min(centre - BLOCK / 2, count - BLOCK));
+        blocks.add(block(start, (int) Math.min(BLOCK, count - start)));
+        double low = tail(true);
+        double high = tail(false);
+        while (low > allowed || high > allowed) {
+            boolean down = low > high;
+            if (down) {
+                int size = (int) Math.min(BLOCK, blocks.getFirst().first);
+                blocks.addFirst(block(blocks.getFirst().first - size, size));
+                low = tail(true);
+            } else {
+                long first = blocks.getLast().end();
+                blocks.addLast(block(first, (int) Math.min(BLOCK, count - first)));
+                high = tail(false);
+            }
+            if (kept() > MOST) {
+                throw new PhysicsException.TooLarge(
+                        "a state on more than " + MOST + " levels",
+                        4.0 * Double.BYTES * 4 * MOST * MOST,
+                        4.0 * Double.BYTES * MOST * MOST,
+                        "make it smoother or of less energy, or loosen the tolerance");
+            }
+        }
+        return amplitudes(low, high);
+    }
+
+    private long kept() {
+        return blocks.getLast().end() - blocks.getFirst().first;
+    }
+
+    /**
+     * Weight expected beyond the blocks on one side: 0 where no level is left, else what a geometric series with the ratio of the last two
+     * blocks would still bring, times four.
+     */
+    private double tail(boolean below) {
+        Block last = below ? blocks.getFirst() : blocks.getLast();
+        if (below ? last.first == 0 : last.end() == count) {
+            return 0;
+        }
+        if (blocks.size() < 2) {
+            return 1;
+        }
+        List<Block> ordered = new ArrayList<>(blocks);
+        Block before = ordered.get(below ? 1 : ordered.size() - 2);
+        double weight = last.weight();
+        double ratio = weight / Math.max(before.weight(), Double.MIN_NORMAL);
+        if (ratio < 0.5) {
+            return 4 * weight * ratio / (1 - ratio) + 1e-3 * weight;
+        }
+        // Both at the level of rounding, which falls no further.
+        return Math.max(weight, before.weight()) <= allowed / 16 ? 16 * weight : 1;
+    }
+
+    private Block block(long first, int size) {
+        Interruption.check();
+        double[][] fine = overlaps(first, size, RADIANS);
+        if (blocks.size() < 2 || blocks.size() % 8 == 0) {
+            double[][] coarse = overlaps(first, size, 1.5 * RADIANS);
+            double square = 0;
+            for (int i = 0; i < size; i++) {
+                square += (fine[0][i] - coarse[0][i]) * (fine[0][i] - coarse[0][i])
+                        + (fine[1][i] - coarse[1][i]) * (fine[1][i] - coarse[1][i]);
+            }
+            difference = Math.max(difference, Math.sqrt(square / size));
+        }
+        return new Block(first, fine[0], fine[1]);
+    }
+
+    private double[][] overlaps(long first, int size, double radians) {
+        double top = levels.energyHigh(first + size - 1);
+        double wave = shape.wave() + Math.sqrt(2 * Math.max(0, top - shape.bottom()));
+        double[][] rule = LegendreRule.of(NODES);
+        double[] breaks = shape.breaks();
+        double[] re = new double[size];
+        double[] im = new double[size];
+        for (int i = 0; i <= breaks.length; i++) {
+            double from = i == 0 ? shape.left() : breaks[i - 1];
+            double to = i == breaks.length ? shape.right() : breaks[i];
+            int panels = 1 + (int) ((to - from) * wave / radians);
+            if (panels > 1_000_000 / NODES) {
+                throw new PhysicsException.TooLarge(
+                        "the overlaps of a state with " + (long) (panels * radians) + " radians of waves",
+                        (double) panels * NODES * size * Double.BYTES,
+                        1e6 * size * Double.BYTES,
+                        "give it less momentum or a smaller extent");
+            }
+            double half = (to - from) / (2 * panels);
+            double[] x = new double[panels * NODES];
+            for (int panel = 0; panel < panels; panel++) {
+                for (int j = 0; j < NODES; j++) {
+                    x[panel * NODES + j] = from + half * (2 * panel + 1 + rule[0][j]);
+                }
+            }
+            double[] a = new double[x.length];
+            double[] b = new double[x.length];
+            shape.sample(x, a, b);
+            for (int j = 0; j < x.length; j++) {
+                a[j] *= half * rule[1][j % NODES];
+                b[j] *= half * rule[1][j % NODES];
+            }
+            double[][] functions = levels.waveFunctions(first, size, x);
+            for (int n = 0; n < size; n++) {
+                double[] f = functions[n];
+                for (int j = 0; j < x.length; j++) {
+                    re[n] += f[j] * a[j];
+                    im[n] += f[j] * b[j];
+                }
+            }
+        }
+        return new double[][] {re, im};
+    }
+
+    /**
+     * What errors of the wave functions do to the overlaps: a wrong function is its right one with a little of its neighbours in it, so that
+     * its overlap errs by that share of what the neighbours hold.
+     */
+    private double functionErrors() {
+        double extent = Math.sqrt(shape.right() - shape.left());
+        List<Block> ordered = new ArrayList<>(blocks);
+        double square = 0;
+        for (int i = 0; i < ordered.size(); i++) {
+            double around = 0;
+            for (int k = Math.max(0, i - 1); k <= Math.min(ordered.size() - 1, i + 1); k++) {
+                around += ordered.get(k).weight();
+            }
+            double share = 2 * extent * levels.waveFunctionError(ordered.get(i).end() - 1);
+            square += share * share * around;
+        }
+        return Math.sqrt(square);
+    }
+
+    private Amplitudes amplitudes(double low, double high) {
+        int size = (int) kept();
+        double[] re = new double[size];
+        double[] im = new double[size];
+        long first = blocks.getFirst().first;
+        double sum = 0;
+        for (Block block : blocks) {
+            System.arraycopy(block.re, 0, re, (int) (block.first - first), block.re.length);
+            System.arraycopy(block.im, 0, im, (int) (block.first - first), block.im.length);
+            sum += block.weight();
+        }
+        double inside = functionErrors() + 2 * Math.sqrt(size) * difference + 1e-15;
+        double missing = 1 - sum;
+        double noise = NOISE + 4 * inside;
+        double lost = missing > noise ? missing : 0;
+        double error = Math.sqrt(low + high + lost) + inside;
+        if (error > tolerance && lost > 0) {
+            throw new PhysicsException.NotCarried(
+                    "the state, wanted to a norm error of " + tolerance + ",",
+                    lost,
+                    (int) Math.min(Integer.MAX_VALUE, count),
+                    "give it less energy, move it off walls and edges, or loosen the tolerance");
+        }
+        if (error > tolerance) {
+            throw new PhysicsException.NotConverged("the expansion of the state in levels", 1, error, tolerance);
+        }
+        double[] moments = new double[Amplitudes.MOMENTS];
+        double above = first + size + 4.0 * BLOCK;
+        double below = first + 1.0;
+        for (int k = 0; k < moments.length; k++) {
+            moments[k] = low * Math.pow(below, k) + high * Math.pow(above, k);
+        }
+        return new Amplitudes(
+                new long[] {first},
+                new double[][] {re},
+                new double[][] {im},
+                error,
+                moments,
+                Math.sqrt((low + high) * 8 * BLOCK),
+                low + high + lost,
+                Certainty.ESTIMATED);
+    }
+}
