@@ -11,6 +11,7 @@ import ladderwell.evidence.PhysicsException;
 final class BandSpectrum {
     private static final double EPS = 0x1p-52;
     private static final int SWEEPS = 60;
+    private static final double LEAST = 0x1p-900;
 
     private BandSpectrum() {}
 
@@ -19,6 +20,24 @@ final class BandSpectrum {
      * @param wanted how many, at most size
      */
     static double[] lowest(double[][] rows, int size, int wanted) {
+        return new Sweeps(tridiagonal(rows, size), wanted).finished();
+    }
+
+    /**
+     * The lowest eigenvalues of two matrices at once. Each step of a sweep waits for the division before it; two sweeps side by side fill that
+     * time.
+     */
+    static double[][] lowest(double[][] first, int firstWanted, double[][] second, int secondWanted) {
+        Sweeps a = new Sweeps(tridiagonal(first, first[0].length), firstWanted);
+        Sweeps b = new Sweeps(tridiagonal(second, second[0].length), secondWanted);
+        while (a.ready() & b.ready()) {
+            Sweeps.both(a, b);
+        }
+        return new double[][] {a.finished(), b.finished()};
+    }
+
+    /** {diagonal, off-diagonal} of a tridiagonal matrix with the same eigenvalues. */
+    private static double[][] tridiagonal(double[][] rows, int size) {
         double[] diagonal = Arrays.copyOf(rows[0], size);
         double[] next = new double[size];
         int width = Math.min(rows.length - 1, size - 1);
@@ -32,7 +51,7 @@ final class BandSpectrum {
         } else if (width > 2) {
             chase(rows, size, width, diagonal, next);
         }
-        return smallest(diagonal, next, wanted);
+        return new double[][] {diagonal, next};
     }
 
     /** Width two, the commonest: next[j] = A(j+1, j), second[j] = A(j+2, j). */
@@ -148,60 +167,107 @@ final class BandSpectrum {
         }
     }
 
-    /** Lowest eigenvalues of a tridiagonal matrix, ascending; both arrays are overwritten. */
-    private static double[] smallest(double[] d, double[] e, int wanted) {
-        int n = d.length;
-        for (int i = 0; i < n; i++) {
-            e[i] = i + 1 < n ? e[i] * e[i] : 0;
+    /** The iteration on one tridiagonal matrix, sweep by sweep. */
+    private static final class Sweeps {
+        private final double[] d;
+        /** Squares of the off-diagonal. */
+        private final double[] e;
+
+        private final int wanted;
+        private int top;
+        private int sweep;
+        private int m;
+        private double[] found = new double[0];
+
+        Sweeps(double[][] tridiagonal, int wanted) {
+            d = tridiagonal[0];
+            e = tridiagonal[1];
+            this.wanted = wanted;
+            int n = d.length;
+            for (int i = 0; i < n; i++) {
+                e[i] = i + 1 < n ? e[i] * e[i] : 0;
+            }
         }
-        for (int top = 0; top < n; top++) {
-            if (top >= wanted) {
-                double[] found = Arrays.copyOf(d, top);
-                Arrays.sort(found);
-                if (noneBelow(d, e, top, found[wanted - 1])) {
-                    return Arrays.copyOf(found, wanted);
+
+        double[] finished() {
+            while (ready()) {
+                run(m - 1, new Carried(this));
+            }
+            return found;
+        }
+
+        /** Settles what is settled; whether a sweep from m to top is needed. */
+        boolean ready() {
+            int n = d.length;
+            while (found.length == 0) {
+                if (top == n || (top >= wanted && sweep == 0 && complete())) {
+                    found = Arrays.copyOf(d, top);
+                    Arrays.sort(found);
+                    found = Arrays.copyOf(found, wanted);
+                    return false;
                 }
+                m = top;
+                while (m < n - 1 && !(Math.abs(e[m]) <= EPS * EPS * Math.abs(d[m] * d[m + 1]))) {
+                    m++;
+                }
+                if (m < n - 1) {
+                    e[m] = 0;
+                }
+                if (m > top) {
+                    if (sweep == SWEEPS) {
+                        throw new PhysicsException.NotConverged(
+                                "an eigenvalue of the oscillator basis", sweep, Math.sqrt(Math.abs(e[top])), 0);
+                    }
+                    sweep++;
+                    return true;
+                }
+                top++;
+                sweep = 0;
             }
-            settle(d, e, top);
+            return false;
         }
-        Arrays.sort(d);
-        return Arrays.copyOf(d, wanted);
-    }
 
-    /** Whether the part from {@code top} on has no eigenvalue below x: the number of negative pivots. */
-    private static boolean noneBelow(double[] d, double[] e, int top, double x) {
-        double pivot = d[top] - x;
-        for (int i = top + 1; i < d.length && pivot > 0; i++) {
-            pivot = d[i] - x - e[i - 1] / pivot;
+        /** Whether the part from {@code top} on has no eigenvalue below those found: the number of negative pivots. */
+        private boolean complete() {
+            double[] sorted = Arrays.copyOf(d, top);
+            Arrays.sort(sorted);
+            double x = sorted[wanted - 1];
+            double pivot = d[top] - x;
+            for (int i = top + 1; i < d.length && pivot > 0; i++) {
+                pivot = d[i] - x - e[i - 1] / pivot;
+            }
+            return pivot > 0;
         }
-        return pivot > 0;
-    }
 
-    private static void settle(double[] d, double[] e, int top) {
-        int n = d.length;
-        for (int sweep = 0; ; sweep++) {
-            int m = top;
-            while (m < n - 1 && !(Math.abs(e[m]) <= EPS * EPS * Math.abs(d[m] * d[m + 1]))) {
-                m++;
-            }
-            if (m < n - 1) {
-                e[m] = 0;
-            }
-            if (m == top) {
-                return;
-            }
-            if (sweep == SWEEPS) {
-                throw new PhysicsException.NotConverged(
-                        "an eigenvalue of the oscillator basis", sweep, Math.sqrt(Math.abs(e[top])), 0);
-            }
+        private double shift() {
             double root = Math.sqrt(e[top]);
             double sigma = (d[top + 1] - d[top]) / (2 * root);
-            sigma = d[top] - root / (sigma + Math.copySign(Math.sqrt(sigma * sigma + 1), sigma));
+            return d[top] - root / (sigma + Math.copySign(Math.sqrt(sigma * sigma + 1), sigma));
+        }
+
+        /** What a sweep carries from row to row. */
+        private static final class Carried {
+            double sigma;
             double c = 1;
-            double s = 0;
-            double gamma = d[m] - sigma;
-            double p = gamma * gamma;
-            for (int i = m - 1; i >= top; i--) {
+            double s;
+            double gamma;
+            double p;
+
+            Carried(Sweeps of) {
+                sigma = of.shift();
+                gamma = of.d[of.m] - sigma;
+                p = gamma * gamma;
+            }
+        }
+
+        /** Rows from down to top. */
+        private void run(int from, Carried at) {
+            double sigma = at.sigma;
+            double c = at.c;
+            double s = at.s;
+            double gamma = at.gamma;
+            double p = at.p;
+            for (int i = from; i >= top; i--) {
                 double square = e[i];
                 double r = p + square;
                 if (i != m - 1) {
@@ -215,10 +281,75 @@ final class BandSpectrum {
                 double here = d[i];
                 gamma = c * (here - sigma) - s * last;
                 d[i + 1] = last + (here - gamma);
-                p = p > 0x1p-900 ? gamma * gamma * (r / p) : before * square;
+                p = p > LEAST ? gamma * gamma * (r / p) : before * square;
             }
             e[top] = s * p;
             d[top] = sigma + gamma;
+        }
+
+        /** One sweep of each, row beside row as far as both reach. */
+        static void both(Sweeps a, Sweeps b) {
+            Carried one = new Carried(a);
+            Carried two = new Carried(b);
+            double[] d1 = a.d;
+            double[] e1 = a.e;
+            double[] d2 = b.d;
+            double[] e2 = b.e;
+            double sigma1 = one.sigma;
+            double c1 = 1;
+            double s1 = 0;
+            double gamma1 = one.gamma;
+            double p1 = one.p;
+            double sigma2 = two.sigma;
+            double c2 = 1;
+            double s2 = 0;
+            double gamma2 = two.gamma;
+            double p2 = two.p;
+            int i = a.m - 1;
+            int k = b.m - 1;
+            // Written below the last row of a sweep, and overwritten after it: e[m] is 0 there.
+            double keep1 = e1[a.m];
+            double keep2 = e2[b.m];
+            for (; i >= a.top && k >= b.top; i--, k--) {
+                double square1 = e1[i];
+                double square2 = e2[k];
+                double r1 = p1 + square1;
+                double r2 = p2 + square2;
+                e1[i + 1] = s1 * r1;
+                e2[k + 1] = s2 * r2;
+                double inverse1 = 1 / r1;
+                double inverse2 = 1 / r2;
+                double turned1 = p1 > LEAST ? r1 / p1 : 0;
+                double turned2 = p2 > LEAST ? r2 / p2 : 0;
+                double before1 = c1;
+                double before2 = c2;
+                c1 = p1 * inverse1;
+                c2 = p2 * inverse2;
+                s1 = square1 * inverse1;
+                s2 = square2 * inverse2;
+                double last1 = gamma1;
+                double last2 = gamma2;
+                double here1 = d1[i];
+                double here2 = d2[k];
+                gamma1 = c1 * (here1 - sigma1) - s1 * last1;
+                gamma2 = c2 * (here2 - sigma2) - s2 * last2;
+                d1[i + 1] = last1 + (here1 - gamma1);
+                d2[k + 1] = last2 + (here2 - gamma2);
+                p1 = turned1 > 0 ? gamma1 * gamma1 * turned1 : before1 * square1;
+                p2 = turned2 > 0 ? gamma2 * gamma2 * turned2 : before2 * square2;
+            }
+            e1[a.m] = keep1;
+            e2[b.m] = keep2;
+            one.c = c1;
+            one.s = s1;
+            one.gamma = gamma1;
+            one.p = p1;
+            two.c = c2;
+            two.s = s2;
+            two.gamma = gamma2;
+            two.p = p2;
+            a.run(i, one);
+            b.run(k, two);
         }
     }
 }

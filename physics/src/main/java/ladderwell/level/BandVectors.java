@@ -5,6 +5,8 @@ package ladderwell.level;
  * 2·width diagonals above the main one. One object serves one matrix and keeps its work space.
  */
 final class BandVectors {
+    private static final int ROUNDS = 3;
+
     private final double[][] rows;
     private final int size;
     private final int width;
@@ -13,6 +15,8 @@ final class BandVectors {
     private final double[] lower;
     private final int[] exchanged;
     private final double tiny;
+    /** A solution that grew by so much has a residual at the level of rounding. */
+    private final double enough;
 
     /** @param rows rows[q][j] = A(j, j + q) */
     BandVectors(double[][] rows, int size) {
@@ -27,6 +31,7 @@ final class BandVectors {
         for (int j = 0; j < size; j++) {
             largest = Math.max(largest, Math.abs(rows[0][j]));
         }
+        enough = 0x1p44 / Math.max(largest, 0x1p-900);
         tiny = Math.max(largest, 0x1p-900) * 0x1p-60;
     }
 
@@ -40,15 +45,20 @@ final class BandVectors {
         }
         back(x);
         normalize(x);
-        for (int round = 0; round < 2; round++) {
+        double grown = 0;
+        for (int round = 0; round < ROUNDS && grown < enough; round++) {
             forward(x);
             back(x);
-            normalize(x);
+            grown = normalize(x);
         }
         return x;
     }
 
     private void factor(double value) {
+        if (width == 2) {
+            factorTwo(value);
+            return;
+        }
         for (int i = 0; i < size; i++) {
             int first = Math.max(0, i - width);
             int at = i * span;
@@ -97,6 +107,111 @@ final class BandVectors {
         }
     }
 
+    /** Width two, the commonest: the three rows that a column meets are kept in local variables. */
+    private void factorTwo(double value) {
+        double[] d = rows[0];
+        double[] e = rows[1];
+        double[] f = rows[2];
+        double a0 = d[0] - value;
+        double a1 = e[0];
+        double a2 = f[0];
+        double a3 = 0;
+        double a4 = 0;
+        double b0 = e[0];
+        double b1 = d[1] - value;
+        double b2 = size > 2 ? e[1] : 0;
+        double b3 = size > 3 ? f[1] : 0;
+        double b4 = 0;
+        for (int k = 0; k < size; k++) {
+            double c0 = 0;
+            double c1 = 0;
+            double c2 = 0;
+            double c3 = 0;
+            double c4 = 0;
+            if (k + 2 < size) {
+                c0 = f[k];
+                c1 = e[k + 1];
+                c2 = d[k + 2] - value;
+                c3 = k + 3 < size ? e[k + 2] : 0;
+                c4 = k + 4 < size ? f[k + 2] : 0;
+            }
+            double sizeB = Math.abs(b0);
+            double sizeC = Math.abs(c0);
+            int best = k;
+            double largest = Math.abs(a0);
+            if (sizeB > largest && k + 1 < size) {
+                largest = sizeB;
+                best = k + 1;
+            }
+            if (sizeC > largest) {
+                best = k + 2;
+            }
+            double keep;
+            if (best == k + 1) {
+                keep = a0;
+                a0 = b0;
+                b0 = keep;
+                keep = a1;
+                a1 = b1;
+                b1 = keep;
+                keep = a2;
+                a2 = b2;
+                b2 = keep;
+                keep = a3;
+                a3 = b3;
+                b3 = keep;
+                keep = a4;
+                a4 = b4;
+                b4 = keep;
+            } else if (best == k + 2) {
+                keep = a0;
+                a0 = c0;
+                c0 = keep;
+                keep = a1;
+                a1 = c1;
+                c1 = keep;
+                keep = a2;
+                a2 = c2;
+                c2 = keep;
+                keep = a3;
+                a3 = c3;
+                c3 = keep;
+                keep = a4;
+                a4 = c4;
+                c4 = keep;
+            }
+            exchanged[k] = best;
+            if (Math.abs(a0) < tiny) {
+                a0 = tiny;
+            }
+            double inverse = 1 / a0;
+            int at = k * 5;
+            upper[at] = inverse;
+            upper[at + 1] = a1;
+            upper[at + 2] = a2;
+            upper[at + 3] = a3;
+            upper[at + 4] = a4;
+            double l1 = b0 * inverse;
+            double l2 = c0 * inverse;
+            lower[2 * k] = l1;
+            lower[2 * k + 1] = l2;
+            double p1 = a1;
+            double p2 = a2;
+            double p3 = a3;
+            double p4 = a4;
+            a0 = b1 - l1 * p1;
+            a1 = b2 - l1 * p2;
+            a2 = b3 - l1 * p3;
+            a3 = b4 - l1 * p4;
+            a4 = 0;
+            b0 = c1 - l2 * p1;
+            b1 = c2 - l2 * p2;
+            b2 = c3 - l2 * p3;
+            b3 = c4 - l2 * p4;
+            b4 = 0;
+        }
+    }
+
     private void forward(double[] x) {
         for (int k = 0; k < size; k++) {
             int other = exchanged[k];
@@ -110,7 +225,27 @@ final class BandVectors {
         }
     }
 
+    private void backTwo(double[] x) {
+        double x1 = 0;
+        double x2 = 0;
+        double x3 = 0;
+        double x4 = 0;
+        for (int k = size - 1; k >= 0; k--) {
+            int at = k * 5;
+            double value = x[k] - upper[at + 4] * x4 - upper[at + 3] * x3 - upper[at + 2] * x2 - upper[at + 1] * x1;
+            x4 = x3;
+            x3 = x2;
+            x2 = x1;
+            x1 = value * upper[at];
+            x[k] = x1;
+        }
+    }
+
     private void back(double[] x) {
+        if (width == 2) {
+            backTwo(x);
+            return;
+        }
         for (int k = size - 1; k >= 0; k--) {
             double value = x[k];
             int end = Math.min(span, size - k);
@@ -121,7 +256,8 @@ final class BandVectors {
         }
     }
 
-    private static void normalize(double[] x) {
+    /** Makes the norm 1 and gives what it was. */
+    private static double normalize(double[] x) {
         double largest = 0;
         for (double value : x) {
             largest = Math.max(largest, Math.abs(value));
@@ -136,5 +272,6 @@ final class BandVectors {
         for (int i = 0; i < x.length; i++) {
             x[i] *= inverse;
         }
+        return largest * Math.sqrt(sum);
     }
 }

@@ -18,6 +18,7 @@ final class BasisBlock {
     /** Values of each parity, one more than wanted. */
     private final double[][] values;
 
+    private final double[][] vectors;
     private @Nullable Proved proved;
 
     /**
@@ -25,21 +26,33 @@ final class BasisBlock {
      * @param error infinite where nothing is proved
      * @param vectorError estimated norm error of the vectors
      */
-    record Proved(double[] quotient, double[] error, double[] vectorError, double[][] vectors) {}
+    record Proved(double[] quotient, double[] error, double[] vectorError) {}
 
-    private BasisBlock(Polynomial polynomial, OscillatorBasis basis, int count) {
+    private BasisBlock(Polynomial polynomial, OscillatorBasis basis, int count, @Nullable BasisBlock known) {
         this.polynomial = polynomial;
         this.basis = basis;
         this.count = count;
         parts = polynomial.even() ? 2 : 1;
+        vectors = new double[count][];
         rows = new double[parts][][];
         values = new double[parts][];
         for (int part = 0; part < parts; part++) {
             rows[part] = parts == 2 ? OscillatorBasis.parity(basis.rows(), basis.size(), part) : basis.rows();
-            int wanted = Math.min(wanted(part) + 1, rows[part][0].length);
-            values[part] = BandSpectrum.lowest(rows[part], rows[part][0].length, wanted);
-            Interruption.check();
         }
+        if (known != null) {
+            System.arraycopy(known.values, 0, values, 0, parts);
+        } else if (parts == 1) {
+            values[0] = BandSpectrum.lowest(rows[0], rows[0][0].length, oneMore(0));
+        } else {
+            double[][] both = BandSpectrum.lowest(rows[0], oneMore(0), rows[1], oneMore(1));
+            System.arraycopy(both, 0, values, 0, 2);
+        }
+        Interruption.check();
+    }
+
+    /** The level after the last shows how far away the rest is. */
+    private int oneMore(int part) {
+        return Math.min(wanted(part) + 1, rows[part][0].length);
     }
 
     /**
@@ -48,6 +61,20 @@ final class BasisBlock {
      * @param vectors whether the vectors are to be as good: they are off by the leak, energies by its square
      */
     static BasisBlock of(Polynomial polynomial, int count, boolean vectors) {
+        return of(polynomial, count, vectors, null);
+    }
+
+    /** The same levels, whose values are known, in a basis large enough for the vectors. */
+    BasisBlock withVectors() {
+        return of(polynomial, count, true, this);
+    }
+
+    /** How many levels it holds. */
+    int count() {
+        return count;
+    }
+
+    private static BasisBlock of(Polynomial polynomial, int count, boolean vectors, @Nullable BasisBlock known) {
         double energy = polynomial.energyOf(count);
         double left = polynomial.turning(energy, -1);
         double right = polynomial.turning(energy, 1);
@@ -64,7 +91,8 @@ final class BasisBlock {
             size = count + 8;
         }
         while (true) {
-            BasisBlock block = new BasisBlock(polynomial, OscillatorBasis.of(polynomial, size, omega, centre), count);
+            BasisBlock block =
+                    new BasisBlock(polynomial, OscillatorBasis.of(polynomial, size, omega, centre), count, known);
             if (block.closed(vectors) || size > LARGEST) {
                 return block;
             }
@@ -148,7 +176,7 @@ final class BasisBlock {
         double[] quotient = new double[count];
         double[] error = new double[count];
         double[] vectorError = new double[count];
-        double[][] vectors = new double[count][];
+        double[][] all = vectors(count - 1);
         double[][] sizes = basis.sizes();
         for (int part = 0; part < parts; part++) {
             int wanted = wanted(part);
@@ -158,7 +186,12 @@ final class BasisBlock {
             Interruption.check();
             int side = parts == 2 ? part : -1;
             double[][] big = parts == 2 ? OscillatorBasis.parity(sizes, basis.size(), part) : sizes;
-            BasisProof proof = new BasisProof(rows[part], big, basis.rounding(), Arrays.copyOf(values[part], wanted));
+            double[][] own = new double[wanted][];
+            for (int i = 0; i < wanted; i++) {
+                own[i] = gathered(all[parts * i + part], part);
+            }
+            BasisProof proof =
+                    new BasisProof(rows[part], big, basis.rounding(), Arrays.copyOf(values[part], wanted), own);
             double top = proof.quotient[wanted - 1];
             double next = 0.5 * (top + values[part][Math.min(wanted, values[part].length - 1)]);
             double[] errors = proof.errors(next, () -> LevelCount.below(next, basis, side));
@@ -166,20 +199,67 @@ final class BasisBlock {
                 int n = parts * i + part;
                 quotient[n] = proof.quotient[i];
                 error[n] = errors.length == 0 ? Double.POSITIVE_INFINITY : errors[i];
-                vectors[n] = spread(proof.vectors[i], part);
                 double gap = proof.gap(i, next);
                 // Davis and Kahan: sin θ ≤ r / gap, and √2 from the sine to the norm.
                 vectorError[n] = gap > 0 ? Math.min(2, 1.5 * proof.residual(i) / gap) : 2;
             }
         }
-        for (int n = 0; n < count; n++) {
-            if (beyond(vectors[n], n) < 0) {
-                for (int j = 0; j < vectors[n].length; j++) {
-                    vectors[n][j] = -vectors[n][j];
+        return new Proved(quotient, error, vectorError);
+    }
+
+    /** Vectors of levels 0 … last over the whole basis, positive at the right turning point; the arrays themselves. */
+    private synchronized double[][] vectors(int last) {
+        Ladder ladder = new Ladder(basis.size());
+        for (int part = 0; part < parts; part++) {
+            BandVectors solver = null;
+            for (int n = part; n <= last; n += parts) {
+                if (vectors[n] != null) {
+                    continue;
                 }
+                if (solver == null) {
+                    solver = new BandVectors(rows[part], rows[part][0].length);
+                }
+                double[] v = spread(solver.at(value(n)), part);
+                // beyond all its zeros
+                if (ladder.sum(v, scaled(polynomial.turning(value(n), 1))) < 0) {
+                    for (int j = 0; j < v.length; j++) {
+                        v[j] = -v[j];
+                    }
+                }
+                vectors[n] = v;
+            }
+            Interruption.check();
+        }
+        return vectors;
+    }
+
+    /** Sums of oscillator functions at one point, good enough for a sign. */
+    private static final class Ladder {
+        private final double[] up;
+        private final double[] down;
+
+        Ladder(int size) {
+            up = new double[size];
+            down = new double[size];
+            for (int k = 0; k < size; k++) {
+                up[k] = Math.sqrt(2.0 / (k + 1));
+                down[k] = Math.sqrt(k / (k + 1.0));
             }
         }
-        return new Proved(quotient, error, vectorError, vectors);
+
+        /** Σ v_k h_k(y) e^{y²/2}, h_k the oscillator functions: the factor does not change the sign. */
+        double sum(double[] v, double y) {
+            double before = 0;
+            double here = 1;
+            double sum = 0;
+            for (int k = 0; k < v.length; k++) {
+                sum += v[k] * here;
+                double next = up[k] * y * here - down[k] * before;
+                before = here;
+                here = next;
+            }
+            return sum;
+        }
     }
 
     private double[] spread(double[] v, int part) {
@@ -193,15 +273,15 @@ final class BasisBlock {
         return all;
     }
 
-    /** The wave at the right turning point, beyond all its zeros. */
-    private double beyond(double[] v, int n) {
-        double x = polynomial.turning(value(n), 1);
-        double[][] table = HermiteFunctions.window(0, v.length, new double[] {scaled(x)});
-        double sum = 0;
-        for (int j = 0; j < v.length; j++) {
-            sum += v[j] * table[j][0];
+    private double[] gathered(double[] all, int part) {
+        if (parts == 1) {
+            return all;
         }
-        return sum;
+        double[] v = new double[rows[part][0].length];
+        for (int j = 0; j < v.length; j++) {
+            v[j] = all[2 * j + part];
+        }
+        return v;
     }
 
     private double scaled(double x) {
@@ -215,7 +295,7 @@ final class BasisBlock {
             points[i] = scaled(x[i]);
         }
         double[][] functions = HermiteFunctions.window(0, basis.size(), points);
-        double[][] vectors = proved().vectors;
+        double[][] vectors = vectors(first + rows - 1);
         double scale = Math.sqrt(Math.sqrt(basis.omega()));
         double[][] table = new double[rows][x.length];
         for (int row = 0; row < rows; row++) {
@@ -249,6 +329,7 @@ final class BasisBlock {
     /** Elements of x, x², p (over i), p² between listed levels: {x, x², p, p²} matrices and their four estimated errors. */
     double[][][] elements(int[] list, double[] errors) {
         Proved all = proved();
+        double[][] vectors = vectors(count - 1);
         int k = list.length;
         double[][][] result = new double[4][k][k];
         double[][] moved = new double[k][];
@@ -256,8 +337,8 @@ final class BasisBlock {
         double[] ownX = new double[k];
         double[] ownP = new double[k];
         for (int i = 0; i < k; i++) {
-            moved[i] = ladder(all.vectors[list[i]], 1);
-            turned[i] = ladder(all.vectors[list[i]], -1);
+            moved[i] = ladder(vectors[list[i]], 1);
+            turned[i] = ladder(vectors[list[i]], -1);
             ownX[i] = Math.sqrt(dot(moved[i], moved[i]));
             ownP[i] = Math.sqrt(dot(turned[i], turned[i]));
         }
@@ -267,8 +348,8 @@ final class BasisBlock {
                 boolean same = part(list[i]) == part(list[j]);
                 boolean mixed = parts == 1;
                 double delta = i == j ? 1 : 0;
-                double x = mixed || !same ? dot(all.vectors[list[i]], moved[j]) : 0;
-                double p = i != j && (mixed || !same) ? dot(all.vectors[list[i]], turned[j]) : 0;
+                double x = mixed || !same ? dot(vectors[list[i]], moved[j]) : 0;
+                double p = i != j && (mixed || !same) ? dot(vectors[list[i]], turned[j]) : 0;
                 double xx = mixed || same ? dot(moved[i], moved[j]) : 0;
                 double pp = mixed || same ? dot(turned[i], turned[j]) : 0;
                 put(result[1], i, j, xx + 2 * x0 * x + x0 * x0 * delta, 1);

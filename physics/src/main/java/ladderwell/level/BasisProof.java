@@ -24,9 +24,10 @@ final class BasisProof {
 
     private final double[] slack;
     private final double[] residual;
-    final double[][] vectors;
+    private final double[][] vectors;
 
-    BasisProof(double[][] rows, double[][] sizes, double elementRounding, double[] values) {
+    /** @param vectors any vectors near the eigenvectors: the nearer, the smaller the errors */
+    BasisProof(double[][] rows, double[][] sizes, double elementRounding, double[] values, double[][] vectors) {
         this.rows = rows;
         this.sizes = sizes;
         size = rows[0].length;
@@ -36,10 +37,8 @@ final class BasisProof {
         quotient = new double[values.length];
         slack = new double[values.length];
         residual = new double[values.length];
-        vectors = new double[values.length][];
-        BandVectors solver = new BandVectors(rows, size);
+        this.vectors = vectors;
         for (int i = 0; i < values.length; i++) {
-            vectors[i] = solver.at(values[i]);
             measure(i, values[i]);
         }
     }

@@ -15,6 +15,15 @@ final class Cell {
     static final int TERMS = 40;
 
     private static final int LONGEST = 80;
+    /** 1/2k. */
+    private static final double[] HALVES = new double[LONGEST + TERMS + 2];
+
+    static {
+        for (int k = 1; k < HALVES.length; k++) {
+            HALVES[k] = 0.5 / k;
+        }
+    }
+
     private static final double[] CHECKS = {-1, -0.97, -0.31, 0.55, 0.93, 1};
 
     final double a;
@@ -185,24 +194,26 @@ final class Cell {
     private static double[] next(double[] p, double[] q, int m) {
         int length = Math.min(p.length + q.length - 1, LONGEST);
         double[] o = new double[length];
-        for (int i = 0; i < p.length; i++) {
-            double factor = p[i];
+        for (int j = 0; j < q.length; j++) {
+            double factor = q[j];
+            int many = Math.min(p.length, length - j);
             if (factor != 0) {
-                for (int j = 0; j < q.length && i + j < length; j++) {
-                    o[i + j] += factor * q[j];
+                for (int i = 0; i < many; i++) {
+                    o[i + j] += factor * p[i];
                 }
             }
         }
+        int inner = Math.min(length, p.length - 2);
+        for (int k = 0; k < inner; k++) {
+            o[k] -= (k + 2.0) * (k + 1) * p[k + 2];
+        }
         for (int k = 0; k < length; k++) {
-            if (k + 2 < p.length) {
-                o[k] -= (k + 2.0) * (k + 1) * p[k + 2];
-            }
-            o[k] /= 2.0 * (k + m + 1);
+            o[k] *= HALVES[k + m + 1];
         }
         while (length > 1 && Math.abs(o[length - 1]) < 1e-19) {
             length--;
         }
-        return Arrays.copyOf(o, length);
+        return length == o.length ? o : Arrays.copyOf(o, length);
     }
 
     private static double bound(double[] p) {
@@ -226,29 +237,52 @@ final class Cell {
     void end(int side, double z, double[] g, boolean slopes, double[] out) {
         int w = terms + 1;
         int at = side > 0 ? 0 : 4 * w;
+        double[] all = ends;
         double extra = side * z * g[1];
-        out[0] = dot(at, g, 0);
-        out[1] = dot(at + w, g, 0) + extra;
-        out[2] = dot(at + 2 * w, g, 0);
-        out[3] = dot(at + 3 * w, g, 0);
-        if (slopes) {
+        double u = 0;
+        double du = extra;
+        double v = 0;
+        double dv = 0;
+        if (!slopes) {
+            for (int i = 0; i <= terms; i++, at++) {
+                double here = g[i];
+                u += all[at] * here;
+                du += all[at + w] * here;
+                v += all[at + 2 * w] * here;
+                dv += all[at + 3 * w] * here;
+            }
+        } else {
             // d(Z η₀)/dZ = (ξ + η₀)/2, dξ/dZ = η₀/2
-            out[4] = 0.5 * dot(at, g, 1);
-            out[5] = 0.5 * (dot(at + w, g, 1) + side * (g[0] + g[1]));
-            out[6] = 0.5 * dot(at + 2 * w, g, 1);
-            out[7] = 0.5 * dot(at + 3 * w, g, 1);
+            double uz = 0;
+            double duz = side * (g[0] + g[1]);
+            double vz = 0;
+            double dvz = 0;
+            double here = g[0];
+            for (int i = 0; i <= terms; i++, at++) {
+                double next = g[i + 1];
+                double a = all[at];
+                double b = all[at + w];
+                double c = all[at + 2 * w];
+                double d = all[at + 3 * w];
+                u += a * here;
+                uz += a * next;
+                du += b * here;
+                duz += b * next;
+                v += c * here;
+                vz += c * next;
+                dv += d * here;
+                dvz += d * next;
+                here = next;
+            }
+            out[4] = 0.5 * uz;
+            out[5] = 0.5 * duz;
+            out[6] = 0.5 * vz;
+            out[7] = 0.5 * dvz;
         }
-    }
-
-    private double dot(int at, double[] g, int shift) {
-        double even = 0;
-        double odd = 0;
-        int i = 0;
-        for (; i < terms; i += 2) {
-            even += ends[at + i] * g[i + shift];
-            odd += ends[at + i + 1] * g[i + 1 + shift];
-        }
-        return i == terms ? even + odd + ends[at + i] * g[i + shift] : even + odd;
+        out[0] = u;
+        out[1] = du;
+        out[2] = v;
+        out[3] = dv;
     }
 
     /** {y, dy/ds} at s for the solution with value yc and slope dc (in s) at the centre. */

@@ -19,6 +19,10 @@ final class PolynomialLevels implements Levels {
     private final Polynomial polynomial;
     private final @Nullable BasisBlock[] blocks = new BasisBlock[8];
     private @Nullable ShootingLevels shooting;
+    /** The levels asked for last, of a potential that grows steadily; with vectors once those were asked for. */
+    private @Nullable BasisBlock quick;
+
+    private boolean quickHasVectors;
 
     PolynomialLevels(double[] coefficients) {
         polynomial = new Polynomial(coefficients);
@@ -93,6 +97,26 @@ final class PolynomialLevels implements Levels {
         return block;
     }
 
+    private synchronized BasisBlock quick(int count) {
+        BasisBlock block = quick;
+        if (block == null || block.count() < count) {
+            block = BasisBlock.of(polynomial, count, false);
+            quick = block;
+            quickHasVectors = false;
+        }
+        return block;
+    }
+
+    private synchronized BasisBlock quickWithVectors(int count) {
+        BasisBlock block = quick(count);
+        if (!quickHasVectors) {
+            block = block.withVectors();
+            quick = block;
+            quickHasVectors = true;
+        }
+        return block;
+    }
+
     /** Whether the basis serves the levels up to n: few enough, and their bounds proved. */
     private boolean small(long n) {
         Points.checkLevel(n, Long.MAX_VALUE);
@@ -134,7 +158,7 @@ final class PolynomialLevels implements Levels {
             few = 0;
         }
         if (few > 0) {
-            BasisBlock block = quick ? BasisBlock.of(polynomial, (int) first + few, false) : block(first + few - 1);
+            BasisBlock block = quick ? quick((int) first + few) : block(first + few - 1);
             for (int i = 0; i < few; i++) {
                 int n = (int) first + i;
                 energies[i] = quick ? block.value(n) : block.proved().quotient()[n];
@@ -205,6 +229,10 @@ final class PolynomialLevels implements Levels {
     public double[][] waveFunctions(long first, int count, double[] x) {
         Points.check(first, count, Long.MAX_VALUE, x);
         long last = first + count - 1;
+        // Where the matrix grows steadily, index and vectors need no proof; their error asks for it.
+        if (last < BASIS && polynomial.monotone()) {
+            return quickWithVectors((int) last + 1).waves((int) first, count, x);
+        }
         return small(last)
                 ? block(last).waves((int) first, count, x)
                 : shooting().waveFunctions(first, count, x);
