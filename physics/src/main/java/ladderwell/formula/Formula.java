@@ -236,6 +236,18 @@ public final class Formula {
         return new Formula(Writer.text(scaled), scaled, Dimension.NONE, true, List.copyOf(moved), parameters);
     }
 
+    /** The formula at one time, as a function of x alone. */
+    public Formula at(double time) {
+        if (!dependsOnTime()) {
+            return this;
+        }
+        List<Hazard> then = new ArrayList<>();
+        for (Hazard hazard : hazards) {
+            then.add(new Hazard(Scaling.at(time, hazard.argument()), hazard.words(), hazard.start(), hazard.end()));
+        }
+        return new Formula(text, Scaling.at(time, node), dimension, natural, List.copyOf(then), parameters);
+    }
+
     /** True for a polynomial in x with coefficients that do not depend on t. */
     public boolean isPolynomial() {
         return polynomial().isPresent();
