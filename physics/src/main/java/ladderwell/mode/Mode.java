@@ -25,7 +25,7 @@ import ladderwell.quantity.Digits;
 public record Mode(double omega, boolean natural, Frame frame, List<Part> parts, List<Jump> jumps) {
 
     /**
-     * Checks units, and that the Hamiltonian moves states for all times: a polynomial of degree above 2 that is bounded neither below nor
+     * Checks units, and that the Hamiltonian of t = 0 moves states for all times: a polynomial of degree above 2 that is bounded neither below nor
      * above lets them escape in finite time.
      *
      * @throws IllegalArgumentException for such a Hamiltonian, or if a part is in other units
@@ -43,14 +43,9 @@ public record Mode(double omega, boolean natural, Frame frame, List<Part> parts,
                         "the mode is in " + (natural ? "natural" : "lab") + " units and its part " + part + " is not");
             }
         }
-        OperatorFormula hamiltonian = sum(omega, frame, parts);
-        LadderPolynomial start = hamiltonian.at(0);
-        if (Boundedness.isRefused(start)) {
-            throw new IllegalArgumentException(
-                    "the Hamiltonian is bounded neither below nor above and lets states escape in"
-                            + " finite time: " + Boundedness.of(start).reason()
-                            + "; add a term of a higher even degree, or use a potential with a wall");
-        }
+        escape(sum(omega, frame, parts).at(0)).ifPresent(words -> {
+            throw new IllegalArgumentException(words);
+        });
     }
 
     /**
@@ -129,6 +124,23 @@ public record Mode(double omega, boolean natural, Frame frame, List<Part> parts,
             sum = sum.plus(frame.isLab() ? part.inLab() : part.inFrame(frame.frequency()));
         }
         return sum;
+    }
+
+    /**
+     * Why states escape in finite time under the Hamiltonian of a time, in a sentence; empty if they do not. Checked at t = 0 when the mode is
+     * made; one that varies is to be checked along its run.
+     */
+    public Optional<String> escapeWarning(double t) {
+        return escape(hamiltonian().at(t));
+    }
+
+    private static Optional<String> escape(LadderPolynomial h) {
+        return Boundedness.isRefused(h)
+                ? Optional.of(
+                        "the Hamiltonian is bounded neither below nor above and lets states escape in finite time: "
+                                + Boundedness.of(h).reason()
+                                + "; add a term of a higher even degree, or use a potential with a wall")
+                : Optional.empty();
     }
 
     /** What the rotating frame leaves out, part by part; empty in the lab. */

@@ -30,8 +30,9 @@ public final class LadderPolynomial {
     private LadderPolynomial(Coefficients sums) {
         for (int i = 0; i < sums.re.length; i++) {
             if (!Double.isFinite(sums.re[i]) || !Double.isFinite(sums.im[i])) {
-                throw new IllegalArgumentException("the coefficient of " + name(i / sums.columns, i % sums.columns)
-                        + " is " + number(sums.re[i], sums.im[i]) + "; coefficients must be finite");
+                throw new IllegalArgumentException(
+                        "the coefficient of " + LadderText.name(i / sums.columns, i % sums.columns) + " is "
+                                + LadderText.number(sums.re[i], sums.im[i]) + "; coefficients must be finite");
             }
         }
         c = sums.trimmed();
@@ -373,8 +374,8 @@ public final class LadderPolynomial {
             k = worstJ;
         }
         String found = re(k, j) == 0 && im(k, j) == 0 ? "0" : text(k, j);
-        return Optional.of(
-                "the term " + text(j, k) + " needs its mirror " + text(re(j, k), -im(j, k), k, j) + ", found " + found);
+        return Optional.of("the term " + text(j, k) + " needs its mirror " + LadderText.term(re(j, k), -im(j, k), k, j)
+                + ", found " + found);
     }
 
     /** The largest |c_jk|. */
@@ -575,57 +576,6 @@ public final class LadderPolynomial {
     }
 
     private String text(int j, int k) {
-        return text(re(j, k), im(j, k), j, k);
-    }
-
-    private static String text(double re, double im, int j, int k) {
-        String number = number(re, im);
-        if (j + k == 0) {
-            return number;
-        }
-        if (number.equals("1") || number.equals("−1")) {
-            return number.substring(0, number.length() - 1) + name(j, k);
-        }
-        return number + " " + name(j, k);
-    }
-
-    /** A complex number as it is written on the board. */
-    private static String number(double re, double im) {
-        if (im == 0) {
-            return plain(re);
-        }
-        String imaginary = Math.abs(im) == 1 ? (im < 0 ? "−i" : "i") : plain(im) + "i";
-        if (re == 0) {
-            return imaginary;
-        }
-        String joined = im < 0 ? " − " + imaginary.substring(1) : " + " + imaginary;
-        return "(" + plain(re) + joined + ")";
-    }
-
-    private static String plain(double value) {
-        String digits = value == Math.rint(value) && Math.abs(value) < 1e15
-                ? Long.toString((long) Math.abs(value))
-                : Double.toString(Math.abs(value));
-        return value < 0 ? "−" + digits : digits;
-    }
-
-    private static String name(int j, int k) {
-        if (j + k == 0) {
-            return "1";
-        }
-        String raising = j == 0 ? "" : "a†" + exponent(j);
-        String lowering = k == 0 ? "" : "a" + exponent(k);
-        return raising.isEmpty() || lowering.isEmpty() ? raising + lowering : raising + " " + lowering;
-    }
-
-    private static String exponent(int power) {
-        if (power == 1) {
-            return "";
-        }
-        StringBuilder raised = new StringBuilder();
-        for (char digit : Integer.toString(power).toCharArray()) {
-            raised.append("⁰¹²³⁴⁵⁶⁷⁸⁹".charAt(digit - '0'));
-        }
-        return raised.toString();
+        return LadderText.term(re(j, k), im(j, k), j, k);
     }
 }

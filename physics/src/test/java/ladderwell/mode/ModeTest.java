@@ -221,6 +221,12 @@ class ModeTest {
                         + " or use a potential with a wall",
                 cubic.getMessage());
         assertThrows(IllegalArgumentException.class, () -> Mode.natural(1).with(new Part.Duffing(-0.1)));
+        Mode later = Mode.natural(1)
+                .with(new Part.Given(OperatorFormula.naturalHamiltonian("step(t - 1)*x^3", Parameters.none())));
+        assertTrue(later.escapeWarning(0.5).isEmpty());
+        assertTrue(later.escapeWarning(1.5)
+                .orElseThrow()
+                .startsWith("the Hamiltonian is bounded neither below nor above"));
         // a negative Kerr term is bounded above: its levels are those of −H
         assertEquals(1, Mode.natural(1).with(new Part.Kerr(-0.1)).parts().size());
         assertThrows(
