@@ -173,11 +173,16 @@ public final class LevelPicture {
     /** 1, 2, 5, 10 …: so that about four numbers stand below the spacings. */
     private long numberStep() {
         long across = spacings.level(spacings.count() - 1) - spacings.level(0);
-        long step = 1;
-        for (int i = 0; across / step > 4; i++) {
-            step = step / 2 * (i % 3 == 1 ? 5 : 4) + (step == 1 ? 2 : 0);
+        long ten = 1;
+        while (across / ten > 40) {
+            ten *= 10;
         }
-        return step;
+        for (long step : new long[] {1, 2, 5}) {
+            if (across / (step * ten) <= 4) {
+                return step * ten;
+            }
+        }
+        return 10 * ten;
     }
 
     private static JsonArray range(double from, double to) {
