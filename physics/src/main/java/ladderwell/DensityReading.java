@@ -25,23 +25,23 @@ final class DensityReading {
 
     private DensityReading() {}
 
-    static Density of(Run run, int points) {
+    static Density of(Run run, PhasedState state, int points) {
         if (points < 2) {
             throw new IllegalArgumentException("a density needs at least 2 points, not " + points);
         }
         boolean closed = run.state() instanceof Coherent coherent && coherent.mean() > CLOSED_FORM_ABOVE;
-        double levels = closed ? 0 : run.amplitudes().levels();
+        double levels = closed ? 0 : state.amplitudes().levels();
         Memory.require(
                 "a density of " + run.times() + " times and " + points + " points",
                 Double.BYTES * (run.times() * (points + 2 * levels) + levels * points),
                 "ask for fewer frames or fewer points");
-        double[] x = grid(run, points);
-        return closed ? closedForm(run, (Coherent) run.state(), x) : sumOverLevels(run, x);
+        double[] x = grid(run, state, points);
+        return closed ? closedForm(run, (Coherent) run.state(), x) : sumOverLevels(run, state, x);
     }
 
     /** Mirror symmetric, bit by bit, where the levels are. */
-    private static double[] grid(Run run, int points) {
-        double[] ends = extent(run);
+    private static double[] grid(Run run, PhasedState state, int points) {
+        double[] ends = extent(run, state);
         double middle = ends[0] == -ends[1] ? 0 : (ends[0] + ends[1]) / 2;
         double half = (ends[1] - ends[0]) / 2;
         double[] x = new double[points];
@@ -51,13 +51,13 @@ final class DensityReading {
         return x;
     }
 
-    private static double[] extent(Run run) {
+    private static double[] extent(Run run, PhasedState state) {
         if (run.state() instanceof Coherent coherent) {
             double half = Math.sqrt(2 * coherent.mean()) + MARGIN;
             return new double[] {-half, half};
         }
         Oscillator oscillator = run.state().oscillator();
-        double[] extent = oscillator.levels().extent(highestThatShows(run), DROP);
+        double[] extent = oscillator.levels().extent(highestThatShows(run, state), DROP);
         if (oscillator instanceof Box || oscillator instanceof FiniteWell) {
             double half = Math.max(0.55, Math.min(extent[1], 2));
             return new double[] {-half, half};
@@ -66,10 +66,10 @@ final class DensityReading {
     }
 
     /** The level above which less of the state lies than a picture could show; the last one of a harmonic oscillator. */
-    private static long highestThatShows(Run run) {
-        Amplitudes amplitudes = run.amplitudes();
+    private static long highestThatShows(Run run, PhasedState state) {
+        Amplitudes amplitudes = state.amplitudes();
         if (run.state().oscillator() instanceof Harmonic) {
-            return run.phased().lastLevel();
+            return state.lastLevel();
         }
         double above = 0;
         for (int s = amplitudes.segments() - 1; s >= 0; s--) {
@@ -80,7 +80,7 @@ final class DensityReading {
                 }
             }
         }
-        return run.phased().lastLevel();
+        return state.lastLevel();
     }
 
     /** π^{−1/2} e^{−(x−x₀)²} at each point; on a grid coarser than the packet, its mean over one grid spacing. */
@@ -114,8 +114,7 @@ final class DensityReading {
                         : "closed form of a coherent state");
     }
 
-    private static Density sumOverLevels(Run run, double[] x) {
-        PhasedState state = run.phased();
+    private static Density sumOverLevels(Run run, PhasedState state, double[] x) {
         Amplitudes amplitudes = state.amplitudes();
         Levels levels = state.levels();
         double coefficientError = state.error();
@@ -151,7 +150,7 @@ final class DensityReading {
             values = frames.of(re, im, workers());
             sumError = frames.errorBound(coefficientError, functionError, 1 + coefficientError);
         }
-        return new Density(run, x, values, bound(run, values, sumError), "sum over levels");
+        return new Density(run, x, values, bound(run, state, values, sumError), "sum over levels");
     }
 
     /**
@@ -159,17 +158,17 @@ final class DensityReading {
      * wave functions' own error is (box and well) and nothing lies above the bound levels; estimated for all other
      * functions and for packets.
      */
-    private static Bound bound(Run run, double[][] values, double sumError) {
+    private static Bound bound(Run run, PhasedState state, double[][] values, double sumError) {
         Oscillator oscillator = run.state().oscillator();
         double largest = 0;
-        if (run.amplitudes().tailSum() > 0) {
+        if (state.amplitudes().tailSum() > 0) {
             largest = switch (oscillator.levels().kind()) {
                 case HARMONIC -> Math.pow(Math.PI, -0.25);
                 case BOX, FINITE_WELL -> Math.sqrt(2);
-                case GENERAL -> largest(oscillator.levels(), run.phased().lastLevel());
+                case GENERAL -> largest(oscillator.levels(), state.lastLevel());
             };
         }
-        double off = run.amplitudes().tailSum() * largest;
+        double off = state.amplitudes().tailSum() * largest;
         double peak = 0;
         for (double[] frame : values) {
             for (double value : frame) {
@@ -179,7 +178,7 @@ final class DensityReading {
         double size = sumError + (2 * Math.sqrt(peak + sumError) + off) * off;
         boolean proved =
                 (oscillator instanceof Box || oscillator instanceof FiniteWell) && !(run.state() instanceof Packet);
-        return proved ? new Bound(run.phased().certainty(), size) : Bound.estimated(size);
+        return proved ? new Bound(state.certainty(), size) : Bound.estimated(size);
     }
 
     /** Twice the largest value of the last kept function: those above are larger only near the turning points, and little. */

@@ -2,6 +2,7 @@ package ladderwell;
 
 import java.util.List;
 import ladderwell.classical.ClassicalOrbit;
+import ladderwell.formula.Formula;
 import ladderwell.level.Levels;
 import ladderwell.potential.Potential;
 import ladderwell.quantity.Quantity;
@@ -12,7 +13,7 @@ import tech.tablesaw.api.Table;
  * What the system is: one mode with its levels and its scale. Made by {@link #harmonic()}, {@link #box()}, {@link #finiteWell()} or
  * {@link #in}; states are prepared in it by {@link #number}, {@link #gaussian}, {@link #superposition} ….
  */
-public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialWell {
+public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialWell, MovingWell {
 
     /** A harmonic oscillator: give the mass and one of ν, ω, wavenumber or level spacing, or {@code natural()}. */
     static Harmonic.Declaring harmonic() {
@@ -47,6 +48,28 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialW
         return PotentialWell.of("potential", potential, boundaryPhase, List.of());
     }
 
+    /**
+     * A particle in the potential of a formula, which may depend on the time t: {@code Formula.potential("k*x^2/2 - F*x*cos(w*t)", …)}. Its
+     * levels are those at time 0.
+     *
+     * @throws IllegalArgumentException if the potential binds nothing at time 0
+     */
+    static Oscillator in(Formula formula, Quantity mass) {
+        Potential start = Potential.of(formula.at(0), mass);
+        return formula.dependsOnTime() ? MovingWell.of("potential", in(start), formula, List.of()) : in(start);
+    }
+
+    /**
+     * A particle in the potential of a formula that need not confine anything: free, falling, over a barrier. Levels are not asked for; packets
+     * move on a grid.
+     *
+     * @param length what lengths and times are scaled by, such as the size of the packet
+     */
+    static Oscillator open(Formula formula, Quantity mass, Quantity length) {
+        PotentialWell start = in(Potential.open(formula.at(0), mass, length));
+        return formula.dependsOnTime() ? MovingWell.of("potential", start, formula, List.of()) : start;
+    }
+
     /** The trade's name of the kind: "harmonic", "box", "finite well", "morse" …. */
     String kind();
 
@@ -58,6 +81,16 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialW
 
     /** Potential energy at scaled position x, in scaled units; infinite outside a box. */
     double potential(double x);
+
+    /** Whether the potential depends on time; then levels and {@link #potential(double)} are those at time 0. */
+    default boolean moves() {
+        return false;
+    }
+
+    /** Potential energy at scaled position x and scaled time t. */
+    default double potential(double x, double t) {
+        return potential(x);
+    }
 
     /** The potential in one line with its parameters, where the kind and {@link #given} do not say it all; else empty. */
     default String formula() {
@@ -110,6 +143,16 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialW
     /** These levels as a table. */
     default Table levelTable(long... levels) {
         return LevelColumns.of(this, levels);
+    }
+
+    /**
+     * Transition elements between these levels as a table: for every pair m ≤ n and every coupling ⟨m|A|n⟩ with its error; of the momentum the
+     * imaginary part, its real part is 0.
+     *
+     * @throws IllegalArgumentException if a level is not bound or a function has no value somewhere
+     */
+    default Table elementTable(long[] levels, Coupling... couplings) {
+        return ElementColumns.of(this, levels, List.of(couplings));
     }
 
     /** Level n, counted from 0. */

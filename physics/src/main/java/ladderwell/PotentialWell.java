@@ -43,17 +43,19 @@ public record PotentialWell(String kind, Potential potential, String formula, Li
     static PotentialWell of(String kind, Potential potential, double boundaryPhase, List<Fact> given) {
         Curve curve = new Curve(potential);
         Levels levels;
-        if (potential.period().isPresent()) {
+        if (!potential.confines()) {
+            levels = Levels.none();
+        } else if (potential.period().isPresent()) {
             levels = Levels.onCircle(curve, potential.period().getAsDouble(), boundaryPhase);
         } else if (potential.polynomial().isPresent() && curve.isOpen()) {
             levels = Levels.polynomial(potential.polynomial().orElseThrow());
         } else {
             levels = Levels.of(curve);
         }
-        if (potential.uncertainty() > 0) {
+        if (potential.uncertainty() > 0 && levels.count() > 0) {
             levels = levels.within(potential.uncertainty());
         }
-        if (levels.count() == 0) {
+        if (levels.count() == 0 && potential.confines()) {
             throw new IllegalArgumentException("the potential " + potential.text() + " has no bound level");
         }
         return new PotentialWell(kind, potential, potential.text(), given, levels);
@@ -205,7 +207,9 @@ public record PotentialWell(String kind, Potential potential, String formula, Li
                 facts.add(Fact.exact("bound levels", "", levels.count(), ONE));
             }
         }
-        facts.add(shown.level("ground energy", "E₀", this, 0));
+        if (levels.count() > 0) {
+            facts.add(shown.level("ground energy", "E₀", this, 0));
+        }
         if (levels.count() > 1) {
             facts.add(shown.scaled(
                     "first spacing",

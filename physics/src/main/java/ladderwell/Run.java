@@ -1,11 +1,11 @@
 package ladderwell;
 
 import java.util.List;
+import java.util.Optional;
 import ladderwell.classical.ClassicalOrbit;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.PhysicsException;
 import ladderwell.evidence.Record;
-import ladderwell.motion.PhasedState;
 import ladderwell.quantity.Digits;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
@@ -14,7 +14,7 @@ import ladderwell.state.Amplitudes;
 import tech.tablesaw.api.Table;
 
 /**
- * A state that has been evolved: times, amplitudes, how sure they are, and the record of how they were made. Immutable;
+ * A state that has been evolved: times, amplitudes on levels or values on a grid, how sure they are, and the record of how they were made. Immutable;
  * what is read from it ({@link #table}, {@link #density}) is computed when asked for, position and momentum once.
  */
 public final class Run {
@@ -22,14 +22,12 @@ public final class Run {
     private static final int DOUBLES_PER_TIME = 24;
 
     private final Evolution evolution;
-    private final PhasedState phased;
-    private final Readings readings;
+    private final Representation representation;
     private final double secondsTaken;
 
-    private Run(Evolution evolution, PhasedState phased, double secondsTaken) {
+    private Run(Evolution evolution, Representation representation, double secondsTaken) {
         this.evolution = evolution;
-        this.phased = phased;
-        this.readings = new Readings(evolution.state().oscillator(), phased);
+        this.representation = representation;
         this.secondsTaken = secondsTaken;
     }
 
@@ -39,26 +37,13 @@ public final class Run {
                 evolution.frames() + " frames",
                 (evolution.frames() + 1.0) * DOUBLES_PER_TIME * Double.BYTES,
                 "ask for fewer frames, or for a shorter time");
-        State state = evolution.state();
-        // Half the tolerance for what is left out of the state, the other half for phases and level errors.
-        Amplitudes amplitudes = state.amplitudes(evolution.tolerance() / 2);
         double end = evolution.scaledDuration();
         int frames = (int) evolution.frames();
         double[] times = new double[frames + 1];
         for (int j = 0; j <= frames; j++) {
             times[j] = end * j / frames;
         }
-        PhasedState phased = PhasedState.of(state.oscillator().levels(), amplitudes, times);
-        if (phased.error() > evolution.tolerance()) {
-            throw new PhysicsException.NotConverged(
-                    "the state after " + evolution.duration()
-                            + " (rounding and the errors of the levels set this floor; "
-                            + "ask for a looser tolerance or a shorter time)",
-                    1,
-                    phased.error(),
-                    evolution.tolerance());
-        }
-        return new Run(evolution, phased, (System.nanoTime() - start) * 1e-9);
+        return new Run(evolution, OnLevels.of(evolution, times), (System.nanoTime() - start) * 1e-9);
     }
 
     /** What was asked. */
@@ -73,31 +58,36 @@ public final class Run {
 
     /** Number of times: frames + 1. */
     public int times() {
-        return phased.times();
+        return representation.times();
     }
 
     /** The j-th time in scaled units; the result speaks of exactly this double. */
     public double time(int j) {
-        return phased.time(j);
+        return representation.time(j);
     }
 
-    /** The amplitudes at time 0. */
-    public Amplitudes amplitudes() {
-        return phased.amplitudes();
+    /** The amplitudes at time 0, where the run is on levels; empty where it is on a grid. */
+    public Optional<Amplitudes> amplitudes() {
+        return representation instanceof OnLevels levels ? Optional.of(levels.amplitudes()) : Optional.empty();
     }
 
-    PhasedState phased() {
-        return phased;
+    Representation representation() {
+        return representation;
     }
 
-    /** Largest ‖ψ − ψ̃‖ over the run: discarded tail, rounding, and the errors of the levels acting all the time. */
+    /** Largest ‖ψ − ψ̃‖ over the run: what was left out or cut off, rounding, and the errors of levels or steps. */
     public Bound stateError() {
-        return new Bound(phased.certainty(), phased.error());
+        return representation.stateError();
     }
 
     /** The method in a few words. */
     public String method() {
-        return "exact phases on levels";
+        return representation.method();
+    }
+
+    /** What was kept, in a few words: "levels 0–40". */
+    public String size() {
+        return representation.size();
     }
 
     /** Wall-clock time that the run took, in seconds; not part of the record. */
@@ -114,12 +104,10 @@ public final class Run {
                 .asked("frames", evolution.frames())
                 .asked("tolerance", evolution.tolerance())
                 .method("name", method())
-                .method("reason", "the Hamiltonian does not depend on time and its levels are known")
-                .size("levels", amplitudes().levels())
-                .size("first level", amplitudes().first(0))
-                .size("last level", phased.lastLevel())
+                .method("reason", representation.reason())
                 .size("times", times())
                 .bound("state", stateError());
+        representation.describe(record);
         askWords(record, "oscillator.formula", state().oscillator().formula());
         askWords(record, "state.origin", state().origin());
         ask(record, "oscillator.", state().oscillator().given());
@@ -151,7 +139,7 @@ public final class Run {
 
     /** Values of one observable at every time, in scaled units. */
     public Series series(Observable observable) {
-        return readings.series(observable);
+        return representation.series(observable);
     }
 
     /** The classical orbit of the same oscillator through the state's mean position and momentum, or at its mean energy. */
@@ -174,21 +162,19 @@ public final class Run {
      * @throws PhysicsException.TooLarge before anything is allocated, if the frames do not fit in memory
      */
     public Density density(int points) {
-        return DensityReading.of(this, points);
+        return representation.density(this, points);
     }
 
     /** What the motion does, in one line, each number with its error. */
     public String verdict() {
-        return Verdict.of(this);
+        return representation.verdict(this);
     }
 
     /** Method, size, error and time taken, in one line. */
     public String errorLine() {
-        long first = amplitudes().first(0);
-        String levels = first == phased.lastLevel() ? "level " + first : "levels " + first + "–" + phased.lastLevel();
-        return levels + " · " + method() + " · error of the state ≤ "
-                + Digits.pretty(Digits.significant(Math.nextUp(phased.error() * 1.05), 2))
-                + ", " + phased.certainty().word() + " · "
+        return size() + " · " + method() + " · error of the state ≤ "
+                + Digits.pretty(Digits.significant(Math.nextUp(stateError().size() * 1.05), 2))
+                + ", " + stateError().kind().word() + " · "
                 + milliseconds()
                 + " ms";
     }

@@ -1,6 +1,8 @@
 package ladderwell;
 
+import java.util.Arrays;
 import java.util.List;
+import java.util.OptionalDouble;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Scale;
 import ladderwell.quantity.Unit;
@@ -34,15 +36,25 @@ final class RunTable {
     }
 
     private static void addTimes(Table table, Run run, Scale scale) {
-        double period = run.state().period();
         double[] lab = new double[run.times()];
-        double[] periods = new double[run.times()];
         Unit unit = scale.display(Kind.TIME, run.time(run.times() - 1) * scale.time());
         for (int j = 0; j < lab.length; j++) {
             lab[j] = unit.fromSi(run.time(j) * scale.time());
-            periods[j] = run.time(j) / period;
         }
-        table.addColumns(DoubleColumn.create(head("time", unit), lab), DoubleColumn.create("time / periods", periods));
+        table.addColumns(DoubleColumn.create(head("time", unit), lab));
+        period(run).ifPresent(period -> {
+            double[] periods = new double[run.times()];
+            Arrays.setAll(periods, j -> run.time(j) / period);
+            table.addColumns(DoubleColumn.create("time / periods", periods));
+        });
+    }
+
+    private static OptionalDouble period(Run run) {
+        try {
+            return OptionalDouble.of(run.state().period());
+        } catch (IllegalArgumentException notBound) {
+            return OptionalDouble.empty();
+        }
     }
 
     private static void addSeries(Table table, Series series, Scale scale) {
@@ -67,7 +79,8 @@ final class RunTable {
                         head("± " + name, unit) + " (" + series.certainty().word() + ")", errors));
     }
 
-    private static String head(String name, Unit unit) {
+    /** "position / nm". */
+    static String head(String name, Unit unit) {
         return unit.symbol().isEmpty() ? name : name + " / " + unit.symbol();
     }
 }

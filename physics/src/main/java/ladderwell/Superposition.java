@@ -49,6 +49,10 @@ public record Superposition(Oscillator oscillator, List<Long> levels, List<Doubl
             throw new IllegalArgumentException("levels are counted from 0, not " + n);
         }
         long count = oscillator.levels().count();
+        if (count == 0) {
+            throw new IllegalArgumentException(
+                    "this " + oscillator.kind() + " has no bound level; prepare a packet in it");
+        }
         if (n >= count) {
             throw new IllegalArgumentException("level " + n + " is not bound: this " + oscillator.kind() + " has "
                     + count + " bound level" + (count == 1 ? "" : "s") + ", 0 to " + (count - 1));

@@ -1,5 +1,6 @@
 package ladderwell;
 
+import ladderwell.motion.PhasedState;
 import ladderwell.quantity.Digits;
 import ladderwell.quantity.Quantity;
 
@@ -7,9 +8,10 @@ import ladderwell.quantity.Quantity;
 final class Verdict {
     private Verdict() {}
 
-    static String of(Run run) {
+    /** For a run on levels. */
+    static String of(Run run, PhasedState phased) {
         State state = run.state();
-        if (run.amplitudes().levels() == 1) {
+        if (phased.amplitudes().levels() == 1) {
             return "stationary: one level, nothing moves";
         }
         Oscillator oscillator = state.oscillator();
@@ -25,9 +27,9 @@ final class Verdict {
             return "returns exactly after " + time(run, Box.REVIVAL_TIME) + " (levels of the box go with n²); "
                     + bestReturn(run);
         }
-        if (run.amplitudes().levels() == 2) {
-            long a = run.amplitudes().first(0);
-            long b = run.phased().lastLevel();
+        if (phased.amplitudes().levels() == 2) {
+            long a = phased.amplitudes().first(0);
+            long b = phased.lastLevel();
             double spacing =
                     oscillator.levels().energyHigh(b) - oscillator.levels().energyHigh(a);
             return "two levels: returns exactly after every beat of " + time(run, 2 * Math.PI / spacing);

@@ -49,6 +49,15 @@ class RoomsTest {
     static final ArchRule formula = only("formula", "quantity", "numeric");
 
     @ArchTest
+    static final ArchRule operator = only("operator", "formula", "quantity", "numeric");
+
+    @ArchTest
+    static final ArchRule mode = only("mode", "operator", "formula", "quantity", "numeric");
+
+    @ArchTest
+    static final ArchRule gaussian = only("gaussian", "mode", "operator", "formula", "evidence", "quantity", "numeric");
+
+    @ArchTest
     static final ArchRule potential = only("potential", "formula", "quantity", "numeric");
 
     @ArchTest

@@ -171,7 +171,7 @@ class RunTest {
                     .evolve(1 + random.nextInt(50), ONE)
                     .frames(7)
                     .run();
-            var elements = ladderwell.motion.Means.onElements(run.phased());
+            var elements = ladderwell.motion.Means.onElements(((OnLevels) run.representation()).phased());
             for (int j = 0; j < run.times(); j++) {
                 assertEquals(
                         run.series(POSITION).value(j),

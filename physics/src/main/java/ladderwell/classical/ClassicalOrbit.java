@@ -45,6 +45,11 @@ public interface ClassicalOrbit {
                 .orElseGet(() -> new LeavingOrbit(v, position, momentum));
     }
 
+    /** The orbit through the given point at time 0 in a potential on the whole axis that moves. */
+    static ClassicalOrbit driven(MovingSlope slope, double position, double momentum) {
+        return new LeavingOrbit(slope, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, position, momentum);
+    }
+
     /**
      * The period of the motion at an energy that passes a position.
      *

@@ -4,7 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 
 /**
- * Motion that leaves to an open side: a symplectic integrator of order 4 with fixed steps, kept as far as it was asked for; a wall
+ * Motion that leaves to an open side, or in a potential that moves: a symplectic integrator of order 4 with fixed steps, kept as far as it was asked for; a wall
  * reflects. Beyond {@value #MOST} steps the particle is taken to be free.
  *
  * @source E. Forest and R. D. Ruth, Physica D 43 (1990) 105
@@ -14,12 +14,20 @@ final class LeavingOrbit implements ClassicalOrbit {
     private static final double STEP = 5e-3;
     private static final double ROOT = 1 / (2 - Math.cbrt(2));
 
-    private final Landscape v;
+    private final MovingSlope slope;
+    private final double left;
+    private final double right;
     private final List<double[]> points = new ArrayList<>();
 
     LeavingOrbit(Landscape v, double position, double momentum) {
-        this.v = v;
-        points.add(new double[] {position, momentum});
+        this((x, t) -> v.slope(x), v.left(), v.right(), position, momentum);
+    }
+
+    LeavingOrbit(MovingSlope slope, double left, double right, double position, double momentum) {
+        this.slope = slope;
+        this.left = left;
+        this.right = right;
+        points.add(new double[] {position, momentum, 0});
     }
 
     private synchronized double[] at(double time) {
@@ -60,17 +68,18 @@ final class LeavingOrbit implements ClassicalOrbit {
 
     private void drift(double[] point, double h) {
         point[0] += h * point[1];
-        if (point[0] < v.left()) {
-            point[0] = 2 * v.left() - point[0];
+        point[2] += h;
+        if (point[0] < left) {
+            point[0] = 2 * left - point[0];
             point[1] = -point[1];
-        } else if (point[0] > v.right()) {
-            point[0] = 2 * v.right() - point[0];
+        } else if (point[0] > right) {
+            point[0] = 2 * right - point[0];
             point[1] = -point[1];
         }
     }
 
     private void kick(double[] point, double h) {
-        point[1] -= h * v.slope(point[0]);
+        point[1] -= h * slope.at(point[0], point[2]);
     }
 
     @Override
@@ -85,11 +94,11 @@ final class LeavingOrbit implements ClassicalOrbit {
 
     @Override
     public double turningPoint() {
-        return Math.min(v.right(), Double.MAX_VALUE);
+        return Math.min(right, Double.MAX_VALUE);
     }
 
     @Override
     public double leftTurningPoint() {
-        return Math.max(v.left(), -Double.MAX_VALUE);
+        return Math.max(left, -Double.MAX_VALUE);
     }
 }

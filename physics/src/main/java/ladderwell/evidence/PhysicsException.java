@@ -129,8 +129,12 @@ public abstract sealed class PhysicsException extends RuntimeException {
          * @param remedy what to try: "lower the mean, or make the well deeper or wider"
          */
         public NotCarried(String state, double missingWeight, int levels, String remedy) {
-            super(state + " needs weight " + Digits.significant(missingWeight, 2) + " above the last bound level (n = "
-                    + (levels - 1) + "); the bound levels cannot carry it: " + remedy);
+            super(
+                    levels == 0
+                            ? state + " needs bound levels, and there are none: " + remedy
+                            : state + " needs weight " + Digits.significant(missingWeight, 2)
+                                    + " above the last bound level (n = " + (levels - 1)
+                                    + "); the bound levels cannot carry it: " + remedy);
             this.state = state;
             this.missingWeight = missingWeight;
             this.levels = levels;

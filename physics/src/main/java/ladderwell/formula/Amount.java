@@ -1,5 +1,6 @@
 package ladderwell.formula;
 
+import java.util.Map;
 import ladderwell.quantity.Constants;
 import ladderwell.quantity.Digits;
 import ladderwell.quantity.Kind;
@@ -44,7 +45,7 @@ public record Amount(double value, Dimension dimension) {
      * @throws FormulaException if the text is no constant expression
      */
     public static Amount read(String text) {
-        Parser.Result read = new Parser(text, Parameters.none(), false, false).parse();
+        Parser.Result read = new Parser(text, Parameters.none(), false, Map.of()).parse();
         double value = read.node().value(0, 0);
         if (!Double.isFinite(value)) {
             throw new FormulaException("'" + text.strip() + "' is not a finite number", text, 0, text.length());

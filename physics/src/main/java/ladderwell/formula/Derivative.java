@@ -65,7 +65,7 @@ final class Derivative {
             case MAX -> chosen(node, Op.MAX);
             case GAUSS -> bell(node);
             case IF -> call(Op.IF, a, of(b), of(node.args[2]));
-            case CONSTANT, PARAMETER, WHOLE_POWER, SIGN, STEP, LESS, LESS_EQUAL, AND, OR -> Node.ZERO;
+            case CONSTANT, PARAMETER, LETTER, WHOLE_POWER, SIGN, STEP, LESS, LESS_EQUAL, AND, OR -> Node.ZERO;
         };
     }
 

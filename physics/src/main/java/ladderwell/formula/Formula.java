@@ -90,7 +90,7 @@ public final class Formula {
      * @throws FormulaException if the text is no formula
      */
     public static Formula lab(String text, Parameters parameters) {
-        Parser.Result read = new Parser(text, parameters, false, true).parse();
+        Parser.Result read = new Parser(text, parameters, false, Parser.LAB_COORDINATES).parse();
         return new Formula(text.strip(), read.node(), read.dimension(), false, read.hazards(), read.parameters());
     }
 
@@ -107,8 +107,13 @@ public final class Formula {
                         + amount.dimension().word());
             }
         });
-        Parser.Result read = new Parser(text, parameters, true, true).parse();
+        Parser.Result read = new Parser(text, parameters, true, Parser.NATURAL_COORDINATES).parse();
         return new Formula(text.strip(), read.node(), Dimension.NONE, true, read.hazards(), read.parameters());
+    }
+
+    /** A function of t alone, made by the reader of operator formulas; what it measures is known of the whole formula only. */
+    static Formula factor(Node node, boolean natural, List<Hazard> hazards, Set<String> parameters) {
+        return new Formula(Writer.text(node), node, Dimension.NONE, natural, hazards, parameters);
     }
 
     /** The functions as they are written, such as "gauss(x, centre, width)"; for completion and help. */
@@ -185,6 +190,30 @@ public final class Formula {
         return new Formula(Writer.text(derived), derived, dimension.over(by), natural, hazards, parameters);
     }
 
+    /** True if both are the same function, written the same way with the same numbers; very long formulas never are. */
+    public boolean isSame(Formula other) {
+        return natural == other.natural && Node.same(node, other.node, new int[] {4000});
+    }
+
+    /**
+     * The product of two formulas.
+     *
+     * @throws IllegalArgumentException if only one of them is natural
+     */
+    public Formula times(Formula other) {
+        if (natural != other.natural) {
+            throw new IllegalArgumentException("a formula in lab units and one in natural units have no product: '"
+                    + text + "' and '" + other.text + "'");
+        }
+        Node product = Algebra.multiply(node, other.node);
+        List<Hazard> both = new ArrayList<>(hazards);
+        both.addAll(other.hazards);
+        Set<String> all = new TreeSet<>(parameters);
+        all.addAll(other.parameters);
+        return new Formula(
+                Writer.text(product), product, dimension.times(other.dimension), natural, List.copyOf(both), all);
+    }
+
     /** dV/dx; the classical force is its negative. */
     public Formula slope() {
         return derivative(Variable.POSITION);
@@ -205,6 +234,18 @@ public final class Formula {
             moved.add(new Hazard(scaling.of(hazard.argument()), hazard.words(), hazard.start(), hazard.end()));
         }
         return new Formula(Writer.text(scaled), scaled, Dimension.NONE, true, List.copyOf(moved), parameters);
+    }
+
+    /** The formula at one time, as a function of x alone. */
+    public Formula at(double time) {
+        if (!dependsOnTime()) {
+            return this;
+        }
+        List<Hazard> then = new ArrayList<>();
+        for (Hazard hazard : hazards) {
+            then.add(new Hazard(Scaling.at(time, hazard.argument()), hazard.words(), hazard.start(), hazard.end()));
+        }
+        return new Formula(text, Scaling.at(time, node), dimension, natural, List.copyOf(then), parameters);
     }
 
     /** True for a polynomial in x with coefficients that do not depend on t. */
@@ -258,6 +299,17 @@ public final class Formula {
             breaks.add(new Break(at[i], kind(slope, at[i], gap, t)));
         }
         return List.copyOf(breaks);
+    }
+
+    /**
+     * Times in (from, to) where the formula at x = 0, its rate of change or a higher derivative may jump; found as in
+     * {@link #breaks(double, double, double)}. For factors f(t).
+     *
+     * @throws IllegalArgumentException for more than 1000 breaks or an empty range
+     */
+    public double[] breakTimes(double from, double to) {
+        requireRange(from, to);
+        return BreakSearch.of(Scaling.alongTime(node), 0, from, to);
     }
 
     /**

@@ -1,6 +1,7 @@
 package ladderwell.formula;
 
 import java.util.ArrayList;
+import java.util.Collection;
 import java.util.List;
 import java.util.Locale;
 import ladderwell.quantity.Units;
@@ -10,7 +11,8 @@ final class Names {
 
     private Names() {}
 
-    static String unknown(String name, boolean called, boolean natural, boolean variables, Parameters parameters) {
+    static String unknown(
+            String name, boolean called, boolean natural, Collection<String> variables, Parameters parameters) {
         List<String> functions = new ArrayList<>();
         for (Op op : Op.values()) {
             if (op.isFunction()) {
@@ -26,10 +28,7 @@ final class Names {
                     + " such as 1 " + name;
         }
         List<String> known = new ArrayList<>(parameters.values().keySet());
-        if (variables) {
-            known.add("x");
-            known.add("t");
-        }
+        known.addAll(variables);
         known.add("pi");
         known.add("hbar");
         List<String> all = new ArrayList<>(known);

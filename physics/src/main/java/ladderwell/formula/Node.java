@@ -5,6 +5,13 @@ final class Node {
 
     static final int USES_X = 1;
     static final int USES_T = 2;
+    /** Letters of operator formulas, the imaginary unit among them; only {@link OperatorExpression} reads trees with these. */
+    static final int USES_LETTER = 4;
+    /** Letters that are operators. */
+    static final int USES_LADDER = 8;
+    /** The letter of the imaginary unit. */
+    static final String IMAGINARY = "i";
+
     private static final Node[] LEAF = {};
 
     final Op op;
@@ -12,9 +19,9 @@ final class Node {
     final Node[] args;
     /** Of constants and parameters. */
     final double value;
-    /** Of parameters. */
+    /** Of parameters and letters. */
     final String name;
-    /** {@link #USES_X} and {@link #USES_T}. */
+    /** {@link #USES_X}, {@link #USES_T}, {@link #USES_LETTER} and {@link #USES_LADDER}. */
     final int uses;
     /** Longest way down to a leaf. */
     final int depth;
@@ -25,6 +32,9 @@ final class Node {
         this.name = name;
         this.args = args;
         int used = op == Op.X ? USES_X : op == Op.T ? USES_T : 0;
+        if (op == Op.LETTER) {
+            used = name.equals(IMAGINARY) ? USES_LETTER : USES_LETTER | USES_LADDER;
+        }
         int deepest = 0;
         for (Node arg : args) {
             used |= arg.uses;
@@ -47,6 +57,10 @@ final class Node {
         return new Node(Op.PARAMETER, value, name, LEAF);
     }
 
+    static Node letter(String name) {
+        return new Node(Op.LETTER, 0, name, LEAF);
+    }
+
     static Node of(Op op, Node... args) {
         return new Node(op, 0, "", args);
     }
@@ -59,7 +73,7 @@ final class Node {
         return op == Op.CONSTANT && value == number;
     }
 
-    /** True where neither x nor t occurs. */
+    /** True where neither x nor t nor a letter occurs. */
     boolean isFixed() {
         return uses == 0;
     }
@@ -70,6 +84,34 @@ final class Node {
 
     boolean usesT() {
         return (uses & USES_T) != 0;
+    }
+
+    boolean usesLetter() {
+        return (uses & USES_LETTER) != 0;
+    }
+
+    boolean usesLadder() {
+        return (uses & USES_LADDER) != 0;
+    }
+
+    /** Whether two trees are the same, number by number; counts down the nodes that may be looked at. */
+    static boolean same(Node a, Node b, int[] budget) {
+        if (a == b) {
+            return true;
+        }
+        if (--budget[0] < 0
+                || a.op != b.op
+                || a.args.length != b.args.length
+                || Double.compare(a.value, b.value) != 0
+                || !a.name.equals(b.name)) {
+            return false;
+        }
+        for (int i = 0; i < a.args.length; i++) {
+            if (!same(a.args[i], b.args[i], budget)) {
+                return false;
+            }
+        }
+        return true;
     }
 
     /** The value at one point, by walking the tree; for the rare points where no compiled program is at hand. */

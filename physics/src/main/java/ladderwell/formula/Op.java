@@ -8,6 +8,8 @@ enum Op {
     PARAMETER,
     X,
     T,
+    /** An operator or the imaginary unit, in operator formulas. */
+    LETTER,
     ADD,
     MULTIPLY,
     DIVIDE,

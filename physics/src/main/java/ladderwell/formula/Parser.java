@@ -7,7 +7,10 @@ import static ladderwell.formula.Algebra.multiply;
 import static ladderwell.formula.Algebra.negate;
 
 import java.util.ArrayList;
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
@@ -33,6 +36,15 @@ final class Parser {
 
     private static final Set<String> WORDS = Set.of("x", "t", "pi", "hbar", "and", "or");
 
+    /** What a name other than a parameter stands for. */
+    record Leaf(Node node, Dimension dimension) {}
+
+    /** Position and time in natural units. */
+    static final Map<String, Leaf> NATURAL_COORDINATES = coordinates(Dimension.NONE, Dimension.NONE);
+
+    /** Position and time in lab units. */
+    static final Map<String, Leaf> LAB_COORDINATES = coordinates(Dimension.LENGTH, Dimension.TIME);
+
     /** A part that has no value for some arguments. */
     record Hazard(Node argument, String words, int start, int end) {}
 
@@ -45,7 +57,7 @@ final class Parser {
     private final String text;
     private final Parameters parameters;
     private final boolean natural;
-    private final boolean variables;
+    private final Map<String, Leaf> variables;
     private final List<Token> tokens;
     private final List<Hazard> hazards = new ArrayList<>();
     private final Set<String> used = new TreeSet<>();
@@ -56,9 +68,9 @@ final class Parser {
      * A reader of one formula.
      *
      * @param natural numbers without units, ħ = 1
-     * @param variables whether x and t may occur
+     * @param variables the names that are neither parameters nor constants, in the order to tell them in
      */
-    Parser(String text, Parameters parameters, boolean natural, boolean variables) {
+    Parser(String text, Parameters parameters, boolean natural, Map<String, Leaf> variables) {
         this.text = text;
         this.parameters = parameters;
         this.natural = natural;
@@ -71,6 +83,13 @@ final class Parser {
                     text.length());
         }
         tokens = Token.read(text);
+    }
+
+    private static Map<String, Leaf> coordinates(Dimension position, Dimension time) {
+        Map<String, Leaf> both = new LinkedHashMap<>();
+        both.put("x", new Leaf(Node.X, position));
+        both.put("t", new Leaf(Node.T, time));
+        return Collections.unmodifiableMap(both);
     }
 
     static boolean isTaken(String name) {
@@ -142,6 +161,8 @@ final class Parser {
             Part right = sum();
             value(left);
             value(right);
+            scalar(left, "a comparison");
+            scalar(right, "a comparison");
             if (!left.dimension.fits(right.dimension)) {
                 throw new FormulaException(
                         left.dimension.word() + " cannot be compared with " + right.dimension.word(),
@@ -209,6 +230,7 @@ final class Parser {
                 factors.add(right.node);
                 dimension = combined(Dimension::times, dimension, right, first.start);
             } else {
+                scalar(right, "a divisor");
                 hazard(right.node, "the divisor", right.start, right.end);
                 Node above = multiply(factors.toArray(new Node[0]));
                 factors.clear();
@@ -264,6 +286,10 @@ final class Parser {
         value(base);
         value(exponent);
         plain(exponent, "an exponent");
+        scalar(exponent, "an exponent");
+        if (base.node.usesLetter()) {
+            operatorPower(exponent);
+        }
         Dimension dimension;
         if (base.dimension.isNone() && !base.dimension.equals(Dimension.ANY)) {
             dimension = Dimension.NONE;
@@ -290,6 +316,16 @@ final class Parser {
         }
         Node node = Algebra.power(base.node, exponent.node);
         return new Part(deep(node, base.start, exponent.end), dimension, false, base.start, exponent.end);
+    }
+
+    private void operatorPower(Part exponent) {
+        double value = exponent.node.isFixed() ? exponent.node.value(0, 0) : Double.NaN;
+        if (!(value >= 0 && value <= Polynomial.HIGHEST && value == Math.rint(value))) {
+            throw error(
+                    "an operator is raised to a whole power from 0 to " + Polynomial.HIGHEST
+                            + (exponent.node.isFixed() ? "" : ", one that does not vary"),
+                    exponent);
+        }
     }
 
     private void notSideBySide() {
@@ -365,7 +401,8 @@ final class Parser {
     }
 
     private boolean isDeclared(String name) {
-        return isTaken(name) && (variables || !name.equals("x") && !name.equals("t"))
+        return variables.containsKey(name)
+                || isTaken(name) && !name.equals("x") && !name.equals("t")
                 || parameters.values().containsKey(name);
     }
 
@@ -389,6 +426,11 @@ final class Parser {
     private Part leaf(Token token) {
         String name = token.text();
         Amount amount = parameters.values().get(name);
+        Leaf variable = variables.get(name);
+        if (amount != null && variable != null) {
+            throw error(
+                    "'" + name + "' is an operator here and also a parameter; give the parameter another name", token);
+        }
         if (amount != null) {
             used.add(name);
             return part(
@@ -396,11 +438,8 @@ final class Parser {
                     Node.parameter(name, amount.value()),
                     amount.value() == 0 && amount.dimension().isNone() ? Dimension.ANY : amount.dimension());
         }
-        if (variables && name.equals("x")) {
-            return part(token, Node.X, natural ? Dimension.NONE : Dimension.LENGTH);
-        }
-        if (variables && name.equals("t")) {
-            return part(token, Node.T, natural ? Dimension.NONE : Dimension.TIME);
+        if (variable != null) {
+            return part(token, variable.node, variable.dimension);
         }
         if (name.equals("pi") || name.equals("π")) {
             return part(token, Node.constant(Math.PI), Dimension.NONE);
@@ -410,7 +449,7 @@ final class Parser {
                     ? part(token, Node.ONE, Dimension.NONE)
                     : part(token, Node.parameter("hbar", Constants.HBAR), Dimension.ACTION);
         }
-        throw error(Names.unknown(name, peek().is("("), natural, variables, parameters), token);
+        throw error(Names.unknown(name, peek().is("("), natural, variables.keySet(), parameters), token);
     }
 
     private Part part(Token token, Node node, Dimension dimension) {
@@ -456,6 +495,10 @@ final class Parser {
                     name + " takes at most " + MOST_CHOICES + " values, not " + args.size(), text, token.start(), end);
         }
         Dimension dimension = check(op, args);
+        // exp of an imaginary number is a rotating factor; all else is real
+        if (op != Op.EXP || args.get(0).node.usesLadder()) {
+            args.forEach(arg -> scalar(arg, name));
+        }
         hazards(op, args);
         Node[] nodes = args.stream().map(Part::node).toArray(Node[]::new);
         return new Part(deep(call(op, nodes), token.start(), end), dimension, false, token.start(), end);
@@ -535,6 +578,15 @@ final class Parser {
     private void value(Part part) {
         if (part.condition) {
             throw error("this is a condition, which has a place only in if(condition, value, value)", part);
+        }
+    }
+
+    private void scalar(Part part, String where) {
+        if (part.node.usesLetter()) {
+            throw error(
+                    where + " takes real numbers, parameters and t, and '" + text.substring(part.start, part.end) + "' "
+                            + (part.node.usesLadder() ? "holds an operator" : "is not real"),
+                    part);
         }
     }
 

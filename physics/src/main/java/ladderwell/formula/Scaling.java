@@ -19,6 +19,11 @@ final class Scaling {
         this(Algebra.multiply(Node.constant(length), Node.X), Algebra.multiply(Node.constant(time), Node.T));
     }
 
+    /** The tree at x = 0 as a function of x in place of t: time is walked along like position. */
+    static Node alongTime(Node node) {
+        return new Scaling(Node.ZERO, Node.X).of(node);
+    }
+
     /** The tree at one time. */
     static Node at(double time, Node node) {
         return node.usesT() ? new Scaling(Node.X, Node.constant(time)).of(node) : node;

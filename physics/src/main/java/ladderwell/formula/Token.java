@@ -54,6 +54,10 @@ record Token(Kind kind, String text, int start, int end) {
                 while (end < text.length() && isNamePart(text.charAt(end))) {
                     end++;
                 }
+                // the dagger belongs to the one letter that carries it
+                if (c == 'a' && end == i + 1 && end < text.length() && text.charAt(end) == '†') {
+                    end++;
+                }
                 tokens.add(new Token(Kind.NAME, text.substring(i, end), i, end));
             } else {
                 end = i + (c == '<' || c == '>' ? equalsAfter(text, i) : 1);

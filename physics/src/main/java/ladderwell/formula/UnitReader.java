@@ -81,6 +81,21 @@ final class UnitReader {
         String name = token.text();
         Optional<Unit> unit = unit(name);
         boolean isHbar = isHbar(name);
+        if (unit.isEmpty()
+                && !isHbar
+                && !declared.test(name)
+                && tokens.get(at + 1).is("/")) {
+            // units with a prefix only as a whole: Mrad/s
+            Optional<Unit> whole = unit(name + "/" + tokens.get(at + 2).text());
+            if (whole.isPresent()) {
+                value = whole.orElseThrow().toSi(value)
+                        * Amount.factor(whole.orElseThrow().kind());
+                dimension = dimensionOf(whole.orElseThrow(), token);
+                at += 3;
+                lone = false;
+                return;
+            }
+        }
         if (unit.isEmpty() && !isHbar) {
             String near = declared.test(name)
                     ? ""

@@ -44,7 +44,7 @@ final class Writer {
         switch (node.op) {
             case CONSTANT ->
                 out.append(Double.isFinite(node.value) ? Digits.shortest(node.value) : String.valueOf(node.value));
-            case PARAMETER, X, T -> out.append(node.name);
+            case PARAMETER, X, T, LETTER -> out.append(node.name);
             case ADD -> sum(node);
             case MULTIPLY -> list(node, "*", 6);
             case DIVIDE -> pair(node, 5, "/", 6);

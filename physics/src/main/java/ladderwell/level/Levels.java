@@ -9,7 +9,14 @@ import ladderwell.evidence.Bound;
  * <p>Levels are computed when asked for; making a {@code Levels} of a very deep well costs nothing per level.
  */
 public sealed interface Levels
-        permits HarmonicLevels, BoxLevels, WellLevels, PolynomialLevels, ShootingLevels, CircleLevels, UncertainLevels {
+        permits HarmonicLevels,
+                BoxLevels,
+                WellLevels,
+                PolynomialLevels,
+                ShootingLevels,
+                CircleLevels,
+                UncertainLevels,
+                NoLevels {
 
     /** Harmonic levels E_n = n + 1/2; x² / 2 is the potential. */
     static Levels harmonic() {
@@ -47,6 +54,11 @@ public sealed interface Levels
      */
     static Levels of(PotentialCurve curve) {
         return new ShootingLevels(curve);
+    }
+
+    /** No levels at all: of a potential that binds nothing. */
+    static Levels none() {
+        return new NoLevels();
     }
 
     /**

@@ -19,10 +19,13 @@ final class FormulaPotential implements Potential {
     private final double edge;
     private final double[] breaks;
     private final boolean even;
+    private final boolean confines;
     private final Scale scale;
     private final String text;
 
-    private FormulaPotential(Formula source, Scale scale, double left, double right, double minimum, double edge) {
+    private FormulaPotential(
+            Formula source, Scale scale, double left, double right, double minimum, double edge, boolean confines) {
+        this.confines = confines;
         double l = scale.length();
         formula = scale.isNatural() ? source : source.scaled(l, scale.time(), scale.energy());
         slope = formula.slope();
@@ -43,7 +46,7 @@ final class FormulaPotential implements Potential {
         double far = 1e3 * scale.length();
         requireValues(formula, -far, far);
         return new FormulaPotential(
-                formula, scale, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, 0, Double.POSITIVE_INFINITY);
+                formula, scale, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, 0, Double.POSITIVE_INFINITY, false);
     }
 
     static FormulaPotential of(Formula formula, Given given, double left, double right) {
@@ -86,7 +89,7 @@ final class FormulaPotential implements Potential {
         double length = given.isNatural() ? survey.length(kinetic) : scale.length();
         requireValues(formula, survey, left, right, length);
         requireStable(v, left, right, length, kinetic);
-        return new FormulaPotential(formula, scale, left, right, survey.minimum(), edge);
+        return new FormulaPotential(formula, scale, left, right, survey.minimum(), edge, true);
     }
 
     private static void requireStatic(Formula formula, Given given) {
@@ -224,6 +227,11 @@ final class FormulaPotential implements Potential {
     @Override
     public double edge() {
         return edge;
+    }
+
+    @Override
+    public boolean confines() {
+        return confines;
     }
 
     @Override

@@ -92,6 +92,11 @@ public sealed interface Potential
         return OptionalInt.empty();
     }
 
+    /** False where it was declared as one that need not confine anything; such a potential has no levels here. */
+    default boolean confines() {
+        return true;
+    }
+
     /** What 1 means. */
     Scale scale();
 

@@ -2,6 +2,7 @@ package ladderwell.state;
 
 import java.util.Locale;
 import ladderwell.evidence.Certainty;
+import ladderwell.evidence.PhysicsException;
 import ladderwell.level.Levels;
 
 /**
@@ -178,6 +179,10 @@ public final class Amplitudes {
      */
     public static Amplitudes expanded(Levels levels, Shape shape, double tolerance) {
         checkTolerance(tolerance);
+        if (levels.count() == 0) {
+            throw new PhysicsException.NotCarried(
+                    "the state", 1, 0, "the potential binds nothing; expected one that confines");
+        }
         return new ShapeState(levels, shape, tolerance).expand();
     }
 

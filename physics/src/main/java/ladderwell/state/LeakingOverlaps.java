@@ -5,6 +5,7 @@ import java.util.List;
 import ladderwell.level.Levels;
 import ladderwell.level.StandingWave;
 import ladderwell.numeric.DoubleDouble;
+import ladderwell.numeric.LegendreRule;
 
 /**
  * Overlaps ∫ g φ_n of a packet with well levels by Gauss–Legendre panels, the walls between panels and the exponential tails included.

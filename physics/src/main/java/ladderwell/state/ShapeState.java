@@ -8,6 +8,7 @@ import ladderwell.evidence.Certainty;
 import ladderwell.evidence.PhysicsException;
 import ladderwell.level.Levels;
 import ladderwell.numeric.Interruption;
+import ladderwell.numeric.LegendreRule;
 
 /**
  * Expands any {@link Shape} in any levels: overlaps by Gauss–Legendre panels, block by block away from the mean energy until what falls

@@ -386,4 +386,43 @@ class FormulaTest {
         assertEquals(formula.value(x, t), sum, 1e-14 * Math.pow(x + Math.sin(t), 12));
         assertEquals(61, natural("(x + sin(t))^60").coefficients().orElseThrow().size());
     }
+
+    @Test
+    void breaksInTimeAreFoundAsInPosition() {
+        Formula pulse = natural("step(t - 1) - step(t - 1.5) + abs(sin(t))");
+        double[] times = pulse.breakTimes(0.5, 4);
+        assertEquals(3, times.length);
+        assertEquals(1, times[0], 1e-15);
+        assertEquals(1.5, times[1], 1e-15);
+        assertEquals(Math.PI, times[2], 1e-14);
+        assertEquals(0, natural("x + cos(t)").breakTimes(0, 10).length);
+        assertThrows(IllegalArgumentException.class, () -> pulse.breakTimes(1, 1));
+    }
+
+    @Test
+    void productsAndSamenessGoByTheTree() {
+        Parameters two = Parameters.none().with("w", "2");
+        Parameters three = Parameters.none().with("w", "3");
+        Formula a = Formula.natural("cos(w*t)", two);
+        Formula b = Formula.natural("cos(w*t)", three);
+        assertTrue(a.isSame(Formula.natural(" cos(w * t) ", two)));
+        assertTrue(!a.isSame(b));
+        assertEquals(Math.cos(2 * 0.4) * Math.cos(3 * 0.4), a.times(b).value(0, 0.4), 1e-16);
+        Formula rate = Formula.lab("3 MHz", Parameters.none());
+        Formula time = Formula.lab("t", Parameters.none());
+        assertEquals(Dimension.NONE, rate.times(time).dimension());
+        assertThrows(IllegalArgumentException.class, () -> a.times(rate));
+    }
+
+    @Test
+    void prefixedAnglesPerTimeAreUnits() {
+        assertEquals(
+                7e6, Formula.lab("7 Mrad/s", Parameters.none(), Dimension.RATE).value(0), 1e-9);
+        assertEquals(7e6, Amount.read("7 Mrad/s").value(), 1e-9);
+        assertEquals(
+                14,
+                Formula.lab("7 Mrad/s*(2 us)", Parameters.none(), Dimension.NONE)
+                        .value(0),
+                1e-14);
+    }
 }

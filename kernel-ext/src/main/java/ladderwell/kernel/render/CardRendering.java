@@ -50,7 +50,7 @@ final class CardRendering {
         lines.add(Line.words("duration", duration(run)));
         lines.add(Line.words("frames", Long.toString(run.evolution().frames())));
         lines.add(Line.words("method", run.method()));
-        lines.add(Line.words("levels kept", Long.toString(run.amplitudes().levels())));
+        lines.add(Line.words("kept", run.size()));
         Bound error = run.stateError();
         String size = "≤ " + (error.isKnown() ? Digits.pretty(Digits.upward(error.size(), 2)) : "unknown");
         lines.add(new Line(

@@ -1,16 +1,14 @@
-package ladderwell.state;
-
-import ladderwell.numeric.DoubleDouble;
+package ladderwell.numeric;
 
 /**
  * Nodes and weights of the Gauss–Legendre rule on [−1, 1], by Newton's iteration on the Legendre polynomial in double-double: each is
  * right to its last place.
  */
-final class LegendreRule {
+public final class LegendreRule {
     private LegendreRule() {}
 
-    /** {nodes, weights} of the rule with n nodes, n even. */
-    static double[][] of(int n) {
+    /** {nodes, weights} of the rule with n nodes, n even; a new pair each time. */
+    public static double[][] of(int n) {
         double[] nodes = new double[n];
         double[] weights = new double[n];
         for (int i = 0; i < n / 2; i++) {

@@ -12,14 +12,14 @@ import ladderwell.numeric.Workers;
 import org.jspecify.annotations.Nullable;
 
 /** What each observable means for a state that moves by phases; every part is computed once, when first asked for. */
-final class Readings {
+final class LevelReadings {
     private final Oscillator oscillator;
     private final PhasedState state;
     private @Nullable Means means;
     private @Nullable Returns returns;
     private @Nullable Populations populations;
 
-    Readings(Oscillator oscillator, PhasedState state) {
+    LevelReadings(Oscillator oscillator, PhasedState state) {
         this.oscillator = oscillator;
         this.state = state;
     }
