@@ -44,6 +44,10 @@ public final class GridFrame {
         }
     }
 
+    Wave wave() {
+        return wave;
+    }
+
     /** Its grid. */
     public Grid grid() {
         return wave.grid;

@@ -143,7 +143,7 @@ public final class GridMotion {
                 int whole = Math.max(1, (int) wanted);
                 pair.move(times[j - 1], whole, length / whole);
                 steps = pair.steps();
-                floor = pair.leakedSoFar() + ROUNDING * steps;
+                floor = pair.leaked() + ROUNDING * steps;
                 error = Math.max(error, pair.difference() / SHARE + floor);
                 if (error > tolerance) {
                     // what it would have become

@@ -14,6 +14,8 @@ final class Pair {
     private Wave fine;
     private SplitStep whole;
     private SplitStep half;
+    private double high;
+    private double side;
     private double leaked;
     private long steps;
 
@@ -28,7 +30,6 @@ final class Pair {
         fine = start.copy();
         whole = new SplitStep(start.grid, field, h);
         half = new SplitStep(start.grid, field, h / 2);
-        growInPosition();
     }
 
     /** The wave of the half steps. */
@@ -40,29 +41,46 @@ final class Pair {
         return coarse.distance(fine);
     }
 
+    /** What the edges of all grids so far may have taken or turned back. */
+    double leaked() {
+        return leaked + Math.sqrt(high) + Math.sqrt(side);
+    }
+
     /** Half steps taken. */
     long steps() {
         return steps;
     }
 
-    /** Moves both over a time in equal steps. */
+    /** Moves both over a time in equal steps. A step that comes too near an edge is taken back and done again on a larger grid. */
     void move(double from, int wholeSteps, double h) {
         // equal steps of a run differ in their last bits
         if (Math.abs(h - whole.h()) > 1e-12 * h) {
             steps(h);
         }
+        Wave coarseBefore = coarse.copy();
+        Wave fineBefore = fine.copy();
         for (int s = 0; s < wholeSteps; s++) {
-            Interruption.check();
             double t = from + s * h;
-            whole.step(coarse, t);
-            double high = half.step(fine, t);
-            high = Math.max(high, half.step(fine, t + h / 2));
-            steps += 2;
-            if (high > still) {
-                leaked += Math.sqrt(high);
-                refine();
+            while (true) {
+                Interruption.check();
+                double waves = whole.step(coarse, t);
+                waves = Math.max(waves, Math.max(half.step(fine, t), half.step(fine, t + h / 2)));
+                steps += 2;
+                double left = fine.weightOnTheLeft();
+                double right = fine.weightOnTheRight();
+                if (Math.max(waves, Math.max(left, right)) <= still) {
+                    high = Math.max(high, waves);
+                    side = Math.max(side, left + right);
+                    break;
+                }
+                coarse = coarseBefore;
+                fine = fineBefore;
+                grow(waves > still, left > still, right > still);
+                coarseBefore = coarse.copy();
+                fineBefore = fine.copy();
             }
-            growInPosition();
+            coarseBefore.take(coarse);
+            fineBefore.take(fine);
         }
     }
 
@@ -71,29 +89,21 @@ final class Pair {
         half = new SplitStep(fine.grid, field, h / 2);
     }
 
-    private void growInPosition() {
-        double left = fine.weightOnTheLeft();
-        double right = fine.weightOnTheRight();
-        if (left <= still && right <= still) {
-            return;
+    private void grow(boolean waves, boolean left, boolean right) {
+        leaked = leaked();
+        high = 0;
+        side = 0;
+        if (waves) {
+            requireRoom();
+            coarse = coarse.finer();
+            fine = fine.finer();
         }
-        leaked += Math.sqrt(Math.max(left, right));
-        requireRoom();
-        Grid longer = fine.grid.longer(left > still, right > still);
-        coarse = coarse.onto(longer);
-        fine = fine.onto(longer);
-        steps(whole.h());
-    }
-
-    /** What may have passed the edges by now, those of this moment included. */
-    double leakedSoFar() {
-        return leaked + Math.sqrt(fine.weightOnTheLeft() + fine.weightOnTheRight());
-    }
-
-    private void refine() {
-        requireRoom();
-        coarse = coarse.finer();
-        fine = fine.finer();
+        if (left || right) {
+            requireRoom();
+            Grid longer = fine.grid.longer(left, right);
+            coarse = coarse.onto(longer);
+            fine = fine.onto(longer);
+        }
         steps(whole.h());
     }
 

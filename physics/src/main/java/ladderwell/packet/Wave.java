@@ -22,6 +22,12 @@ final class Wave {
         return new Wave(grid, re.clone(), im.clone());
     }
 
+    /** Takes over the values of another wave on the same grid. */
+    void take(Wave other) {
+        System.arraycopy(other.re, 0, re, 0, re.length);
+        System.arraycopy(other.im, 0, im, 0, im.length);
+    }
+
     double weight(int from, int to) {
         double sum = 0;
         for (int j = from; j < to; j++) {
