@@ -20,7 +20,8 @@ final class DensityReading {
     /** Height of the last wave function at the edge of the grid. */
     private static final double DROP = 1e-4;
 
-    private static final double INVISIBLE = 1e-6;
+    /** Less of a state than this cannot be seen beside the rest. */
+    private static final double INVISIBLE = 1e-4;
 
     private DensityReading() {}
 

@@ -1,5 +1,6 @@
 package ladderwell;
 
+import static ladderwell.quantity.Units.ANGSTROM;
 import static ladderwell.quantity.Units.ATOMIC_MASS;
 import static ladderwell.quantity.Units.ONE;
 import static ladderwell.quantity.Units.PERIOD;
@@ -250,6 +251,28 @@ class PotentialWellTest {
                         .evolve(1, ONE)
                         .run());
         assertTrue(refused.missingWeight() > 0.1);
+    }
+
+    @Test
+    void whatLiesAboveTheEdgeIsNeverMissedHoweverLittleItIs() {
+        // 1 − Σ |overlap|² with Laguerre functions summed to 40 digits; the sum of double overlaps shows no less than 1e-13.
+        PotentialWell soft = Oscillator.in(Potential.morseFromLevels(
+                Quantity.of(0.9796, ATOMIC_MASS), Quantity.of(2460, PER_CENTIMETRE), Quantity.of(48, PER_CENTIMETRE)));
+        aboveTheEdge(soft, -0.12, 2.79199814757e-8);
+        aboveTheEdge(soft, -0.06, 1.30206373002e-11);
+        aboveTheEdge(soft, -0.04, 3.03295740224e-12);
+        aboveTheEdge(soft, 0.02, 3.87916374255e-12);
+        aboveTheEdge(HCL, 0.15, 1.1297716822e-15);
+        aboveTheEdge(HCL, 0.10, 3.24297269157e-17);
+    }
+
+    private static void aboveTheEdge(PotentialWell well, double shift, double weight) {
+        Amplitudes amplitudes =
+                well.groundOf(HCL).shifted(Quantity.of(shift, ANGSTROM)).amplitudes(0.01);
+        double claimed = amplitudes.normError();
+        assertTrue(claimed > Math.sqrt(weight) * (1 - 1e-6), shift + " Å: " + claimed);
+        // An estimate from the fall of the last levels may be ten times too careful, not more.
+        assertTrue(claimed < 10 * Math.sqrt(weight), shift + " Å: " + claimed);
     }
 
     @Test

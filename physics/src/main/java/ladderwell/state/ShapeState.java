@@ -24,6 +24,9 @@ final class ShapeState {
 
     private static final double RADIANS = 6;
 
+    /** Levels within as many spacings of a level count in full among those that its error mixes in. */
+    private static final double MIXED = 4;
+
     /** Σ|c|² misses 1 by as much through rounding alone. */
     private static final double NOISE = 2e-14;
 
@@ -173,22 +176,73 @@ final class ShapeState {
     }
 
     /**
-     * What errors of the wave functions do to the overlaps: a wrong function is its right one with a little of its neighbours in it, so that
-     * its overlap errs by that share of what the neighbours hold.
+     * What errors of the wave functions do to the overlaps. A wrong function is its right one with a little of the others in it; by first-order
+     * perturbation theory a level k takes part in it as gap / |E_n − E_k|, so that the overlap errs by the sum of what these levels hold.
      */
     private double functionErrors() {
         double extent = Math.sqrt(shape.right() - shape.left());
-        List<Block> ordered = new ArrayList<>(blocks);
+        int size = (int) kept();
+        double[] weight = weights();
+        long first = blocks.getFirst().first;
+        double[] energy = levels.energies(first, size);
         double square = 0;
-        for (int i = 0; i < ordered.size(); i++) {
+        for (int n = 0; n < size; n++) {
+            double gap = Math.max(
+                    n > 0 ? energy[n] - energy[n - 1] : 0, n + 1 < size ? energy[n + 1] - energy[n] : 0);
             double around = 0;
-            for (int k = Math.max(0, i - 1); k <= Math.min(ordered.size() - 1, i + 1); k++) {
-                around += ordered.get(k).weight();
+            for (int k = 0; k < size; k++) {
+                double part = k == n ? 1 : Math.min(1, MIXED * gap / Math.abs(energy[k] - energy[n]));
+                around += part * part * weight[k];
             }
-            double share = 2 * extent * levels.waveFunctionError(ordered.get(i).end() - 1);
+            double share = 2 * extent * levels.waveFunctionError(first + n);
             square += share * share * around;
         }
         return Math.sqrt(square);
+    }
+
+    /**
+     * Weight expected above the edge of a well that ends: the weight per energy goes through the edge without a jump, and falls on as it fell
+     * over the last levels below it. Times four; infinite where there are too few levels to tell.
+     */
+    private double beyondTheEdge() {
+        double edge = levels.threshold();
+        if (blocks.getLast().end() < count || Double.isInfinite(edge)) {
+            return 0;
+        }
+        int size = (int) kept();
+        int group = Math.min(6, size / 2);
+        if (group == 0) {
+            return Double.POSITIVE_INFINITY;
+        }
+        double[] weights = weights();
+        double[] energy = levels.energies(blocks.getFirst().first, size);
+        double[] density = new double[2];
+        double[] centre = new double[2];
+        for (int g = 0; g < 2; g++) {
+            int from = size - (2 - g) * group;
+            double low = from == 0 ? shape.bottom() : (energy[from - 1] + energy[from]) / 2;
+            double high = g == 0 ? (energy[from + group - 1] + energy[from + group]) / 2 : edge;
+            for (int n = from; n < from + group; n++) {
+                density[g] += weights[n] / (high - low);
+            }
+            centre[g] = (low + high) / 2;
+        }
+        double fall = Math.log(density[0] / Math.max(density[1], Double.MIN_NORMAL)) / (centre[1] - centre[0]);
+        double length = fall > 0 ? Math.min(1 / fall, edge - centre[0]) : edge - centre[0];
+        // Overlaps that change their sign near the edge may be small there by chance: not below the mean of the two, as they fall.
+        return 4 * Math.max(density[1], Math.sqrt(density[0] * density[1])) * length;
+    }
+
+    /** |c|² of the levels kept. */
+    private double[] weights() {
+        double[] weight = new double[(int) kept()];
+        int at = 0;
+        for (Block block : blocks) {
+            for (int i = 0; i < block.re.length; i++) {
+                weight[at++] = block.re[i] * block.re[i] + block.im[i] * block.im[i];
+            }
+        }
+        return weight;
     }
 
     private Amplitudes amplitudes(double low, double high) {
@@ -205,7 +259,8 @@ final class ShapeState {
         double inside = functionErrors() + 2 * Math.sqrt(size) * difference + 1e-15;
         double missing = 1 - sum;
         double noise = NOISE + 4 * inside;
-        double lost = missing > noise ? missing : 0;
+        // What the sum of the weights cannot show is taken from their fall towards the edge.
+        double lost = missing > noise ? missing : Math.min(noise, beyondTheEdge());
         double error = Math.sqrt(low + high + lost) + inside;
         if (error > tolerance && lost > 0) {
             throw new PhysicsException.NotCarried(

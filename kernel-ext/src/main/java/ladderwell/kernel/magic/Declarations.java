@@ -36,7 +36,8 @@ public final class Declarations implements Sentences {
             "evolve", new EvolveMagic(),
             "table", new TableMagic(),
             "animate", new AnimateMagic(),
-            "levels", new LevelsMagic());
+            "levels", new LevelsMagic(),
+            "elements", new ElementsMagic());
 
     /** The table of the language, for a reference page. */
     public Grammar grammar() {

@@ -20,6 +20,9 @@ final class LevelsMagic implements Magic {
     public Outcome carryOut(Sentence sentence, Things things) throws MisreadSentence {
         Oscillator oscillator = things.oscillator(sentence.name());
         long bound = oscillator.levels().count();
+        if (bound == 0) {
+            throw new MisreadSentence("'" + sentence.name() + "' has no bound level", sentence.namePlace());
+        }
         long count = sentence.has("count") ? sentence.count("count") : Math.min(USUAL, bound);
         if (count > bound) {
             throw new MisreadSentence(

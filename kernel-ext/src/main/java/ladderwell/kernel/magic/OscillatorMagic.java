@@ -5,6 +5,7 @@ import java.util.Optional;
 import ladderwell.Box;
 import ladderwell.FiniteWell;
 import ladderwell.Harmonic;
+import ladderwell.MovingWell;
 import ladderwell.Oscillator;
 import ladderwell.PotentialWell;
 import ladderwell.kernel.sentence.MisreadSentence;
@@ -19,7 +20,11 @@ final class OscillatorMagic implements Magic {
     @Override
     public Optional<Promise> promise(Sentence sentence) {
         return Optional.of(new Promise(
-                sentence.name(), TYPES.getOrDefault(sentence.kind(), PotentialWell.class), sentence.namePlace()));
+                sentence.name(),
+                Potentials.moves(sentence)
+                        ? MovingWell.class
+                        : TYPES.getOrDefault(sentence.kind(), PotentialWell.class),
+                sentence.namePlace()));
     }
 
     @Override
@@ -28,7 +33,7 @@ final class OscillatorMagic implements Magic {
             case "harmonic" -> harmonic(sentence);
             case "box" -> box(sentence);
             case "finite well" -> finiteWell(sentence);
-            default -> new Potentials(sentence).well();
+            default -> new Potentials(sentence).oscillator();
         };
         // A mass and a length may be fine and their scale still outside the range of numbers: refused here, not later.
         oscillator.scale();

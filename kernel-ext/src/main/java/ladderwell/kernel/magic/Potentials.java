@@ -4,7 +4,9 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.regex.Pattern;
 import ladderwell.Fact;
+import ladderwell.MovingWell;
 import ladderwell.Oscillator;
 import ladderwell.PotentialWell;
 import ladderwell.evidence.Bound;
@@ -23,17 +25,26 @@ import tech.tablesaw.io.csv.CsvReadOptions;
 
 /** The oscillators whose sentence names a potential, by name, by formula or by a table of points. */
 record Potentials(Sentence sentence) {
+    private static final Pattern TIME = Pattern.compile("(?<![\\p{L}\\p{N}_])t(?![\\p{L}\\p{N}_])");
 
-    PotentialWell well() throws MisreadSentence {
+    /** Whether a formula speaks of the time, so that its potential moves. */
+    static boolean moves(Sentence sentence) {
+        return sentence.kind().equals("potential")
+                && TIME.matcher(sentence.text("formula")).find();
+    }
+
+    Oscillator oscillator() throws MisreadSentence {
+        if (sentence.kind().equals("potential")) {
+            return fromFormula();
+        }
         Potential potential = potential();
         double boundaryPhase = sentence.has("charge") ? 2 * Math.PI * sentence.number("charge") : 0;
         PotentialWell well = Oscillator.in(potential, boundaryPhase);
-        return well.declared(sentence.kind(), formula(potential), given());
+        return well.declared(sentence.kind(), formula(potential.text()), given());
     }
 
     private Potential potential() throws MisreadSentence {
         return switch (sentence.kind()) {
-            case "potential" -> fromFormula();
             case "quartic" ->
                 sentence.has("frequency")
                         ? Potential.quartic(mass(), quantity("frequency"), amount("coefficient"))
@@ -82,7 +93,7 @@ record Potentials(Sentence sentence) {
                 mass(), quantity(sentence.has("wavenumber") ? "wavenumber" : "frequency"), quantity("anharmonicity"));
     }
 
-    private Potential fromFormula() throws MisreadSentence {
+    private Oscillator fromFormula() throws MisreadSentence {
         String text = sentence.text("formula");
         Parameters parameters = Parameters.none();
         for (String name : sentence.parameters()) {
@@ -114,12 +125,35 @@ record Potentials(Sentence sentence) {
             }
         }
         try {
-            return Potential.of(formula, mass, end("left"), end("right"));
+            return in(formula, mass);
         } catch (FormulaException e) {
             throw new MisreadSentence(e.reason(), inside(e), e);
         } catch (IllegalArgumentException e) {
             throw new MisreadSentence(String.valueOf(e.getMessage()), sentence.placeOf("formula"), e);
         }
+    }
+
+    private Oscillator in(Formula formula, Quantity mass) throws MisreadSentence {
+        boolean walls = sentence.has("left") || sentence.has("right");
+        String wall = sentence.has("left") ? "left" : "right";
+        String shown = formula(formula.text());
+        if (!sentence.has("scale") && !formula.dependsOnTime()) {
+            return Oscillator.in(Potential.of(formula, mass, end("left"), end("right")))
+                    .declared("potential", shown, given());
+        }
+        if (walls) {
+            throw new MisreadSentence(
+                    "a wall does not go with a potential that "
+                            + (formula.dependsOnTime() ? "moves" : "is said to be open by 'scale'")
+                            + "; leave '" + wall + "' out",
+                    sentence.placeOf(wall));
+        }
+        Oscillator oscillator = sentence.has("scale")
+                ? Oscillator.open(formula, mass, quantity("scale"))
+                : Oscillator.in(formula, mass);
+        return oscillator instanceof MovingWell moving
+                ? moving.declared("potential", shown, given())
+                : ((PotentialWell) oscillator).declared("potential", shown, given());
     }
 
     private double end(String side) {
@@ -154,9 +188,9 @@ record Potentials(Sentence sentence) {
     }
 
     /** The potential in one line, with what was typed and is no quantity of a common kind. */
-    private String formula(Potential potential) {
+    private String formula(String potential) {
         boolean named = !sentence.kind().equals("potential") && !sentence.kind().equals("tabulated");
-        StringBuilder words = new StringBuilder(named ? sentence.kindFormula() : potential.text());
+        StringBuilder words = new StringBuilder(named ? sentence.kindFormula() : potential);
         for (String key : List.of("coefficient", "range", "force", "repulsion", "attraction")) {
             if (sentence.has(key)) {
                 words.append(", ").append(key).append(' ').append(sentence.typed(key));
@@ -193,7 +227,8 @@ record Potentials(Sentence sentence) {
                 "josephson",
                 "sigma",
                 "left",
-                "right")) {
+                "right",
+                "scale")) {
             if (sentence.has(key)) {
                 given.add(new Fact(key, symbol(key), quantity(key), Bound.exact()));
             }

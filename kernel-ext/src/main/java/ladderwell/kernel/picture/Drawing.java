@@ -92,6 +92,18 @@ final class Drawing {
                         .build());
     }
 
+    /** Small rings joined by a thin line. */
+    static ScatterTrace.ScatterBuilder points(String name, double size) {
+        return named(ScatterTrace.builder(LATER, LATER), name)
+                .mode(ScatterTrace.Mode.LINE_AND_MARKERS)
+                .line(Line.builder().width(1).simplify(false).build())
+                .marker(Marker.builder()
+                        .symbol(Symbol.CIRCLE)
+                        .size(size)
+                        .line(Line.builder().width(1.4).build())
+                        .build());
+    }
+
     static ScatterTrace.ScatterBuilder ring(String name) {
         return named(ScatterTrace.builder(LATER, LATER), name)
                 .mode(ScatterTrace.Mode.MARKERS)

@@ -102,17 +102,18 @@ final class Filmstrip {
             }
             before = point;
         }
-        double[] span = motion.spanAtMeanEnergy();
+        double[] stretches = motion.stretchesAtMeanEnergy();
         String height = tenth(up(motion, motion.meanEnergy()));
-        return path.append("\"/><path class=\"dash\" d=\"M")
-                .append(tenth(across(motion, span[0])))
-                .append(' ')
-                .append(height)
-                .append("L")
-                .append(tenth(across(motion, span[1])))
-                .append(' ')
-                .append(height)
-                .append("\"/>")
+        path.append("\"/><path class=\"dash\" d=\"");
+        for (int i = 0; i + 1 < stretches.length; i += 3) {
+            path.append("M")
+                    .append(tenth(across(motion, stretches[i])))
+                    .append(' ')
+                    .append(height)
+                    .append("H")
+                    .append(tenth(across(motion, stretches[i + 1])));
+        }
+        return path.append("\"/>")
                 .toString();
     }
 

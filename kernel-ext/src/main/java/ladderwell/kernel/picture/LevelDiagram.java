@@ -137,6 +137,11 @@ final class LevelDiagram {
         return levels.length;
     }
 
+    /** Number of wave functions drawn: all, or none where the levels have no real ones. */
+    int curves() {
+        return waves.length;
+    }
+
     long level(int k) {
         return levels[k];
     }
@@ -173,8 +178,7 @@ final class LevelDiagram {
     double[] lifted(int k) {
         double[] out = new double[POINTS];
         for (int i = 0; i < POINTS; i++) {
-            double wave = waves.length == 0 ? 0 : waves[k][i];
-            out[i] = (energies[k] + lift * wave) * energyScale;
+            out[i] = (energies[k] + lift * waves[k][i]) * energyScale;
         }
         return out;
     }
@@ -211,6 +215,19 @@ final class LevelDiagram {
 
     String label(int k) {
         return "n = " + levels[k];
+    }
+
+    /** The label of level k and of those below it that lie so close that one line is drawn for all. */
+    String label(int k, double pixels) {
+        double close = 7.5 * (top - bottom) / pixels;
+        int first = k;
+        while (first > 0 && energies[first] - energies[first - 1] < close) {
+            first--;
+        }
+        if (first == k) {
+            return label(k);
+        }
+        return "n = " + levels[first] + (k - first == 1 ? ", " : "–") + levels[k];
     }
 
     String description() {

@@ -1,5 +1,7 @@
 package ladderwell.kernel.picture;
 
+import java.util.ArrayList;
+import java.util.List;
 import java.util.OptionalDouble;
 import ladderwell.Density;
 import ladderwell.Oscillator;
@@ -237,28 +239,37 @@ final class Motion {
         return floor * energyScale;
     }
 
-    /** The ends of the line at the mean energy: where the potential reaches it, or the edges of the picture. */
-    double[] spanAtMeanEnergy() {
+    /**
+     * Where the potential lies below the mean energy, as ends of the lines that are drawn there: left, right, NaN, left, right …; a well
+     * that the particle does not start in has its line too.
+     */
+    double[] stretchesAtMeanEnergy() {
         Oscillator oscillator = run.state().oscillator();
-        int lowest = 0;
-        for (int i = 1; i < density.points(); i++) {
-            if (oscillator.potential(density.position(i)) < oscillator.potential(density.position(lowest))) {
-                lowest = i;
+        int last = density.points() - 1;
+        List<Double> ends = new ArrayList<>();
+        int from = -1;
+        for (int i = 0; i <= last; i++) {
+            boolean below = oscillator.potential(density.position(i)) <= meanEnergy;
+            if (below && from < 0) {
+                from = i;
+            }
+            if (from >= 0 && (!below || i == last)) {
+                int to = below ? i : i - 1;
+                if (!ends.isEmpty()) {
+                    ends.add(Double.NaN);
+                }
+                ends.add((from == 0 ? density.position(0) : crossing(oscillator, from, from - 1)) * lengthScale);
+                ends.add((to == last ? density.position(last) : crossing(oscillator, to, to + 1)) * lengthScale);
+                from = -1;
             }
         }
-        return new double[] {end(oscillator, lowest, -1) * lengthScale, end(oscillator, lowest, 1) * lengthScale};
+        return ends.stream().mapToDouble(Double::doubleValue).toArray();
     }
 
-    private double end(Oscillator oscillator, int from, int step) {
-        int at = from;
-        while (at >= 0 && at < density.points() && oscillator.potential(density.position(at)) <= meanEnergy) {
-            at += step;
-        }
-        if (at < 0 || at >= density.points() || at == from) {
-            return density.position(Math.max(0, Math.min(density.points() - 1, at)));
-        }
-        double inside = density.position(at - step);
-        double outside = density.position(at);
+    /** Where the potential crosses the mean energy between two neighbours of the grid, the first below it, the second above. */
+    private double crossing(Oscillator oscillator, int below, int above) {
+        double inside = density.position(below);
+        double outside = density.position(above);
         for (int i = 0; i < 60; i++) {
             double middle = (inside + outside) / 2;
             if (oscillator.potential(middle) > meanEnergy) {

@@ -3,6 +3,7 @@ package ladderwell.kernel.picture;
 import com.google.gson.JsonArray;
 import com.google.gson.JsonObject;
 import ladderwell.Density;
+import java.util.Arrays;
 import ladderwell.Run;
 import tech.tablesaw.plotly.components.Layout;
 import tech.tablesaw.plotly.traces.HeatmapTrace;
@@ -167,7 +168,7 @@ public final class MotionPicture {
                 .yAxis2(Drawing.right(
                                 motion.floor() - RAIL * (motion.top() - motion.floor()),
                                 motion.top(),
-                                new double[] {motion.floor()})
+                                new double[] {Written.rounded(motion.floor(), 3)})
                         .build())
                 .build();
         double[] turn = motion.turningPoints();
@@ -175,10 +176,11 @@ public final class MotionPicture {
         JsonArray traces = new JsonArray();
         traces.add(Drawing.trace(Drawing.line("density", 2).fill(ScatterTrace.Fill.TO_ZERO_Y)));
         traces.add(Drawing.trace(Drawing.right(Drawing.line("potential", 1))));
+        double[] stretches = motion.stretchesAtMeanEnergy();
+        double[] heights = new double[stretches.length];
+        Arrays.setAll(heights, i -> Double.isNaN(stretches[i]) ? Double.NaN : motion.meanEnergy());
         traces.add(Drawing.with(
-                Drawing.trace(Drawing.right(Drawing.dashes("energy", 1.2))),
-                motion.spanAtMeanEnergy(),
-                new double[] {motion.meanEnergy(), motion.meanEnergy()}));
+                Drawing.trace(Drawing.right(Drawing.dashes("energy", 1.2))), stretches, heights));
         JsonObject turning = Drawing.with(
                 Drawing.trace(Drawing.line("turning", 1.3)),
                 new double[] {turn[0], turn[0], Double.NaN, turn[1], turn[1]},

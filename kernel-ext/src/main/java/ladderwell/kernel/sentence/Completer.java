@@ -174,9 +174,10 @@ final class Completer {
             int from = clause.place().map(Place::start).orElse(cursor);
             List<Offer> offers = new ArrayList<>();
             if (!clause.joined()) {
-                noun.items()
+                noun.items().stream()
+                        .filter(item -> !item.quoted())
                         .forEach(item ->
-                                offers.add(new Offer(item.words() + (item.numbered() ? " " : ""), "observable")));
+                                offers.add(new Offer(item.words() + (item.numbered() ? " " : ""), item.sort())));
             }
             usableKeys(noun, clause).forEach(key -> offers.add(new Offer(key.word(), "key")));
             return fitting(text, from, cursor, offers);

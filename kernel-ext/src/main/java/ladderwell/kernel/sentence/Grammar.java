@@ -98,7 +98,39 @@ public record Grammar(List<Noun> nouns) {
                                 "tabulates the lowest levels of an oscillator")
                         .about("oscillator")
                         .keys(Key.count("count", 1, 10_000, "5", "how many levels, from the lowest")
-                                .standard("10, or all bound levels where there are fewer"))));
+                                .standard("10, or all bound levels where there are fewer")),
+                Noun.of(
+                                "elements",
+                                "elements OSCILLATOR: COUPLING, COUPLING, …, levels N N N, as NAME",
+                                "elements well: position, momentum, \"x^2\", levels 0..4",
+                                "tabulates transition elements ⟨m|A|n⟩ between levels of an oscillator")
+                        .about("oscillator")
+                        .items(couplings())
+                        .keys(
+                                Key.of("levels", Form.COUNTS, "0..4", "the levels, counted from 0, each once")
+                                        .standard("0..4, or all bound levels where there are fewer"),
+                                Key.of("as", Form.NEW_NAME, "dipoles", "keeps the table under a name, for Java cells"))));
+    }
+
+    private static List<Item> couplings() {
+        return List.of(
+                new Item("position", false, "x", "a length", "⟨m|x|n⟩, dipole transitions", "coupling", false),
+                new Item(
+                        "momentum",
+                        false,
+                        "p",
+                        "a momentum",
+                        "the imaginary part of ⟨m|p|n⟩; its real part is 0",
+                        "coupling",
+                        false),
+                new Item(
+                        "a function of x",
+                        false,
+                        "f(x)",
+                        "what f measures",
+                        "⟨m|f(x)|n⟩ of a formula in quotes, such as \"x^2\" or \"cos(2*x/nm)\"",
+                        "coupling",
+                        true));
     }
 
     /** The noun of that word, in any case. */

@@ -183,7 +183,7 @@ final class Inspector {
                 })
                 .findFirst()
                 .map(item -> new Explanation(
-                        item.words() + ": an observable",
+                        item.words() + ": " + Words.article(item.sort()),
                         List.of(item.symbol() + ": " + item.meaning(), "value: " + item.unit()),
                         List.of()));
     }

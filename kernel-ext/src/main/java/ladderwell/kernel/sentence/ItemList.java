@@ -50,6 +50,11 @@ final class ItemList {
         if (pieces.size() == 1 && pieces.get(0).is(Sort.JAVA)) {
             return evaluated(pieces.get(0));
         }
+        if (pieces.size() == 1
+                && pieces.get(0).is(Sort.QUOTED)
+                && noun.items().stream().anyMatch(Item::quoted)) {
+            return List.of('"' + pieces.get(0).text() + '"');
+        }
         if (pieces.stream().allMatch(piece -> piece.is(Sort.WORD))) {
             Optional<Item> item = named(Outline.text(pieces));
             if (item.isPresent()) {
@@ -113,7 +118,7 @@ final class ItemList {
         if (words.isEmpty() || !words.stream().allMatch(word -> word.is(Sort.WORD))) {
             throw new MisreadSentence(
                     Words.quoted("{" + piece.text().strip() + "}")
-                            + " gives no text; expected the name of an observable," + " such as "
+                            + " gives no text; expected the name of " + Words.article(sort()) + ", such as "
                             + noun.items().get(0).words(),
                     piece.place());
         }
@@ -123,8 +128,14 @@ final class ItemList {
     private Optional<Item> named(String name) {
         String typed = Words.plain(name);
         return noun.items().stream()
-                .filter(item -> !item.numbered() && Words.plain(item.words()).equals(typed))
+                .filter(item -> !item.numbered()
+                        && !item.quoted()
+                        && Words.plain(item.words()).equals(typed))
                 .findFirst();
+    }
+
+    private String sort() {
+        return noun.items().get(0).sort();
     }
 
     private MisreadSentence unknown(List<Piece> pieces) {
@@ -138,14 +149,14 @@ final class ItemList {
         }
         String typed = Outline.text(pieces);
         List<String> names = noun.items().stream()
-                .map(item -> item.numbered() ? item.words() + " 3" : item.words())
+                .map(Item::typed)
                 .toList();
         Optional<String> near = Words.nearest(typed, names)
                 .or(() -> Words.nearest(
                         pieces.get(0).text(),
                         noun.keys().stream().map(Key::word).toList()));
         return new MisreadSentence(
-                Words.quoted(typed) + " is no observable"
+                Words.quoted(typed) + " is no " + sort()
                         + (near.isPresent() ? Words.didYouMean(near) : "; expected one of " + String.join("; ", names)),
                 Outline.placeOf(pieces).orElse(new Place(0, 0)));
     }

@@ -67,10 +67,11 @@ final class OscillatorKinds {
     private static final NounKind POTENTIAL = NounKind.of(
                     "potential",
                     "potential",
-                    "a particle in a potential given by a formula in x, with parameters that are given as keys",
+                    "a particle in a potential given by a formula in x, and in t where it moves, with parameters that are given as"
+                            + " keys",
                     "numbers with units, + − * / ^, exp log sin cos tan sinh cosh tanh sqrt abs sign step min max gauss"
-                            + " if(…); x, m, pi, hbar")
-            .argument(Key.of("formula", Form.TEXT, "\"a*x^4 - b*x^2\"", "V(x) as a formula"))
+                            + " if(…); x, t, m, pi, hbar")
+            .argument(Key.of("formula", Form.TEXT, "\"a*x^4 - b*x^2\"", "V(x) or V(x, t) as a formula"))
             .withParameters()
             .keys(
                     MASS_KEY,
@@ -78,8 +79,16 @@ final class OscillatorKinds {
                             .standard("none"),
                     Key.quantity("right", "a wall at this x; V need have no value beyond", LENGTH)
                             .standard("none"),
+                    Key.quantity(
+                                    "scale",
+                                    "for a potential that need not bind: free, falling, over a barrier; what lengths are"
+                                            + " counted in, such as the size of the packet",
+                                    LENGTH)
+                            .standard("none, the potential binds"),
                     NATURAL.formula("ħ = m = 1"))
-            .ways(Way.of("mass").with("left", "right"), Way.of("natural").with("left", "right"));
+            .ways(
+                    Way.of("mass").with("left", "right", "scale"),
+                    Way.of("natural").with("left", "right", "scale"));
 
     private static final NounKind QUARTIC = NounKind.of(
                     "quartic",

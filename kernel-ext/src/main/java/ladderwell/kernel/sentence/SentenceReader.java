@@ -101,7 +101,7 @@ final class SentenceReader {
             return new MisreadSentence(
                     "nothing stands behind " + where + "; expected "
                             + (noun.head() == Head.ITEMS
-                                    ? "an observable such as "
+                                    ? Words.article(noun.items().get(0).sort()) + " such as "
                                             + noun.items().get(0).words()
                                     : "a key: " + Words.either(keys)),
                     at);
@@ -351,7 +351,8 @@ final class SentenceReader {
                 outline.clauses().stream().anyMatch(clause -> clause.key().isEmpty());
         if (noun.head() == Head.ITEMS && items.isEmpty() && !unnamed) {
             throw new MisreadSentence(
-                    noun.word() + " lists nothing; expected observables, as in '" + noun.example() + "'", end);
+                    noun.word() + " lists nothing; expected "
+                            + noun.items().get(0).sort() + "s, as in '" + noun.example() + "'", end);
         }
     }
 }

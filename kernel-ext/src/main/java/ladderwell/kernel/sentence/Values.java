@@ -4,6 +4,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import ladderwell.formula.Amount;
 import ladderwell.formula.FormulaException;
 import ladderwell.quantity.Digits;
@@ -19,6 +21,10 @@ final class Values {
 
     /** Longest text that can be the symbol of a unit. */
     private static final int LONGEST_UNIT = 24;
+
+    private static final Pattern RANGE = Pattern.compile("([0-9]+)\\.\\.([0-9]+)");
+
+    private static final long LONGEST_RANGE = 100_000;
 
     private final Key key;
     private final List<Term> terms;
@@ -209,9 +215,36 @@ final class Values {
     List<Long> counts() throws MisreadSentence {
         List<Long> all = new ArrayList<>();
         for (Term term : terms) {
-            all.add(whole(term, plain(List.of(term))));
+            Matcher range = RANGE.matcher(term.word() ? term.text() : "");
+            if (range.matches()) {
+                addRange(term, range, all);
+            } else {
+                all.add(whole(term, plain(List.of(term))));
+            }
         }
         return all;
+    }
+
+    /** A stretch of whole numbers such as 0..5, both ends included. */
+    private void addRange(Term term, Matcher range, List<Long> all) throws MisreadSentence {
+        long from = whole(term, plain(List.of(part(term, range.start(1), range.end(1)))));
+        long to = whole(term, plain(List.of(part(term, range.start(2), range.end(2)))));
+        if (to < from || to - from >= LONGEST_RANGE) {
+            throw new MisreadSentence(
+                    Words.quoted(term.text()) + (to < from
+                            ? " runs downward; expected the lower number first, as in 0..5"
+                            : " holds more than " + LONGEST_RANGE + " numbers"),
+                    term.place());
+        }
+        for (long n = from; n <= to; n++) {
+            all.add(n);
+        }
+    }
+
+    private static Term part(Term term, int from, int to) {
+        int start = term.place().start();
+        return new Term(
+                term.text().substring(from, to), new Place(start + from, start + to), Optional.empty(), true);
     }
 
     private long whole(Term term, double real) throws MisreadSentence {

@@ -55,7 +55,7 @@ function word(text, color, place) {
 /* Every trace of ours is named for what it shows; the name gives it its colour. */
 function paint(traces, ink) {
   traces.forEach(function (t) {
-    var c = {density: ink.teal, mean: ink.teal, wave: ink.teal, potential: ink.grey, energy: ink.ochre, level: ink.ochre,
+    var c = {density: ink.teal, mean: ink.teal, wave: ink.teal, potential: ink.grey, energy: ink.ochre, level: ink.ochre, spacing: ink.ochre,
       classical: ink.red, turning: ink.red}[t.name];
     if (t.type === 'heatmap') {
       t.colorscale = [[0, ink.paper], [0.07, ink.map1], [0.33, ink.map2], [0.68, ink.map3], [1, ink.map4]];
@@ -63,6 +63,7 @@ function paint(traces, ink) {
     }
     if (t.line) t.line.color = c;
     if (t.marker) { t.marker.symbol = 'circle-open'; t.marker.color = c; if (t.marker.line) t.marker.line.color = c; }
+    if (t.error_y) t.error_y.color = c;
     if (t.fill) t.fillcolor = ink.fill;
   });
 }
@@ -254,18 +255,31 @@ function motion(root, p) {
 /* ---- potential, levels and wave functions ---- */
 function levels(root, p) {
   var m = p.data, box = element(stageOf(root), 'div', 'lw-levels');
-  var n = m.x[2], waves = rows(m.waves, n), x = even(m.x[0], m.x[1], n);
+  var n = m.x[2], waves = m.waves ? rows(m.waves, n) : [], x = even(m.x[0], m.x[1], n);
   p.traces[0].x = m.potential.x;
   p.traces[0].y = m.potential.v;
   waves.forEach(function (y, i) { p.traces[2 + i].x = x; p.traces[2 + i].y = y; });
-  p.traces.forEach(function (t, i) { if (i < 2) t.hoverinfo = 'skip'; else { t.hoverinfo = 'text'; t.text = m.words.hover[i - 2]; } });
+  p.traces.forEach(function (t, i) {
+    if (i < 2) { t.hoverinfo = 'skip'; return; }
+    t.hoverinfo = 'text';
+    t.text = t.name === 'spacing' ? m.words.spacings : m.words.hover[i - 2];
+  });
+  var beside = p.layout.xaxis2, end = beside ? p.layout.xaxis.domain[1] : 1, margin = p.layout.margin.r;
   function dress() {
-    var ink = inks(root);
+    var ink = inks(root), wide = width(root);
     axes(p.layout, ink);
     paint(p.traces, ink);
-    p.layout.width = width(root);
+    p.layout.width = wide;
+    /* On a narrow page the levels take the whole width. */
+    if (beside) {
+      var room = wide >= 560;
+      p.layout.xaxis.domain = [0, room ? end : 1];
+      p.layout.margin.r = room ? margin : 66;
+      beside.visible = p.layout.yaxis3.visible = room;
+      p.traces[p.traces.length - 1].visible = room;
+    }
     p.layout.annotations = m.labels.map(function (l) {
-      return word(l.text, ink.ochre, {xref: 'paper', x: 1, xanchor: 'left', xshift: 5, yref: 'y', y: l.y});
+      return word(l.text, ink.ochre, {xref: 'paper', x: p.layout.xaxis.domain ? p.layout.xaxis.domain[1] : 1, xanchor: 'left', xshift: 5, yref: 'y', y: l.y});
     });
   }
   dress();

@@ -1,0 +1,10 @@
+package ladderwell.packet;
+
+/** V(x, t) on the whole axis as a packet sees it. @units scaled */
+public interface PotentialField {
+    /** V at all points at time t; +∞ is a wall that no packet passes. */
+    void values(double[] x, double t, double[] out);
+
+    /** Whether V depends on time. */
+    boolean moves();
+}
