@@ -24,6 +24,9 @@ final class OnLevels implements Representation {
      */
     static OnLevels of(Evolution evolution, double[] times) {
         State state = evolution.state();
+        if (state.oscillator().moves()) {
+            throw new IllegalArgumentException("levels carry a state only where the potential stands still");
+        }
         // Half the tolerance for what is left out of the state, the other half for phases and level errors.
         Amplitudes amplitudes = state.amplitudes(evolution.tolerance() / 2);
         PhasedState phased = PhasedState.of(state.oscillator().levels(), amplitudes, times);
