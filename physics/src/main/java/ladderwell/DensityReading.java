@@ -60,8 +60,9 @@ final class DensityReading {
             return new double[] {-half, half};
         }
         Oscillator oscillator = run.state().oscillator();
-        double[] extent = oscillator.levels().extent(
-                highestThatShows(run, state), oscillator instanceof PotentialWell ? SHOWN : DROP);
+        double[] extent = oscillator
+                .levels()
+                .extent(highestThatShows(run, state), oscillator instanceof PotentialWell ? SHOWN : DROP);
         if (oscillator instanceof Box || oscillator instanceof FiniteWell) {
             double half = Math.max(0.55, Math.min(extent[1], 2));
             return new double[] {-half, half};

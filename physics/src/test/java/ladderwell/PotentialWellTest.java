@@ -255,7 +255,8 @@ class PotentialWellTest {
 
     @Test
     void whatLiesAboveTheEdgeIsNeverMissedHoweverLittleItIs() {
-        // 1 − Σ |overlap|² with Laguerre functions summed to 40 digits; the sum of double overlaps shows no less than 1e-13.
+        // 1 − Σ |overlap|² with Laguerre functions summed to 40 digits; the sum of double overlaps shows no less than
+        // 1e-13.
         PotentialWell soft = Oscillator.in(Potential.morseFromLevels(
                 Quantity.of(0.9796, ATOMIC_MASS), Quantity.of(2460, PER_CENTIMETRE), Quantity.of(48, PER_CENTIMETRE)));
         aboveTheEdge(soft, -0.12, 2.79199814757e-8);
@@ -282,7 +283,10 @@ class PotentialWellTest {
             for (int n = 0; n < 6; n++) {
                 // One below the other: of two neighbours the lower one is on the left, where the tilt is lower.
                 double x = crooked.levels().elements(new long[] {n}).position(0, 0);
-                assertTrue(crooked.levels().energyError(n) < 1e-12 * crooked.levels().energyHigh(n), tilt);
+                assertTrue(
+                        crooked.levels().energyError(n)
+                                < 1e-12 * crooked.levels().energyHigh(n),
+                        tilt);
                 if (!tilt.startsWith("1e-13")) {
                     assertEquals(n % 2 == 0 ? -4 : 4, x, 0.2, tilt + ", n = " + n);
                 }

@@ -20,8 +20,7 @@ import org.junit.jupiter.params.provider.CsvSource;
 
 /** {@code ladderwell run} in a process of its own, with the real sentences and renderers. */
 class RunCommandTest {
-    private static final Path SHIPPED =
-            Path.of("../notebooks").toAbsolutePath().normalize();
+    private static final Path SHIPPED = Path.of("../notebooks").toAbsolutePath().normalize();
 
     @TempDir
     private Path folder;

@@ -53,11 +53,17 @@ class ElementsSentencesTest {
     void aFunctionStandsInQuotesAndAStretchOfLevelsIsWrittenWithTwoPoints() throws SentenceFailure {
         Table table = table("%elements trap: \"x^2\", momentum, levels 0..3, as pairs");
         assertEquals(10, table.rowCount());
-        assertTrue(table.column(2).name().startsWith("⟨m|x^2|n⟩"), table.columnNames().toString());
-        assertTrue(table.column(4).name().startsWith("Im ⟨m|p|n⟩"), table.columnNames().toString());
+        assertTrue(
+                table.column(2).name().startsWith("⟨m|x^2|n⟩"),
+                table.columnNames().toString());
+        assertTrue(
+                table.column(4).name().startsWith("Im ⟨m|p|n⟩"),
+                table.columnNames().toString());
         // ⟨0|x²|2⟩ / ⟨0|x²|0⟩ = √2, common practice, no source
         assertEquals(
-                Math.sqrt(2), table.doubleColumn(2).get(2) / table.doubleColumn(2).get(0), 1e-12);
+                Math.sqrt(2),
+                table.doubleColumn(2).get(2) / table.doubleColumn(2).get(0),
+                1e-12);
         assertEquals(table, bench.value("pairs"));
     }
 

@@ -27,17 +27,23 @@ class SpacingsTest {
 
     @Test
     void thePairsOfADoubleWellAreNamedWithTheirSplittings() {
-        // p² + x⁴ − 10 x² is twice p²/2 + x⁴/2 − 5x²; splitting 2.98185428881e-5 of Banerjee and Bhatnagar 1978, row S-DW-04b
+        // p² + x⁴ − 10 x² is twice p²/2 + x⁴/2 − 5x²; splitting 2.98185428881e-5 of Banerjee and Bhatnagar 1978, row
+        // S-DW-04b
         Spacings spacings = Spacings.of(in("x^4/2 - 5*x^2"), lowest(6));
-        assertTrue(spacings.words().startsWith("levels 0 and 1 are split by 1.4909×10⁻⁵, 2 and 3 by "), spacings.words());
+        assertTrue(
+                spacings.words().startsWith("levels 0 and 1 are split by 1.4909×10⁻⁵, 2 and 3 by "), spacings.words());
     }
 
     @Test
     void spacingsOfOneWellAreSaidAsTheyRun() {
         Oscillator morse = Oscillator.in(Potential.morse(UNIT, Quantity.of(10, Units.ONE), Amount.number(0.5)));
         // E_{n+1} − E_n = a√(2D) − a²(n + 1), Morse, Phys. Rev. 34 (1929) 57
-        assertEquals("spacings fall from 1.986 to 0.9861 with n", Spacings.of(morse, lowest(5)).words());
-        assertEquals("all spacings are 1", Spacings.of(Oscillator.harmonic().natural(), lowest(8)).words());
+        assertEquals(
+                "spacings fall from 1.986 to 0.9861 with n",
+                Spacings.of(morse, lowest(5)).words());
+        assertEquals(
+                "all spacings are 1",
+                Spacings.of(Oscillator.harmonic().natural(), lowest(8)).words());
         assertTrue(Spacings.of(in("x^4"), lowest(8)).words().startsWith("spacings rise from "));
     }
 
