@@ -255,7 +255,8 @@ class PotentialWellTest {
 
     @Test
     void whatLiesAboveTheEdgeIsNeverMissedHoweverLittleItIs() {
-        // 1 − Σ |overlap|² with Laguerre functions summed to 40 digits; the sum of double overlaps shows no less than 1e-13.
+        // 1 − Σ |overlap|² with Laguerre functions summed to 40 digits; the sum of double overlaps shows no less than
+        // 1e-13.
         PotentialWell soft = Oscillator.in(Potential.morseFromLevels(
                 Quantity.of(0.9796, ATOMIC_MASS), Quantity.of(2460, PER_CENTIMETRE), Quantity.of(48, PER_CENTIMETRE)));
         aboveTheEdge(soft, -0.12, 2.79199814757e-8);

@@ -187,8 +187,7 @@ final class ShapeState {
         double[] energy = levels.energies(first, size);
         double square = 0;
         for (int n = 0; n < size; n++) {
-            double gap = Math.max(
-                    n > 0 ? energy[n] - energy[n - 1] : 0, n + 1 < size ? energy[n + 1] - energy[n] : 0);
+            double gap = Math.max(n > 0 ? energy[n] - energy[n - 1] : 0, n + 1 < size ? energy[n + 1] - energy[n] : 0);
             double around = 0;
             for (int k = 0; k < size; k++) {
                 double part = k == n ? 1 : Math.min(1, MIXED * gap / Math.abs(energy[k] - energy[n]));
@@ -229,7 +228,8 @@ final class ShapeState {
         }
         double fall = Math.log(density[0] / Math.max(density[1], Double.MIN_NORMAL)) / (centre[1] - centre[0]);
         double length = fall > 0 ? Math.min(1 / fall, edge - centre[0]) : edge - centre[0];
-        // Overlaps that change their sign near the edge may be small there by chance: not below the mean of the two, as they fall.
+        // Overlaps that change their sign near the edge may be small there by chance: not below the mean of the two, as
+        // they fall.
         return 4 * Math.max(density[1], Math.sqrt(density[0] * density[1])) * length;
     }
 

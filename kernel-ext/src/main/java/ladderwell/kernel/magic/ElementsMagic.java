@@ -51,14 +51,15 @@ final class ElementsMagic implements Magic {
     private static Coupling coupling(String item) {
         return item.startsWith("\"")
                 ? Coupling.function(item.substring(1, item.length() - 1), Parameters.none())
-                : Coupling.named(item)
-                        .orElseThrow(() -> new IllegalArgumentException("'" + item + "' is no coupling"));
+                : Coupling.named(item).orElseThrow(() -> new IllegalArgumentException("'" + item + "' is no coupling"));
     }
 
     private static Place inside(Sentence sentence, FormulaException e) {
         for (String item : sentence.items()) {
             if (item.startsWith("\"")
-                    && item.substring(1, item.length() - 1).strip().equals(e.text().strip())) {
+                    && item.substring(1, item.length() - 1)
+                            .strip()
+                            .equals(e.text().strip())) {
                 Place place = sentence.placeOf(item);
                 int blanks = item.indexOf(e.text(), 1);
                 int start = place.start() + Math.max(1, blanks) + e.start();

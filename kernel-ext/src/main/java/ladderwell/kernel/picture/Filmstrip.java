@@ -113,8 +113,7 @@ final class Filmstrip {
                     .append("H")
                     .append(tenth(across(motion, stretches[i + 1])));
         }
-        return path.append("\"/>")
-                .toString();
+        return path.append("\"/>").toString();
     }
 
     private static double across(Motion motion, double x) {

@@ -153,8 +153,7 @@ public final class LevelPicture {
         number.addProperty("tick0", 0);
         number.addProperty("dtick", numberStep());
         size.addProperty("anchor", "x2");
-        size.addProperty(
-                "title", Markup.plot(Written.axis("Eₙ₊₁ − Eₙ", spacings.unit())));
+        size.addProperty("title", Markup.plot(Written.axis("Eₙ₊₁ − Eₙ", spacings.unit())));
         size.add("range", range(0, spacings.top()));
         size.addProperty("nticks", 5);
         layout.add("xaxis2", number);
@@ -275,9 +274,7 @@ public final class LevelPicture {
 
     /** Right end of the levels, in pixels. */
     private double right() {
-        return hasSpacings()
-                ? Drawing.LEFT + LEVELS_END * (WIDTH - Drawing.LEFT - BESIDE)
-                : WIDTH - Drawing.RIGHT;
+        return hasSpacings() ? Drawing.LEFT + LEVELS_END * (WIDTH - Drawing.LEFT - BESIDE) : WIDTH - Drawing.RIGHT;
     }
 
     private void stillSpacings(StringBuilder svg) {
@@ -288,7 +285,10 @@ public final class LevelPicture {
         for (int i = 0; i < spacings.count(); i++) {
             double x = from + (to - from) * (spacings.level(i) - firstNumber()) / (lastNumber() - firstNumber());
             double y = TOP + high * (1 - spacings.gap(i) / spacings.top());
-            line.append(i == 0 ? "M" : "L").append(Filmstrip.tenth(x)).append(' ').append(Filmstrip.tenth(y));
+            line.append(i == 0 ? "M" : "L")
+                    .append(Filmstrip.tenth(x))
+                    .append(' ')
+                    .append(Filmstrip.tenth(y));
             svg.append("<circle class=\"dash\" style=\"stroke-dasharray:none\" r=\"2.6\" cx=\"")
                     .append(Filmstrip.tenth(x))
                     .append("\" cy=\"")
@@ -310,7 +310,8 @@ public final class LevelPicture {
                 .append("\" y=\"")
                 .append(HEIGHT - BOTTOM + 16)
                 .append("\">")
-                .append(Markup.text("spacing to " + Written.number(spacings.top(), 3) + Written.behind(spacings.unit())))
+                .append(Markup.text(
+                        "spacing to " + Written.number(spacings.top(), 3) + Written.behind(spacings.unit())))
                 .append("</text>");
         svg.append("<text class=\"faint\" text-anchor=\"end\" x=\"")
                 .append((int) to)

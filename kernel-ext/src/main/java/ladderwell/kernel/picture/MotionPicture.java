@@ -2,8 +2,8 @@ package ladderwell.kernel.picture;
 
 import com.google.gson.JsonArray;
 import com.google.gson.JsonObject;
-import ladderwell.Density;
 import java.util.Arrays;
+import ladderwell.Density;
 import ladderwell.Run;
 import tech.tablesaw.plotly.components.Layout;
 import tech.tablesaw.plotly.traces.HeatmapTrace;
@@ -179,8 +179,7 @@ public final class MotionPicture {
         double[] stretches = motion.stretchesAtMeanEnergy();
         double[] heights = new double[stretches.length];
         Arrays.setAll(heights, i -> Double.isNaN(stretches[i]) ? Double.NaN : motion.meanEnergy());
-        traces.add(Drawing.with(
-                Drawing.trace(Drawing.right(Drawing.dashes("energy", 1.2))), stretches, heights));
+        traces.add(Drawing.with(Drawing.trace(Drawing.right(Drawing.dashes("energy", 1.2))), stretches, heights));
         JsonObject turning = Drawing.with(
                 Drawing.trace(Drawing.line("turning", 1.3)),
                 new double[] {turn[0], turn[0], Double.NaN, turn[1], turn[1]},

@@ -181,8 +181,7 @@ final class Spacings {
         if (!falls && !rises) {
             return Optional.empty();
         }
-        return Optional.of(
-                (falls ? "spacings fall from " : "spacings rise from ") + from + " to " + to + " with n");
+        return Optional.of((falls ? "spacings fall from " : "spacings rise from ") + from + " to " + to + " with n");
     }
 
     /** Places in the list of spacings that are small beside both of their neighbours. */

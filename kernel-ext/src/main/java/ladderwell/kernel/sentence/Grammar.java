@@ -109,7 +109,11 @@ public record Grammar(List<Noun> nouns) {
                         .keys(
                                 Key.of("levels", Form.COUNTS, "0..4", "the levels, counted from 0, each once")
                                         .standard("0..4, or all bound levels where there are fewer"),
-                                Key.of("as", Form.NEW_NAME, "dipoles", "keeps the table under a name, for Java cells"))));
+                                Key.of(
+                                        "as",
+                                        Form.NEW_NAME,
+                                        "dipoles",
+                                        "keeps the table under a name, for Java cells"))));
     }
 
     private static List<Item> couplings() {

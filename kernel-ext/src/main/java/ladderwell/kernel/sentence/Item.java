@@ -12,13 +12,7 @@ package ladderwell.kernel.sentence;
  * @param quoted whether it stands for any text in quotes; its words then say what the text is
  */
 public record Item(
-        String words,
-        boolean numbered,
-        String symbol,
-        String unit,
-        String meaning,
-        String sort,
-        boolean quoted) {
+        String words, boolean numbered, String symbol, String unit, String meaning, String sort, boolean quoted) {
 
     /** An observable. */
     public Item(String words, boolean numbered, String symbol, String unit, String meaning) {

@@ -148,9 +148,7 @@ final class ItemList {
             }
         }
         String typed = Outline.text(pieces);
-        List<String> names = noun.items().stream()
-                .map(Item::typed)
-                .toList();
+        List<String> names = noun.items().stream().map(Item::typed).toList();
         Optional<String> near = Words.nearest(typed, names)
                 .or(() -> Words.nearest(
                         pieces.get(0).text(),

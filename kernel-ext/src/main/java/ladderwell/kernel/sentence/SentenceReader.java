@@ -352,7 +352,8 @@ final class SentenceReader {
         if (noun.head() == Head.ITEMS && items.isEmpty() && !unnamed) {
             throw new MisreadSentence(
                     noun.word() + " lists nothing; expected "
-                            + noun.items().get(0).sort() + "s, as in '" + noun.example() + "'", end);
+                            + noun.items().get(0).sort() + "s, as in '" + noun.example() + "'",
+                    end);
         }
     }
 }

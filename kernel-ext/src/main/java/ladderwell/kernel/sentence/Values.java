@@ -231,9 +231,10 @@ final class Values {
         long to = whole(term, plain(List.of(part(term, range.start(2), range.end(2)))));
         if (to < from || to - from >= LONGEST_RANGE) {
             throw new MisreadSentence(
-                    Words.quoted(term.text()) + (to < from
-                            ? " runs downward; expected the lower number first, as in 0..5"
-                            : " holds more than " + LONGEST_RANGE + " numbers"),
+                    Words.quoted(term.text())
+                            + (to < from
+                                    ? " runs downward; expected the lower number first, as in 0..5"
+                                    : " holds more than " + LONGEST_RANGE + " numbers"),
                     term.place());
         }
         for (long n = from; n <= to; n++) {
@@ -243,8 +244,7 @@ final class Values {
 
     private static Term part(Term term, int from, int to) {
         int start = term.place().start();
-        return new Term(
-                term.text().substring(from, to), new Place(start + from, start + to), Optional.empty(), true);
+        return new Term(term.text().substring(from, to), new Place(start + from, start + to), Optional.empty(), true);
     }
 
     private long whole(Term term, double real) throws MisreadSentence {
