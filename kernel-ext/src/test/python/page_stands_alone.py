@@ -1,4 +1,5 @@
-"""Opens the page of a run in headless Chromium: it must fetch nothing, complain of nothing, and play its animations."""
+"""Opens the page of a run in headless Chromium: its title and the plots it must at least draw
+are given; it must fetch nothing and complain of nothing."""
 import pathlib
 import sys
 import time
@@ -16,12 +17,12 @@ browser = webdriver.Chrome(service=Service("/usr/bin/chromedriver"), options=opt
 try:
     browser.get(pathlib.Path(sys.argv[1]).resolve().as_uri())
     end = time.monotonic() + 60
-    plots = []
-    while len(plots) < 3 and time.monotonic() < end:
+    title, least, plots = sys.argv[2], int(sys.argv[3]), []
+    while len(plots) < least and time.monotonic() < end:
         time.sleep(0.5)
         plots = browser.find_elements(By.CSS_SELECTOR, ".js-plotly-plot")
-    assert len(plots) >= 3, "only %d plots were drawn" % len(plots)
-    assert browser.title == "How classical is it?", browser.title
+    assert len(plots) >= least, "only %d plots were drawn" % len(plots)
+    assert browser.title == title, browser.title
     fetched = browser.execute_script("return performance.getEntriesByType('resource').map(e => e.name)")
     assert not [name for name in fetched if not name.startswith("data:")], fetched
     log = browser.get_log("browser")

@@ -20,6 +20,9 @@ final class DensityReading {
     /** Height of the last wave function at the edge of the grid. */
     private static final double DROP = 1e-4;
 
+    /** The same in any potential, whose tails can be long: its square is no more than a picture can show. */
+    private static final double SHOWN = 3e-3;
+
     /** Less of a state than this cannot be seen beside the rest. */
     private static final double INVISIBLE = 1e-4;
 
@@ -57,7 +60,9 @@ final class DensityReading {
             return new double[] {-half, half};
         }
         Oscillator oscillator = run.state().oscillator();
-        double[] extent = oscillator.levels().extent(highestThatShows(run, state), DROP);
+        double[] extent = oscillator
+                .levels()
+                .extent(highestThatShows(run, state), oscillator instanceof PotentialWell ? SHOWN : DROP);
         if (oscillator instanceof Box || oscillator instanceof FiniteWell) {
             double half = Math.max(0.55, Math.min(extent[1], 2));
             return new double[] {-half, half};

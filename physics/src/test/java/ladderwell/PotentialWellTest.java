@@ -277,6 +277,24 @@ class PotentialWellTest {
     }
 
     @Test
+    void eachLevelOfACrookedDoubleWellLivesOnItsSide() {
+        for (String tilt : new String[] {"1e-3*x + 1e-4*sin(x)", "1e-13*x + 1e-14*sin(x)", "1e-2*tanh(x)"}) {
+            PotentialWell crooked = formula("(x^2 - 16)^2/3 + " + tilt);
+            for (int n = 0; n < 6; n++) {
+                // One below the other: of two neighbours the lower one is on the left, where the tilt is lower.
+                double x = crooked.levels().elements(new long[] {n}).position(0, 0);
+                assertTrue(
+                        crooked.levels().energyError(n)
+                                < 1e-12 * crooked.levels().energyHigh(n),
+                        tilt);
+                if (!tilt.startsWith("1e-13")) {
+                    assertEquals(n % 2 == 0 ? -4 : 4, x, 0.2, tilt + ", n = " + n);
+                }
+            }
+        }
+    }
+
+    @Test
     void theUncertaintyOfATableIsThatOfItsLevels() {
         double[] x = new double[41];
         double[] v = new double[41];

@@ -248,6 +248,20 @@ public final class Formula {
         return new Formula(text, Scaling.at(time, node), dimension, natural, List.copyOf(then), parameters);
     }
 
+    /** The terms of the outermost sum that are odd in x by their form, whatever their size; 0 where there is none. */
+    public Formula oddTerms() {
+        return part(new Parity().parts(node).odd());
+    }
+
+    /** What {@link #oddTerms} leaves. */
+    public Formula otherTerms() {
+        return part(new Parity().parts(node).rest());
+    }
+
+    private Formula part(Node terms) {
+        return new Formula(Writer.text(terms), terms, dimension, natural, hazards, parameters);
+    }
+
     /** True for a polynomial in x with coefficients that do not depend on t. */
     public boolean isPolynomial() {
         return polynomial().isPresent();

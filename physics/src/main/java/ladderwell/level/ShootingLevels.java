@@ -5,6 +5,7 @@ import java.util.HashMap;
 import java.util.Map;
 import java.util.function.DoubleUnaryOperator;
 import ladderwell.evidence.Bound;
+import ladderwell.evidence.PhysicsException;
 import ladderwell.numeric.Interruption;
 import org.jspecify.annotations.Nullable;
 
@@ -122,6 +123,11 @@ final class ShootingLevels implements Levels {
             wave = level.search.wave(n, level.found);
             level.wave = wave;
             level.error = level.found.rounding() + wave.fitError() + level.search.tailError(wave);
+            if (Double.isNaN(level.error)) {
+                level.wave = null;
+                throw new PhysicsException.NotConverged(
+                        "the wave function of level n = " + n, 1, Double.POSITIVE_INFINITY, level.found.rounding());
+            }
         }
         return wave;
     }

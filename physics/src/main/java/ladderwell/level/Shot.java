@@ -292,10 +292,12 @@ final class Shot {
         for (int i = to - 1; i > from; i--) {
             pass(i, -1, e, true, false);
             double h = 1 / Math.hypot(y, p);
-            double jump = Math.abs(a[i] * p * h - b[i] * y * h) / (norm[i] + (y * pE - p * yE) * h * h);
+            double both = norm[i] + (y * pE - p * yE) * h * h;
+            double jump = Math.abs(a[i] * p * h - b[i] * y * h) / both;
             // In a forbidden region one of the two has lost the level to its growing part.
             boolean allowed = cells[i].mean < e || cells[i - 1].mean < e;
-            if (allowed && jump < least) {
+            // A norm that is not positive has been lost by cancellation: the level lives in another well.
+            if (allowed && both > 0 && jump < least) {
                 least = jump;
                 best = i;
             }

@@ -456,4 +456,16 @@ class PotentialTest {
             default -> "sqrt(abs(" + a + "))";
         };
     }
+
+    @Test
+    void aSmallTiltIsNotLostInTheRoundingOfALargeEvenPotential() {
+        for (String even : new String[] {
+            "cosh(x) + x^2", "min(50*(x-4)^2, 50*(x+4)^2)", "(x-4)^2*(x+4)^2 + tanh(x)^2", "abs(x)^1.5"
+        }) {
+            assertTrue(natural(even).isEven(), even);
+            assertFalse(natural(even + " + 1e-17*x").isEven(), even);
+            assertFalse(natural(even + " - 1e-17*sin(x)^3").isEven(), even);
+        }
+        assertTrue(natural("(x-4)^2 + 8*x + cosh(x)").isEven(), "an odd term that another one takes away");
+    }
 }

@@ -9,6 +9,7 @@ import ladderwell.LevelOf;
 import ladderwell.NumberState;
 import ladderwell.Oscillator;
 import ladderwell.Packet;
+import ladderwell.PotentialWell;
 import ladderwell.State;
 import ladderwell.Superposition;
 import ladderwell.kernel.sentence.Complex;
@@ -99,15 +100,24 @@ final class StateMagic implements Magic {
         Quantity momentum = orZero(sentence, "momentum", Units.KILOGRAM_METRE_PER_SECOND);
         Quantity spread = sentence.quantity("spread");
         Packet packet = oscillator.gaussian(position, momentum, spread);
-        // What the bound levels cannot carry even loosely is refused here; what they cannot carry closely, by the run.
-        packet.amplitudes(LOOSEST_TOLERANCE);
+        refuseUncarried(packet);
         return packet;
     }
 
     private static LevelOf levelOf(Sentence sentence, Things things, Oscillator oscillator, long n) {
         LevelOf state = oscillator.levelOf(things.oscillator(sentence.reference("of")), n);
         LevelOf placed = sentence.has("shift") ? state.shifted(sentence.quantity("shift")) : state;
-        placed.amplitudes(LOOSEST_TOLERANCE);
+        refuseUncarried(placed);
         return placed;
+    }
+
+    /**
+     * What the bound levels of a box or a square well cannot carry even loosely is refused here; what they cannot carry closely, by the run. In
+     * other potentials a state need not be on levels.
+     */
+    private static void refuseUncarried(State state) {
+        if (!(state.oscillator() instanceof PotentialWell) && !state.oscillator().moves()) {
+            state.amplitudes(LOOSEST_TOLERANCE);
+        }
     }
 }

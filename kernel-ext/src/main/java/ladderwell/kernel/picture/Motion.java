@@ -87,14 +87,15 @@ final class Motion {
         double edge = Math.min(
                 oscillator.potential(density.position(0)),
                 oscillator.potential(density.position(density.points() - 1)));
-        return Math.abs(least) < 0.01 * Math.min(edge - least, 1) ? 0 : least;
+        double missed = Math.max(0.01 * Math.min(edge - least, 1), Math.min(0.002 * (edge - least), 1));
+        return Math.abs(least) < missed ? 0 : least;
     }
 
     /** Height of the energy scale: about twice the mean energy above the bottom; the rim of a well where that is near. */
     private double height(Oscillator oscillator, double mean, Density density) {
         double rim = oscillator.levels().threshold() - floor;
         if (rim < 5 * mean) {
-            return 1.12 * rim;
+            return 1.12 * Math.max(rim, mean);
         }
         double edge = Math.min(
                         oscillator.potential(density.position(0)),

@@ -154,7 +154,7 @@ function motion(root, p) {
       word(m.words.potential, ink.grey, {xref: 'paper', x: 1, xanchor: 'left', yref: 'paper', y: 1, yanchor: 'top', xshift: 5, align: 'left'}),
       word('\u27e8x\u27e9', ink.teal, {xref: 'paper', x: 0, xanchor: 'right', xshift: -6, yref: 'y', y: -rail * 0.66})
     ];
-    below.layout.annotations = [word(below.traces[1] ? '\u25cb\u2009\u2014<br>classical' : '\u25cb classical', ink.red,
+    below.layout.annotations = [word(below.traces[1] ? '\u25cb\u2009\u2014<br>classical' : '\u25cb<br>classical', ink.red,
       {xref: 'paper', x: 1, xanchor: 'left', xshift: 12, yref: 'paper', y: 1, yanchor: 'top', align: 'left'})];
     top.layout.width = below.layout.width = width(root);
   }

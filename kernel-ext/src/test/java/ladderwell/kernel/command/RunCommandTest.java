@@ -15,11 +15,12 @@ import ladderwell.kernel.real.RealPrograms;
 import ladderwell.kernel.real.RealPrograms.Outcome;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 
 /** {@code ladderwell run} in a process of its own, with the real sentences and renderers. */
 class RunCommandTest {
-    private static final Path SHIPPED =
-            Path.of("../notebooks/how-classical-is-it.ipynb").toAbsolutePath().normalize();
+    private static final Path SHIPPED = Path.of("../notebooks").toAbsolutePath().normalize();
 
     @TempDir
     private Path folder;
@@ -145,12 +146,14 @@ class RunCommandTest {
         assertValid(file);
     }
 
-    @Test
-    void theShippedNotebookRunsAndItsPageStandsAlone() throws Exception {
-        assertFalse(Files.readString(SHIPPED).contains("\"output_type\""), "the notebook is kept without outputs");
+    @ParameterizedTest
+    @CsvSource({"how-classical-is-it,How classical is it?,3", "potentials-from-the-board,Potentials from the board,7"})
+    void aShippedNotebookRunsAndItsPageStandsAlone(String name, String title, int plots) throws Exception {
+        Path shipped = SHIPPED.resolve(name + ".ipynb");
+        assertFalse(Files.readString(shipped).contains("\"output_type\""), "the notebook is kept without outputs");
         Path output = folder.resolve("done.ipynb");
         Path page = folder.resolve("page.html");
-        Outcome outcome = run(SHIPPED.toString(), "--output", output.toString(), "--html", page.toString());
+        Outcome outcome = run(shipped.toString(), "--output", output.toString(), "--html", page.toString());
         assertEquals(0, outcome.exitCode(), outcome.text());
         assertTrue(outcome.text().contains("wrote " + output + " and " + page), outcome.text());
         assertValid(output);
@@ -158,7 +161,13 @@ class RunCommandTest {
         RealPrograms.needProgram("/usr/bin/chromium");
         RealPrograms.needProgram("/usr/bin/chromedriver");
         Outcome seen = RealPrograms.run(
-                Map.of(), 120, RealPrograms.PYTHON, "src/test/python/page_stands_alone.py", page.toString());
+                Map.of(),
+                120,
+                RealPrograms.PYTHON,
+                "src/test/python/page_stands_alone.py",
+                page.toString(),
+                title,
+                String.valueOf(plots));
         assertEquals(0, seen.exitCode(), seen.text());
     }
 }
