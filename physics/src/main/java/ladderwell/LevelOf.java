@@ -80,6 +80,10 @@ public record LevelOf(Oscillator oscillator, Oscillator source, long n, Quantity
         }
     }
 
+    Shape shape() {
+        return new Form(this);
+    }
+
     /** Kinetic energy as in the source, potential energy as here. */
     @Override
     public double meanEnergy() {

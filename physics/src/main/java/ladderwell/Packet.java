@@ -54,7 +54,7 @@ public record Packet(Oscillator oscillator, Quantity position, Quantity momentum
         }
     }
 
-    private GaussianShape shape() {
+    GaussianShape shape() {
         Scale scale = oscillator.scale();
         return new GaussianShape(
                 oscillator,

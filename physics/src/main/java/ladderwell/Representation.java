@@ -1,10 +1,49 @@
 package ladderwell;
 
 import ladderwell.evidence.Bound;
+import ladderwell.evidence.PhysicsException;
 import ladderwell.evidence.Record;
+import ladderwell.quantity.Digits;
 
 /** In what a run carries its state from time 0 on: amplitudes on levels, or values on a grid of positions. */
-sealed interface Representation permits OnLevels {
+sealed interface Representation permits OnLevels, OnGrid {
+
+    /**
+     * Levels where the potential stands still and they carry the state; else a grid, where the potential allows one.
+     *
+     * @throws PhysicsException what the levels said, if a grid cannot do better
+     */
+    static Representation of(Evolution evolution, double[] times) {
+        Oscillator oscillator = evolution.state().oscillator();
+        if (oscillator.moves()) {
+            return OnGrid.of(evolution, times, "the potential depends on time");
+        }
+        if (oscillator.levels().count() == 0) {
+            return OnGrid.of(evolution, times, "the potential binds nothing");
+        }
+        try {
+            return OnLevels.of(evolution, times);
+        } catch (PhysicsException levels) {
+            if (!OnGrid.fits(evolution.state())) {
+                throw levels;
+            }
+            return instead(evolution, times, levels);
+        }
+    }
+
+    private static Representation instead(Evolution evolution, double[] times, PhysicsException levels) {
+        String reason = levels instanceof PhysicsException.NotCarried missed
+                ? "the bound levels miss weight " + Digits.significant(missed.missingWeight(), 2) + " of the state"
+                : levels instanceof PhysicsException.NotConverged
+                        ? "the levels are not known well enough for this time and tolerance"
+                        : "the state spreads over too many levels";
+        try {
+            return OnGrid.of(evolution, times, reason);
+        } catch (PhysicsException grid) {
+            levels.addSuppressed(grid);
+            throw levels;
+        }
+    }
 
     /** Number of times. */
     int times();

@@ -43,7 +43,7 @@ public final class Run {
         for (int j = 0; j <= frames; j++) {
             times[j] = end * j / frames;
         }
-        return new Run(evolution, OnLevels.of(evolution, times), (System.nanoTime() - start) * 1e-9);
+        return new Run(evolution, Representation.of(evolution, times), (System.nanoTime() - start) * 1e-9);
     }
 
     /** What was asked. */

@@ -37,6 +37,12 @@ final class Verdict {
         return "no common period is claimed for these levels; " + bestReturn(run);
     }
 
+    /** For a run on a grid. */
+    static String onGrid(Run run) {
+        return (run.state().oscillator().moves() ? "in a potential that moves; " : "no levels carry this motion; ")
+                + bestReturn(run);
+    }
+
     /** The best return among the run's own times, after the state has first moved away. */
     private static String bestReturn(Run run) {
         Series back = run.series(Observable.RETURN_PROBABILITY);

@@ -76,6 +76,9 @@ class RoomsTest {
     static final ArchRule motion = only("motion", "state", "level", "evidence", "quantity", "numeric");
 
     @ArchTest
+    static final ArchRule packet = only("packet", "state", "level", "evidence", "quantity", "numeric");
+
+    @ArchTest
     static final ArchRule roomsAreFreeOfCycles =
             slices().matching("ladderwell.(*)..").should().beFreeOfCycles();
 }

@@ -12,6 +12,12 @@ final class CurveSurvey {
         1e300, 1e200, 1e150, 1e100, 1e75, 1e50, 1e30, 1e20, 1e15, 1e12, 1e10, 1e8, 1e6, 1e5
     };
     private static final int PIECES = 256;
+    private static final int MOST_WELLS = 256;
+    /** 32 places in each decade, from 1e-4 to 1e6. */
+    private static final int DECADES = 321;
+
+    private static final double TENTH_OF_TENTH = Math.pow(10, 1.0 / 32);
+    private static final double GOLDEN = (3 - Math.sqrt(5)) / 2;
 
     final double left;
     final double right;
@@ -31,6 +37,8 @@ final class CurveSurvey {
     final boolean singular;
 
     private final PotentialCurve curve;
+    private double[] wellsAt = {};
+    private double[] wells2V = {};
 
     CurveSurvey(PotentialCurve curve) {
         this.curve = curve;
@@ -128,47 +136,49 @@ final class CurveSurvey {
     }
 
     private double[] lowest() {
-        TreeSet<Double> points = new TreeSet<>();
         double from = even ? 0 : left;
-        if (!Double.isInfinite(from) && !Double.isInfinite(right)) {
-            for (int i = 1; i < 4 * PIECES; i++) {
-                points.add(from + (right - from) * i / (4 * PIECES));
-            }
-        } else {
-            double origin = !Double.isInfinite(from) ? from : !Double.isInfinite(right) ? right : 0;
-            for (int j = -32; j <= 48; j++) {
-                double d = Math.pow(10, j / 8.0);
-                points.add(origin + d);
-                points.add(origin - d);
-            }
-            points.add(origin);
-        }
-        double before = Double.NaN;
-        for (double b : breaks) {
-            points.add(b + 1e-9 * (1 + Math.abs(b)));
-            points.add(b - 1e-9 * (1 + Math.abs(b)));
-            if (!Double.isNaN(before)) {
-                points.add((before + b) / 2);
-            }
-            before = b;
-        }
+        double[] points = points(from);
         double least = Double.POSITIVE_INFINITY;
         double at = Double.NaN;
-        for (double x : points) {
-            if (x > from && x < right && Arrays.binarySearch(breaks, x) < 0) {
-                double value = curve.value(x);
-                if (Double.isNaN(value)) {
-                    throw new IllegalArgumentException("the potential is not a number at x = " + x);
+        int wells = 0;
+        double[] x = new double[points.length];
+        double[] value = new double[points.length];
+        int many = 0;
+        for (double point : points) {
+            if (!(point > from && point < right) || Arrays.binarySearch(breaks, point) >= 0) {
+                continue;
+            }
+            double here = curve.value(point);
+            if (Double.isNaN(here)) {
+                throw new IllegalArgumentException("the potential is not a number at x = " + point);
+            }
+            if (here == Double.NEGATIVE_INFINITY) {
+                throw new IllegalArgumentException("the potential is minus infinity at x = " + point);
+            }
+            x[many] = point;
+            value[many] = here;
+            if (2 * here < least) {
+                least = 2 * here;
+                at = point;
+            }
+            many++;
+        }
+        wellsAt = new double[MOST_WELLS];
+        wells2V = new double[MOST_WELLS];
+        for (int i = 1; i + 1 < many && wells < MOST_WELLS; i++) {
+            if (value[i] < value[i - 1] && value[i] <= value[i + 1]) {
+                double well = refined(x[i - 1], x[i], x[i + 1]);
+                wellsAt[wells] = well;
+                wells2V[wells] = 2 * curve.value(well);
+                if (wells2V[wells] < least) {
+                    least = wells2V[wells];
+                    at = well;
                 }
-                if (value == Double.NEGATIVE_INFINITY) {
-                    throw new IllegalArgumentException("the potential is minus infinity at x = " + x);
-                }
-                if (2 * value < least) {
-                    least = 2 * value;
-                    at = x;
-                }
+                wells++;
             }
         }
+        wellsAt = Arrays.copyOf(wellsAt, wells);
+        wells2V = Arrays.copyOf(wells2V, wells);
         if (Double.isNaN(at)) {
             throw new IllegalArgumentException(
                     "the potential is infinite everywhere between " + from + " and " + right);
@@ -199,6 +209,74 @@ final class CurveSurvey {
             }
         }
         return new double[] {at, least};
+    }
+
+    /** Where to look: every few per cent of the distance from the origin, or evenly between two walls; beside breaks and between them. */
+    private double[] points(double from) {
+        double[] points = new double[4 * PIECES + 2 * DECADES + 1 + 3 * breaks.length];
+        int many = 0;
+        if (!Double.isInfinite(from) && !Double.isInfinite(right)) {
+            for (int i = 1; i < 4 * PIECES; i++) {
+                points[many++] = from + (right - from) * i / (4 * PIECES);
+            }
+        } else {
+            double origin = !Double.isInfinite(from) ? from : !Double.isInfinite(right) ? right : 0;
+            double d = 1e-4;
+            for (int j = 0; j < DECADES; j++, d *= TENTH_OF_TENTH) {
+                points[many++] = origin + d;
+                points[many++] = origin - d;
+            }
+            points[many++] = origin;
+        }
+        double before = Double.NaN;
+        for (double b : breaks) {
+            points[many++] = b + 1e-9 * (1 + Math.abs(b));
+            points[many++] = b - 1e-9 * (1 + Math.abs(b));
+            if (!Double.isNaN(before)) {
+                points[many++] = (before + b) / 2;
+            }
+            before = b;
+        }
+        double[] sorted = Arrays.copyOf(points, many);
+        Arrays.sort(sorted);
+        return sorted;
+    }
+
+    /** The least of v between two places that lie higher than the one between them, by golden sections. */
+    private double refined(double low, double middle, double high) {
+        double a = low;
+        double b = high;
+        double best = middle;
+        double least = curve.value(middle);
+        for (int i = 0; i < 40; i++) {
+            boolean right = b - best > best - a;
+            double next = right ? best + GOLDEN * (b - best) : best - GOLDEN * (best - a);
+            double value = curve.value(next);
+            if (value < least) {
+                if (right) {
+                    a = best;
+                } else {
+                    b = best;
+                }
+                best = next;
+                least = value;
+            } else if (right) {
+                b = next;
+            } else {
+                a = next;
+            }
+        }
+        return best;
+    }
+
+    /** Whether some well beyond x, that way, lies below e. */
+    boolean wellBeyond(double x, int direction, double e) {
+        for (int i = 0; i < wellsAt.length; i++) {
+            if (direction * (wellsAt[i] - x) > 0 && wells2V[i] < e) {
+                return true;
+            }
+        }
+        return false;
     }
 
     /** A wall itself where the lowest place is close to it: an edge just inside would resolve nothing. */

@@ -77,6 +77,7 @@ final class LevelSearch {
         double a = survey.bottom;
         double b = survey.threshold;
         boolean bracketed = false;
+        boolean under = false;
         double e = Math.max(guess, survey.bottom + 1e-9 * Math.abs(survey.bottom));
         double s = 0;
         double before = Double.NaN;
@@ -85,6 +86,10 @@ final class LevelSearch {
             Interruption.check();
             e = below(e, a);
             mesh.cover(e, ShootingMesh.TAIL);
+            if (!under) {
+                // The survey samples; the mesh meets every well on its way.
+                a = Math.min(a, mesh.lowest());
+            }
             shot.range(e, ShootingMesh.TAIL, forced);
             s = frequency(e);
             double f = shot.mismatch(e, k, s, parity, true, true);
@@ -97,6 +102,7 @@ final class LevelSearch {
                 bracketed = true;
             } else {
                 a = Math.max(a, e);
+                under = true;
             }
             double step = Math.abs(f / slope);
             double best = e - f / slope;
@@ -116,6 +122,7 @@ final class LevelSearch {
                 }
                 if (shot.mismatch(best + delta, k, s, parity, false, true) < 0) {
                     a = Math.max(a, best + delta);
+                    under = true;
                 } else if (shot.mismatch(best - delta, k, s, parity, false, true) > 0) {
                     b = Math.min(b, best - delta);
                     bracketed = true;

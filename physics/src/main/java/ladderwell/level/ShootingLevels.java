@@ -156,14 +156,16 @@ final class ShootingLevels implements Levels {
             return Long.MAX_VALUE;
         }
         double depth = Math.min(top - survey.bottom, Math.abs(top - survey.energyOf(0.5)) * 10);
+        // Nearer to the threshold than rounding of the potential nothing can be told.
+        double least = 1e-14 * Math.max(Math.abs(top), Math.abs(survey.bottom));
         LevelSearch search = search(0);
-        long some = search.below(top - 1e-6 * depth);
-        long more = search.below(top - 1e-9 * depth);
+        long some = search.below(top - Math.max(1e-6 * depth, least));
+        long more = search.below(top - Math.max(1e-9 * depth, least));
         if (more > 2 * some + 10) {
             // A tail like 1/x carries levels without end.
             return Long.MAX_VALUE;
         }
-        return search.below(top - 1e-13 * depth);
+        return search.below(top - Math.max(1e-13 * depth, least));
     }
 
     @Override

@@ -60,6 +60,15 @@ final class ShootingMesh {
         return cells;
     }
 
+    /** A lower bound of v in all cells. */
+    double lowest() {
+        double lowest = Double.POSITIVE_INFINITY;
+        for (Cell cell : cells) {
+            lowest = Math.min(lowest, cell.low);
+        }
+        return lowest;
+    }
+
     /** How many cells lie left of the start. */
     int startIndex() {
         return leftward.size();
@@ -91,7 +100,7 @@ final class ShootingMesh {
 
     /** Whether v falls below e again farther out, by samples. */
     private boolean lower(double x, int direction, double e) {
-        if (direction * (survey.bottomAt - x) > 0 && survey.bottom < e) {
+        if (direction * (survey.bottomAt - x) > 0 && survey.bottom < e || survey.wellBeyond(x, direction, e)) {
             return true;
         }
         double end = direction > 0 ? survey.right : survey.left;
@@ -136,6 +145,7 @@ final class ShootingMesh {
         double size = list.isEmpty() ? 0 : list.get(list.size() - 1).size;
         double h = direction > 0 ? stepRight : stepLeft;
         double wanted = h;
+        boolean refused = false;
         while (direction * (end - x) > 0
                 && Math.abs(x) < 1e15
                 && (depth < reachedDepth || !Double.isInfinite(end) || lower(x, direction, e))) {
@@ -147,7 +157,8 @@ final class ShootingMesh {
                 }
             }
             double y = x + direction * h;
-            if (direction * (y - stop) > -0.2 * h) {
+            // A cell that nearly reaches the stop goes there; but not again once that was refused as too long.
+            if (direction * (y - stop) > (refused ? 0 : -0.2 * h)) {
                 y = stop;
             }
             Cell.Attempt attempt = attempt(x, y, size);
@@ -163,9 +174,11 @@ final class ShootingMesh {
                         cell = past(x, direction, wanted, size);
                     }
                 } else {
+                    refused = true;
                     continue;
                 }
             }
+            refused = false;
             list.add(cell);
             if (list.size() > MOST_CELLS) {
                 throw new PhysicsException.NotConverged(

@@ -71,8 +71,8 @@ final class SplitStep {
         field.values(x, time, v);
         for (int j = 0; j < v.length; j++) {
             if (Double.isNaN(v[j])) {
-                throw new IllegalArgumentException(
-                        "the potential has no value at x = " + x[j] + " in scaled units; expected one wherever the packet goes");
+                throw new IllegalArgumentException("the potential has no value at x = " + x[j]
+                        + " in scaled units; expected one wherever the packet goes");
             }
             v[j] = Math.max(-HIGHEST, Math.min(HIGHEST, v[j]));
         }

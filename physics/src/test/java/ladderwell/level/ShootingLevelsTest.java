@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.Arrays;
 import java.util.Random;
 import java.util.concurrent.CancellationException;
 import java.util.function.DoubleUnaryOperator;
@@ -288,5 +289,104 @@ class ShootingLevelsTest {
         Levels levels = Levels.of(Curves.even(x -> x * x / 2));
         Thread.currentThread().interrupt();
         assertThrows(CancellationException.class, () -> levels.energies(0, 1000));
+    }
+
+    private static PotentialCurve open(DoubleUnaryOperator v, double... breaks) {
+        return new PotentialCurve() {
+            @Override
+            public double value(double x) {
+                return v.applyAsDouble(x);
+            }
+
+            @Override
+            public double left() {
+                return Double.NEGATIVE_INFINITY;
+            }
+
+            @Override
+            public double right() {
+                return Double.POSITIVE_INFINITY;
+            }
+
+            @Override
+            public double[] breaks() {
+                return breaks.clone();
+            }
+
+            @Override
+            public boolean isEven() {
+                return false;
+            }
+        };
+    }
+
+    /** Two parabolas that meet in a kink far above: each well has its own ladder, and the levels are those of both, sorted. */
+    @Test
+    void noLevelOfAFarWellIsMissedAndNoMeshTurnsInCircles() {
+        double[][] wells = {
+            {22.904902859914593, 1.2602165754142414, 1.7801926211623225},
+            {20.01824911122496, 1.4293172087346866, 2.2032967163357338},
+            {15.714109137958562, 0.968874891141933, 0.4258260460573826},
+            {14.771992279914592, 0.6342484332754376, 2.1953042953997923}
+        };
+        for (double[] well : wells) {
+            double s = well[0];
+            double w = well[1];
+            double up = well[2];
+            double low = -s;
+            double high = s;
+            for (int i = 0; i < 100; i++) {
+                double middle = (low + high) / 2;
+                if ((middle + s) * (middle + s) < w * w * (middle - s) * (middle - s) + 2 * up) {
+                    low = middle;
+                } else {
+                    high = middle;
+                }
+            }
+            double[] expected = new double[12];
+            for (int k = 0; k < 6; k++) {
+                expected[k] = k + 0.5;
+                expected[6 + k] = w * (k + 0.5) + up;
+            }
+            Arrays.sort(expected);
+            DoubleUnaryOperator v = x -> Math.min((x + s) * (x + s) / 2, w * w * (x - s) * (x - s) / 2 + up);
+            for (Levels levels : new Levels[] {Levels.of(open(v, low)), Levels.of(open(v))}) {
+                for (int n = 0; n < 6; n++) {
+                    // the barrier is above 100 and 30 wide: tunnelling is below any rounding
+                    assertEquals(
+                            expected[n],
+                            levels.energyHigh(n),
+                            levels.energyError(n) + 1e-13,
+                            "level " + n + " at " + s);
+                }
+            }
+        }
+    }
+
+    /** A well a quarter wide on the far slope of a barrier: found although the survey's first look is coarse. Reference: sinc functions, 900 points. */
+    @Test
+    void aNarrowWellBehindABarrierHoldsTheLowestLevel() {
+        double[] size = {8.615487677290135, -30.129593694610143, 20.516317849165127};
+        double[] at = {2.2521724198041095, 3.9229891948391113, 2.752656475335371};
+        double[] width = {0.37826093482012624, 0.24990375277370744, 1.3833551735746035};
+        Levels levels = Levels.of(open(x -> {
+            double v = -0.49076356159781753 * x * x + 0.03448459708108077 * x * x * x * x;
+            for (int i = 0; i < 3; i++) {
+                double d = (x - at[i]) / width[i];
+                v += size[i] * Math.exp(-d * d);
+            }
+            return v;
+        }));
+        assertEquals(-6.907138377685854, levels.energyHigh(0), 2e-10);
+        assertEquals(-1.0839682142408464, levels.energyHigh(1), 1e-9);
+    }
+
+    @Test
+    void aShallowSquareWellHasOneLevelHoweverNearTheThresholdOneLooks() {
+        double left = -1.5909565721702377;
+        double right = -1.3078330267717948;
+        Levels levels =
+                Levels.of(open(x -> x < left || x >= right ? 36.62866713326563 : 22.92333193509699, left, right));
+        assertEquals(1, levels.count());
     }
 }

@@ -98,7 +98,10 @@ class GridMotionTest {
             double t = 0.5 * j;
             double width = Math.hypot(0.7 * Math.cosh(t), Math.sinh(t) / (2 * 0.7));
             GridFrame frame = motion.frame(j);
-            assertEquals(0.3 * Math.cosh(t), frame.position().mean(), 2 * width * motion.error().size() + 1e-12);
+            assertEquals(
+                    0.3 * Math.cosh(t),
+                    frame.position().mean(),
+                    2 * width * motion.error().size() + 1e-12);
             assertEquals(width, Math.sqrt(frame.position().variance()), 1e-7);
         }
     }
@@ -109,12 +112,13 @@ class GridMotionTest {
         double x0 = 2.5;
         double width = Math.sqrt(0.5);
         for (double tolerance : new double[] {1e-4, 1e-7, 1e-10}) {
-            GridMotion motion =
-                    GridMotion.of(new Field((x, t) -> x * x / 2, false), new Gauss(x0, 0, width), times(20, 3), tolerance);
+            GridMotion motion = GridMotion.of(
+                    new Field((x, t) -> x * x / 2, false), new Gauss(x0, 0, width), times(20, 3), tolerance);
             double t = 20;
             double x = x0 * Math.cos(t);
             double p = -x0 * Math.sin(t);
-            Wave exact = GridFrame.sampled(new Gauss(x, p, width), motion.frame(3).grid());
+            Wave exact =
+                    GridFrame.sampled(new Gauss(x, p, width), motion.frame(3).grid());
             // the packet's own phase is 0 at its centre: e^{−it/2 + ixp/2} is left over
             double phase = -t / 2 + x * p / 2;
             for (int i = 0; i < exact.re.length; i++) {
@@ -141,7 +145,10 @@ class GridMotionTest {
         for (int j = 0; j <= 6; j++) {
             double t = 2.0 * j;
             double expected = f * (Math.cos(w * t) - Math.cos(t)) / (1 - w * w);
-            assertEquals(expected, motion.frame(j).position().mean(), 2 * motion.error().size());
+            assertEquals(
+                    expected,
+                    motion.frame(j).position().mean(),
+                    2 * motion.error().size());
             assertEquals(0.5, motion.frame(j).position().variance(), 1e-8);
         }
     }
@@ -170,8 +177,7 @@ class GridMotionTest {
     @Test
     void aFasterPacketThanTheGridKnowsMakesItFiner() {
         // falls from 20 down a slope: from rest to p = 20
-        GridMotion motion =
-                GridMotion.of(new Field((x, t) -> 10 * x, false), new Gauss(20, 0, 1), times(2, 2), 1e-8);
+        GridMotion motion = GridMotion.of(new Field((x, t) -> 10 * x, false), new Gauss(20, 0, 1), times(2, 2), 1e-8);
         assertEquals(-20, motion.frame(2).momentum().mean(), 1e-6);
         assertTrue(motion.grid().spacing() < motion.frame(0).grid().spacing());
     }
@@ -199,8 +205,7 @@ class GridMotionTest {
         Thread.currentThread().interrupt();
         assertThrows(
                 CancellationException.class,
-                () -> GridMotion.of(
-                        new Field((x, t) -> x * x / 2, false), new Gauss(3, 0, 1), times(1000, 10), 1e-9));
+                () -> GridMotion.of(new Field((x, t) -> x * x / 2, false), new Gauss(3, 0, 1), times(1000, 10), 1e-9));
         assertTrue(!Thread.interrupted(), "the flag is cleared");
     }
 }

@@ -116,7 +116,8 @@ final class StateMagic implements Magic {
      * other potentials a state need not be on levels.
      */
     private static void refuseUncarried(State state) {
-        if (!(state.oscillator() instanceof PotentialWell) && !state.oscillator().moves()) {
+        if (!(state.oscillator() instanceof PotentialWell)
+                && !state.oscillator().moves()) {
             state.amplitudes(LOOSEST_TOLERANCE);
         }
     }
