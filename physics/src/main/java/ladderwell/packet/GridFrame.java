@@ -8,6 +8,9 @@ public final class GridFrame {
     /** Neighbours that a value between points is taken from, on a grid eight times as fine. */
     private static final int NEIGHBOURS = 10;
 
+    /** Share of the largest density below which a density is rounding. */
+    private static final double ROUNDED_AWAY = 1e-20;
+
     private final Wave wave;
     private final double time;
 
@@ -106,10 +109,14 @@ public final class GridFrame {
         double norm = 0;
         double mean = 0;
         double square = 0;
+        double peak = 0;
+        for (int j = 0; j < n; j++) {
+            peak = Math.max(peak, wave.re[j] * wave.re[j] + wave.im[j] * wave.im[j]);
+        }
         for (int j = 0; j < n; j++) {
             double weight = wave.re[j] * wave.re[j] + wave.im[j] * wave.im[j];
-            // where nothing is, a wall counts for nothing
-            double here = weight < 1e-40 || !Double.isFinite(v[j]) ? 0 : v[j];
+            // Where only rounding is left of the packet a wall counts for nothing, however high.
+            double here = weight < ROUNDED_AWAY * peak || !Double.isFinite(v[j]) ? 0 : v[j];
             re[j] += here * wave.re[j];
             im[j] += here * wave.im[j];
             norm += weight;
