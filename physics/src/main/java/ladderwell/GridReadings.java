@@ -99,7 +99,7 @@ final class GridReadings {
 
     private Series energy(Observable o) {
         double[][] energies = new double[motion.times()][];
-        Arrays.setAll(energies, j -> motion.frame(j).energy(motion.field()));
+        Arrays.setAll(energies, j -> motion.frame(j).energy(motion.field(), delta));
         return along(
                 o,
                 j -> energies[j][0],
@@ -113,8 +113,7 @@ final class GridReadings {
         Superposition.checkLevel(oscillator, o.level());
         Shape level = LevelSum.level(oscillator, o.level());
         double off = delta + oscillator.levels().waveFunctionError(o.level()) * Math.sqrt(level.right() - level.left());
-        double[][] amplitudes = new double[motion.times()][];
-        Arrays.setAll(amplitudes, j -> motion.frame(j).overlap(level));
+        double[][] amplitudes = motion.overlaps(level);
         return along(o, j -> probability(amplitudes[j]), j -> probabilityError(amplitudes[j], off));
     }
 
@@ -152,13 +151,9 @@ final class GridReadings {
 
     private synchronized double[][] returns() {
         if (returns == null) {
-            returns = new double[motion.times()][];
+            returns = motion.overlaps(start);
             GridFrame first = motion.frame(0);
-            Arrays.setAll(
-                    returns,
-                    j -> j == 0
-                            ? new double[] {first.norm() * first.norm(), 0}
-                            : motion.frame(j).overlap(start));
+            returns[0] = new double[] {first.norm() * first.norm(), 0};
         }
         return returns;
     }

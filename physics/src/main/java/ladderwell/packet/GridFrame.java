@@ -91,8 +91,14 @@ public final class GridFrame {
         return squares;
     }
 
-    /** Mean of p²/2 + V(x, t) and its standard deviation. @shape {mean, deviation} */
-    public double[] energy(PotentialField field) {
+    /**
+     * Mean of p²/2 + V(x, t) and its standard deviation.
+     *
+     * @param error ‖ψ − ψ̃‖: where the density is below its square times the peak, nothing of the packet can be told
+     * @shape {mean, deviation}
+     */
+    public double[] energy(PotentialField field, double error) {
+        double least = Math.max(ROUNDED_AWAY, error * error);
         int n = wave.re.length;
         double[] re = wave.re.clone();
         double[] im = wave.im.clone();
@@ -115,8 +121,8 @@ public final class GridFrame {
         }
         for (int j = 0; j < n; j++) {
             double weight = wave.re[j] * wave.re[j] + wave.im[j] * wave.im[j];
-            // Where only rounding is left of the packet a wall counts for nothing, however high.
-            double here = weight < ROUNDED_AWAY * peak || !Double.isFinite(v[j]) ? 0 : v[j];
+            // There a wall counts for nothing, however high.
+            double here = weight < least * peak || !Double.isFinite(v[j]) ? 0 : v[j];
             re[j] += here * wave.re[j];
             im[j] += here * wave.im[j];
             norm += weight;
@@ -129,7 +135,23 @@ public final class GridFrame {
 
     /** ⟨φ|ψ⟩ with another state, given as a function of position. @shape {real, imaginary part} */
     public double[] overlap(Shape other) {
-        Wave there = sampled(other, wave.grid);
+        return overlap(sampled(other, wave.grid));
+    }
+
+    /** The same at several times, the other state sampled once for each grid. @shape [time]{real, imaginary part} */
+    static double[][] overlaps(GridFrame[] frames, Shape other) {
+        double[][] overlaps = new double[frames.length][];
+        Wave there = null;
+        for (int j = 0; j < frames.length; j++) {
+            if (there == null || !there.grid.equals(frames[j].grid())) {
+                there = sampled(other, frames[j].grid());
+            }
+            overlaps[j] = frames[j].overlap(there);
+        }
+        return overlaps;
+    }
+
+    private double[] overlap(Wave there) {
         double re = 0;
         double im = 0;
         for (int j = 0; j < wave.re.length; j++) {

@@ -180,6 +180,11 @@ public final class GridMotion {
         return frames[j];
     }
 
+    /** ⟨φ|ψ⟩ at every time with another state, given as a function of position. @shape [time]{real, imaginary part} */
+    public double[][] overlaps(Shape other) {
+        return GridFrame.overlaps(frames, other);
+    }
+
     /** Steps taken in all. */
     public long steps() {
         return steps;
