@@ -243,14 +243,15 @@ class PotentialWellTest {
     }
 
     @Test
-    void aPacketThatTheBoundLevelsCannotCarryIsRefusedWithItsMissingWeight() {
+    void aPacketThatTheBoundLevelsCannotCarryIsRefusedByThemWithItsMissingWeightAndMovesOnAGrid() {
         PotentialWell well = Oscillator.in(Potential.morse(UNIT, number(10), Amount.number(0.5)));
-        PhysicsException.NotCarried refused = assertThrows(
-                PhysicsException.NotCarried.class,
-                () -> well.gaussian(number(0), number(5), number(0.4))
-                        .evolve(1, ONE)
-                        .run());
+        Packet packet = well.gaussian(number(0), number(5), number(0.4));
+        PhysicsException.NotCarried refused =
+                assertThrows(PhysicsException.NotCarried.class, () -> packet.amplitudes(1e-9));
         assertTrue(refused.missingWeight() > 0.1);
+        Run run = packet.evolve(1, ONE).frames(4).run();
+        assertTrue(run.method().contains("grid"), run.method());
+        assertTrue(run.stateError().size() <= run.evolution().tolerance());
     }
 
     @Test

@@ -95,7 +95,7 @@ final class Motion {
     private double height(Oscillator oscillator, double mean, Density density) {
         double rim = oscillator.levels().threshold() - floor;
         if (rim < 5 * mean) {
-            return 1.12 * Math.max(rim, mean);
+            return Math.max(1.12 * rim, 1.3 * mean);
         }
         double edge = Math.min(
                         oscillator.potential(density.position(0)),

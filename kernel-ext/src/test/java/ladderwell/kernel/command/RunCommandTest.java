@@ -147,7 +147,7 @@ class RunCommandTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"how-classical-is-it,How classical is it?,3", "potentials-from-the-board,Potentials from the board,7"})
+    @CsvSource({"how-classical-is-it,How classical is it?,3", "potentials-from-the-board,Potentials from the board,9"})
     void aShippedNotebookRunsAndItsPageStandsAlone(String name, String title, int plots) throws Exception {
         Path shipped = SHIPPED.resolve(name + ".ipynb");
         assertFalse(Files.readString(shipped).contains("\"output_type\""), "the notebook is kept without outputs");
