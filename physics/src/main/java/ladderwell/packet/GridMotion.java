@@ -13,7 +13,7 @@ public final class GridMotion {
     /** Of the error of the larger step, order 4 leaves a fifteenth; a fifth is taken. */
     private static final double SHARE = 5;
 
-    /** Rounding of one step: 13 turns and 12 transforms, each off by a few 1e-16; measured on long runs: a tenth of this. */
+    /** Allowance for the rounding of one step: 13 turns and 12 transforms, each off by a few 1e-16 that do not all add up. */
     private static final double ROUNDING = 2e-15;
 
     private static final int TRIALS = 12;
