@@ -49,6 +49,11 @@ final class OnGrid implements Representation {
         public boolean moves() {
             return oscillator.moves();
         }
+
+        @Override
+        public double[] breaks(double from, double to) {
+            return oscillator instanceof MovingWell moving ? moving.motion().breakTimes(from, to) : new double[0];
+        }
     }
 
     /** Whether a grid is worth trying: a potential without jumps and kinks on the whole axis, or with ends that are no sudden walls. */

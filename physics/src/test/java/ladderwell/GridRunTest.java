@@ -17,6 +17,8 @@ import ladderwell.potential.Potential;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Units;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
 import tech.tablesaw.api.Table;
 
 class GridRunTest {
@@ -63,6 +65,32 @@ class GridRunTest {
         }
         assertTrue(run.errorLine().contains("estimated"));
         assertTrue(run.record().json().contains("the potential depends on time"));
+    }
+
+    @ParameterizedTest
+    @ValueSource(doubles = {1e-4, 1e-5, 1e-8, 1e-10})
+    void aForceThatSetsInAtOnceIsMetAtItsInstant(double tolerance) {
+        assertSetsIn("x^2/2 - if(t > 3.3, 0.5*x, 0)", 3.3, tolerance);
+        assertSetsIn("x^2/2 - 0.5*x*step(t - 3.01)", 3.01, tolerance);
+    }
+
+    /** A force 1/2 on the ground state from a time on: x = (1 − cos(t − from))/2, p = sin(t − from)/2. */
+    private static void assertSetsIn(String potential, double from, double tolerance) {
+        Run run = Oscillator.in(natural(potential), UNIT)
+                .number(0)
+                .evolve(8, ONE)
+                .frames(1)
+                .tolerance(tolerance)
+                .run();
+        double x = (1 - Math.cos(8 - from)) / 2;
+        double p = Math.sin(8 - from) / 2;
+        Series position = run.series(Observable.POSITION);
+        assertEquals(x, position.value(1), position.error(1), potential + " at " + tolerance);
+        Series momentum = run.series(Observable.MOMENTUM);
+        assertEquals(p, momentum.value(1), momentum.error(1), potential + " at " + tolerance);
+        Series ground = run.series(Observable.population(0));
+        assertEquals(Math.exp(-(x * x + p * p) / 2), ground.value(1), ground.error(1) + 1e-14, potential);
+        assertTrue(ground.error(1) < 4 * tolerance, ground.error(1) + " at " + tolerance);
     }
 
     @Test

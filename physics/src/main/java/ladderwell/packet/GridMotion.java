@@ -131,17 +131,25 @@ public final class GridMotion {
             Pair pair = new Pair(field, start, first, still);
             double bytes = 0;
             for (int j = 1; j < times.length; j++) {
-                double length = times[j] - times[j - 1];
-                double wanted = Math.ceil(length / h);
-                if (wanted * (times.length - 1) > MOST_STEPS) {
-                    throw new PhysicsException.TooLarge(
-                            "a motion of " + (long) (wanted * (times.length - 1)) + " steps",
-                            wanted * (times.length - 1),
-                            MOST_STEPS,
-                            "ask for a shorter time or a looser tolerance");
+                double from = times[j - 1];
+                double[] breaks = field.moves() ? field.breaks(from, times[j]) : new double[0];
+                for (int leg = 0; leg <= breaks.length; leg++) {
+                    double to = leg < breaks.length ? breaks[leg] : times[j];
+                    if (!(to > from)) {
+                        continue;
+                    }
+                    double wanted = Math.ceil((to - from) / h);
+                    if (wanted * (times.length - 1) > MOST_STEPS) {
+                        throw new PhysicsException.TooLarge(
+                                "a motion of " + (long) (wanted * (times.length - 1)) + " steps",
+                                wanted * (times.length - 1),
+                                MOST_STEPS,
+                                "ask for a shorter time or a looser tolerance");
+                    }
+                    int whole = Math.max(1, (int) wanted);
+                    pair.move(from, whole, (to - from) / whole);
+                    from = to;
                 }
-                int whole = Math.max(1, (int) wanted);
-                pair.move(times[j - 1], whole, length / whole);
                 steps = pair.steps();
                 floor = pair.leaked() + ROUNDING * steps;
                 error = Math.max(error, pair.difference() / SHARE + floor);

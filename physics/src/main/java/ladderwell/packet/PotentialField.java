@@ -7,4 +7,9 @@ public interface PotentialField {
 
     /** Whether V depends on time. */
     boolean moves();
+
+    /** Times between two times at which V jumps or bends, ascending: no step goes across one. */
+    default double[] breaks(double from, double to) {
+        return new double[0];
+    }
 }

@@ -27,6 +27,9 @@ final class SplitStep {
     /** Beyond it a potential is cut: nothing of a packet is there. */
     private static final double HIGHEST = 1e12;
 
+    /** How far inside a step, as a share of it, its first and last kick look at the potential; the two shifts cancel where V is smooth. */
+    private static final double INSIDE = 1e-8;
+
     private final Grid grid;
     private final PotentialField field;
     private final double h;
@@ -96,7 +99,8 @@ final class SplitStep {
         double high = 0;
         for (int s = 0; s < KICKS.length; s++) {
             if (field.moves()) {
-                potential(t);
+                // where V jumps at an end of the step, the value inside counts
+                potential(Math.max(time + INSIDE * h, Math.min(time + h - INSIDE * h, t)));
                 turns(0, KICKS[s]);
                 times(wave, kickRe[0], kickIm[0]);
             } else {
