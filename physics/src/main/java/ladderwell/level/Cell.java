@@ -51,8 +51,9 @@ final class Cell {
      *
      * @param cell the cell, null where refused
      * @param shorter by what factor to shorten then
+     * @param misfit whether the polynomial did not follow the potential
      */
-    record Attempt(@Nullable Cell cell, double shorter) {}
+    record Attempt(@Nullable Cell cell, double shorter, boolean misfit) {}
 
     private Cell(
             double a,
@@ -128,7 +129,7 @@ final class Cell {
         double rounding = 2e-16 * Math.max(Math.abs(a), Math.abs(b)) * (most - least) / (2 * r);
         double eps = tolerance * size + Math.min(rounding, 1e-11 * size);
         if (!(Math.abs(t[d]) + Math.abs(t[d - 1]) <= eps)) {
-            return new Attempt(null, 0.75);
+            return new Attempt(null, 0.75, true);
         }
         int n = d;
         while (n > 0 && Math.abs(t[n]) <= 0.4 * eps) {
@@ -150,7 +151,8 @@ final class Cell {
         double fast = Math.sqrt(Math.max(0, r * r * (eLow - mean - theta)));
         theta *= r * r;
         if (!(theta <= Math.max(thetaMost, fast))) {
-            return new Attempt(null, Math.max(0.2, Math.min(0.9, 0.97 * Math.cbrt(Math.max(thetaMost, fast) / theta))));
+            double shorter = 0.97 * Math.cbrt(Math.max(thetaMost, fast) / theta);
+            return new Attempt(null, Math.max(0.2, Math.min(0.9, shorter)), false);
         }
         double[] q = Chebyshev.powers(t, n);
         for (double s : CHECKS) {
@@ -158,7 +160,7 @@ final class Cell {
             fit = Math.max(fit, Math.abs(mean + Chebyshev.value(q, s) - v.applyAsDouble(x)));
         }
         if (!(fit <= 4 * eps)) {
-            return new Attempt(null, 0.75);
+            return new Attempt(null, 0.75, true);
         }
         for (int j = 0; j <= n; j++) {
             q[j] *= r * r;
@@ -181,14 +183,14 @@ final class Cell {
             odd *= 2 * m + 3;
             power *= base;
             if (m + 2 >= TERMS) {
-                return new Attempt(null, 0.75);
+                return new Attempt(null, 0.75, false);
             }
             if (m > 1 && Math.max(bound(ofU[m + 1]), bound(ofV[m + 1])) < 2e-17 * Math.max(odd, power)) {
                 break;
             }
             m++;
         }
-        return new Attempt(new Cell(a, b, mean, theta, fit, size, ofU, ofV, m + 1), 1);
+        return new Attempt(new Cell(a, b, mean, theta, fit, size, ofU, ofV, m + 1), 1, false);
     }
 
     private static double[] next(double[] p, double[] q, int m) {

@@ -82,6 +82,8 @@ final class LevelSearch {
         double s = 0;
         double before = Double.NaN;
         int first = shot.count;
+        double width = Double.POSITIVE_INFINITY;
+        int since = 0;
         while (shot.count - first < MOST_SHOTS) {
             Interruption.check();
             e = below(e, a);
@@ -155,6 +157,14 @@ final class LevelSearch {
                 }
             } else if (Math.abs(f) > 1.5 && !Double.isInfinite(b)) {
                 best = Math.max(a + 0.1 * (b - a), Math.min(b - 0.1 * (b - a), best));
+            }
+            // Newton's iteration can go to and fro about a step of the angle, each time hardly nearer.
+            if (b - a <= 0.5 * width) {
+                width = b - a;
+                since = 0;
+            } else if (++since > 4 && Math.abs(f) > 1e-3 && !Double.isInfinite(b)) {
+                best = a + 0.5 * (b - a);
+                since = 0;
             }
             e = best;
         }

@@ -146,6 +146,7 @@ final class ShootingMesh {
         double h = direction > 0 ? stepRight : stepLeft;
         double wanted = h;
         boolean refused = false;
+        boolean shortened = false;
         while (direction * (end - x) > 0
                 && Math.abs(x) < 1e15
                 && (depth < reachedDepth || !Double.isInfinite(end) || lower(x, direction, e))) {
@@ -175,6 +176,7 @@ final class ShootingMesh {
                     }
                 } else {
                     refused = true;
+                    shortened |= attempt.misfit();
                     continue;
                 }
             }
@@ -194,7 +196,9 @@ final class ShootingMesh {
             double grow = 0.97 * Math.cbrt(THETA / (cell.theta + 1e-3));
             h = cut ? Math.max(h, 2 * cell.r) * 1.2 : 2 * cell.r * Math.max(1.02, Math.min(2, grow));
             h = Math.max(trouble ? wanted : h, 1e-12 * Math.abs(x));
-            wanted = h;
+            // Cells that shrink one after the other approach a jump: the length in use before tells it from a steep place.
+            wanted = shortened && !trouble ? Math.max(h, wanted / 3) : h;
+            shortened = false;
             depth = cell.low > e ? depth + fall(cell, e) : 0;
         }
         if (direction > 0) {
@@ -246,6 +250,30 @@ final class ShootingMesh {
         return best;
     }
 
+    /** The short cell from x to a jump somewhere before x + reach, found by its values; null where there is none. */
+    private @Nullable Cell upToJump(double x, int direction, double reach, double size) {
+        double near = direction > 0 ? Math.nextUp(x) : Math.nextDown(x);
+        double far = x + direction * reach;
+        double before = survey.v(near);
+        double beyond = survey.v(far);
+        if (!(beyond <= Double.MAX_VALUE)) {
+            return null;
+        }
+        while (true) {
+            double middle = 0.5 * (near + far);
+            if (middle == near || middle == far) {
+                break;
+            }
+            double value = survey.v(middle);
+            if (Math.abs(value - before) < Math.abs(value - beyond)) {
+                near = middle;
+            } else {
+                far = middle;
+            }
+        }
+        return attempt(x, direction > 0 ? Math.max(near, far) : Math.min(near, far), size).cell();
+    }
+
     /** A cell from x that looks at the potential beyond a trouble at x itself: its first sliver continues the rest. */
     private Cell past(double x, int direction, double wanted, double size) {
         double least = 1e-13 * survey.length + 1e-15 * Math.abs(x);
@@ -255,6 +283,10 @@ final class ShootingMesh {
             double from = x + direction * sliver;
             double step = Math.abs(survey.v(from) - survey.v(direction > 0 ? Math.nextUp(x) : Math.nextDown(x)));
             if (sliver > least && !(step * sliver <= 1e-15 * (size + step) * survey.length)) {
+                Cell cell = upToJump(x, direction, sliver, size);
+                if (cell != null) {
+                    return cell;
+                }
                 break;
             }
             double value = survey.v(from);
