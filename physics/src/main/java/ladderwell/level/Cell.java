@@ -305,6 +305,26 @@ final class Cell {
         out[1] = exponent == 0 ? d : Math.scalb(d, exponent);
     }
 
+    /** C_m(s) s^(2m+1) of both solutions, for any number of {@link #value}s at s. */
+    void shapes(double s, double[] u, double[] v) {
+        double odd = s;
+        for (int m = 0; m < terms; m++) {
+            u[m] = odd * Chebyshev.value(ofU[m], s);
+            v[m] = odd * Chebyshev.value(ofV[m], s);
+            odd *= s * s;
+        }
+    }
+
+    /** y at s for the solution with value yc and slope dc at the centre, from the {@link #shapes} there. */
+    double value(double s, double z, double yc, double dc, double[] u, double[] v, double[] g) {
+        int exponent = EtaSeries.fill(z * s * s, terms, g);
+        double y = yc * g[0];
+        for (int m = 0; m < terms; m++) {
+            y += (yc * u[m] + dc * v[m]) * g[1 + m];
+        }
+        return exponent == 0 ? y : Math.scalb(y, exponent);
+    }
+
     /** v at s by the polynomial. */
     double potential(double s) {
         return mean + 2 * Chebyshev.slope(ofU[0], s) / (r * r);

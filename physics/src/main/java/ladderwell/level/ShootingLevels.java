@@ -311,19 +311,46 @@ final class ShootingLevels implements Levels {
     public double[][] waveFunctions(long first, int count, double[] x) {
         Points.check(first, count, Long.MAX_VALUE, x);
         double[][] table = new double[count][x.length];
+        Wave[] waves = new Wave[count];
+        for (int row = 0; row < count; row++) {
+            waves[row] = wave(first + row);
+        }
         double[] g = EtaSeries.room();
         double[] out = new double[2];
+        double[] u = new double[Cell.TERMS];
+        double[] v = new double[Cell.TERMS];
+        int[] near = new int[count];
         double scale = survey.even ? Math.sqrt(0.5) : 1;
-        for (int row = 0; row < count; row++) {
-            Interruption.check();
-            Wave wave = wave(first + row);
-            boolean odd = ((first + row) & 1) == 1;
-            for (int i = 0; i < x.length; i++) {
-                if (x[i] <= survey.left || x[i] >= survey.right) {
-                    continue;
+        for (int i = 0; i < x.length; i++) {
+            if (x[i] <= survey.left || x[i] >= survey.right) {
+                continue;
+            }
+            if ((i & 63) == 0) {
+                Interruption.check();
+            }
+            double place = survey.even ? Math.abs(x[i]) : x[i];
+            // The polynomials of a cell serve all levels on the same mesh.
+            Cell known = null;
+            for (int row = 0; row < count; row++) {
+                Wave wave = waves[row];
+                double value;
+                if (place >= wave.left() && place < wave.right()) {
+                    int index = wave.cell(place, near[row]);
+                    near[row] = index;
+                    Cell cell = wave.cells()[index];
+                    double s = (place - cell.centre) / cell.r;
+                    if (cell != known) {
+                        cell.shapes(s, u, v);
+                        known = cell;
+                    }
+                    value = cell.value(
+                            s, cell.z(wave.e()), wave.values()[index], wave.slopes()[index], u, v, g);
+                } else {
+                    wave.at(place, g, out);
+                    value = out[0];
                 }
-                wave.at(survey.even ? Math.abs(x[i]) : x[i], g, out);
-                table[row][i] = survey.even && odd && x[i] < 0 ? -scale * out[0] : scale * out[0];
+                boolean odd = ((first + row) & 1) == 1;
+                table[row][i] = survey.even && odd && x[i] < 0 ? -scale * value : scale * value;
             }
         }
         return table;
