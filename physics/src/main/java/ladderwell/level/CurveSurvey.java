@@ -279,6 +279,11 @@ final class CurveSurvey {
         return best;
     }
 
+    /** The least places met, one in each well. */
+    double[] wells() {
+        return wellsAt;
+    }
+
     /** Whether some well beyond x, that way, lies below e. */
     boolean wellBeyond(double x, int direction, double e) {
         for (int i = 0; i < wellsAt.length; i++) {
@@ -340,7 +345,8 @@ final class CurveSurvey {
         return sum * (even ? 2 : 1) / Math.PI;
     }
 
-    private double turning(double e, int direction) {
+    /** The outermost place on one side where v reaches e, to 1e-4 of its distance; infinite where there is none. */
+    double turning(double e, int direction) {
         double d = Math.max(length, direction * (bottomAt - start));
         int above = 0;
         double last = d;

@@ -22,8 +22,9 @@ final class LevelSearch {
      *
      * @param e energy
      * @param rounding what rounding leaves open, estimated
+     * @param fit error by the fit of the cells; NaN where the wave function has to tell
      */
-    record Found(double e, double rounding) {}
+    record Found(double e, double rounding, double fit) {}
 
     LevelSearch(CurveSurvey survey, double eLow, double eHigh) {
         this.survey = survey;
@@ -182,7 +183,7 @@ final class LevelSearch {
      */
     private Found found(double e, double delta, double slope) {
         double rounding = 4e-16 * (4 + 2 * (shot.to - shot.from)) / slope + 5e-15 * Math.abs(e);
-        return new Found(e, Math.min(delta, rounding) + rounding);
+        return new Found(e, Math.min(delta, rounding) + rounding, Double.NaN);
     }
 
     /** Number of levels below e. */

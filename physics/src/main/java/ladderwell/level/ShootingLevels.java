@@ -11,36 +11,49 @@ import org.jspecify.annotations.Nullable;
 
 /**
  * Levels of any potential by shooting: single levels are found when asked for and kept. Levels 128, 256, … begin new meshes whose cells are
- * as long as the higher energies allow. Energies inside are e = 2E.
+ * as long as the higher energies allow; their energies come from phase functions where the well has them, and from a mesh otherwise. Energies
+ * inside are e = 2E.
  */
 final class ShootingLevels implements Levels {
     private static final long LAST = 50_000_000;
     private static final int FIRST_BAND = 7;
     private static final int SCANNED = 512;
     private static final int REMEMBERED = 20_000;
+    /** So many levels of a band asked for one by one are worth a table of it. */
+    private static final int SINGLE = 12;
 
     private final CurveSurvey survey;
     private final Map<Integer, LevelSearch> bands = new HashMap<>();
+    private final HighLevels high;
+    private final Map<Integer, Band> highBands = new HashMap<>();
     private final Map<Long, Solved> known = new HashMap<>();
     private long count = -1;
 
     /** A level; the wave and with it the error are added when asked for. */
     private static final class Solved {
-        final LevelSearch search;
         final LevelSearch.Found found;
 
         @Nullable Wave wave;
 
         double error;
 
-        Solved(LevelSearch search, LevelSearch.Found found) {
-            this.search = search;
+        Solved(LevelSearch.Found found) {
             this.found = found;
+            error = found.rounding() + found.fit();
         }
+    }
+
+    /** What is known of levels 2^k … 2^(k+1) − 1 by phase functions. */
+    private static final class Band {
+        HighLevels.@Nullable Table table;
+
+        int asked;
+        boolean refused;
     }
 
     ShootingLevels(PotentialCurve curve) {
         survey = new CurveSurvey(curve);
+        high = new HighLevels(survey);
     }
 
     @Override
@@ -81,6 +94,16 @@ final class ShootingLevels implements Levels {
             throw new IllegalArgumentException(
                     "levels of a general potential are computed up to n = " + LAST + ", got " + n);
         }
+        LevelSearch.Found found = byPhase(n);
+        level = new Solved(found == null ? shot(n) : found);
+        if (known.size() >= REMEMBERED) {
+            known.clear();
+        }
+        known.put(n, level);
+        return level;
+    }
+
+    private LevelSearch.Found shot(long n) {
         LevelSearch search = search(n);
         double guess = extrapolated(n);
         Solved twin = known.get(n - 2);
@@ -88,17 +111,43 @@ final class ShootingLevels implements Levels {
         LevelSearch.Found found = Double.isNaN(guess)
                 ? search.solve(n, survey.energyOf(n + 0.5), Double.NaN)
                 : search.solve(n, guess, spacing);
-        if (found.e() < search.mesh.eLow()) {
-            // The band began too high for an unusual potential: the mesh for all energies serves.
-            found = search(0).solve(n, found.e(), Double.NaN);
-            search = search(0);
+        // Where the band began too high for an unusual potential, the mesh for all energies serves.
+        return found.e() < search.mesh.eLow() ? search(0).solve(n, found.e(), Double.NaN) : found;
+    }
+
+    /** The search whose mesh serves a level found. */
+    private LevelSearch searchOf(long n, double e) {
+        LevelSearch search = search(n);
+        return e < search.mesh.eLow() ? search(0) : search;
+    }
+
+    private LevelSearch.@Nullable Found byPhase(long n) {
+        if (band(n) < FIRST_BAND) {
+            return null;
         }
-        level = new Solved(search, found);
-        if (known.size() >= REMEMBERED) {
-            known.clear();
+        Band band = highBands.computeIfAbsent(band(n), k -> new Band());
+        HighLevels.Table table = band.asked >= SINGLE ? table(band, n) : band.table;
+        if (table != null && table.holds(n, n)) {
+            return table.level(n);
         }
-        known.put(n, level);
-        return level;
+        LevelSearch.Found found = band.refused ? null : high.one(n);
+        band.refused |= found == null;
+        band.asked++;
+        return found;
+    }
+
+    /** The table of the band of level n, made when first asked for; null where it cannot be made. */
+    private HighLevels.@Nullable Table table(Band band, long n) {
+        if (band.table == null && !band.refused) {
+            long first = 1L << band(n);
+            long last = 2 * first - 1;
+            if (survey.threshold < Double.POSITIVE_INFINITY) {
+                last = Math.min(last, count() - 2);
+            }
+            band.table = n <= last ? high.table(first, last) : null;
+            band.refused = band.table == null;
+        }
+        return band.table;
     }
 
     /** From four neighbours below; NaN where they are not all known. */
@@ -120,9 +169,10 @@ final class ShootingLevels implements Levels {
         Wave wave = level.wave;
         if (wave == null) {
             Interruption.check();
-            wave = level.search.wave(n, level.found);
+            LevelSearch search = searchOf(n, level.found.e());
+            wave = search.wave(n, level.found);
             level.wave = wave;
-            level.error = level.found.rounding() + wave.fitError() + level.search.tailError(wave);
+            level.error = level.found.rounding() + wave.fitError() + search.tailError(wave);
             if (Double.isNaN(level.error)) {
                 level.wave = null;
                 throw new PhysicsException.NotConverged(
@@ -133,8 +183,11 @@ final class ShootingLevels implements Levels {
     }
 
     private double error(long n) {
-        wave(n);
-        return solved(n).error;
+        Solved level = solved(n);
+        if (Double.isNaN(level.error)) {
+            wave(n);
+        }
+        return level.error;
     }
 
     @Override
@@ -193,8 +246,24 @@ final class ShootingLevels implements Levels {
     public synchronized double[] energies(long first, int count) {
         Points.check(first, count, Long.MAX_VALUE, new double[0]);
         double[] energies = new double[count];
-        for (int i = 0; i < count; i++) {
-            energies[i] = energyHigh(first + i);
+        int i = 0;
+        while (i < count) {
+            long n = first + i;
+            long end = Math.min(first + count, 2L << band(n));
+            HighLevels.Table table = null;
+            if (band(n) >= FIRST_BAND && n <= LAST && end - n > SINGLE) {
+                table = table(highBands.computeIfAbsent(band(n), k -> new Band()), n);
+            }
+            if (table == null || !table.holds(n, n)) {
+                energies[i++] = energyHigh(n);
+                continue;
+            }
+            double[] room = new double[2];
+            while (first + i < end && table.holds(n, first + i)) {
+                energies[i] = table.energy(first + i, room) / 2;
+                i++;
+            }
+            Interruption.check();
         }
         return energies;
     }
@@ -210,6 +279,12 @@ final class ShootingLevels implements Levels {
             return count();
         }
         double about = survey.action(e);
+        if (about > 2 << FIRST_BAND) {
+            long below = high.below(e, about);
+            if (below >= 0) {
+                return below;
+            }
+        }
         return search(about > 200 ? (long) (0.4 * about) : 0).below(e);
     }
 

@@ -23,6 +23,9 @@ final class ShootingMesh {
     private final List<Cell> rightward = new ArrayList<>();
     private final List<Cell> leftward = new ArrayList<>();
     private final double start;
+    /** 0 for both. */
+    private final int side;
+
     private final double leftEnd;
     final @Nullable SingularEdge edge;
     private double stepRight;
@@ -39,6 +42,7 @@ final class ShootingMesh {
     ShootingMesh(CurveSurvey survey, double eLow, double eHigh) {
         this.survey = survey;
         this.eLow = eLow;
+        side = 0;
         if (survey.singular) {
             edge = SingularEdge.at(survey, eHigh);
             start = survey.left + edge.width();
@@ -52,8 +56,25 @@ final class ShootingMesh {
         stepLeft = survey.length;
     }
 
+    /** A mesh on one side only, from a place inside the well outwards. */
+    ShootingMesh(CurveSurvey survey, double eLow, double start, int direction, double step) {
+        this.survey = survey;
+        this.eLow = eLow;
+        this.start = start;
+        edge = null;
+        side = direction;
+        leftEnd = survey.left;
+        stepRight = step;
+        stepLeft = step;
+    }
+
     double eLow() {
         return eLow;
+    }
+
+    /** The highest energy covered. */
+    double reached() {
+        return reached;
     }
 
     Cell[] cells() {
@@ -81,8 +102,8 @@ final class ShootingMesh {
         }
         reached = Math.max(e, reached);
         reachedDepth = Math.max(depth, reachedDepth);
-        boolean grown = extend(reached, 1, rightward, survey.right);
-        if (!survey.even && edge == null) {
+        boolean grown = side >= 0 && extend(reached, 1, rightward, survey.right);
+        if (side < 0 || side == 0 && !survey.even && edge == null) {
             grown |= extend(reached, -1, leftward, leftEnd);
         }
         if (grown) {

@@ -213,6 +213,32 @@ final class Shot {
     private int leftExponent;
     private int rightExponent;
 
+    /**
+     * Comes in from the far end of a mesh that lies on one side of the well, to where that mesh begins. Leaves the solution in {@link #rightY} and
+     * {@link #rightP}.
+     *
+     * @param direction of the mesh as seen from the well
+     * @return zeros on the way
+     */
+    int inwards(double e, int direction) {
+        count++;
+        range(e, ShootingMesh.TAIL, -1);
+        if (direction > 0) {
+            begin(rightEnd(), e, cells[to - 1].mean - e, -1);
+            for (int i = to - 1; i >= 0; i--) {
+                pass(i, -1, e, false, true);
+            }
+        } else {
+            begin(leftEnd(0), e, cells[from].mean - e, 1);
+            for (int i = from; i < cells.length; i++) {
+                pass(i, 1, e, false, true);
+            }
+        }
+        rightY = y;
+        rightP = p;
+        return zeros;
+    }
+
     private static double angle(double sy, double p) {
         double t = Math.atan2(sy, p);
         return t < 0 ? t + Math.PI : t == Math.PI ? 0 : t;
