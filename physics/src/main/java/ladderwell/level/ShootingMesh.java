@@ -15,6 +15,9 @@ final class ShootingMesh {
     static final double TAIL = 20;
 
     private static final double TOLERANCE = 1e-15;
+    /** Where nothing better can be had. */
+    private static final double ROUGH = 1e-13;
+
     private static final double THETA = 4;
     private static final int MOST_CELLS = 200_000;
 
@@ -149,7 +152,10 @@ final class ShootingMesh {
     private double scale(double x, double size) {
         double usual = survey.length;
         boolean near = edge == null && Math.min(Math.abs(x - start), Math.abs(x - survey.bottomAt)) < 6 * usual;
-        return Math.max(near ? 1 / (usual * usual) : 0, Math.max(0.1 * size, smallest));
+        double least = near ? 1 / (usual * usual) : 0;
+        // High levels feel no error of the potential that is small beside their own height.
+        double high = eLow > survey.bottom ? 0.1 * (eLow - survey.bottom) : 0;
+        return Math.max(Math.max(least, high), Math.max(0.1 * size, smallest));
     }
 
     private static double fall(Cell cell, double e) {
@@ -329,6 +335,16 @@ final class ShootingMesh {
                     return cell;
                 }
                 h *= attempt.shorter();
+            }
+        }
+        // Values that are rough by the rounding of large terms that cancel: the cell's fit says by how much.
+        for (double h = wanted; h > 1e-3 * wanted; h *= 0.6) {
+            double to = x + direction * h;
+            Cell cell = Cell.build(
+                            survey::v, Math.min(x, to), Math.max(x, to), scale(x, size), ROUGH, THETA, eLow)
+                    .cell();
+            if (cell != null) {
+                return cell;
             }
         }
         throw new IllegalArgumentException("the potential cannot be followed at x = " + x
