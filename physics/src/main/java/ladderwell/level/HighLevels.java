@@ -9,7 +9,9 @@ import org.jspecify.annotations.Nullable;
  */
 final class HighLevels {
     private static final int MOST_ROUNDS = 16;
-    private static final int[] DEGREES = {11, 19, 35};
+    private static final long FAR = 1024;
+    /** A pure power of the height needs degree 1. */
+    private static final int[] DEGREES = {9, 15, 24, 40};
 
     private final CurveSurvey survey;
 
@@ -115,15 +117,16 @@ final class HighLevels {
         if (!(high < survey.threshold && high > low)) {
             return null;
         }
-        PhaseWell well = PhaseWell.of(survey, low, first);
-        if (well == null) {
+        // Higher up the meshes that lead from one turning point to the next grow long: a well for each energy is quicker.
+        PhaseWell well = first < FAR ? PhaseWell.of(survey, low, first) : null;
+        if (well == null && first < FAR) {
             return null;
         }
         double unit = low - survey.bottom;
         double range = Math.log((high - survey.bottom) / unit);
         for (int degree : DEGREES) {
             Interruption.check();
-            Table table = Table.of(well, survey, unit, range, degree);
+            Table table = Table.of(well, survey, unit, range, degree, first);
             if (table != null) {
                 return table.holds(first, last) ? table : null;
             }
@@ -131,32 +134,41 @@ final class HighLevels {
         return null;
     }
 
-    /** n + excess as a Chebyshev series in ln((e − bottom)/unit). */
+    /** ln((n + ½ + excess)/centre) as a Chebyshev series in ln((e − bottom)/unit). */
     static final class Table {
         private final double bottom;
         private final double unit;
         private final double half;
+        private final double centre;
         private final double[] series;
+        /** Of n over n + ½. */
         private final double noise;
         private final double fit;
+        private final double from;
+        private final double to;
         private final double lowest;
         private final double highest;
 
-        private Table(double bottom, double unit, double half, double[] series, double noise, double fit) {
+        private Table(
+                double bottom, double unit, double half, double centre, double[] series, double noise, double fit) {
             this.bottom = bottom;
             this.unit = unit;
             this.half = half;
+            this.centre = centre;
             this.series = series;
             this.noise = noise;
             this.fit = fit;
             double[] out = new double[2];
             at(-1, out);
-            lowest = out[0];
+            from = out[0];
+            lowest = centre * Math.exp(from) - 0.5;
             at(1, out);
-            highest = out[0];
+            to = out[0];
+            highest = centre * Math.exp(to) - 0.5;
         }
 
-        static @Nullable Table of(PhaseWell well, CurveSurvey survey, double unit, double range, int degree) {
+        static @Nullable Table of(
+                @Nullable PhaseWell well, CurveSurvey survey, double unit, double range, int degree, double levels) {
             int m = degree + 1;
             double half = range / 2;
             double[] value = new double[m];
@@ -164,14 +176,23 @@ final class HighLevels {
             double fit = 0;
             for (int j = m - 1; j >= 0; j--) {
                 double t = half * (1 + Math.cos(Math.PI * (j + 0.5) / m));
-                value[j] = well.excess(survey.bottom + unit * Math.exp(t), 0);
-                // A level can tell no more than its own rounding and what that of the angle makes of it.
-                double open = well.noise + 4e-16 * Math.abs(value[j]);
-                if (!(well.apart <= 4 * open)) {
+                double e = survey.bottom + unit * Math.exp(t);
+                PhaseWell own = well == null ? PhaseWell.of(survey, e, levels) : well;
+                if (own == null) {
                     return null;
                 }
-                noise = Math.max(noise, open);
-                fit = Math.max(fit, well.fit);
+                value[j] = own.excess(e, 0) + 0.5;
+                // A level can tell no more than its own rounding and what that of the angle makes of it.
+                double open = own.noise + 4e-16 * value[j];
+                if (!(value[j] > 1 && own.apart <= 4 * open)) {
+                    return null;
+                }
+                noise = Math.max(noise, open / value[j]);
+                fit = Math.max(fit, own.fit);
+            }
+            double centre = value[m / 2];
+            for (int j = 0; j < m; j++) {
+                value[j] = Math.log(value[j] / centre);
             }
             double[] series = new double[m];
             for (int k = 0; k < m; k++) {
@@ -186,17 +207,22 @@ final class HighLevels {
                 return null;
             }
             double off = left;
-            Table table = new Table(survey.bottom, unit, half, series, noise, fit);
+            Table table = new Table(survey.bottom, unit, half, centre, series, noise, fit);
             double[] out = new double[2];
-            for (double s : new double[] {-0.981, 0.137, 0.903}) {
+            for (double s : new double[] {-0.981, 0.137, 0.933}) {
                 table.at(s, out);
-                double there = well.excess(survey.bottom + unit * Math.exp(half * (1 + s)), 0);
-                off = Math.max(off, Math.abs(out[0] - there));
+                double e = survey.bottom + unit * Math.exp(half * (1 + s));
+                PhaseWell own = well == null ? PhaseWell.of(survey, e, levels) : well;
+                if (own == null) {
+                    return null;
+                }
+                double there = own.excess(e, 0) + 0.5;
+                off = Math.max(off, Math.abs(out[0] - Math.log(there / centre)));
             }
-            return off <= 6 * noise ? new Table(survey.bottom, unit, half, series, noise + off, fit) : null;
+            return off <= 6 * noise ? new Table(survey.bottom, unit, half, centre, series, noise + off, fit) : null;
         }
 
-        /** {n, dn/ds} at s in [−1, 1]. */
+        /** {ln((n + ½)/centre), its derivative by s} at s in [−1, 1]. */
         private void at(double s, double[] out) {
             double b1 = 0;
             double b2 = 0;
@@ -221,16 +247,16 @@ final class HighLevels {
         LevelSearch.Found level(long n) {
             double[] out = new double[2];
             double e = energy(n, out);
-            double slope = out[1] / (half * (e - bottom));
-            return found(e, Double.POSITIVE_INFINITY, noise / slope, fit);
+            return found(e, Double.POSITIVE_INFINITY, noise * half * (e - bottom) / out[1], fit);
         }
 
-        /** e of level n; leaves the derivative of n in out[1]. */
+        /** e of level n; leaves the derivative of {@link #at} in out[1]. */
         double energy(long n, double[] out) {
-            double s = 2 * Math.log((n + 0.5) / (lowest + 0.5)) / Math.log((highest + 0.5) / (lowest + 0.5)) - 1;
+            double wanted = Math.log((n + 0.5) / centre);
+            double s = 2 * (wanted - from) / (to - from) - 1;
             for (int round = 0; round < 8; round++) {
                 at(s, out);
-                double step = (n - out[0]) / out[1];
+                double step = (wanted - out[0]) / out[1];
                 s += step;
                 if (Math.abs(step) < 1e-8) {
                     break;

@@ -21,6 +21,9 @@ final class ShootingLevels implements Levels {
     private static final int REMEMBERED = 20_000;
     /** So many levels of a band asked for one by one are worth a table of it. */
     private static final int SINGLE = 12;
+    /** Factors of 2 in a table. */
+    private static final int WIDE = 3;
+
 
     private final CurveSurvey survey;
     private final Map<Integer, LevelSearch> bands = new HashMap<>();
@@ -43,7 +46,7 @@ final class ShootingLevels implements Levels {
         }
     }
 
-    /** What is known of levels 2^k … 2^(k+1) − 1 by phase functions. */
+    /** What is known by phase functions of levels 128 … 1023, 1024 … 8191 and so on. */
     private static final class Band {
         HighLevels.@Nullable Table table;
 
@@ -121,11 +124,19 @@ final class ShootingLevels implements Levels {
         return e < search.mesh.eLow() ? search(0) : search;
     }
 
+    private static long firstOf(long n) {
+        return 1L << FIRST_BAND + (band(n) - FIRST_BAND) / WIDE * WIDE;
+    }
+
+    private Band highBand(long n) {
+        return highBands.computeIfAbsent((band(n) - FIRST_BAND) / WIDE, k -> new Band());
+    }
+
     private LevelSearch.@Nullable Found byPhase(long n) {
         if (band(n) < FIRST_BAND) {
             return null;
         }
-        Band band = highBands.computeIfAbsent(band(n), k -> new Band());
+        Band band = highBand(n);
         HighLevels.Table table = band.asked >= SINGLE ? table(band, n) : band.table;
         if (table != null && table.holds(n, n)) {
             return table.level(n);
@@ -139,8 +150,8 @@ final class ShootingLevels implements Levels {
     /** The table of the band of level n, made when first asked for; null where it cannot be made. */
     private HighLevels.@Nullable Table table(Band band, long n) {
         if (band.table == null && !band.refused) {
-            long first = 1L << band(n);
-            long last = 2 * first - 1;
+            long first = firstOf(n);
+            long last = (first << WIDE) - 1;
             if (survey.threshold < Double.POSITIVE_INFINITY) {
                 last = Math.min(last, count() - 2);
             }
@@ -150,17 +161,23 @@ final class ShootingLevels implements Levels {
         return band.table;
     }
 
-    /** From four neighbours below; NaN where they are not all known. */
+    /** From six neighbours below, or four; NaN where they are not all known. */
     private double extrapolated(long n) {
-        double[] e = new double[4];
-        for (int i = 0; i < 4; i++) {
-            Solved neighbour = known.get(n - 1 - i);
+        double[] e = new double[6];
+        int many = 0;
+        while (many < e.length) {
+            Solved neighbour = known.get(n - 1 - many);
             if (neighbour == null) {
-                return Double.NaN;
+                break;
             }
-            e[i] = neighbour.found.e();
+            e[many++] = neighbour.found.e();
         }
-        double guess = 4 * e[0] - 6 * e[1] + 4 * e[2] - e[3];
+        if (many < 4) {
+            return Double.NaN;
+        }
+        double guess = many < 6
+                ? 4 * e[0] - 6 * e[1] + 4 * e[2] - e[3]
+                : 6 * e[0] - 15 * e[1] + 20 * e[2] - 15 * e[3] + 6 * e[4] - e[5];
         return guess > e[0] ? guess : Double.NaN;
     }
 
@@ -249,10 +266,10 @@ final class ShootingLevels implements Levels {
         int i = 0;
         while (i < count) {
             long n = first + i;
-            long end = Math.min(first + count, 2L << band(n));
+            long end = Math.min(first + count, band(n) < FIRST_BAND ? 1L << FIRST_BAND : firstOf(n) << WIDE);
             HighLevels.Table table = null;
             if (band(n) >= FIRST_BAND && n <= LAST && end - n > SINGLE) {
-                table = table(highBands.computeIfAbsent(band(n), k -> new Band()), n);
+                table = table(highBand(n), n);
             }
             if (table == null || !table.holds(n, n)) {
                 energies[i++] = energyHigh(n);
