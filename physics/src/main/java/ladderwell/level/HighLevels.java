@@ -10,8 +10,11 @@ import org.jspecify.annotations.Nullable;
 final class HighLevels {
     private static final int MOST_ROUNDS = 16;
     private static final long FAR = 1024;
+    /** Of heights, in logarithm: not tried with the lowest degree. */
+    private static final double WIDE = 1.5;
+
     /** A pure power of the height needs degree 1. */
-    private static final int[] DEGREES = {9, 15, 24, 40};
+    private static final int[] DEGREES = {9, 13, 20, 40};
 
     private final CurveSurvey survey;
 
@@ -125,6 +128,9 @@ final class HighLevels {
         double unit = low - survey.bottom;
         double range = Math.log((high - survey.bottom) / unit);
         for (int degree : DEGREES) {
+            if (range > WIDE && degree < 10) {
+                continue;
+            }
             Interruption.check();
             Table table = Table.of(well, survey, unit, range, degree, first);
             if (table != null) {

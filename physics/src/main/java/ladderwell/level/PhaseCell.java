@@ -13,7 +13,7 @@ final class PhaseCell {
 
     private static final double[] NODE = new double[N + 1];
     private static final double[] WEIGHT = new double[N + 1];
-    /** Rows one after the other. */
+    /** Columns one after the other. */
     private static final double[] SLOPE = new double[(N + 1) * (N + 1)];
 
     private static final double[][] LAST = new double[2][N + 1];
@@ -38,7 +38,7 @@ final class PhaseCell {
                 if (i != j) {
                     double c = (i == 0 || i == N ? 2.0 : 1) / (j == 0 || j == N ? 2.0 : 1);
                     double d = c * ((i + j) % 2 == 0 ? 1 : -1) / (NODE[i] - NODE[j]);
-                    SLOPE[i * (N + 1) + j] = d;
+                    SLOPE[j * (N + 1) + i] = d;
                     sum += d;
                 }
             }
@@ -143,12 +143,14 @@ final class PhaseCell {
 
     private static void slope(double[] f, double scale, double[] out) {
         for (int i = 0; i <= N; i++) {
-            double sum = 0;
-            int row = i * (N + 1);
-            for (int j = 0; j <= N; j++) {
-                sum += SLOPE[row + j] * f[j];
+            out[i] = 0;
+        }
+        for (int j = 0; j <= N; j++) {
+            double here = scale * f[j];
+            int column = j * (N + 1);
+            for (int i = 0; i <= N; i++) {
+                out[i] += SLOPE[column + i] * here;
             }
-            out[i] = sum * scale;
         }
     }
 
