@@ -248,8 +248,8 @@ final class Cell {
         if (!slopes) {
             for (int i = 0; i <= terms; i++, at++) {
                 double here = g[i];
-                u += all[at] * here;
-                du += all[at + w] * here;
+                u = Math.fma(all[at], here, u);
+                du = Math.fma(all[at + w], here, du);
                 v += all[at + 2 * w] * here;
                 dv += all[at + 3 * w] * here;
             }
@@ -266,14 +266,14 @@ final class Cell {
                 double b = all[at + w];
                 double c = all[at + 2 * w];
                 double d = all[at + 3 * w];
-                u += a * here;
-                uz += a * next;
-                du += b * here;
-                duz += b * next;
-                v += c * here;
-                vz += c * next;
-                dv += d * here;
-                dvz += d * next;
+                u = Math.fma(a, here, u);
+                uz = Math.fma(a, next, uz);
+                du = Math.fma(b, here, du);
+                duz = Math.fma(b, next, duz);
+                v = Math.fma(c, here, v);
+                vz = Math.fma(c, next, vz);
+                dv = Math.fma(d, here, dv);
+                dvz = Math.fma(d, next, dvz);
                 here = next;
             }
             out[4] = 0.5 * uz;

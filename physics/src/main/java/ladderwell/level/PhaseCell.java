@@ -149,7 +149,7 @@ final class PhaseCell {
             double here = scale * f[j];
             int column = j * (N + 1);
             for (int i = 0; i <= N; i++) {
-                out[i] += SLOPE[column + i] * here;
+                out[i] = Math.fma(SLOPE[column + i], here, out[i]);
             }
         }
     }

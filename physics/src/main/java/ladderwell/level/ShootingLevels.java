@@ -124,12 +124,17 @@ final class ShootingLevels implements Levels {
         return e < search.mesh.eLow() ? search(0) : search;
     }
 
+    /** Which table may hold level n; -1 for none. */
+    private static int tableOf(long n) {
+        return Math.floorDiv(63 - Long.numberOfLeadingZeros(Math.max(1, n)) - FIRST_BAND, WIDE);
+    }
+
     private static long firstOf(long n) {
-        return 1L << FIRST_BAND + (band(n) - FIRST_BAND) / WIDE * WIDE;
+        return 1L << FIRST_BAND + tableOf(n) * WIDE;
     }
 
     private Band highBand(long n) {
-        return highBands.computeIfAbsent((band(n) - FIRST_BAND) / WIDE, k -> new Band());
+        return highBands.computeIfAbsent(tableOf(n), k -> new Band());
     }
 
     private LevelSearch.@Nullable Found byPhase(long n) {
@@ -266,9 +271,9 @@ final class ShootingLevels implements Levels {
         int i = 0;
         while (i < count) {
             long n = first + i;
-            long end = Math.min(first + count, band(n) < FIRST_BAND ? 1L << FIRST_BAND : firstOf(n) << WIDE);
+            long end = Math.min(first + count, tableOf(n) < 0 ? 1L << FIRST_BAND : firstOf(n) << WIDE);
             HighLevels.Table table = null;
-            if (band(n) >= FIRST_BAND && n <= LAST && end - n > SINGLE) {
+            if (tableOf(n) >= 0 && n <= LAST && end - n > SINGLE) {
                 table = table(highBand(n), n);
             }
             if (table == null || !table.holds(n, n)) {

@@ -293,6 +293,21 @@ final class Shot {
             return y0 * y1 < 0 || y1 == 0 && y0 != 0 ? 1 : 0;
         }
         double w = Math.sqrt(square);
+        // The angle advances by w up to theta/w, the zeros are within one of that over pi, and even or odd as the signs say: most often one
+        // number is left.
+        double product = y0 * y1;
+        if (Math.abs(product) >= Double.MIN_NORMAL) {
+            double slack = theta / w;
+            double low = (w - slack) / Math.PI - 1 - 1e-9;
+            double high = (w + slack) / Math.PI + 1 + 1e-9;
+            int least = (int) Math.floor(low) + 1;
+            if ((least & 1) != (product < 0 ? 1 : 0)) {
+                least++;
+            }
+            if (least >= 0 && least + 2 > high) {
+                return least;
+            }
+        }
         double a = Math.atan2(w * y0, d0);
         double b = Math.atan2(w * y1, d1);
         double t = a + w + Math.IEEEremainder(b - a - w, 2 * Math.PI);
