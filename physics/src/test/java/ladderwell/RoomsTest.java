@@ -76,6 +76,10 @@ class RoomsTest {
     static final ArchRule motion = only("motion", "state", "level", "evidence", "quantity", "numeric");
 
     @ArchTest
+    static final ArchRule window =
+            only("window", "state", "operator", "formula", "level", "evidence", "quantity", "numeric");
+
+    @ArchTest
     static final ArchRule packet = only("packet", "state", "level", "evidence", "quantity", "numeric");
 
     @ArchTest

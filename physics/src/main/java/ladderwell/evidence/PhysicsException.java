@@ -62,6 +62,50 @@ public abstract sealed class PhysicsException extends RuntimeException {
         }
     }
 
+    /** What was asked would take far longer than anyone waits; refused before it is begun or as soon as it shows. */
+    public static final class TooLong extends PhysicsException {
+        private static final long serialVersionUID = 1L;
+
+        private final String what;
+        private final double seconds;
+        private final String remedy;
+
+        /**
+         * Message: "{what} would take about {seconds}; {remedy}".
+         *
+         * @param what the request and its size in the caller's words
+         * @param seconds estimate
+         * @param remedy what to try
+         */
+        public TooLong(String what, double seconds, String remedy) {
+            super(what + " would take about "
+                    + (seconds < 2e5
+                            ? Digits.significant(seconds / 3600, 2) + " hours"
+                            : seconds < 1e8
+                                    ? Digits.significant(seconds / 86400, 2) + " days"
+                                    : Digits.significant(seconds / 31557600, 2) + " years")
+                    + "; " + remedy);
+            this.what = what;
+            this.seconds = seconds;
+            this.remedy = remedy;
+        }
+
+        /** The request. */
+        public String what() {
+            return what;
+        }
+
+        /** Seconds it would take, roughly. */
+        public double seconds() {
+            return seconds;
+        }
+
+        /** What to try. */
+        public String remedy() {
+            return remedy;
+        }
+    }
+
     /** An iteration reached its cap before its tolerance. */
     public static final class NotConverged extends PhysicsException {
         private static final long serialVersionUID = 1L;

@@ -1,0 +1,199 @@
+package ladderwell.window;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.List;
+import java.util.concurrent.CancellationException;
+import ladderwell.evidence.PhysicsException;
+import ladderwell.operator.LadderPolynomial;
+import ladderwell.state.Amplitudes;
+import ladderwell.state.HarmonicStates;
+import ladderwell.state.Mixture;
+import org.junit.jupiter.api.Test;
+
+/** Values with an S-… number are those of the project's table of published values; sources beside them. */
+class WindowMotionTest {
+    private static final double MEMORY = 1e9;
+    private static final double TOLERANCE = 1e-9;
+
+    private static final LadderPolynomial A = LadderPolynomial.a();
+
+    private static LadderPolynomial kerr(double strength) {
+        return LadderPolynomial.term(2, 2, strength / 2, 0);
+    }
+
+    private static LadderPolynomial drive(double strength) {
+        return A.plus(LadderPolynomial.adagger()).times(strength);
+    }
+
+    private static WindowState mixed(
+            LadderPolynomial h, List<LadderPolynomial> jumps, Mixture start, double time, double tolerance) {
+        return WindowMotion.mixed(h, jumps, start.density(MEMORY), new double[] {time}, tolerance, MEMORY)
+                .state(0);
+    }
+
+    @Test
+    void aKerrStateCollapsesAsItsClosedFormSays() {
+        // S-KER-01, S-KER-02: H = χ n², α = 2, χt = 0.1; Yurke and Stoler, Phys. Rev. Lett. 57 (1986) 13
+        LadderPolynomial h = LadderPolynomial.number().power(2);
+        WindowState state = WindowMotion.pure(
+                        h, Amplitudes.coherent(4, 0, TOLERANCE / 10), new double[] {0.1}, TOLERANCE, MEMORY)
+                .state(0);
+        double[] a = state.lowering(1);
+        // ⟨a⟩ of an error ε in a window of N levels: below 2 ε √N and what was cut off, far below
+        double allowed = 3 * state.error().size() * Math.sqrt(state.first() + state.levels());
+        assertEquals(1.846724430996562, Math.hypot(a[0], a[1]), allowed);
+        assertEquals(1.155625742951775, a[0], allowed);
+        assertTrue(state.error().isGuaranteed());
+    }
+
+    @Test
+    void aDampedKerrStateFollowsItsClosedForm() {
+        // S-DK-01a: H = χ n², loss κ, α = 1, χ = 1, κ = 0.2, t = 0.3; Milburn and Holmes, Phys. Rev. Lett. 56 (1986)
+        // 2237
+        WindowState state = mixed(
+                LadderPolynomial.number().power(2),
+                List.of(A.times(Math.sqrt(0.2))),
+                Mixture.pure(Amplitudes.coherent(1, 0, TOLERANCE / 10)),
+                0.3,
+                TOLERANCE);
+        assertEquals(0.54239350700974, state.lowering(1)[0], state.error().size() * Math.sqrt(state.levels()) + 5e-15);
+    }
+
+    @Test
+    void aCatLosesItsParityAndPurity() {
+        // S-DC-01a, S-DC-01b: even cat α = 2, κt = 0.1; Walls and Milburn, Phys. Rev. A 31 (1985) 2403
+        WindowState state = mixed(
+                LadderPolynomial.zero(),
+                List.of(A),
+                Mixture.pure(HarmonicStates.cat(4, 0, 2, 0, TOLERANCE / 10)),
+                0.1,
+                TOLERANCE);
+        double error = state.traceNormError().size();
+        assertEquals(0.46761992573919, state.diagonalMean(n -> n % 2 == 0 ? 1 : -1), error);
+        assertEquals(0.60933419747416, state.purity(), 2 * error);
+    }
+
+    @Test
+    void lossTakesQuantaAsTheBinomialLawSays() {
+        // S-TZ-03: P(3) of |5⟩ after κt = 0.4; Walls and Milburn, Quantum Optics
+        WindowState state =
+                mixed(LadderPolynomial.zero(), List.of(A), Mixture.pure(Amplitudes.level(5)), 0.4, TOLERANCE);
+        assertEquals(
+                0.327364591595040,
+                state.population((int) (3 - state.first())),
+                state.traceNormError().size());
+    }
+
+    @Test
+    void vacuumBecomesThermal() {
+        // S-TZ-02: κ = 1, n_th = 0.6, t = 0.9; Gardiner and Zoller, Quantum Noise
+        WindowState state = mixed(
+                LadderPolynomial.zero(),
+                List.of(A.times(Math.sqrt(1.6)), LadderPolynomial.adagger().times(Math.sqrt(0.6))),
+                Mixture.pure(Amplitudes.level(0)),
+                0.9,
+                TOLERANCE);
+        assertEquals(
+                0.0508401709886575, state.population(2), state.traceNormError().size());
+        assertEquals(1, state.trace(), state.traceNormError().size());
+    }
+
+    @Test
+    void heatAndLossKeepTheMeanOfTheirClosedForm() {
+        // S-TZ-01: κ = 0.5, n_th = 3, ⟨n⟩(0) = 10, t = 2
+        WindowState state = mixed(
+                LadderPolynomial.zero(),
+                List.of(A.times(Math.sqrt(2.0)), LadderPolynomial.adagger().times(Math.sqrt(1.5))),
+                Mixture.pure(Amplitudes.coherent(10, 0.7, 1e-10)),
+                2,
+                1e-7);
+        // the tail of heat falls by 3/4 a level: its weight times a few hundred levels
+        assertEquals(
+                5.575156088200096,
+                state.diagonalMean(n -> n),
+                400 * state.traceNormError().size());
+    }
+
+    @Test
+    void aDrivenDampedKerrModeSettlesWhereTheHypergeometricSolutionIs() {
+        // S-DDK-02a, S-DDK-02b: Δ = 1, U = 0.5, F = 0.8, κ = 1; Drummond and Walls, J. Phys. A 13 (1980) 725
+        LadderPolynomial h = kerr(0.5).plus(LadderPolynomial.number().times(-1)).plus(drive(0.8));
+        WindowState state = mixed(h, List.of(A), Mixture.pure(Amplitudes.level(0)), 90, 1e-7);
+        double mean = state.diagonalMean(n -> n);
+        double pairs = state.diagonalMean(n -> n * (n - 1.0));
+        // the slowest part of the transient decays at about 0.2 κ: e^{−18}; the rest is the error times the levels
+        double levels = state.levels();
+        double error = state.traceNormError().size();
+        assertEquals(1.3847927652210, mean, levels * error + 1e-7);
+        assertEquals(1.2278223408365, pairs / (mean * mean), levels * levels * error + 1e-6);
+    }
+
+    @Test
+    void normAndTraceAreKeptAndPurityStaysOneWithoutJumps() {
+        LadderPolynomial h = kerr(0.2).plus(drive(1.5));
+        double[] times = {0, 0.5, 1, 2};
+        WindowMotion vectors = WindowMotion.pure(h, Amplitudes.coherent(4, 0, 1e-10), times, TOLERANCE, MEMORY);
+        WindowMotion operators = WindowMotion.mixed(
+                h, List.of(), Mixture.pure(Amplitudes.coherent(4, 0, 1e-10)).density(MEMORY), times, TOLERANCE, MEMORY);
+        for (int j = 0; j < times.length; j++) {
+            WindowState v = vectors.state(j);
+            WindowState w = operators.state(j);
+            assertEquals(1, v.trace(), v.traceNormError().size());
+            assertEquals(1, w.purity(), 2 * w.traceNormError().size());
+            double both = v.traceNormError().size() + w.traceNormError().size();
+            for (long n = 0; n < 12; n++) {
+                double p = n < v.first() ? 0 : v.population((int) (n - v.first()));
+                double q = n < w.first() ? 0 : w.population((int) (n - w.first()));
+                assertEquals(p, q, both, "level " + n + " at " + times[j]);
+            }
+        }
+    }
+
+    @Test
+    void farFromTheGroundLevelTheWindowFollowsTheState() {
+        // 400 quanta that decay: the window moves down with the mean, 400 e^{−κt}
+        WindowMotion motion = WindowMotion.mixed(
+                LadderPolynomial.zero(),
+                List.of(A),
+                Mixture.pure(Amplitudes.coherent(400, 0, 1e-7)).density(MEMORY),
+                new double[] {0, 0.4},
+                1e-5,
+                MEMORY);
+        WindowState end = motion.state(1);
+        assertTrue(end.first() > 120 && end.first() + end.levels() < 420, end.first() + "+" + end.levels());
+        double mean = 400 * Math.exp(-0.4);
+        assertEquals(mean, end.diagonalMean(n -> n), mean * end.traceNormError().size());
+    }
+
+    @Test
+    void aStateThatEscapesIsRefusedWithAnEstimate() {
+        // a cubic potential lets a state reach infinity in finite time
+        LadderPolynomial cubic = LadderPolynomial.position().power(3).times(0.1);
+        PhysicsException refused = assertThrows(
+                PhysicsException.class,
+                () -> WindowMotion.pure(cubic, Amplitudes.level(0), new double[] {50}, TOLERANCE, MEMORY));
+        assertTrue(String.valueOf(refused.getMessage()).contains("levels"), refused.getMessage());
+    }
+
+    @Test
+    void aToleranceBelowRoundingIsRefused() {
+        assertThrows(
+                PhysicsException.NotConverged.class,
+                () -> mixed(drive(1), List.of(A), Mixture.pure(Amplitudes.level(0)), 10, 1e-13));
+    }
+
+    @Test
+    void anInterruptEndsARun() {
+        Thread.currentThread().interrupt();
+        try {
+            assertThrows(
+                    CancellationException.class,
+                    () -> mixed(drive(1), List.of(A), Mixture.pure(Amplitudes.level(0)), 10, 1e-8));
+        } finally {
+            Thread.interrupted();
+        }
+    }
+}
