@@ -3,6 +3,7 @@ package ladderwell;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.PhysicsException;
 import ladderwell.evidence.Record;
+import ladderwell.phasespace.PhaseState;
 import ladderwell.quantity.Digits;
 
 /** In what a run carries its state from time 0 on: amplitudes on levels, or values on a grid of positions. */
@@ -71,6 +72,12 @@ sealed interface Representation permits OnLevels, OnGrid {
 
     /** |ψ|² at every time on so many points that cover the motion. */
     Density density(Run run, int points);
+
+    /** The time nearest to this one at which the state can be had: the same on levels, one of the run's times on a grid. */
+    double instant(double time);
+
+    /** The state at such a time, as phase-space functions are made of it. */
+    PhaseState phaseState(State state, double time);
 
     /** What the motion does, in one line. */
     String verdict(Run run);

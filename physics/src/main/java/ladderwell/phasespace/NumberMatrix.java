@@ -6,7 +6,7 @@ import ladderwell.numeric.HermitianForm;
 import ladderwell.state.DensityOperator;
 
 /** A mixed state on a window of harmonic levels, given by its density operator. Not to be shared between threads: it keeps work arrays. */
-public final class NumberMatrix {
+public final class NumberMatrix implements PhaseState {
     private final int first;
     private final int size;
     private final HermitianForm form;
@@ -62,7 +62,7 @@ public final class NumberMatrix {
         frobenius = Math.sqrt(squares);
     }
 
-    /** Where it lives. */
+    @Override
     public Support support() {
         return Support.ofLevels(first + size - 1L);
     }
@@ -88,15 +88,16 @@ public final class NumberMatrix {
         return frobenius;
     }
 
-    /** The level above which less than a share of the weight lies. */
-    long highestThatShows(double share) {
+    /** A square about the orbit of the level above which less than the share lies. */
+    @Override
+    public Support visible(double share) {
         double above = 0;
-        for (int m = size - 1; m >= 0; m--) {
+        int m = size - 1;
+        while (m > 0 && above + Math.abs(populations[m]) <= share) {
             above += Math.abs(populations[m]);
-            if (above > share) {
-                return first + m;
-            }
+            m--;
         }
-        return first;
+        double reach = Math.sqrt(2.0 * (first + m) + 1) + 2;
+        return new Support(-reach, reach, -reach, reach, Bound.estimated(Math.sqrt(share)));
     }
 }

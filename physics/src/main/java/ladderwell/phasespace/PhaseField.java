@@ -32,6 +32,11 @@ public final class PhaseField {
         this.bound = bound;
     }
 
+    /** The same values at the points of another grid. */
+    PhaseField on(PhaseGrid other, Bound there) {
+        return new PhaseField(kind, other, values, there);
+    }
+
     /** Wigner or Husimi. */
     public Kind kind() {
         return kind;

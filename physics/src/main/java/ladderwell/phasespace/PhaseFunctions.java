@@ -20,8 +20,27 @@ public final class PhaseFunctions {
     /** Nothing is computed before a function is asked for. */
     public PhaseFunctions() {}
 
+    /** The Wigner function of a state. */
+    public PhaseField wigner(PhaseState state, PhaseGrid grid) {
+        return state instanceof WaveFunction wave ? wigner(wave, grid) : wigner((NumberMatrix) state, grid);
+    }
+
+    /**
+     * The Husimi function of a state.
+     *
+     * @param width that of the coherent states it is a mean over: |⟨x|α⟩|² ∝ e^{−(x−x₀)²/width²}; 1 for those of the harmonic oscillator
+     */
+    public PhaseField husimi(PhaseState state, PhaseGrid grid, double width) {
+        return state instanceof WaveFunction wave
+                ? husimi(wave, grid, width)
+                : husimi((NumberMatrix) state, grid, width);
+    }
+
     /** The Wigner function of a pure state. */
     public PhaseField wigner(WaveFunction wave, PhaseGrid grid) {
+        if (wave instanceof GaussianWave away && !away.isAtOrigin()) {
+            return moved(wigner(away.atOrigin(), from(away, grid)), away, grid);
+        }
         Correlations correlations = new PureCorrelations(wave, lattice(grid, wave.support()));
         return wigner(correlations, grid, wave.sampleError(), missed(wave, grid));
     }
@@ -38,6 +57,9 @@ public final class PhaseFunctions {
      * @param width that of the coherent states it is a mean over: |⟨x|α⟩|² ∝ e^{−(x−x₀)²/width²}; 1 for those of the harmonic oscillator
      */
     public PhaseField husimi(WaveFunction wave, PhaseGrid grid, double width) {
+        if (wave instanceof GaussianWave away && !away.isAtOrigin()) {
+            return moved(husimi(away.atOrigin(), from(away, grid), width), away, grid);
+        }
         Correlations correlations = new PureCorrelations(wave, smoothedLattice(grid, wave.support(), width));
         return husimi(correlations, grid, width, wave.sampleError(), missed(wave, grid));
     }
@@ -46,6 +68,22 @@ public final class PhaseFunctions {
     public PhaseField husimi(NumberMatrix state, PhaseGrid grid, double width) {
         Correlations correlations = new MixedCorrelations(state, smoothedLattice(grid, state.support(), width));
         return husimi(correlations, grid, width, Bound.estimated(0), missed(state, grid));
+    }
+
+    /** The grid as seen from the middle of a coherent state, where far from the origin no phase is rounded. */
+    private static PhaseGrid from(GaussianWave away, PhaseGrid grid) {
+        return new PhaseGrid(
+                grid.x() - away.position(),
+                grid.p() - away.momentum(),
+                grid.halfX(),
+                grid.halfP(),
+                grid.nx(),
+                grid.np());
+    }
+
+    private static PhaseField moved(PhaseField field, GaussianWave away, PhaseGrid grid) {
+        Bound bound = field.bound().plus(misplaced(grid, away.support()) / Math.PI);
+        return field.on(grid, bound);
     }
 
     private static Lattice lattice(PhaseGrid grid, Support support) {

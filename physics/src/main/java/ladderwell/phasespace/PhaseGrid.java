@@ -34,6 +34,31 @@ public record PhaseGrid(double x, double p, double halfX, double halfP, int nx, 
         return new PhaseGrid(0, 0, half, half, points, points);
     }
 
+    /**
+     * A grid over a box with a margin of a twentieth around it, so fine that fringes between its opposite ends show as far as {@code most} points on a
+     * side allow, and with at least {@code least}; an odd number of points.
+     */
+    public static PhaseGrid covering(Support box, int least, int most) {
+        double halfX = 0.55 * (box.right() - box.left());
+        double halfP = 0.55 * (box.high() - box.low());
+        // Fringes between ends of the box are π over its width apart: four points to each.
+        double wanted = 1 + 4 * (2 * halfX) * (2 * halfP) / Math.PI / 1.21;
+        int points = (int) Math.max(least, Math.min(most, wanted)) | 1;
+        return new PhaseGrid(
+                box.left() + (box.right() - box.left()) / 2,
+                box.low() + (box.high() - box.low()) / 2,
+                halfX,
+                halfP,
+                points,
+                points);
+    }
+
+    /** Whether the fringes of a state that fills a box are seen: two points at least to each. */
+    public boolean resolves(Support box) {
+        return stepX() * (box.high() - box.low()) <= Math.PI / 2 * 1.01
+                && stepP() * (box.right() - box.left()) <= Math.PI / 2 * 1.01;
+    }
+
     /** Distance of neighbouring positions. */
     public double stepX() {
         return 2 * halfX / (nx - 1);

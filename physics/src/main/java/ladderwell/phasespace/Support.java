@@ -57,4 +57,14 @@ public record Support(double left, double right, double low, double high, Bound 
         // exponent.
         return new Support(-far, far, -far, far, Bound.guaranteed(WANTED));
     }
+
+    /** The least box around this one and another. */
+    public Support around(Support other) {
+        return new Support(
+                Math.min(left, other.left),
+                Math.max(right, other.right),
+                Math.min(low, other.low),
+                Math.max(high, other.high),
+                missed.widest(other.missed));
+    }
 }
