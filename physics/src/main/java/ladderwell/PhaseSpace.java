@@ -5,6 +5,7 @@ import static ladderwell.quantity.Units.ONE;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
+import ladderwell.classical.ClassicalOrbit;
 import ladderwell.evidence.Bound;
 import ladderwell.phasespace.PhaseField;
 import ladderwell.phasespace.PhaseFunctions;
@@ -23,6 +24,11 @@ import org.jspecify.annotations.Nullable;
 public final class PhaseSpace {
     /** Less of the state than this may lie outside the grid, in position and in momentum. */
     private static final double SHARE = 1e-7;
+
+    /** Up to so many times as wide as the state the picture grows for the classical orbit. */
+    private static final double WIDER = 3;
+
+    private static final int ORBIT_POINTS = 200;
 
     private static final int LEAST_POINTS = 161;
     private static final int MOST_POINTS = 401;
@@ -45,7 +51,39 @@ public final class PhaseSpace {
         this.time = time;
         state = run.representation().phaseState(run.state(), time);
         box = state.visible(SHARE);
-        grid = PhaseGrid.covering(box, LEAST_POINTS, MOST_POINTS);
+        grid = PhaseGrid.covering(withOrbit(run, box), LEAST_POINTS, MOST_POINTS);
+    }
+
+    /** The box, widened to show the whole classical orbit where that is not much larger. */
+    private static Support withOrbit(Run run, Support box) {
+        ClassicalOrbit orbit = run.classical();
+        double last = run.time(run.times() - 1);
+        double end = run.state().oscillator().moves()
+                ? last
+                : Math.min(last, period(run).orElse(last));
+        double left = box.left();
+        double right = box.right();
+        double low = box.low();
+        double high = box.high();
+        for (int i = 0; i <= ORBIT_POINTS; i++) {
+            double x = orbit.position(end * i / ORBIT_POINTS);
+            double p = orbit.momentum(end * i / ORBIT_POINTS);
+            left = Math.min(left, x);
+            right = Math.max(right, x);
+            low = Math.min(low, p);
+            high = Math.max(high, p);
+        }
+        boolean near =
+                right - left < WIDER * (box.right() - box.left()) && high - low < WIDER * (box.high() - box.low());
+        return near ? new Support(left, right, low, high, box.missed()) : box;
+    }
+
+    private static OptionalDouble period(Run run) {
+        try {
+            return OptionalDouble.of(run.state().period());
+        } catch (IllegalArgumentException e) {
+            return OptionalDouble.empty(); // no classical particle is bound at this energy
+        }
     }
 
     static PhaseSpace at(Run run, Quantity instant) {
@@ -79,18 +117,14 @@ public final class PhaseSpace {
 
     /** The instant in classical periods, where there are any. */
     public OptionalDouble periods() {
-        return periods(run, time);
+        OptionalDouble period = period(run);
+        return period.isPresent() ? OptionalDouble.of(time / period.getAsDouble()) : period;
     }
 
-    static OptionalDouble periods(Run run, double time) {
-        try {
-            return OptionalDouble.of(time / run.state().period());
-        } catch (IllegalArgumentException e) {
-            return OptionalDouble.empty(); // no classical particle is bound at this energy
-        }
-    }
-
-    /** The grid: all but a ten-millionth of the state lies on it, in position and in momentum. */
+    /**
+     * The grid: all but a ten-millionth of the state lies on it, in position and in momentum (of momenta that fall off slowly all but about a
+     * thousandth), and the classical orbit where that is not much larger.
+     */
     public PhaseGrid grid() {
         return grid;
     }
@@ -182,12 +216,20 @@ public final class PhaseSpace {
     public String verdict() {
         PhaseField field = wigner();
         PhaseField.Reading parts = negativity();
-        String range = "ħW between " + field.bound().beside(field.least()) + " and "
-                + field.bound().beside(greatest(field));
+        String range =
+                "ħW between " + shown(field.least(), field.bound()) + " and " + shown(greatest(field), field.bound());
         return parts.value() <= parts.bound().size()
                         && field.least() >= -field.bound().size()
                 ? range + "; nowhere negative on the grid beyond its error"
                 : range + "; negativity ∫|W| − 1 = " + parts.bound().beside(parts.value());
+    }
+
+    /** Four digits at most, fewer where the error allows no more. */
+    private static String shown(double value, Bound bound) {
+        return Math.abs(value) <= 2 * bound.size()
+                ? "0"
+                : Digits.pretty(Digits.withBound(value, Math.max(bound.size(), 5e-5 * Math.abs(value)))
+                        .replaceAll("\\(\\d+\\)", ""));
     }
 
     /** Grid, method and error, in one line. */

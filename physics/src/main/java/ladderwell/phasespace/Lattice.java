@@ -23,14 +23,15 @@ record Lattice(
 
     /**
      * For a state within a support, with rows at the positions of a grid and {@code between} − 1 rows between neighbours, and further rows to
-     * {@code margin} beyond its ends; so fine that with a step in y of d no image of the momenta up to {@code blur} beyond the support falls on
-     * the grid.
+     * {@code margin} beyond its ends; so fine that no image of the momenta up to {@code blur} beyond the support falls on the grid.
+     *
+     * @param turn images lie this angle over d apart: π for sums over y, 2π for sums over x
      *
      * @throws IllegalArgumentException if that takes too many samples
      */
-    static Lattice of(PhaseGrid grid, Support support, double margin, double rowSpacing, double blur) {
+    static Lattice of(PhaseGrid grid, Support support, double margin, double rowSpacing, double turn, double blur) {
         double highest = Math.max(support.high() - grid.p(), grid.p() - support.low()) + blur;
-        double wanted = Math.PI / (grid.halfP() + highest);
+        double wanted = turn / (grid.halfP() + highest);
         double h = grid.stepX();
         int between = (int) Math.ceil(Math.max(1, h / rowSpacing));
         double ratio = Math.ceil(h / between / wanted);

@@ -60,8 +60,35 @@ public final class PhaseFunctions {
         if (wave instanceof GaussianWave away && !away.isAtOrigin()) {
             return moved(husimi(away.atOrigin(), from(away, grid), width), away, grid);
         }
-        Correlations correlations = new PureCorrelations(wave, smoothedLattice(grid, wave.support(), width));
-        return husimi(correlations, grid, width, wave.sampleError(), missed(wave, grid));
+        checkWidth(width);
+        Support support = wave.support();
+        Lattice lattice = Lattice.of(grid, support, 0, grid.stepX(), 2 * Math.PI, CoherentOverlaps.REACH / width);
+        CoherentOverlaps real = CoherentOverlaps.of(wave, lattice, width);
+        double factor = lattice.step() / Math.sqrt(Math.sqrt(Math.PI) * width);
+        double[][] values = sums(real, lattice.step() / 2, factor, grid);
+        double[][] imaginary = sums(real.imaginary(), lattice.step() / 2, factor, grid);
+        for (int i = 0; i < grid.nx(); i++) {
+            for (int j = 0; j < grid.np(); j++) {
+                values[i][j] = (values[i][j] * values[i][j] + imaginary[i][j] * imaginary[i][j]) / (2 * Math.PI);
+            }
+        }
+        return new PhaseField(PhaseField.Kind.HUSIMI, grid, values, overlapBound(wave, grid, lattice, width));
+    }
+
+    /** Of |⟨α|ψ⟩|²/2π, whose overlap is below 1: errors of the state count by their norm, those of samples by the Gaussian's area. */
+    private static Bound overlapBound(WaveFunction wave, PhaseGrid grid, Lattice lattice, double width) {
+        // ∫|g| over a Gaussian of norm 1, and by Cauchy and Schwarz for what is summed
+        double area = Math.sqrt(2 * Math.sqrt(Math.PI) * width);
+        int longest = (int) Math.ceil(CoherentOverlaps.REACH * width / lattice.step()) + 1;
+        double rounding = area * wave.sampleError().size()
+                + 1.5 * HermitianTransform.errorFactor(longest)
+                + misplaced(grid, wave.support())
+                + 2e-16;
+        Bound overlap = wave.stateError()
+                .plus(wave.support().missed().times(OUTSIDE))
+                .plus(new Bound(wave.sampleError().kind(), rounding));
+        double off = overlap.size();
+        return new Bound(overlap.kind(), Math.nextUp((2 + off) * off / (2 * Math.PI)));
     }
 
     /** The Husimi function of a mixed state. */
@@ -87,17 +114,21 @@ public final class PhaseFunctions {
     }
 
     private static Lattice lattice(PhaseGrid grid, Support support) {
-        return Lattice.of(grid, support, 0, grid.stepX(), 0);
+        return Lattice.of(grid, support, 0, grid.stepX(), Math.PI, 0);
     }
 
-    private static Lattice smoothedLattice(PhaseGrid grid, Support support, double width) {
+    private static void checkWidth(double width) {
         if (!(width > 0) || Double.isInfinite(width)) {
             throw new IllegalArgumentException("the width of coherent states is positive and finite, not " + width);
         }
+    }
+
+    private static Lattice smoothedLattice(PhaseGrid grid, Support support, double width) {
+        checkWidth(width);
         // Correlations swing in s at up to the difference of the state's momenta; a sum with this spacing folds them
         // with the Gaussian as the integral does, within e^{−6.1²}.
         double spacing = 2 * Math.PI / (support.high() - support.low() + 2 * Smoothed.REACH / width);
-        return Lattice.of(grid, support, Smoothed.REACH * width, spacing, Smoothed.REACH / width);
+        return Lattice.of(grid, support, Smoothed.REACH * width, spacing, Math.PI, Smoothed.REACH / width);
     }
 
     private static Bound missed(WaveFunction wave, PhaseGrid grid) {
@@ -114,7 +145,8 @@ public final class PhaseFunctions {
     }
 
     private PhaseField wigner(Correlations correlations, PhaseGrid grid, Bound rounding, Bound missed) {
-        double[][] values = sums(correlations, correlations.lattice(), grid);
+        double step = correlations.lattice().step();
+        double[][] values = sums(correlations, step, step / Math.PI, grid);
         return new PhaseField(PhaseField.Kind.WIGNER, grid, values, bound(correlations, rounding, missed));
     }
 
@@ -131,19 +163,20 @@ public final class PhaseFunctions {
     }
 
     private PhaseField husimi(Correlations correlations, PhaseGrid grid, double width, Bound rounding, Bound missed) {
-        double[][] values = sums(new Smoothed(correlations, width), correlations.lattice(), grid);
+        double step = correlations.lattice().step();
+        double[][] values = sums(new Smoothed(correlations, width), step, step / Math.PI, grid);
         Bound bound = bound(correlations, rounding, missed).plus(1e-16);
         return new PhaseField(PhaseField.Kind.HUSIMI, grid, values, bound);
     }
 
-    private double[][] sums(HermitianTransform.Rows rows, Lattice lattice, PhaseGrid grid) {
+    private double[][] sums(HermitianTransform.Rows rows, double step, double factor, PhaseGrid grid) {
         HermitianTransform table = transform;
-        if (table == null || !table.isFor(lattice.step(), grid.stepP(), grid.p(), grid.np())) {
-            table = new HermitianTransform(lattice.step(), grid.stepP(), grid.p(), grid.np());
+        if (table == null || !table.isFor(step, grid.stepP(), grid.p(), grid.np())) {
+            table = new HermitianTransform(step, grid.stepP(), grid.p(), grid.np());
             transform = table;
         }
         double[][] values = new double[grid.nx()][grid.np()];
-        table.transform(rows, grid.nx(), lattice.step() / Math.PI, values);
+        table.transform(rows, grid.nx(), factor, values);
         return values;
     }
 

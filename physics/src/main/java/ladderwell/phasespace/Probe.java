@@ -114,10 +114,18 @@ final class Probe {
         return new int[] {from, to};
     }
 
-    /** The box that holds all but a share of each distribution. */
+    /** Of a distribution with long tails this share is what one looks at; the box reaches no further than twice its range. */
+    private static final double MAIN = 1e-3;
+
+    /** The box that holds all but a share of each distribution; where momenta fall off slowly, all but about a thousandth. */
     Support box(double share) {
         int[] x = ends(overX, share);
         double[] p = momenta(share);
+        double[] main = momenta(Math.max(share, MAIN));
+        double middle = (main[0] + main[1]) / 2;
+        double reach = main[1] - main[0];
+        p[0] = Math.max(p[0], middle - reach);
+        p[1] = Math.min(p[1], middle + reach);
         return new Support(left + x[0] * step, left + (x[1] + 1) * step, p[0], p[1], Bound.estimated(Math.sqrt(share)));
     }
 

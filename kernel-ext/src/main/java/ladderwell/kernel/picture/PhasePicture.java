@@ -60,14 +60,16 @@ public final class PhasePicture {
 
     /** The instant in words. */
     public String instant() {
-        return PhaseScale.instant(space.periods(), space.labTime().toString());
+        String lab = Written.number(space.labTime().value(), 5)
+                + Written.behind(space.labTime().unit().symbol());
+        return PhaseScale.instant(space.periods(), lab);
     }
 
     /** What is found, in a line. */
     public String verdict() {
         return isWigner()
                 ? space.verdict()
-                : "ħQ up to " + field.bound().beside(peak) + ", mean over coherent states of width "
+                : "ħQ up to " + Written.number(peak, 4) + ", mean over coherent states of width "
                         + Written.number(space.width() * scale.lengthScale(), 3)
                         + Written.behind(scale.lengthUnit());
     }

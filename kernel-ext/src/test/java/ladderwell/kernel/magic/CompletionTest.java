@@ -48,7 +48,9 @@ class CompletionTest {
 
     @Test
     void nounsFollowThePercentSign() {
-        assertEquals(List.of("oscillator", "state", "evolve", "table", "animate", "phasespace", "levels", "elements"), offered("%|"));
+        assertEquals(
+                List.of("oscillator", "state", "evolve", "table", "animate", "phasespace", "levels", "elements"),
+                offered("%|"));
         assertEquals(List.of("oscillator"), offered("%os|"));
         assertEquals("%oscillator", completed("%OSC|"));
         assertEquals(List.of("noun"), kinds("%|"));
