@@ -21,7 +21,7 @@ import ladderwell.state.Amplitudes;
  * @param phaseAngle φ in rad at time 0; φ = 0 starts at the turning point on the +x side
  * @param given the inputs as they were typed
  */
-public record Coherent(Harmonic oscillator, double mean, double phaseAngle, List<Fact> given) implements State {
+public record Coherent(Ladder oscillator, double mean, double phaseAngle, List<Fact> given) implements State {
 
     public Coherent {
         if (!(mean >= 0) || Double.isInfinite(mean)) {
@@ -37,12 +37,12 @@ public record Coherent(Harmonic oscillator, double mean, double phaseAngle, List
         given = List.copyOf(given);
     }
 
-    static Coherent mean(Harmonic oscillator, double mean) {
+    static Coherent mean(Ladder oscillator, double mean) {
         return new Coherent(
                 oscillator, mean, 0, List.of(Fact.exact("mean", "n̄", Checks.finite("mean quanta", mean), ONE)));
     }
 
-    static Coherent alpha(Harmonic oscillator, double re, double im) {
+    static Coherent alpha(Ladder oscillator, double re, double im) {
         Checks.finite("the real part of alpha", re);
         Checks.finite("the imaginary part of alpha", im);
         return new Coherent(
@@ -54,14 +54,14 @@ public record Coherent(Harmonic oscillator, double mean, double phaseAngle, List
                         Fact.exact("alpha, imaginary part", "Im α", im, ONE)));
     }
 
-    static Coherent at(Harmonic oscillator, Quantity displacement, Quantity momentum) {
+    static Coherent at(Ladder oscillator, Quantity displacement, Quantity momentum) {
         Scale scale = oscillator.scale();
-        Kind length = scale.isNatural() ? Kind.NUMBER : Kind.LENGTH;
-        Kind push = scale.isNatural() ? Kind.NUMBER : Kind.MOMENTUM;
+        Kind length = scale.position();
+        Kind push = length == Kind.NUMBER ? Kind.NUMBER : Kind.MOMENTUM;
         Checks.kind("displacement", displacement, length);
         Checks.kind("momentum", momentum, push);
-        double re = displacement.si() / scale.length() * Math.sqrt(0.5);
-        double im = momentum.si() / scale.momentum() * Math.sqrt(0.5);
+        double re = displacement.si() / scale.of(Kind.LENGTH) * Math.sqrt(0.5);
+        double im = momentum.si() / scale.of(Kind.MOMENTUM) * Math.sqrt(0.5);
         return new Coherent(
                 oscillator,
                 re * re + im * im,
@@ -100,29 +100,41 @@ public record Coherent(Harmonic oscillator, double mean, double phaseAngle, List
 
     @Override
     public double meanEnergy() {
-        return mean + 0.5;
+        return oscillator.coherentEnergy(
+                Math.sqrt(mean) * Math.cos(phaseAngle), Math.sqrt(mean) * Math.sin(phaseAngle));
     }
 
     @Override
     public List<Fact> facts() {
         Scale scale = oscillator.scale();
         Shown shown = new Shown(scale);
-        double uncertainty = oscillator.mass().map(Checks::relativeUncertainty).orElse(0.0) / 2;
+        double uncertainty = oscillator instanceof Harmonic harmonic
+                ? harmonic.mass().map(Checks::relativeUncertainty).orElse(0.0) / 2
+                : 0;
         List<Fact> facts = new ArrayList<>();
         facts.add(Fact.closedForm("mean quanta", "n̄ = |α|²", mean, ONE, 0));
         facts.add(new Fact("phase", "φ", Quantity.of(phaseAngle, RADIAN), Bound.guaranteed(Math.ulp(phaseAngle))));
-        double swing = Math.sqrt(2 * mean) * scale.length();
+        double swing = Math.sqrt(2 * mean) * scale.of(Kind.LENGTH);
         facts.add(shown.fact("swing (turning point)", "√(2n̄)·ℓ", Kind.LENGTH, swing, uncertainty));
         facts.add(shown.fact(
-                "spread of position", "Δx = ℓ/√2", Kind.LENGTH, scale.length() * Math.sqrt(0.5), uncertainty));
+                "spread of position", "Δx = ℓ/√2", Kind.LENGTH, scale.of(Kind.LENGTH) * Math.sqrt(0.5), uncertainty));
         facts.add(shown.fact(
-                "spread of momentum", "Δp = ħ/√2ℓ", Kind.MOMENTUM, scale.momentum() * Math.sqrt(0.5), uncertainty));
+                "spread of momentum",
+                "Δp = ħ/√2ℓ",
+                Kind.MOMENTUM,
+                scale.of(Kind.MOMENTUM) * Math.sqrt(0.5),
+                uncertainty));
         if (mean > 0) {
             facts.add(Fact.closedForm("spread over swing", "1/(2√n̄)", 0.5 / Math.sqrt(mean), ONE, 0));
         }
-        facts.add(shown.energy("mean energy", "(n̄ + ½)ħω", meanEnergy(), oscillator));
+        facts.add(shown.energy(
+                "mean energy", oscillator instanceof Harmonic ? "(n̄ + ½)ħω" : "⟨α|H|α⟩", meanEnergy(), oscillator));
         facts.add(shown.fact(
-                "swing in momentum", "√(2n̄)·ħ/ℓ", Kind.MOMENTUM, Math.sqrt(2 * mean) * scale.momentum(), uncertainty));
+                "swing in momentum",
+                "√(2n̄)·ħ/ℓ",
+                Kind.MOMENTUM,
+                Math.sqrt(2 * mean) * scale.of(Kind.MOMENTUM),
+                uncertainty));
         return List.copyOf(facts);
     }
 }

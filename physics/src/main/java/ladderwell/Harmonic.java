@@ -21,7 +21,7 @@ import ladderwell.quantity.Unit;
  * @param spacing what fixes ω: a cycle frequency ν (ω = 2πν), an angular frequency ω, a wavenumber (ω = 2πcν̃) or the
  *     level spacing as an energy (ω = E/ħ); empty for the natural oscillator
  */
-public record Harmonic(Optional<Quantity> mass, Optional<Quantity> spacing) implements Oscillator {
+public record Harmonic(Optional<Quantity> mass, Optional<Quantity> spacing) implements Ladder {
 
     private static final Levels LADDER = Levels.harmonic();
 
@@ -129,19 +129,14 @@ public record Harmonic(Optional<Quantity> mass, Optional<Quantity> spacing) impl
         return ClassicalOrbit.harmonic(position, momentum);
     }
 
-    /** A coherent state of the given mean quanta n̄ = |α|², at phase 0; {@link Coherent#phase} turns it. */
-    public Coherent coherent(double mean) {
-        return Coherent.mean(this, mean);
+    @Override
+    public double coherentEnergy(double re, double im) {
+        return re * re + im * im + 0.5;
     }
 
-    /** The coherent state |α⟩, α = re + i·im. */
-    public Coherent coherentAlpha(double re, double im) {
-        return Coherent.alpha(this, re, im);
-    }
-
-    /** The coherent state with these mean position and momentum. */
-    public Coherent coherentAt(Quantity displacement, Quantity momentum) {
-        return Coherent.at(this, displacement, momentum);
+    @Override
+    public double numberEnergy(long n) {
+        return LADDER.energyHigh(n);
     }
 
     @Override

@@ -72,6 +72,10 @@ final class LevelReadings {
         if (o.equals(Observable.MANDEL_Q)) {
             return mandel(o);
         }
+        if (o.equals(Observable.PURITY)) {
+            // a vector stays a vector; its norm is off by no more than its error
+            return constant(o, 1, Bound.guaranteed(0));
+        }
         if (o.equals(Observable.RETURN_PROBABILITY)) {
             Returns r = returns();
             return along(o, r::probability, r::probabilityError, state.certainty());
@@ -119,7 +123,7 @@ final class LevelReadings {
     }
 
     private void requireHarmonic(Observable o) {
-        if (!(oscillator instanceof Harmonic)) {
+        if (!(oscillator instanceof Ladder)) {
             throw new IllegalArgumentException("'" + o.name() + "' is defined for a harmonic oscillator, not for a "
                     + oscillator.kind() + "; ask for energy or populations");
         }
@@ -139,7 +143,7 @@ final class LevelReadings {
 
     private synchronized Means means() {
         if (means == null) {
-            means = oscillator instanceof Harmonic ? Means.onLadder(state, Workers.CALLER) : Means.onElements(state);
+            means = oscillator instanceof Ladder ? Means.onLadder(state, Workers.CALLER) : Means.onElements(state);
         }
         return means;
     }

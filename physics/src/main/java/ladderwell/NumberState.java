@@ -29,7 +29,9 @@ public record NumberState(Oscillator oscillator, long n) implements State {
 
     @Override
     public double meanEnergy() {
-        return oscillator.levels().energyHigh(n);
+        return oscillator instanceof Ladder ladder
+                ? ladder.numberEnergy(n)
+                : oscillator.levels().energyHigh(n);
     }
 
     @Override

@@ -46,6 +46,8 @@ public record Observable(String name, String symbol, Kind kind, String meaning, 
             of("return amplitude, real part", "Re⟨ψ(0)|ψ(t)⟩", Kind.NUMBER, "overlap with the initial state");
     public static final Observable RETURN_AMPLITUDE_IMAGINARY =
             of("return amplitude, imaginary part", "Im⟨ψ(0)|ψ(t)⟩", Kind.NUMBER, "overlap with the initial state");
+    public static final Observable PURITY =
+            of("purity", "tr ρ²", Kind.NUMBER, "1 for a pure state, less for a mixed one");
     public static final Observable NORM =
             of("norm", "‖ψ‖", Kind.NUMBER, "norm of the amplitudes kept; 1 but for what was discarded");
 
@@ -63,6 +65,7 @@ public record Observable(String name, String symbol, Kind kind, String meaning, 
                 MEAN_QUANTA,
                 VARIANCE_OF_QUANTA,
                 MANDEL_Q,
+                PURITY,
                 RETURN_PROBABILITY,
                 RETURN_AMPLITUDE_REAL,
                 RETURN_AMPLITUDE_IMAGINARY)) {

@@ -4,6 +4,7 @@ import java.util.List;
 import ladderwell.classical.ClassicalOrbit;
 import ladderwell.formula.Formula;
 import ladderwell.level.Levels;
+import ladderwell.mode.Mode;
 import ladderwell.potential.Potential;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
@@ -13,7 +14,7 @@ import tech.tablesaw.api.Table;
  * What the system is: one mode with its levels and its scale. Made by {@link #harmonic()}, {@link #box()}, {@link #finiteWell()} or
  * {@link #in}; states are prepared in it by {@link #number}, {@link #gaussian}, {@link #superposition} ….
  */
-public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialWell, MovingWell {
+public sealed interface Oscillator permits Ladder, Box, FiniteWell, PotentialWell, MovingWell {
 
     /** A harmonic oscillator: give the mass and one of ν, ω, wavenumber or level spacing, or {@code natural()}. */
     static Harmonic.Declaring harmonic() {
@@ -68,6 +69,16 @@ public sealed interface Oscillator permits Harmonic, Box, FiniteWell, PotentialW
     static Oscillator open(Formula formula, Quantity mass, Quantity length) {
         PotentialWell start = in(Potential.open(formula.at(0), mass, length));
         return formula.dependsOnTime() ? MovingWell.of("potential", start, formula, List.of()) : start;
+    }
+
+    /**
+     * A nonlinear, driven or lossy mode.
+     *
+     * @param kind the trade's name: "kerr", "duffing", "hamiltonian"
+     * @param given what was typed, for card and record
+     */
+    static LadderMode mode(String kind, Mode mode, List<Fact> given) {
+        return LadderMode.of(kind, mode, given);
     }
 
     /** The trade's name of the kind: "harmonic", "box", "finite well", "morse" …. */

@@ -6,8 +6,8 @@ import ladderwell.evidence.Record;
 import ladderwell.phasespace.PhaseState;
 import ladderwell.quantity.Digits;
 
-/** In what a run carries its state from time 0 on: amplitudes on levels, or values on a grid of positions. */
-sealed interface Representation permits OnLevels, OnGrid {
+/** In what a run carries its state from time 0 on: amplitudes on levels, a state in a window of number states, or values on a grid of positions. */
+sealed interface Representation permits OnLevels, OnGrid, OnWindow {
 
     /**
      * Levels where the potential stands still and they carry the state; else a grid, where the potential allows one.
@@ -16,6 +16,9 @@ sealed interface Representation permits OnLevels, OnGrid {
      */
     static Representation of(Evolution evolution, double[] times) {
         Oscillator oscillator = evolution.state().oscillator();
+        if (oscillator instanceof LadderMode mode && !mode.isDiagonal()) {
+            return OnWindow.of(evolution, mode, times);
+        }
         if (oscillator.moves()) {
             return OnGrid.of(evolution, times, "the potential depends on time");
         }

@@ -21,7 +21,7 @@ record Shown(Scale scale) {
 
     /** Relative standard uncertainty of the mass, where energies in the oscillator's scale depend on it. */
     double massUncertainty(Oscillator oscillator) {
-        return oscillator instanceof Harmonic
+        return oscillator instanceof Ladder
                 ? 0
                 : oscillator.given().stream()
                         .filter(f -> f.name().equals("mass"))

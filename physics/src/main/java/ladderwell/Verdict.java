@@ -43,6 +43,11 @@ final class Verdict {
                 + bestReturn(run);
     }
 
+    /** For a run in a window of number states. */
+    static String inWindow(Run run) {
+        return run.state().oscillator().moves() ? "driven; " + bestReturn(run) : bestReturn(run);
+    }
+
     /** The best return among the run's own times, after the state has first moved away. */
     private static String bestReturn(Run run) {
         Series back = run.series(Observable.RETURN_PROBABILITY);

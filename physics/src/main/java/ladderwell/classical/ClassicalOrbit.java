@@ -50,6 +50,11 @@ public interface ClassicalOrbit {
         return new LeavingOrbit(slope, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, position, momentum);
     }
 
+    /** The orbit of a mode whose velocity in phase space is known, driven and damped as it may be; from time 0 on. */
+    static ClassicalOrbit along(PhaseVelocity velocity, double position, double momentum) {
+        return new MeanFieldOrbit(velocity, position, momentum);
+    }
+
     /**
      * The period of the motion at an energy that passes a position.
      *

@@ -1,7 +1,9 @@
 package ladderwell.level;
 
 import java.util.function.DoubleUnaryOperator;
+import java.util.function.LongFunction;
 import ladderwell.evidence.Bound;
+import ladderwell.numeric.DoubleDouble;
 
 /**
  * The bound levels of one potential, in scaled units (ħ = m = 1; see the package page for the unit of length).
@@ -16,11 +18,23 @@ public sealed interface Levels
                 ShootingLevels,
                 CircleLevels,
                 UncertainLevels,
+                DiagonalLevels,
                 NoLevels {
 
     /** Harmonic levels E_n = n + 1/2; x² / 2 is the potential. */
     static Levels harmonic() {
         return new HarmonicLevels();
+    }
+
+    /**
+     * Number states with any energies: a mode whose Hamiltonian is diagonal in the number of quanta, such as Kerr's. Wave functions are those of
+     * the harmonic oscillator; energies need not rise.
+     *
+     * @param energies E_n, right within {@code relativeError} of the largest that is asked for
+     * @param relativeError relative error of every energy
+     */
+    static Levels ofNumberStates(LongFunction<DoubleDouble> energies, double relativeError) {
+        return new DiagonalLevels(energies, relativeError);
     }
 
     /** Infinite box with walls at ±1/2: E_n = π² (n + 1)² / 2. */

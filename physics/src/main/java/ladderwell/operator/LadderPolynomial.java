@@ -530,6 +530,40 @@ public final class LadderPolynomial {
         }
     }
 
+    /**
+     * ⟨α|P|α⟩ = Σ c_jk α*^j α^k: what a classical mode of amplitude α has in place of P.
+     *
+     * @return real part, imaginary part
+     */
+    public double[] coherentMean(double re, double im) {
+        double sumRe = 0;
+        double sumIm = 0;
+        for (int j = c.rows - 1; j >= 0; j--) {
+            double rowRe = 0;
+            double rowIm = 0;
+            for (int k = c.columns - 1; k >= 0; k--) {
+                double next = rowRe * re - rowIm * im + c.re[c.at(j, k)];
+                rowIm = rowRe * im + rowIm * re + c.im[c.at(j, k)];
+                rowRe = next;
+            }
+            double next = sumRe * re + sumIm * im + rowRe;
+            sumIm = sumIm * re - sumRe * im + rowIm;
+            sumRe = next;
+        }
+        return new double[] {sumRe, sumIm};
+    }
+
+    /** ⟨n|P|n⟩ of a diagonal operator with all its digits. */
+    public DoubleDouble diagonal(long n) {
+        DoubleDouble falling = DoubleDouble.ONE;
+        DoubleDouble sum = DoubleDouble.ZERO;
+        for (int k = 0; k < Math.min(c.rows, c.columns) && k <= n; k++) {
+            sum = sum.plus(c.re(c.at(k, k)).times(falling));
+            falling = falling.times((double) (n - k));
+        }
+        return sum;
+    }
+
     private static void checkDegree(long degree) {
         if (degree > HIGHEST) {
             throw new IllegalArgumentException(

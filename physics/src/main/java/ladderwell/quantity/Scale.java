@@ -8,11 +8,21 @@ package ladderwell.quantity;
  * @param mass kg, or 1 when natural; positive
  * @param length m, or 1 when natural; positive
  * @param hbar J s, or 1 when natural; positive
- * @param angle whether the coordinate is an angle: the mass is then a moment of inertia in kg m², the length 1 rad
+ * @param coordinate what a position is
  */
-public record Scale(double mass, double length, double hbar, boolean angle) {
+public record Scale(double mass, double length, double hbar, Coordinate coordinate) {
 
-    private static final Scale NATURAL = new Scale(1, 1, 1, false);
+    /** What a position is. */
+    public enum Coordinate {
+        /** A length. */
+        LENGTH,
+        /** An angle: the mass is a moment of inertia in kg m², the length 1 rad. */
+        ANGLE,
+        /** A quadrature (a + a†)/√2 of a mode, a plain number: the length is 1, the mass ħ/ω. */
+        QUADRATURE
+    }
+
+    private static final Scale NATURAL = new Scale(1, 1, 1, Coordinate.LENGTH);
 
     private static final Unit ANGULAR_MOMENTUM = new Unit("ħ", Kind.MOMENTUM, Constants.HBAR, 0);
 
@@ -43,7 +53,7 @@ public record Scale(double mass, double length, double hbar, boolean angle) {
      * @param length m
      */
     public static Scale of(double mass, double length) {
-        return new Scale(mass, length, Constants.HBAR, false);
+        return new Scale(mass, length, Constants.HBAR, Coordinate.LENGTH);
     }
 
     /**
@@ -52,12 +62,29 @@ public record Scale(double mass, double length, double hbar, boolean angle) {
      * @param inertia moment of inertia, kg m²
      */
     public static Scale turning(double inertia) {
-        return new Scale(inertia, 1, Constants.HBAR, true);
+        return new Scale(inertia, 1, Constants.HBAR, Coordinate.ANGLE);
     }
 
-    /** What a position measures: a length, an angle, or nothing in natural units. */
+    /**
+     * Lab scale of a mode whose position and momentum are quadratures: time 1/ω, energy ħω.
+     *
+     * @param omega rad/s
+     */
+    public static Scale mode(double omega) {
+        require("angular frequency", omega);
+        return new Scale(Constants.HBAR / omega, 1, Constants.HBAR, Coordinate.QUADRATURE);
+    }
+
+    /** What a position measures: a length, an angle, or nothing in natural units and for a quadrature. */
     public Kind position() {
-        return isNatural() ? Kind.NUMBER : angle ? Kind.ANGLE : Kind.LENGTH;
+        if (isNatural()) {
+            return Kind.NUMBER;
+        }
+        return switch (coordinate) {
+            case LENGTH -> Kind.LENGTH;
+            case ANGLE -> Kind.ANGLE;
+            case QUADRATURE -> Kind.NUMBER;
+        };
     }
 
     /** ħ = m = length = 1; symbols are empty. */
@@ -112,7 +139,7 @@ public record Scale(double mass, double length, double hbar, boolean angle) {
             case MASS -> mass;
             case LENGTH -> length;
             case TIME -> time();
-            case MOMENTUM -> momentum();
+            case MOMENTUM -> coordinate == Coordinate.QUADRATURE ? 1 : momentum();
             case ENERGY -> energy();
             case ANGULAR_FREQUENCY -> angularFrequency();
             case CYCLE_FREQUENCY -> isNatural() ? 1 : angularFrequency();
@@ -141,11 +168,13 @@ public record Scale(double mass, double length, double hbar, boolean angle) {
                 default -> Units.natural(kind);
             };
         }
-        if (angle && kind == Kind.LENGTH) {
-            return Units.RADIAN;
-        }
-        if (angle && kind == Kind.MOMENTUM) {
-            return ANGULAR_MOMENTUM;
+        if (kind == Kind.LENGTH || kind == Kind.MOMENTUM) {
+            if (coordinate == Coordinate.QUADRATURE) {
+                return Units.natural(kind);
+            }
+            if (coordinate == Coordinate.ANGLE) {
+                return kind == Kind.LENGTH ? Units.RADIAN : ANGULAR_MOMENTUM;
+            }
         }
         return Prefixes.display(kind, magnitude == 0 ? of(kind) : Math.abs(magnitude));
     }

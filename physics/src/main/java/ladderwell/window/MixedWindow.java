@@ -1,6 +1,7 @@
 package ladderwell.window;
 
 import ladderwell.evidence.Bound;
+import ladderwell.state.Amplitudes;
 
 /**
  * A density operator on consecutive levels. Immutable; the arrays are handed out themselves for hot loops: read only.
@@ -62,16 +63,38 @@ public final class MixedWindow implements WindowState {
     }
 
     @Override
-    public double[] lowering(int k) {
-        // tr(a^k ρ) = Σ √… ⟨n + k|ρ|n⟩
-        double sumRe = 0;
-        double sumIm = 0;
-        for (int n = 0; n + k < levels; n++) {
-            double root = Roots.of(first + n, k);
-            sumRe += root * re[at(n + k, n)];
-            sumIm += root * im[at(n + k, n)];
+    public double re(int m, int n) {
+        return re[m >= n ? at(m, n) : at(n, m)];
+    }
+
+    @Override
+    public double im(int m, int n) {
+        return m >= n ? im[at(m, n)] : -im[at(n, m)];
+    }
+
+    @Override
+    public double fidelity(Amplitudes phi) {
+        double[] a = new double[levels];
+        double[] b = new double[levels];
+        for (int s = 0; s < phi.segments(); s++) {
+            for (int i = 0; i < phi.length(s); i++) {
+                long n = phi.first(s) + i - first;
+                if (n >= 0 && n < levels) {
+                    a[(int) n] = phi.re(s, i);
+                    b[(int) n] = phi.im(s, i);
+                }
+            }
         }
-        return new double[] {sumRe, sumIm};
+        double sum = 0;
+        for (int m = 0; m < levels; m++) {
+            for (int n = 0; n < m; n++) {
+                int i = at(m, n);
+                // twice the real part of φ_m* ρ_mn φ_n
+                sum += 2 * (re[i] * (a[m] * a[n] + b[m] * b[n]) - im[i] * (a[m] * b[n] - b[m] * a[n]));
+            }
+            sum += population(m) * (a[m] * a[m] + b[m] * b[m]);
+        }
+        return sum;
     }
 
     @Override

@@ -1,6 +1,7 @@
 package ladderwell.window;
 
 import ladderwell.evidence.Bound;
+import ladderwell.state.Amplitudes;
 
 /** Amplitudes on consecutive levels. Immutable; the arrays are handed out themselves for hot loops: read only. */
 public final class PureWindow implements WindowState {
@@ -53,15 +54,41 @@ public final class PureWindow implements WindowState {
     }
 
     @Override
-    public double[] lowering(int k) {
+    public double re(int m, int n) {
+        return re[m] * re[n] + im[m] * im[n];
+    }
+
+    @Override
+    public double im(int m, int n) {
+        return im[m] * re[n] - re[m] * im[n];
+    }
+
+    /**
+     * ⟨φ|ψ⟩ as computed.
+     *
+     * @return real part, imaginary part
+     */
+    public double[] overlap(Amplitudes phi) {
         double sumRe = 0;
         double sumIm = 0;
-        for (int i = 0; i + k < re.length; i++) {
-            double root = Roots.of(first + i, k);
-            sumRe += root * (re[i] * re[i + k] + im[i] * im[i + k]);
-            sumIm += root * (re[i] * im[i + k] - im[i] * re[i + k]);
+        for (int s = 0; s < phi.segments(); s++) {
+            for (int i = 0; i < phi.length(s); i++) {
+                long n = phi.first(s) + i - first;
+                if (n >= 0 && n < re.length) {
+                    double a = phi.re(s, i);
+                    double b = phi.im(s, i);
+                    sumRe += a * re[(int) n] + b * im[(int) n];
+                    sumIm += a * im[(int) n] - b * re[(int) n];
+                }
+            }
         }
         return new double[] {sumRe, sumIm};
+    }
+
+    @Override
+    public double fidelity(Amplitudes phi) {
+        double[] overlap = overlap(phi);
+        return overlap[0] * overlap[0] + overlap[1] * overlap[1];
     }
 
     @Override

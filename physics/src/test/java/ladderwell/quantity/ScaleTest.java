@@ -132,7 +132,7 @@ class ScaleTest {
         assertThrows(IllegalArgumentException.class, () -> Scale.of(1, bad));
         assertThrows(IllegalArgumentException.class, () -> Scale.harmonic(bad, 1));
         assertThrows(IllegalArgumentException.class, () -> Scale.harmonic(1, bad));
-        assertThrows(IllegalArgumentException.class, () -> new Scale(1, 1, bad, false));
+        assertThrows(IllegalArgumentException.class, () -> new Scale(1, 1, bad, Scale.Coordinate.LENGTH));
     }
 
     @Test

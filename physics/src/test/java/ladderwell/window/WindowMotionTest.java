@@ -41,7 +41,7 @@ class WindowMotionTest {
         WindowState state = WindowMotion.pure(
                         h, Amplitudes.coherent(4, 0, TOLERANCE / 10), new double[] {0.1}, TOLERANCE, MEMORY)
                 .state(0);
-        double[] a = state.lowering(1);
+        double[] a = state.mean(A);
         // ⟨a⟩ of an error ε in a window of N levels: below 2 ε √N and what was cut off, far below
         double allowed = 3 * state.error().size() * Math.sqrt(state.first() + state.levels());
         assertEquals(1.846724430996562, Math.hypot(a[0], a[1]), allowed);
@@ -59,7 +59,7 @@ class WindowMotionTest {
                 Mixture.pure(Amplitudes.coherent(1, 0, TOLERANCE / 10)),
                 0.3,
                 TOLERANCE);
-        assertEquals(0.54239350700974, state.lowering(1)[0], state.error().size() * Math.sqrt(state.levels()) + 5e-15);
+        assertEquals(0.54239350700974, state.mean(A)[0], state.error().size() * Math.sqrt(state.levels()) + 5e-15);
     }
 
     @Test

@@ -5,6 +5,7 @@ import java.util.Optional;
 import ladderwell.Box;
 import ladderwell.FiniteWell;
 import ladderwell.Harmonic;
+import ladderwell.LadderMode;
 import ladderwell.MovingWell;
 import ladderwell.Oscillator;
 import ladderwell.PotentialWell;
@@ -14,8 +15,13 @@ import ladderwell.quantity.Quantity;
 
 /** {@code oscillator trap: harmonic, mass 40 u, frequency 1.2 MHz}. */
 final class OscillatorMagic implements Magic {
-    private static final Map<String, Class<?>> TYPES =
-            Map.of("harmonic", Harmonic.class, "box", Box.class, "finite well", FiniteWell.class);
+    private static final Map<String, Class<?>> TYPES = Map.of(
+            "harmonic", Harmonic.class,
+            "box", Box.class,
+            "finite well", FiniteWell.class,
+            "kerr", LadderMode.class,
+            "duffing", LadderMode.class,
+            "hamiltonian", LadderMode.class);
 
     @Override
     public Optional<Promise> promise(Sentence sentence) {
@@ -33,6 +39,7 @@ final class OscillatorMagic implements Magic {
             case "harmonic" -> harmonic(sentence);
             case "box" -> box(sentence);
             case "finite well" -> finiteWell(sentence);
+            case "kerr", "duffing", "hamiltonian" -> new Modes(sentence).oscillator();
             default -> new Potentials(sentence).oscillator();
         };
         // A mass and a length may be fine and their scale still outside the range of numbers: refused here, not later.

@@ -163,6 +163,10 @@ record Potentials(Sentence sentence) {
 
     /** The place of a mistake in a formula; the whole value where it came from an expression. */
     private Place inside(FormulaException e) {
+        return inside(sentence, e);
+    }
+
+    static Place inside(Sentence sentence, FormulaException e) {
         Place value = sentence.placeOf("formula");
         boolean typed = value.end() - value.start() == e.text().length() + 2;
         int start = value.start() + 1 + e.start();

@@ -4,7 +4,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import ladderwell.Coherent;
-import ladderwell.Harmonic;
+import ladderwell.Ladder;
 import ladderwell.LevelOf;
 import ladderwell.NumberState;
 import ladderwell.Oscillator;
@@ -43,7 +43,7 @@ final class StateMagic implements Magic {
         Oscillator oscillator = things.oscillator(sentence.reference("in"));
         State state = switch (sentence.kind()) {
             case "number" -> oscillator.number(sentence.count("level"));
-            case "coherent" -> coherent(sentence, (Harmonic) oscillator);
+            case "coherent" -> coherent(sentence, (Ladder) oscillator);
             case "superposition" -> superposition(sentence, oscillator);
             case "gaussian" -> gaussian(sentence, oscillator);
             case "ground" -> levelOf(sentence, things, oscillator, 0);
@@ -53,7 +53,7 @@ final class StateMagic implements Magic {
         return new Outcome(new Declared(sentence.name(), "state", state), state);
     }
 
-    private static Coherent coherent(Sentence sentence, Harmonic oscillator) {
+    private static Coherent coherent(Sentence sentence, Ladder oscillator) {
         if (sentence.has("mean")) {
             Coherent state = oscillator.coherent(sentence.number("mean"));
             if (sentence.has("phase")) {

@@ -8,6 +8,8 @@ import static ladderwell.quantity.Kind.MASS;
 import static ladderwell.quantity.Kind.TEMPERATURE;
 import static ladderwell.quantity.Kind.WAVENUMBER;
 
+import java.util.Arrays;
+
 /** The kinds of oscillator, as the table of the language lists them. */
 final class OscillatorKinds {
     private static final Key MASS_KEY = Key.quantity("mass", "mass of the particle", MASS);
@@ -223,7 +225,8 @@ final class OscillatorKinds {
     private OscillatorKinds() {}
 
     static NounKind[] all() {
-        return new NounKind[] {
+        NounKind[] modes = ModeKinds.all();
+        NounKind[] wells = {
             HARMONIC,
             BOX,
             FINITE_WELL,
@@ -240,5 +243,8 @@ final class OscillatorKinds {
             LENNARD_JONES,
             TABULATED
         };
+        NounKind[] all = Arrays.copyOf(wells, wells.length + modes.length);
+        System.arraycopy(modes, 0, all, wells.length, modes.length);
+        return all;
     }
 }

@@ -153,11 +153,29 @@ record Outline(
             for (int at = first; at < pieces.size(); ) {
                 List<Piece> after = pieces.subList(at + 1, pieces.size());
                 int next = index(after, Sort.COMMA);
-                Clause clause = clause(keys, false, Optional.of(pieces.get(at)), after.subList(0, next));
+                List<Piece> words = after.subList(0, next);
+                int rider = rider(kind, words);
+                Clause clause = clause(keys, false, Optional.of(pieces.get(at)), words.subList(0, rider));
                 clauses.add(kind.filter(NounKind::parameters).isPresent() ? named(clause) : clause);
+                if (rider < next) {
+                    clauses.add(clause(keys, true, Optional.empty(), words.subList(rider, next)));
+                }
                 at += 1 + next;
             }
             return new Outline(Optional.of(nounPiece), noun, subject, colon, head, kind, clauses);
+        }
+
+        /** Where a key of the kind that needs no comma stands behind a value, as in "drive 80 kHz at 5 GHz"; else the end. */
+        private static int rider(Optional<NounKind> kind, List<Piece> words) {
+            List<String> links = kind.map(NounKind::links).orElse(List.of()).stream()
+                    .map(Key::word)
+                    .toList();
+            for (int i = 2; i < words.size(); i++) {
+                if (isLead(links, words.get(i))) {
+                    return i;
+                }
+            }
+            return words.size();
         }
 
         /** How many pieces the longest kind takes that they start with. */

@@ -20,7 +20,7 @@ final class StateKinds {
                     "coherent state",
                     "the state that swings like the classical oscillator and keeps its shape",
                     "|α⟩, α = √n̄ e^{iφ},  a|α⟩ = α|α⟩")
-            .homes("harmonic")
+            .homes("harmonic", "kerr", "duffing", "hamiltonian")
             .keys(
                     Key.of("mean", Form.NUMBER, "9.5", "mean quanta n̄, any real number from 0")
                             .formula("n̄ = |α|²"),

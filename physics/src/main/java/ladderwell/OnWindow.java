@@ -1,0 +1,105 @@
+package ladderwell;
+
+import ladderwell.evidence.Bound;
+import ladderwell.evidence.Record;
+import ladderwell.operator.OperatorFormula;
+import ladderwell.state.Amplitudes;
+import ladderwell.state.Mixture;
+import ladderwell.window.WindowMotion;
+
+/** A run of a mode in a window of number states that follows it: a vector where nothing jumps, else a density operator. */
+final class OnWindow implements Representation {
+    /** Share of the tolerance that the start may take. */
+    private static final double START = 0.1;
+
+    private final LadderMode mode;
+    private final WindowMotion motion;
+    private final boolean pure;
+    private final WindowReadings readings;
+
+    private OnWindow(LadderMode mode, Amplitudes start, WindowMotion motion, boolean pure) {
+        this.mode = mode;
+        this.motion = motion;
+        this.pure = pure;
+        readings = new WindowReadings(mode, start, motion);
+    }
+
+    static OnWindow of(Evolution evolution, LadderMode mode, double[] times) {
+        if (mode.hamiltonian().dependsOnTime()) {
+            throw new IllegalArgumentException(
+                    "the Hamiltonian of this mode varies with time in its frame, and only constant ones are followed so far; "
+                            + "choose a frame in which it stands still");
+        }
+        double tolerance = evolution.tolerance();
+        Amplitudes start = evolution.state().amplitudes(Math.max(1e-13, START * tolerance / 2));
+        OperatorFormula h = mode.hamiltonian();
+        boolean pure = mode.jumps().isEmpty();
+        double memory = Memory.allowed();
+        WindowMotion motion = pure
+                ? WindowMotion.pure(h.constant(), start, times, tolerance, memory)
+                : WindowMotion.mixed(
+                        h.constant(), mode.jumps(), Mixture.pure(start).density(memory), times, tolerance, memory);
+        return new OnWindow(mode, start, motion, pure);
+    }
+
+    WindowMotion motion() {
+        return motion;
+    }
+
+    @Override
+    public int times() {
+        return motion.size();
+    }
+
+    @Override
+    public double time(int j) {
+        return motion.time(j);
+    }
+
+    @Override
+    public Bound stateError() {
+        return motion.state(motion.size() - 1).error();
+    }
+
+    @Override
+    public String method() {
+        return pure
+                ? "Chebyshev series of the vector in a window of number states"
+                : "Chebyshev series of the density operator in a window of number states";
+    }
+
+    @Override
+    public String reason() {
+        return pure
+                ? "nothing jumps and the Hamiltonian does not vary"
+                : "the mode jumps and neither Hamiltonian nor rates vary";
+    }
+
+    @Override
+    public String size() {
+        return "up to " + motion.work().mostLevels() + " levels, "
+                + motion.work().steps() + " steps";
+    }
+
+    @Override
+    public void describe(Record.Builder record) {
+        record.size("most levels", motion.work().mostLevels())
+                .size("steps", motion.work().steps())
+                .size("applications", motion.work().applications());
+    }
+
+    @Override
+    public Series series(Observable observable) {
+        return readings.series(observable);
+    }
+
+    @Override
+    public Density density(Run run, int points) {
+        return WindowDensity.of(run, motion, points);
+    }
+
+    @Override
+    public String verdict(Run run) {
+        return Verdict.inWindow(run);
+    }
+}
