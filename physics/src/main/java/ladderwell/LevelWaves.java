@@ -30,7 +30,9 @@ final class LevelWaves {
     }
 
     static PhaseState of(State state, PhasedState run, double time) {
-        if (state instanceof Coherent coherent && coherent.mean() > CLOSED_FORM_ABOVE) {
+        if (state instanceof Coherent coherent
+                && state.oscillator() instanceof Harmonic
+                && coherent.mean() > CLOSED_FORM_ABOVE) {
             double swing = Math.sqrt(2 * coherent.mean());
             double angle = coherent.phaseAngle() - time;
             double off = swing * (4 * Math.ulp(1.0) + 2 * Math.ulp(Math.abs(time) + Math.abs(coherent.phaseAngle())));
@@ -51,7 +53,7 @@ final class LevelWaves {
             im[s] = rowIm[0];
         }
         Bound error = new Bound(now.certainty(), now.error());
-        if (state.oscillator() instanceof Harmonic) {
+        if (state.oscillator() instanceof Ladder) {
             if (now.lastLevel() > HermiteFunctions.LAST_INDEX) {
                 throw new IllegalArgumentException("levels up to " + now.lastLevel()
                         + " are too many for a phase-space picture, at most " + HermiteFunctions.LAST_INDEX

@@ -159,24 +159,14 @@ final class OnGrid implements Representation {
         return new Density(run, x, values, Bound.estimated(error), "values on a grid");
     }
 
-    private int nearest(double time) {
-        int nearest = 0;
-        for (int j = 1; j < times(); j++) {
-            if (Math.abs(time(j) - time) < Math.abs(time(nearest) - time)) {
-                nearest = j;
-            }
-        }
-        return nearest;
-    }
-
     @Override
     public double instant(double time) {
-        return time(nearest(time));
+        return time(Representation.nearest(this, time));
     }
 
     @Override
     public PhaseState phaseState(State state, double time) {
-        GridFrame frame = motion.frame(nearest(time));
+        GridFrame frame = motion.frame(Representation.nearest(this, time));
         return SampledWave.onGrid(frame.grid().left(), frame.grid().spacing(), frame.re(), frame.im(), motion.error());
     }
 

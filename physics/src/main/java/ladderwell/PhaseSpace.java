@@ -171,7 +171,7 @@ public final class PhaseSpace {
      * shape of the grid.
      */
     public double width() {
-        return run.state().oscillator() instanceof Harmonic ? 1 : Math.sqrt(grid.halfX() / grid.halfP());
+        return run.state().oscillator() instanceof Ladder ? 1 : Math.sqrt(grid.halfX() / grid.halfP());
     }
 
     /** ∫|W| dx dp − 1, twice the volume of the negative parts of W; on a grid of its own that follows the fringes. */

@@ -76,7 +76,18 @@ sealed interface Representation permits OnLevels, OnGrid, OnWindow {
     /** |ψ|² at every time on so many points that cover the motion. */
     Density density(Run run, int points);
 
-    /** The time nearest to this one at which the state can be had: the same on levels, one of the run's times on a grid. */
+    /** The number of the time nearest to this one. */
+    static int nearest(Representation run, double time) {
+        int nearest = 0;
+        for (int j = 1; j < run.times(); j++) {
+            if (Math.abs(run.time(j) - time) < Math.abs(run.time(nearest) - time)) {
+                nearest = j;
+            }
+        }
+        return nearest;
+    }
+
+    /** The time nearest to this one at which the state can be had: the same on levels, else one of the run's times. */
     double instant(double time);
 
     /** The state at such a time, as phase-space functions are made of it. */

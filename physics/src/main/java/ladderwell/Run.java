@@ -166,7 +166,7 @@ public final class Run {
     }
 
     /**
-     * The state at one instant in phase space: on levels at any instant of the run, on a grid at the run's nearest time.
+     * The state at one instant in phase space: on levels at any instant of the run, else at the run's nearest time.
      *
      * @param value the instant, in lab units (natural units: a plain number) or in classical periods
      * @throws IllegalArgumentException if it lies outside the run

@@ -6,8 +6,13 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.List;
 import ladderwell.formula.Formula;
 import ladderwell.formula.Parameters;
+import ladderwell.mode.Jump;
+import ladderwell.mode.Mode;
+import ladderwell.mode.Part;
+import ladderwell.mode.Rate;
 import ladderwell.phasespace.PhaseField;
 import ladderwell.phasespace.PhaseGrid;
 import ladderwell.quantity.Quantity;
@@ -119,6 +124,45 @@ class PhaseSpaceTest {
             assertEquals(1, field.total(), 1e-4, oscillator.kind());
             assertTrue(space.negativity().value() > space.negativity().bound().size());
         }
+    }
+
+    @Test
+    void aKerrModeMakesACat() {
+        // H = n² from alpha = 2 at t = π/2: (e^{−iπ/4}|α⟩ + e^{iπ/4}|−α⟩)/√2; row S-KER-03, Yurke and Stoler, Phys.
+        // Rev.
+        // Lett. 57 (1986) 13
+        LadderMode kerr = Oscillator.mode("kerr", Mode.natural(1).with(new Part.Kerr(2)), List.of());
+        PhaseField field = kerr.coherent(4)
+                .evolve(2, ONE)
+                .run()
+                .phaseSpace(Math.PI / 2, ONE)
+                .wigner(new PhaseGrid(0, 0, 5, 3, 61, 62));
+        double a = Math.sqrt(8);
+        for (int i = 0; i < 61; i++) {
+            for (int j = 0; j < 62; j++) {
+                double x = field.grid().position(i);
+                double p = field.grid().momentum(j);
+                double exact = (Math.exp(-(x - a) * (x - a) - p * p) / 2
+                                + Math.exp(-(x + a) * (x + a) - p * p) / 2
+                                - Math.exp(-x * x - p * p) * Math.sin(2 * a * p))
+                        / Math.PI;
+                assertEquals(exact, field.value(i, j), field.bound().size(), x + ", " + p);
+            }
+        }
+        assertTrue(field.bound().size() < 2e-9, "bound " + field.bound());
+    }
+
+    @Test
+    void aLossyModeIsReadAsADensityOperatorAtTheRunsNearestTime() {
+        // α e^{−(i ω + κ/2) t}: a coherent state stays coherent under loss at zero temperature
+        LadderMode lossy =
+                Oscillator.mode("hamiltonian", Mode.natural(1).with(Jump.loss(Rate.natural(0.3))), List.of());
+        PhaseSpace space = lossy.coherent(4).evolve(2, ONE).frames(4).run().phaseSpace(1.6, ONE);
+        assertEquals(1.5, space.time(), 1e-12);
+        double size = Math.sqrt(8) * Math.exp(-0.15 * 1.5);
+        isGaussianAt(space.wigner(), size * Math.cos(1.5), -size * Math.sin(1.5));
+        assertTrue(
+                space.wigner().bound().size() < 1e-7, "bound " + space.wigner().bound());
     }
 
     @Test
