@@ -7,6 +7,8 @@ import ladderwell.packet.Grid;
 import ladderwell.packet.GridFrame;
 import ladderwell.packet.GridMotion;
 import ladderwell.packet.PotentialField;
+import ladderwell.phasespace.PhaseState;
+import ladderwell.phasespace.SampledWave;
 import ladderwell.state.Shape;
 
 /** A run on a grid of positions: where the potential moves, or the levels do not carry the state. */
@@ -155,6 +157,17 @@ final class OnGrid implements Representation {
         double off = motion.error().size() / Math.sqrt(motion.grid().spacing());
         double error = (2 * Math.sqrt(peak) + off) * off + BETWEEN * peak;
         return new Density(run, x, values, Bound.estimated(error), "values on a grid");
+    }
+
+    @Override
+    public double instant(double time) {
+        return time(Representation.nearest(this, time));
+    }
+
+    @Override
+    public PhaseState phaseState(State state, double time) {
+        GridFrame frame = motion.frame(Representation.nearest(this, time));
+        return SampledWave.onGrid(frame.grid().left(), frame.grid().spacing(), frame.re(), frame.im(), motion.error());
     }
 
     @Override

@@ -4,6 +4,7 @@ import ladderwell.evidence.Bound;
 import ladderwell.evidence.PhysicsException;
 import ladderwell.evidence.Record;
 import ladderwell.motion.PhasedState;
+import ladderwell.phasespace.PhaseState;
 import ladderwell.state.Amplitudes;
 
 /** A run on levels: every amplitude turns by the phase of its level. */
@@ -96,6 +97,16 @@ final class OnLevels implements Representation {
     @Override
     public Density density(Run run, int points) {
         return DensityReading.of(run, phased, points);
+    }
+
+    @Override
+    public double instant(double time) {
+        return time;
+    }
+
+    @Override
+    public PhaseState phaseState(State state, double time) {
+        return LevelWaves.of(state, phased, time);
     }
 
     @Override

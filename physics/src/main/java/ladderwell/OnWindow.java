@@ -3,9 +3,15 @@ package ladderwell;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.Record;
 import ladderwell.operator.OperatorFormula;
+import ladderwell.phasespace.NumberMatrix;
+import ladderwell.phasespace.NumberWave;
+import ladderwell.phasespace.PhaseState;
 import ladderwell.state.Amplitudes;
 import ladderwell.state.Mixture;
+import ladderwell.window.MixedWindow;
+import ladderwell.window.PureWindow;
 import ladderwell.window.WindowMotion;
+import ladderwell.window.WindowState;
 
 /** A run of a mode in a window of number states that follows it: a vector where nothing jumps, else a density operator. */
 final class OnWindow implements Representation {
@@ -88,6 +94,23 @@ final class OnWindow implements Representation {
     @Override
     public Density density(Run run, int points) {
         return WindowDensity.of(run, motion, points);
+    }
+
+    @Override
+    public double instant(double time) {
+        return time(Representation.nearest(this, time));
+    }
+
+    @Override
+    public PhaseState phaseState(State state, double time) {
+        WindowState at = motion.state(Representation.nearest(this, time));
+        return at instanceof PureWindow vector
+                ? new NumberWave(vector.first(), vector.reals(), vector.imaginaries(), vector.error())
+                : mixed((MixedWindow) at);
+    }
+
+    private static PhaseState mixed(MixedWindow at) {
+        return new NumberMatrix(at.first(), at.levels(), at.lowerRe(), at.lowerIm(), at.traceNormError());
     }
 
     @Override

@@ -3,6 +3,7 @@ package ladderwell;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.PhysicsException;
 import ladderwell.evidence.Record;
+import ladderwell.phasespace.PhaseState;
 import ladderwell.quantity.Digits;
 
 /** In what a run carries its state from time 0 on: amplitudes on levels, a state in a window of number states, or values on a grid of positions. */
@@ -74,6 +75,23 @@ sealed interface Representation permits OnLevels, OnGrid, OnWindow {
 
     /** |ψ|² at every time on so many points that cover the motion. */
     Density density(Run run, int points);
+
+    /** The number of the time nearest to this one. */
+    static int nearest(Representation run, double time) {
+        int nearest = 0;
+        for (int j = 1; j < run.times(); j++) {
+            if (Math.abs(run.time(j) - time) < Math.abs(run.time(nearest) - time)) {
+                nearest = j;
+            }
+        }
+        return nearest;
+    }
+
+    /** The time nearest to this one at which the state can be had: the same on levels, else one of the run's times. */
+    double instant(double time);
+
+    /** The state at such a time, as phase-space functions are made of it. */
+    PhaseState phaseState(State state, double time);
 
     /** What the motion does, in one line. */
     String verdict(Run run);

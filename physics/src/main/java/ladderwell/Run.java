@@ -165,6 +165,26 @@ public final class Run {
         return representation.density(this, points);
     }
 
+    /**
+     * The state at one instant in phase space: on levels at any instant of the run, else at the run's nearest time.
+     *
+     * @param value the instant, in lab units (natural units: a plain number) or in classical periods
+     * @throws IllegalArgumentException if it lies outside the run
+     */
+    public PhaseSpace phaseSpace(double value, Unit unit) {
+        return PhaseSpace.at(this, Quantity.of(value, unit));
+    }
+
+    /** The Wigner function at every time, or at as many evenly chosen ones as a film shows. */
+    public PhaseFilm phaseFilm() {
+        return PhaseFilm.of(this, PhaseFilm.DEFAULT_POINTS);
+    }
+
+    /** The same with this many positions and momenta. */
+    public PhaseFilm phaseFilm(int points) {
+        return PhaseFilm.of(this, points);
+    }
+
     /** What the motion does, in one line, each number with its error. */
     public String verdict() {
         return representation.verdict(this);

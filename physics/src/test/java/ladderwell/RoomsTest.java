@@ -83,6 +83,9 @@ class RoomsTest {
     static final ArchRule packet = only("packet", "state", "level", "evidence", "quantity", "numeric");
 
     @ArchTest
+    static final ArchRule phasespace = only("phasespace", "state", "evidence", "quantity", "numeric");
+
+    @ArchTest
     static final ArchRule roomsAreFreeOfCycles =
             slices().matching("ladderwell.(*)..").should().beFreeOfCycles();
 }

@@ -58,6 +58,41 @@ interface Loops {
     void squares(
             double[] even, double[] odd, int row, boolean mirrored, double[] frame, int upper, int lower, int count);
 
+    /**
+     * Products of places that mirror one another about a centre: outRe + i outIm = f(centre + k) f(centre - k)* for k = from … from+count-1,
+     * written from entry 0 on.
+     */
+    void mirrored(double[] re, double[] im, int centre, int from, int count, double[] outRe, double[] outIm);
+
+    /**
+     * Turns rows of {@link #columns} unit numbers: row to + r becomes row from + r times row {@code by} of the turning table, for all r below
+     * count. From and to may overlap only where they are the same.
+     */
+    void turn(
+            double[] cosine,
+            double[] sine,
+            int from,
+            double[] byCosine,
+            double[] bySine,
+            int by,
+            double[] toCosine,
+            double[] toSine,
+            int to,
+            int count);
+
+    /** The same for k = done … count-1, one by one. */
+    static void mirroredOneByOne(
+            double[] re, double[] im, int centre, int from, int done, int count, double[] outRe, double[] outIm) {
+        for (int k = done; k < count; k++) {
+            double a = re[centre + from + k];
+            double b = im[centre + from + k];
+            double u = re[centre - from - k];
+            double v = im[centre - from - k];
+            outRe[k] = Math.fma(a, u, b * v);
+            outIm[k] = Math.fma(b, u, -(a * v));
+        }
+    }
+
     /** The same for columns from … count-1, one by one. */
     static void squaresOneByOne(
             int columns,

@@ -109,4 +109,36 @@ final class PlainLoops implements Loops {
         sums[sumAt + 3] += squeezeRe;
         sums[sumAt + 4] += squeezeIm;
     }
+
+    @Override
+    public void mirrored(double[] re, double[] im, int centre, int from, int count, double[] outRe, double[] outIm) {
+        Loops.mirroredOneByOne(re, im, centre, from, 0, count, outRe, outIm);
+    }
+
+    @Override
+    public void turn(
+            double[] cosine,
+            double[] sine,
+            int from,
+            double[] byCosine,
+            double[] bySine,
+            int by,
+            double[] toCosine,
+            double[] toSine,
+            int to,
+            int count) {
+        for (int r = 0; r < count; r++) {
+            int a = (from + r) * COLUMNS;
+            int b = by * COLUMNS;
+            int c = (to + r) * COLUMNS;
+            for (int j = 0; j < COLUMNS; j++) {
+                double x = cosine[a + j];
+                double y = sine[a + j];
+                double u = byCosine[b + j];
+                double v = bySine[b + j];
+                toCosine[c + j] = Math.fma(x, u, -(y * v));
+                toSine[c + j] = Math.fma(x, v, y * u);
+            }
+        }
+    }
 }

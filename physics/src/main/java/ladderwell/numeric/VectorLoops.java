@@ -159,4 +159,46 @@ final class VectorLoops implements Loops {
             sums[sumAt + 4] += gRe * bIm - gIm * bRe;
         }
     }
+
+    @Override
+    public void mirrored(double[] re, double[] im, int centre, int from, int count, double[] outRe, double[] outIm) {
+        int k = 0;
+        for (; k <= count - LANES; k += LANES) {
+            int right = centre + from + k;
+            int left = centre - from - k - (LANES - 1);
+            DoubleVector a = DoubleVector.fromArray(SPECIES, re, right);
+            DoubleVector b = DoubleVector.fromArray(SPECIES, im, right);
+            DoubleVector u = DoubleVector.fromArray(SPECIES, re, left).rearrange(REVERSED);
+            DoubleVector v = DoubleVector.fromArray(SPECIES, im, left).rearrange(REVERSED);
+            a.fma(u, b.mul(v)).intoArray(outRe, k);
+            b.fma(u, a.mul(v).neg()).intoArray(outIm, k);
+        }
+        Loops.mirroredOneByOne(re, im, centre, from, k, count, outRe, outIm);
+    }
+
+    @Override
+    public void turn(
+            double[] cosine,
+            double[] sine,
+            int from,
+            double[] byCosine,
+            double[] bySine,
+            int by,
+            double[] toCosine,
+            double[] toSine,
+            int to,
+            int count) {
+        for (int half = 0; half < COLUMNS; half += LANES) {
+            DoubleVector u = DoubleVector.fromArray(SPECIES, byCosine, by * COLUMNS + half);
+            DoubleVector v = DoubleVector.fromArray(SPECIES, bySine, by * COLUMNS + half);
+            for (int r = 0; r < count; r++) {
+                int a = (from + r) * COLUMNS + half;
+                int c = (to + r) * COLUMNS + half;
+                DoubleVector x = DoubleVector.fromArray(SPECIES, cosine, a);
+                DoubleVector y = DoubleVector.fromArray(SPECIES, sine, a);
+                x.fma(u, y.mul(v).neg()).intoArray(toCosine, c);
+                x.fma(v, y.mul(u)).intoArray(toSine, c);
+            }
+        }
+    }
 }

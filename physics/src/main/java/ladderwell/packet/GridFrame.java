@@ -61,6 +61,16 @@ public final class GridFrame {
         return time;
     }
 
+    /** Real parts at the positions of the grid, a copy. */
+    public double[] re() {
+        return wave.re.clone();
+    }
+
+    /** Imaginary parts at the positions of the grid, a copy. */
+    public double[] im() {
+        return wave.im.clone();
+    }
+
     /** ‖ψ‖. */
     public double norm() {
         return wave.norm();

@@ -36,6 +36,7 @@ public final class Declarations implements Sentences {
             "evolve", new EvolveMagic(),
             "table", new TableMagic(),
             "animate", new AnimateMagic(),
+            "phasespace", new PhaseSpaceMagic(),
             "levels", new LevelsMagic(),
             "elements", new ElementsMagic());
 

@@ -6,10 +6,12 @@ import ladderwell.Run;
 import ladderwell.kernel.cell.MimeBundle;
 import ladderwell.kernel.magic.Animation;
 import ladderwell.kernel.magic.LevelTable;
+import ladderwell.kernel.magic.PhasePortrait;
 import ladderwell.kernel.picture.Easel;
 import ladderwell.kernel.picture.FigurePicture;
 import ladderwell.kernel.picture.LevelPicture;
 import ladderwell.kernel.picture.MotionPicture;
+import ladderwell.kernel.picture.PhasePicture;
 import ladderwell.quantity.Digits;
 import tech.tablesaw.plotly.components.Figure;
 
@@ -32,6 +34,18 @@ final class PictureRendering {
                 .with(MimeBundle.HTML, picture.html(easel))
                 .with(SVG, picture.still());
         return new MimeBundle(bundle.data(), Map.of("ladderwell", CardRendering.record(run)));
+    }
+
+    static MimeBundle portrait(PhasePortrait portrait, Easel easel) {
+        PhasePicture picture = PhasePicture.of(portrait.name(), portrait.space(), portrait.husimi());
+        String text = "phasespace " + portrait.name() + " at " + picture.instant() + ": " + picture.verdict() + "\n"
+                + picture.description() + "\n" + picture.errorLine();
+        MimeBundle bundle = MimeBundle.plain(text)
+                .with(MimeBundle.HTML, picture.html(easel))
+                .with(SVG, picture.still());
+        return new MimeBundle(
+                bundle.data(),
+                Map.of("ladderwell", CardRendering.record(portrait.space().run())));
     }
 
     static MimeBundle levels(LevelTable levels, Easel easel) {

@@ -1,6 +1,7 @@
 package ladderwell.kernel.render;
 
 import ladderwell.Oscillator;
+import ladderwell.PhaseSpace;
 import ladderwell.Run;
 import ladderwell.State;
 import ladderwell.kernel.cell.MimeBundle;
@@ -8,6 +9,7 @@ import ladderwell.kernel.cell.Renderer;
 import ladderwell.kernel.magic.Animation;
 import ladderwell.kernel.magic.Declared;
 import ladderwell.kernel.magic.LevelTable;
+import ladderwell.kernel.magic.PhasePortrait;
 import ladderwell.kernel.magic.TableRead;
 import ladderwell.kernel.picture.Easel;
 import ladderwell.kernel.picture.PageLibrary;
@@ -55,6 +57,12 @@ public final class Renderings implements Renderer {
         }
         if (value instanceof Animation animation) {
             return PictureRendering.animation(animation, easel);
+        }
+        if (value instanceof PhasePortrait portrait) {
+            return PictureRendering.portrait(portrait, easel);
+        }
+        if (value instanceof PhaseSpace space) {
+            return PictureRendering.portrait(new PhasePortrait("run", space, false), easel);
         }
         if (value instanceof LevelTable levels) {
             return PictureRendering.levels(levels, easel);

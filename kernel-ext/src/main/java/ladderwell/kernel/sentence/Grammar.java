@@ -92,6 +92,24 @@ public record Grammar(List<Noun> nouns) {
                         .keys(Key.count("points", 2, 100_000, "400", "number of grid points across the motion")
                                 .standard("400")),
                 Noun.of(
+                                "phasespace",
+                                "phasespace RUN at INSTANT, KEY",
+                                "phasespace run at 1.5 periods",
+                                "shows the Wigner function W(x, p) of a run at an instant, or moving below its density")
+                        .about("evolve")
+                        .lead(Key.quantity(
+                                        "at",
+                                        "when; a period is the classical one at the mean energy of the state",
+                                        PERIODS,
+                                        TIME)
+                                .called("instant")
+                                .standard("the whole run, as a film"))
+                        .keys(Key.of(
+                                "husimi",
+                                Form.FLAG,
+                                "",
+                                "shows the Husimi function instead, the mean over coherent states")),
+                Noun.of(
                                 "levels",
                                 "levels OSCILLATOR, KEY VALUE",
                                 "levels well, count 5",

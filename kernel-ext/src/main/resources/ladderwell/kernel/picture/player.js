@@ -32,7 +32,7 @@ function inks(root) {
   var p = paper(root), dark = 0.299 * p[0] + 0.587 * p[1] + 0.114 * p[2] < 128;
   root.classList.toggle('lw-dark', dark);
   var style = w.getComputedStyle(root), out = {paper: 'rgb(' + p.slice(0, 3).join(',') + ')', font: style.fontFamily};
-  ['ink', 'faint', 'teal', 'fill', 'red', 'grey', 'ochre', 'indigo', 'plum', 'map1', 'map2', 'map3', 'map4'].forEach(function (name) {
+  ['ink', 'faint', 'teal', 'fill', 'red', 'grey', 'ochre', 'indigo', 'plum', 'map1', 'map2', 'map3', 'map4', 'low1', 'low2', 'low3'].forEach(function (name) {
     out[name] = style.getPropertyValue('--lw-' + name).trim();
   });
   return out;
@@ -57,6 +57,11 @@ function paint(traces, ink) {
   traces.forEach(function (t) {
     var c = {density: ink.teal, mean: ink.teal, wave: ink.teal, potential: ink.grey, energy: ink.ochre, level: ink.ochre, spacing: ink.ochre,
       classical: ink.red, turning: ink.red}[t.name];
+    if (t.name === 'signed') {
+      t.colorscale = [[0, ink.low3], [0.25, ink.low2], [0.44, ink.low1], [0.5, ink.paper], [0.56, ink.map1], [0.75, ink.map2], [1, ink.map3]];
+      return;
+    }
+    if (t.type === 'contour') { t.line.color = t.name === 'below' ? ink.red : ink.teal; return; }
     if (t.type === 'heatmap') {
       t.colorscale = [[0, ink.paper], [0.07, ink.map1], [0.33, ink.map2], [0.68, ink.map3], [1, ink.map4]];
       return;
@@ -252,6 +257,55 @@ function motion(root, p) {
     });
 }
 
+/* ---- a Wigner or Husimi function at one instant, with its marginals ---- */
+function signed(text, peak, across) {
+  var raw = w.atob(text), out = [];
+  for (var at = 0; at < raw.length; at += across) {
+    var row = new Float32Array(across);
+    for (var i = 0; i < across; i++) row[i] = peak * (raw.charCodeAt(at + i) - 128) / 127;
+    out.push(row);
+  }
+  return out;
+}
+function phase(root, p) {
+  var m = p.data, box = element(stageOf(root), 'div', 'lw-phase');
+  var x = even(m.x[0], m.x[1], m.x[2]), y = even(m.y[0], m.y[1], m.y[2]), field = signed(m.field, m.peak, m.x[2]);
+  p.traces.slice(0, 3).forEach(function (t) { t.x = x; t.y = y; t.z = field; t.hoverinfo = 'skip'; });
+  var map = p.traces[0];
+  map.hoverinfo = undefined;
+  map.hovertemplate = m.words.hover;
+  map.zmin = map.name === 'signed' ? -m.peak : 0;
+  map.zmax = m.peak;
+  map.zsmooth = 'best';
+  map.showscale = false;
+  p.traces[5].x = x;
+  p.traces[5].y = decode(m.overMomenta);
+  p.traces[6].x = decode(m.overPositions);
+  p.traces[6].y = y;
+  p.traces.slice(3).forEach(function (t) { t.hoverinfo = 'skip'; });
+  function dress() {
+    var ink = inks(root), l = p.layout, b = l.margin, side = Math.min(m.side, width(root) - b.l - m.gap - m.marginal - 8);
+    var all = side + m.gap + m.marginal, part = side / all, next = (side + m.gap) / all;
+    axes(l, ink);
+    paint(p.traces, ink);
+    b.r = 8;
+    l.width = b.l + all + b.r;
+    l.height = b.t + all + b.b;
+    l.xaxis.domain = l.yaxis.domain = [0, part];
+    l.xaxis2.domain = l.yaxis3.domain = [next, 1];
+    var place = {xref: 'paper', x: next, xanchor: 'left', yref: 'paper', yanchor: 'top', align: 'left'};
+    l.annotations = [word(m.words.above, ink.teal, Object.assign({y: 1}, place)),
+      word(m.words.classical, ink.red, Object.assign({y: next, yshift: 18}, place))];
+    if (m.words.below) l.annotations.push(word(m.words.below, ink.red, Object.assign({y: 1, yshift: -17}, place)));
+  }
+  dress();
+  return Plotly.newPlot(box, p.traces, p.layout, quiet).then(function () {
+    box.parentNode.drawn();
+    function again() { dress(); Plotly.react(box, p.traces, p.layout, quiet); }
+    watch(root, again, again);
+  });
+}
+
 /* ---- potential, levels and wave functions ---- */
 function levels(root, p) {
   var m = p.data, box = element(stageOf(root), 'div', 'lw-levels');
@@ -313,7 +367,7 @@ function figure(root, p) {
 }
 
 /* ---- the queue: a picture may come before its place in the page is there ---- */
-var kinds = {motion: motion, levels: levels, figure: figure};
+var kinds = {motion: motion, levels: levels, phase: phase, figure: figure};
 function draw(p, tries) {
   var found = false;
   Array.prototype.forEach.call(d.querySelectorAll('[data-ladderwell="' + p.key + '"]'), function (root) {

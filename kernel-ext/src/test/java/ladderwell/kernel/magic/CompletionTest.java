@@ -48,7 +48,9 @@ class CompletionTest {
 
     @Test
     void nounsFollowThePercentSign() {
-        assertEquals(List.of("oscillator", "state", "evolve", "table", "animate", "levels", "elements"), offered("%|"));
+        assertEquals(
+                List.of("oscillator", "state", "evolve", "table", "animate", "phasespace", "levels", "elements"),
+                offered("%|"));
         assertEquals(List.of("oscillator"), offered("%os|"));
         assertEquals("%oscillator", completed("%OSC|"));
         assertEquals(List.of("noun"), kinds("%|"));
@@ -155,6 +157,6 @@ class CompletionTest {
     void aSentenceThatGoesOnInTheNextLineIsStillTheSame() {
         assertEquals(List.of("frequency"), offered("%%declare\noscillator x: harmonic,\n  mass 4 u,\n  fr|"));
         assertEquals(List.of("mass", "width", "natural"), offered("%%declare\noscillator x: box,\n  |"));
-        assertEquals(7, offered("%%declare\noscillator x: box,\n|").size());
+        assertEquals(8, offered("%%declare\noscillator x: box,\n|").size());
     }
 }

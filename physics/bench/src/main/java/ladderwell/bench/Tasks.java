@@ -59,7 +59,9 @@ final class Tasks {
                     PotentialLevels levels = new PotentialLevels();
                     return new Work(levels::well, levels::wellError);
                 }),
-                farUpTheQuartic());
+                farUpTheQuartic(),
+                wigner("Wigner function, 201 × 201, pure state of 200 levels", 0.20, "pure", 200, 1),
+                wigner("Wigner function, 201 × 201, density operator of 120 levels", 0.30, "mixed", 120, 6));
     }
 
     private static Task densityFrames(int threads) {
@@ -109,6 +111,13 @@ final class Tasks {
                 1e-11,
                 new Ours(() -> new Work(() -> low.alone(100), () -> low.aloneError(100))),
                 () -> new Work(() -> high.alone(100_000), () -> high.aloneError(100_000)));
+    }
+
+    private static Task wigner(String name, double goal, String variant, int size, int rank) {
+        return new Task(name, 1, goal, 1e-13, Script.of("wigner.py", variant), () -> {
+            WignerGrid wigner = new WignerGrid(size, rank);
+            return new Work(wigner::run, wigner::error);
+        });
     }
 
     private static ExecutorService pool(int threads) {
