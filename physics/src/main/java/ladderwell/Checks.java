@@ -7,6 +7,7 @@ import ladderwell.quantity.Digits;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Units;
+import ladderwell.state.Amplitudes;
 
 /** The checks that declarations share; each failure is one sentence that names the input, its value and what was expected. */
 final class Checks {
@@ -52,5 +53,25 @@ final class Checks {
             return Constants.ELECTRON_REST_MASS_UNCERTAINTY / Constants.ELECTRON_REST_MASS;
         }
         return 0;
+    }
+
+    /** Refuses mean quanta of a coherent state or a displacement that are negative, not finite, or more than is carried. */
+    static void meanQuanta(double mean) {
+        if (!(mean >= 0) || Double.isInfinite(mean)) {
+            throw new IllegalArgumentException(
+                    "mean quanta must be a finite number of at least 0, not " + number(mean));
+        }
+        if (mean > Amplitudes.LARGEST_MEAN) {
+            throw new IllegalArgumentException("mean quanta of " + number(mean) + " need about "
+                    + number(Math.rint(14 * Math.sqrt(mean) / 1e6) * 1e6)
+                    + " levels; at most " + number(Amplitudes.LARGEST_MEAN) + " quanta are carried");
+        }
+    }
+
+    /** Relative standard uncertainty of lengths and momenta in the oscillator's scale, from its mass. */
+    static double lengthUncertainty(Ladder oscillator) {
+        return oscillator instanceof Harmonic harmonic
+                ? harmonic.mass().map(Checks::relativeUncertainty).orElse(0.0) / 2
+                : 0;
     }
 }

@@ -1,11 +1,9 @@
 package ladderwell;
 
 import static ladderwell.quantity.Units.ONE;
-import static ladderwell.quantity.Units.RADIAN;
 
 import java.util.ArrayList;
 import java.util.List;
-import ladderwell.evidence.Bound;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
@@ -24,15 +22,7 @@ import ladderwell.state.Amplitudes;
 public record Coherent(Ladder oscillator, double mean, double phaseAngle, List<Fact> given) implements State {
 
     public Coherent {
-        if (!(mean >= 0) || Double.isInfinite(mean)) {
-            throw new IllegalArgumentException(
-                    "mean quanta must be a finite number of at least 0, not " + Checks.number(mean));
-        }
-        if (mean > Amplitudes.LARGEST_MEAN) {
-            throw new IllegalArgumentException("mean quanta of " + Checks.number(mean) + " need about "
-                    + Checks.number(Math.rint(14 * Math.sqrt(mean) / 1e6) * 1e6)
-                    + " levels; at most " + Checks.number(Amplitudes.LARGEST_MEAN) + " quanta are carried");
-        }
+        Checks.meanQuanta(mean);
         Checks.finite("phase", phaseAngle);
         given = List.copyOf(given);
     }
@@ -72,10 +62,8 @@ public record Coherent(Ladder oscillator, double mean, double phaseAngle, List<F
     /** The same state with α turned to this phase: it starts later on the same orbit, clockwise in phase space. */
     public Coherent phase(double value, Unit unit) {
         Quantity phase = Checks.kind("phase", Quantity.of(value, unit), Kind.ANGLE);
-        List<Fact> all = new ArrayList<>(given);
-        all.removeIf(f -> f.name().equals("phase"));
-        all.add(Fact.exact("phase", "φ", phase));
-        return new Coherent(oscillator, mean, phase.si(), all);
+        return new Coherent(
+                oscillator, mean, phase.si(), Fact.with(given, Fact.exact("phase", "φ", phase)));
     }
 
     /** ⟨x⟩ at time 0, scaled. */
@@ -108,12 +96,10 @@ public record Coherent(Ladder oscillator, double mean, double phaseAngle, List<F
     public List<Fact> facts() {
         Scale scale = oscillator.scale();
         Shown shown = new Shown(scale);
-        double uncertainty = oscillator instanceof Harmonic harmonic
-                ? harmonic.mass().map(Checks::relativeUncertainty).orElse(0.0) / 2
-                : 0;
+        double uncertainty = Checks.lengthUncertainty(oscillator);
         List<Fact> facts = new ArrayList<>();
         facts.add(Fact.closedForm("mean quanta", "n̄ = |α|²", mean, ONE, 0));
-        facts.add(new Fact("phase", "φ", Quantity.of(phaseAngle, RADIAN), Bound.guaranteed(Math.ulp(phaseAngle))));
+        facts.add(Fact.angle("phase", "φ", phaseAngle));
         double swing = Math.sqrt(2 * mean) * scale.of(Kind.LENGTH);
         facts.add(shown.fact("swing (turning point)", "√(2n̄)·ℓ", Kind.LENGTH, swing, uncertainty));
         facts.add(shown.fact(

@@ -1,8 +1,11 @@
 package ladderwell;
 
+import java.util.ArrayList;
+import java.util.List;
 import ladderwell.evidence.Bound;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Unit;
+import ladderwell.quantity.Units;
 
 /**
  * One line of a card: what it is, how the trade writes it, its value with a unit, and how far the value can be off.
@@ -21,6 +24,19 @@ public record Fact(String name, String symbol, Quantity value, Bound bound) {
 
     static Fact exact(String name, String symbol, Quantity value) {
         return new Fact(name, symbol, value, Bound.exact());
+    }
+
+    /** An angle in rad, as good as a double is. */
+    static Fact angle(String name, String symbol, double radians) {
+        return new Fact(name, symbol, Quantity.of(radians, Units.RADIAN), Bound.guaranteed(Math.ulp(radians)));
+    }
+
+    /** The facts with this one in place of the one of its name, or behind them. */
+    static List<Fact> with(List<Fact> facts, Fact fact) {
+        List<Fact> all = new ArrayList<>(facts);
+        all.removeIf(f -> f.name().equals(fact.name()));
+        all.add(fact);
+        return all;
     }
 
     /** A value computed in closed form: off by rounding and by the relative uncertainty of what went in. */

@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Optional;
 import ladderwell.classical.ClassicalOrbit;
 import ladderwell.level.Levels;
+import ladderwell.operator.LadderPolynomial;
 import ladderwell.quantity.Constants;
 import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
@@ -132,6 +133,11 @@ public record Harmonic(Optional<Quantity> mass, Optional<Quantity> spacing) impl
     @Override
     public double coherentEnergy(double re, double im) {
         return re * re + im * im + 0.5;
+    }
+
+    @Override
+    public LadderPolynomial energyOperator() {
+        return LadderPolynomial.number().plus(LadderPolynomial.constant(0.5, 0));
     }
 
     @Override

@@ -124,6 +124,11 @@ public record LadderMode(String kind, Mode mode, Scale scale, List<Fact> given) 
     }
 
     @Override
+    public LadderPolynomial energyOperator() {
+        return hamiltonian().at(0);
+    }
+
+    @Override
     public double numberEnergy(long n) {
         return hamiltonian().at(0).diagonalPart().diagonal(n).value();
     }

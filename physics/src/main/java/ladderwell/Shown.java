@@ -5,6 +5,7 @@ import ladderwell.quantity.Kind;
 import ladderwell.quantity.Quantity;
 import ladderwell.quantity.Scale;
 import ladderwell.quantity.Unit;
+import ladderwell.quantity.Units;
 
 /** Turns SI values into facts in the readable unit of their size. */
 record Shown(Scale scale) {
@@ -51,5 +52,22 @@ record Shown(Scale scale) {
     Fact level(String name, String symbol, Oscillator oscillator, long n) {
         Bound bound = oscillator.levels().energyBound(n);
         return scaled(name, symbol, Kind.ENERGY, oscillator.levels().energyHigh(n), bound, massUncertainty(oscillator));
+    }
+
+    /**
+     * The mean energy of a state on a ladder, computed from its operator.
+     *
+     * @param magnitude size of the terms that were added
+     */
+    Fact ladderEnergy(String symbol, double scaled, double magnitude, Ladder oscillator) {
+        double off = magnitude * 0x1p-44;
+        // the harmonic terms are all positive and few; those of a polynomial may cancel
+        Bound bound = oscillator instanceof Harmonic ? Bound.guaranteed(off) : Bound.estimated(off);
+        return scaled("mean energy", symbol, Kind.ENERGY, scaled, bound, massUncertainty(oscillator));
+    }
+
+    /** A plain number with a relative error of so many units in the last place. */
+    static Fact number(String name, String symbol, double value, double ulps) {
+        return new Fact(name, symbol, Quantity.of(value, Units.ONE), Bound.guaranteed(ulps * Math.ulp(value)));
     }
 }

@@ -6,12 +6,12 @@ import ladderwell.quantity.Unit;
 import ladderwell.state.Amplitudes;
 
 /** What the motion starts in: a pure state of one oscillator. */
-public sealed interface State permits NumberState, Coherent, Superposition, Packet, LevelOf {
+public sealed interface State permits NumberState, Coherent, Squeezed, Cat, DisplacedNumber, Superposition, Packet, LevelOf {
 
     /** The oscillator it is prepared in. */
     Oscillator oscillator();
 
-    /** The trade's name of the kind: "number", "coherent", "superposition", "gaussian", "level". */
+    /** The trade's name of the kind: "number", "coherent", "squeezed", "cat", "displaced number", "superposition", "gaussian", "level". */
     String kind();
 
     /**

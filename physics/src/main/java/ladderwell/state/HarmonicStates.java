@@ -9,6 +9,9 @@ import ladderwell.numeric.DoubleDouble;
  * chosen from the tolerance and tells a guaranteed error. Coherent states: {@link Amplitudes#coherent}; mixed ones: {@link Mixture}.
  */
 public final class HarmonicStates {
+    /** Largest squeezing r, 43 dB. */
+    public static final double LARGEST_SQUEEZING = SqueezedWindow.LARGEST_SQUEEZING;
+
     /** Largest window. */
     static final int MOST_LEVELS = 30_000_000;
 

@@ -7,7 +7,7 @@
  * <p>Read {@link ladderwell.state.Amplitudes} and {@link ladderwell.state.HarmonicStates} first; then {@code PoissonWindow} and {@code ExactTurns} for coherent states, and {@code
  * PacketState} with {@code PacketOverlaps} (closed forms) and {@code LeakingOverlaps} (quadrature) for Gaussian packets, {@code
  * SqueezedWindow} and {@code DisplacedNumberWindow} (recurrences, the residual of the state's own equation as bound) with {@code
- * QuantaTail}, {@code CatState}; then {@link ladderwell.state.Mixture} and {@link ladderwell.state.DensityOperator} for mixed states.
+ * QuantaTail}, {@code CatState} with {@link ladderwell.state.CatMoments}; then {@link ladderwell.state.Mixture} and {@link ladderwell.state.DensityOperator} for mixed states.
  */
 @NullMarked
 package ladderwell.state;

@@ -209,11 +209,22 @@ final class Completer {
                     .toList();
         }
 
+        private Offers inChoice(Key key, List<Piece> value) {
+            boolean done = value.size() > 1 || (value.size() == 1 && !touched(value.get(0)));
+            int from = value.isEmpty() ? cursor : value.get(0).place().start();
+            List<Offer> offers =
+                    key.choices().stream().map(word -> new Offer(word, "value")).toList();
+            return done ? Offers.none(cursor) : fitting(text, from, cursor, offers);
+        }
+
         private Offers inValue(Key key, List<Piece> value) {
             if (key.form() == Form.REFERENCE) {
                 boolean nameDone = value.size() > 1 || (value.size() == 1 && !touched(value.get(0)));
                 List<String> homes = before.kind().map(NounKind::homes).orElse(List.of());
                 return nameDone ? Offers.none(cursor) : names(key.noun(), homes);
+            }
+            if (key.form() == Form.CHOICE) {
+                return inChoice(key, value);
             }
             if (key.form() != Form.QUANTITY || value.isEmpty()) {
                 return Offers.none(cursor);

@@ -16,6 +16,8 @@ public enum Form {
     COUNT,
     /** A complex number such as 1.5+0.5i. */
     COMPLEX,
+    /** One of a few words. */
+    CHOICE,
     /** Whole numbers, parted by blanks. */
     COUNTS,
     /** Complex numbers, parted by blanks. */

@@ -17,6 +17,7 @@ import ladderwell.quantity.Kind;
  * @param meaning one line that says what it is
  * @param formula how it enters; may be empty
  * @param standard what holds where it is not given; empty where it must be given or nothing holds
+ * @param choices the words that it takes; empty where the form is no {@link Form#CHOICE}
  * @param called how messages of physics call the value; mostly the word itself
  */
 public record Key(
@@ -30,28 +31,35 @@ public record Key(
         String meaning,
         String formula,
         String standard,
+        List<String> choices,
         String called) {
 
-    /** Copies the kinds. */
+    /** Copies the lists. */
     public Key {
         kinds = List.copyOf(kinds);
+        choices = List.copyOf(choices);
     }
 
     static Key quantity(String word, String meaning, Kind... kinds) {
         List<Kind> all = List.of(kinds);
-        return new Key(word, Form.QUANTITY, all, "", 0, 0, all.get(0).example(), meaning, "", "", word);
+        return new Key(word, Form.QUANTITY, all, "", 0, 0, all.get(0).example(), meaning, "", "", List.of(), word);
     }
 
     static Key of(String word, Form form, String example, String meaning) {
-        return new Key(word, form, List.of(), "", 0, Long.MAX_VALUE, example, meaning, "", "", word);
+        return new Key(word, form, List.of(), "", 0, Long.MAX_VALUE, example, meaning, "", "", List.of(), word);
     }
 
     static Key count(String word, long least, long most, String example, String meaning) {
-        return new Key(word, Form.COUNT, List.of(), "", least, most, example, meaning, "", "", word);
+        return new Key(word, Form.COUNT, List.of(), "", least, most, example, meaning, "", "", List.of(), word);
     }
 
     static Key reference(String word, String noun, String example, String meaning) {
-        return new Key(word, Form.REFERENCE, List.of(), noun, 0, 0, example, meaning, "", "", word);
+        return new Key(word, Form.REFERENCE, List.of(), noun, 0, 0, example, meaning, "", "", List.of(), word);
+    }
+
+    static Key choice(String word, String meaning, String... choices) {
+        List<String> all = List.of(choices);
+        return new Key(word, Form.CHOICE, List.of(), "", 0, 0, all.get(0), meaning, "", "", all, word);
     }
 
     /** The key of a parameter that a formula names. */
@@ -60,15 +68,15 @@ public record Key(
     }
 
     Key formula(String text) {
-        return new Key(word, form, kinds, noun, least, most, example, meaning, text, standard, called);
+        return new Key(word, form, kinds, noun, least, most, example, meaning, text, standard, choices, called);
     }
 
     Key standard(String text) {
-        return new Key(word, form, kinds, noun, least, most, example, meaning, formula, text, called);
+        return new Key(word, form, kinds, noun, least, most, example, meaning, formula, text, choices, called);
     }
 
     Key called(String text) {
-        return new Key(word, form, kinds, noun, least, most, example, meaning, formula, standard, text);
+        return new Key(word, form, kinds, noun, least, most, example, meaning, formula, standard, choices, text);
     }
 
     /** The key with a value, as one would type it: "mass 40 u". */
@@ -89,6 +97,7 @@ public record Key(
             case NUMBER -> "a plain number such as " + example;
             case COUNT -> "a whole number such as " + example;
             case COMPLEX -> "a complex number such as " + example;
+            case CHOICE -> Words.either(choices);
             case COUNTS -> "whole numbers such as " + example;
             case COMPLEXES -> "numbers, real or complex, such as " + example;
             case REFERENCE -> "the name of " + Words.article(noun);

@@ -18,7 +18,7 @@ public record Offers(Place place, List<Offer> offers) {
      * One replacement.
      *
      * @param text what is put in
-     * @param kind what it is: noun, kind, key, unit, observable, or the noun of a declared name
+     * @param kind what it is: noun, kind, key, value, unit, observable, or the noun of a declared name
      */
     public record Offer(String text, String kind) {}
 

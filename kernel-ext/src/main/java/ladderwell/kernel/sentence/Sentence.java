@@ -147,6 +147,11 @@ public final class Sentence {
         return value(key, String.class);
     }
 
+    /** The word given for a key that takes one of a few, lower case. */
+    public String choice(String key) {
+        return value(key, String.class);
+    }
+
     /** The whole numbers given for a key. */
     public List<Long> counts(String key) {
         List<Long> all = new ArrayList<>();

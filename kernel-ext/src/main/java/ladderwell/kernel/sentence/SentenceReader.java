@@ -246,6 +246,7 @@ final class SentenceReader {
             case NUMBER -> reading.number();
             case COUNT -> reading.count();
             case COMPLEX -> reading.complex();
+            case CHOICE -> reading.choice();
             case COUNTS -> reading.counts();
             case COMPLEXES -> reading.complexes();
             default -> throw new IllegalStateException("read elsewhere: " + key.form());

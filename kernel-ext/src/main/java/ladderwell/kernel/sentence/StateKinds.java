@@ -3,9 +3,13 @@ package ladderwell.kernel.sentence;
 import static ladderwell.quantity.Kind.ANGLE;
 import static ladderwell.quantity.Kind.LENGTH;
 import static ladderwell.quantity.Kind.MOMENTUM;
+import static ladderwell.quantity.Kind.SQUEEZING;
 
 /** The kinds of state, as the table of the language lists them. */
 final class StateKinds {
+    /** Oscillators with quanta. */
+    private static final String[] LADDERS = {"harmonic", "kerr", "duffing", "hamiltonian"};
+
     private static final NounKind NUMBER = NounKind.of(
                     "number",
                     "number state",
@@ -20,7 +24,7 @@ final class StateKinds {
                     "coherent state",
                     "the state that swings like the classical oscillator and keeps its shape",
                     "|α⟩, α = √n̄ e^{iφ},  a|α⟩ = α|α⟩")
-            .homes("harmonic", "kerr", "duffing", "hamiltonian")
+            .homes(LADDERS)
             .keys(
                     Key.of("mean", Form.NUMBER, "9.5", "mean quanta n̄, any real number from 0")
                             .formula("n̄ = |α|²"),
@@ -38,6 +42,72 @@ final class StateKinds {
                     Way.of("alpha"),
                     Way.of("displacement").with("momentum"),
                     Way.of("momentum").with("displacement"));
+
+    private static final NounKind SQUEEZED = NounKind.of(
+                    "squeezed",
+                    "squeezed state",
+                    "the vacuum with one quadrature less uncertain than the other, displaced where a mean is given",
+                    "D(α) S(ξ)|0⟩,  S(ξ) = exp[(ξ* a² − ξ a†²)/2],  ξ = r e^{2iθ}")
+            .homes(LADDERS)
+            .keys(
+                    Key.quantity("squeezing", "how far the least variance lies below that of the vacuum", SQUEEZING)
+                            .formula("10 log₁₀ e^{2r} dB; 6 dB is r = 0.691"),
+                    Key.of("r", Form.NUMBER, "0.7", "the squeezing parameter r in place of dB, from 0 to 5")
+                            .formula("least variance e^{−2r}/2, largest e^{2r}/2; the vacuum has ½"),
+                    Key.quantity("angle", "angle θ of the quadrature of least variance; 0 squeezes the position", ANGLE)
+                            .formula("x cos θ + p sin θ")
+                            .standard("0 deg"),
+                    Key.of("mean", Form.NUMBER, "4", "quanta |α|² of a displacement that follows the squeezing")
+                            .standard("0, the squeezed vacuum"),
+                    Key.quantity("phase", "phase of the displacement α; 0 displaces to the +x side", ANGLE)
+                            .standard("0 deg"))
+            .ways(Way.of("squeezing").with("angle", "mean", "phase"), Way.of("r").with("angle", "mean", "phase"));
+
+    private static final NounKind CAT = NounKind.of(
+                    "cat",
+                    "cat state",
+                    "coherent states evenly on a circle, all at once",
+                    "Σ_j e^{ijχ}|α e^{2πij/k}⟩, normalised;  |α⟩ ± |−α⟩ for two")
+            .homes(LADDERS)
+            .keys(
+                    Key.of("mean", Form.NUMBER, "4", "mean quanta of each component")
+                            .formula("|α|²"),
+                    Key.count("components", 2, 64, "2", "number k of coherent components")
+                            .standard("2"),
+                    Key.choice(
+                                    "parity",
+                                    "which levels of a cat of two components remain: the even or the odd ones",
+                                    "even",
+                                    "odd")
+                            .formula("even: |α⟩ + |−α⟩;  odd: |α⟩ − |−α⟩")
+                            .standard("even"),
+                    Key.count("residue", 0, 63, "1", "the levels that remain, n ≡ residue modulo the components")
+                            .formula("χ = −2π residue/k")
+                            .standard("0"),
+                    Key.quantity("relative phase", "phase χ from each component to the next", ANGLE)
+                            .formula("|α⟩ + e^{iχ}|−α⟩ for two"),
+                    Key.quantity("phase", "phase of α, the first component; 0 lies on the +x side", ANGLE)
+                            .standard("0 deg"))
+            .ways(
+                    Way.of("mean").with("components", "parity", "phase"),
+                    Way.of("mean").with("components", "relative phase", "phase"),
+                    Way.of("mean").with("components", "residue", "phase"));
+
+    private static final NounKind DISPLACED_NUMBER = NounKind.of(
+                    "displaced number",
+                    "displaced number state",
+                    "a number state that swings like the classical oscillator and keeps its shape",
+                    "D(α)|n⟩")
+            .homes(LADDERS)
+            .keys(
+                    Key.count("level", 0, 1_000_000_000, "3", "the level n that is displaced, counted from 0"),
+                    Key.of("mean", Form.NUMBER, "4", "quanta |α|² of the displacement")
+                            .formula("⟨n⟩ = |α|² + n"),
+                    Key.quantity("phase", "phase of α; 0 starts at the turning point on the +x side", ANGLE)
+                            .standard("0 deg"),
+                    Key.of("alpha", Form.COMPLEX, "1.5+0.5i", "the displacement α")
+                            .formula("|α|² quanta"))
+            .ways(Way.of("level", "mean").with("phase"), Way.of("level", "alpha"));
 
     private static final NounKind SUPERPOSITION = NounKind.of(
                     "superposition",
@@ -95,6 +165,7 @@ final class StateKinds {
     private StateKinds() {}
 
     static NounKind[] all() {
-        return new NounKind[] {COHERENT, NUMBER, SUPERPOSITION, GAUSSIAN, GROUND, LEVEL};
+        return new NounKind[] {
+            COHERENT, NUMBER, SQUEEZED, CAT, DISPLACED_NUMBER, SUPERPOSITION, GAUSSIAN, GROUND, LEVEL};
     }
 }

@@ -211,6 +211,27 @@ final class Values {
         return whole(terms.get(0), number());
     }
 
+    /** One of the words that the key takes, in any case; an expression may give it. */
+    String choice() throws MisreadSentence {
+        Term term = terms.get(0);
+        if (term.isUnknown()) {
+            return key.choices().get(0);
+        }
+        String typed =
+                Words.plain(term.result().map(String::valueOf).orElse(term.text())).strip();
+        if (!key.choices().contains(typed)) {
+            throw new MisreadSentence(
+                    key.word() + " takes " + key.expected() + ", not " + Words.quoted(term.text())
+                            + Words.didYouMean(
+                                    typed.length() > LONGEST_UNIT
+                                            ? Optional.empty()
+                                            : Words.nearest(typed, key.choices())),
+                    term.place());
+        }
+        refuseMore(terms, 1);
+        return typed;
+    }
+
     /** Whole numbers. */
     List<Long> counts() throws MisreadSentence {
         List<Long> all = new ArrayList<>();
