@@ -108,9 +108,17 @@ final class Cell {
      * @param tolerance fit over that size
      * @param thetaMost largest r² max|v − mean| in any case
      * @param eLow the mesh serves energies above this: a cell may be longer if the phase outruns theta
+     * @param survey whose places the cell is held against as well
      */
     static Attempt build(
-            DoubleUnaryOperator v, double a, double b, double scale, double tolerance, double thetaMost, double eLow) {
+            DoubleUnaryOperator v,
+            double a,
+            double b,
+            double scale,
+            double tolerance,
+            double thetaMost,
+            double eLow,
+            CurveSurvey survey) {
         int d = Chebyshev.DEGREE;
         double c = (a + b) / 2;
         double r = (b - a) / 2;
@@ -159,7 +167,8 @@ final class Cell {
             double x = s == -1 ? Math.nextUp(a) : s == 1 ? Math.nextDown(b) : c + r * s;
             fit = Math.max(fit, Math.abs(mean + Chebyshev.value(q, s) - v.applyAsDouble(x)));
         }
-        if (!(fit <= 4 * eps)) {
+        double level = mean;
+        if (!(fit <= 4 * eps && survey.agrees(a, b, 4 * eps, x -> level + Chebyshev.value(q, (x - c) / r)))) {
             return new Attempt(null, 0.75, true);
         }
         for (int j = 0; j <= n; j++) {
