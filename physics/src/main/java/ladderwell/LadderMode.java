@@ -91,6 +91,11 @@ public record LadderMode(String kind, Mode mode, Scale scale, List<Fact> given) 
         return jumps().isEmpty() && !h.dependsOnTime() && h.constant().bandwidth() == 0;
     }
 
+    @Override
+    public boolean moves() {
+        return mode.hamiltonian().dependsOnTime();
+    }
+
     /** Levels where the Hamiltonian is diagonal; else the number states, whose energies are the means ⟨n|H|n⟩ at time 0. */
     @Override
     public Levels levels() {

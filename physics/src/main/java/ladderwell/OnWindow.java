@@ -18,33 +18,27 @@ final class OnWindow implements Representation {
     /** Share of the tolerance that the start may take. */
     private static final double START = 0.1;
 
-    private final LadderMode mode;
     private final WindowMotion motion;
     private final boolean pure;
+    private final boolean varies;
     private final WindowReadings readings;
 
     private OnWindow(LadderMode mode, Amplitudes start, WindowMotion motion, boolean pure) {
-        this.mode = mode;
+        varies = mode.moves();
         this.motion = motion;
         this.pure = pure;
         readings = new WindowReadings(mode, start, motion);
     }
 
     static OnWindow of(Evolution evolution, LadderMode mode, double[] times) {
-        if (mode.hamiltonian().dependsOnTime()) {
-            throw new IllegalArgumentException(
-                    "the Hamiltonian of this mode varies with time in its frame, and only constant ones are followed so far; "
-                            + "choose a frame in which it stands still");
-        }
         double tolerance = evolution.tolerance();
         Amplitudes start = evolution.state().amplitudes(Math.max(1e-13, START * tolerance / 2));
         OperatorFormula h = mode.hamiltonian();
         boolean pure = mode.jumps().isEmpty();
         double memory = Memory.allowed();
         WindowMotion motion = pure
-                ? WindowMotion.pure(h.constant(), start, times, tolerance, memory)
-                : WindowMotion.mixed(
-                        h.constant(), mode.jumps(), Mixture.pure(start).density(memory), times, tolerance, memory);
+                ? WindowMotion.pure(h, start, times, tolerance, memory)
+                : WindowMotion.mixed(h, mode.jumps(), Mixture.pure(start).density(memory), times, tolerance, memory);
         return new OnWindow(mode, start, motion, pure);
     }
 
@@ -69,16 +63,14 @@ final class OnWindow implements Representation {
 
     @Override
     public String method() {
-        return pure
-                ? "Chebyshev series of the vector in a window of number states"
-                : "Chebyshev series of the density operator in a window of number states";
+        return (varies ? "Taylor" : "Chebyshev") + " series of the " + (pure ? "vector" : "density operator")
+                + " in a window of number states";
     }
 
     @Override
     public String reason() {
-        return pure
-                ? "nothing jumps and the Hamiltonian does not vary"
-                : "the mode jumps and neither Hamiltonian nor rates vary";
+        return (pure ? "nothing jumps" : "the mode jumps") + " and the Hamiltonian "
+                + (varies ? "varies with time" : "does not vary");
     }
 
     @Override

@@ -28,12 +28,23 @@ final class BandSpectrum {
      * time.
      */
     static double[][] lowest(double[][] first, int firstWanted, double[][] second, int secondWanted) {
-        Sweeps a = new Sweeps(tridiagonal(first, first[0].length), firstWanted);
-        Sweeps b = new Sweeps(tridiagonal(second, second[0].length), secondWanted);
+        double[][][] both = tridiagonal(first, second);
+        Sweeps a = new Sweeps(both[0], firstWanted);
+        Sweeps b = new Sweeps(both[1], secondWanted);
         while (a.ready() & b.ready()) {
             Sweeps.both(a, b);
         }
         return new double[][] {a.finished(), b.finished()};
+    }
+
+    private static double[][][] tridiagonal(double[][] first, double[][] second) {
+        if (first.length != 3 || second.length != 3 || Math.min(first[0].length, second[0].length) < 3) {
+            return new double[][][] {tridiagonal(first, first[0].length), tridiagonal(second, second[0].length)};
+        }
+        double[][] a = {first[0].clone(), first[1].clone(), first[2].clone()};
+        double[][] b = {second[0].clone(), second[1].clone(), second[2].clone()};
+        BandChase.both(new BandChase(a[0], a[1], a[2]), new BandChase(b[0], b[1], b[2]));
+        return new double[][][] {a, b};
     }
 
     /** {diagonal, off-diagonal} of a tridiagonal matrix with the same eigenvalues. */
@@ -47,63 +58,11 @@ final class BandSpectrum {
         if (width == 2) {
             double[] second = new double[size];
             System.arraycopy(rows[2], 0, second, 0, size - 2);
-            chaseTwo(diagonal, next, second);
+            new BandChase(diagonal, next, second).run();
         } else if (width > 2) {
             chase(rows, size, width, diagonal, next);
         }
         return new double[][] {diagonal, next};
-    }
-
-    /** Width two, the commonest: next[j] = A(j+1, j), second[j] = A(j+2, j). */
-    private static void chaseTwo(double[] d, double[] next, double[] second) {
-        int n = d.length;
-        for (int k = 0; k < n - 2; k++) {
-            double gone = second[k];
-            if (gone == 0) {
-                continue;
-            }
-            int i = k + 1;
-            double pivot = next[k];
-            double inverse = 1 / Math.sqrt(pivot * pivot + gone * gone);
-            double c = pivot * inverse;
-            double s = gone * inverse;
-            next[k] = c * pivot + s * gone;
-            second[k] = 0;
-            while (true) {
-                int j = i + 1;
-                double di = d[i];
-                double dj = d[j];
-                double e = next[i];
-                double shift = s * (s * (dj - di) + 2 * c * e);
-                d[i] = di + shift;
-                d[j] = dj - shift;
-                next[i] = (c - s) * (c + s) * e + c * s * (dj - di);
-                if (j + 1 < n) {
-                    double a = second[i];
-                    double b = next[j];
-                    second[i] = c * a + s * b;
-                    next[j] = c * b - s * a;
-                }
-                if (j + 2 >= n) {
-                    break;
-                }
-                double bulge = s * second[j];
-                second[j] *= c;
-                if (bulge == 0) {
-                    break;
-                }
-                double a = second[i];
-                inverse = 1 / Math.sqrt(a * a + bulge * bulge);
-                c = a * inverse;
-                s = bulge * inverse;
-                second[i] = c * a + s * bulge;
-                double b1 = next[j];
-                double b2 = second[j];
-                next[j] = c * b1 + s * b2;
-                second[j] = c * b2 - s * b1;
-                i = j + 1;
-            }
-        }
     }
 
     /** Any width: column by column, outermost element first, each bulge chased off the end. */

@@ -213,6 +213,10 @@ final class BandVectors {
     }
 
     private void forward(double[] x) {
+        if (width == 2) {
+            forwardTwo(x);
+            return;
+        }
         for (int k = 0; k < size; k++) {
             int other = exchanged[k];
             double value = x[other];
@@ -222,6 +226,25 @@ final class BandVectors {
             for (int i = k + 1; i < end; i++) {
                 x[i] -= lower[k * width + i - k - 1] * value;
             }
+        }
+    }
+
+    private void forwardTwo(double[] x) {
+        int last = size - 2;
+        for (int k = 0; k < last; k++) {
+            int other = exchanged[k];
+            double value = x[other];
+            x[other] = x[k];
+            x[k] = value;
+            x[k + 1] -= lower[2 * k] * value;
+            x[k + 2] -= lower[2 * k + 1] * value;
+        }
+        if (last >= 0) {
+            int other = exchanged[last];
+            double value = x[other];
+            x[other] = x[last];
+            x[last] = value;
+            x[last + 1] -= lower[2 * last] * value;
         }
     }
 
@@ -258,20 +281,43 @@ final class BandVectors {
 
     /** Makes the norm 1 and gives what it was. */
     private static double normalize(double[] x) {
-        double largest = 0;
-        for (double value : x) {
-            largest = Math.max(largest, Math.abs(value));
+        double sum = squares(x);
+        double before = 1;
+        if (!(sum > 0x1p-900 && sum < 0x1p900)) {
+            before = 0;
+            for (double value : x) {
+                before = Math.max(before, Math.abs(value));
+            }
+            double scale = 1 / before;
+            for (int i = 0; i < x.length; i++) {
+                x[i] *= scale;
+            }
+            sum = squares(x);
         }
-        double sum = 0;
-        double scale = 1 / largest;
-        for (int i = 0; i < x.length; i++) {
-            x[i] *= scale;
-            sum += x[i] * x[i];
-        }
-        double inverse = 1 / Math.sqrt(sum);
+        double norm = Math.sqrt(sum);
+        double inverse = 1 / norm;
         for (int i = 0; i < x.length; i++) {
             x[i] *= inverse;
         }
-        return largest * Math.sqrt(sum);
+        return before * norm;
+    }
+
+    /** Four sums side by side: none waits for the addition before it. */
+    private static double squares(double[] x) {
+        double a = 0;
+        double b = 0;
+        double c = 0;
+        double d = 0;
+        int i = 0;
+        for (; i + 3 < x.length; i += 4) {
+            a += x[i] * x[i];
+            b += x[i + 1] * x[i + 1];
+            c += x[i + 2] * x[i + 2];
+            d += x[i + 3] * x[i + 3];
+        }
+        for (; i < x.length; i++) {
+            a += x[i] * x[i];
+        }
+        return (a + b) + (c + d);
     }
 }

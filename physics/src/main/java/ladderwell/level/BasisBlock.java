@@ -220,8 +220,7 @@ final class BasisBlock {
                     solver = new BandVectors(rows[part], rows[part][0].length);
                 }
                 double[] v = spread(solver.at(value(n)), part);
-                // beyond all its zeros
-                if (ladder.sum(v, scaled(polynomial.turning(value(n), 1))) < 0) {
+                if (negative(v, n, ladder)) {
                     for (int j = 0; j < v.length; j++) {
                         v[j] = -v[j];
                     }
@@ -233,18 +232,54 @@ final class BasisBlock {
         return vectors;
     }
 
+    /** Whether a vector is negative beyond all its zeros. */
+    private boolean negative(double[] v, int n, Ladder ladder) {
+        if (!polynomial.monotone()) {
+            return ladder.sum(v, scaled(polynomial.turning(value(n), 1))) < 0;
+        }
+        // In a single even well half the zeros lie on the right of 0: the sign there, or that of the slope, tells.
+        double sum = ladder.middle(v, n & 1);
+        return (n / 2 & 1) == 0 ? sum < 0 : sum > 0;
+    }
+
     /** Sums of oscillator functions at one point, good enough for a sign. */
     private static final class Ladder {
         private final double[] up;
         private final double[] down;
+        /** h_k(0) over h_0(0) for even k, h_k′(0) over √2 h_0(0) for odd k. */
+        private final double[] middle;
 
         Ladder(int size) {
+            middle = new double[size + 2];
+            middle[0] = 1;
+            middle[1] = 1;
             up = new double[size];
             down = new double[size];
             for (int k = 0; k < size; k++) {
                 up[k] = Math.sqrt(2.0 / (k + 1));
                 down[k] = Math.sqrt(k / (k + 1.0));
             }
+            for (int k = 0; k < size; k += 2) {
+                middle[k + 2] = -Math.sqrt((k + 1.0) / (k + 2)) * middle[k];
+            }
+            for (int k = 1; k < size; k += 2) {
+                middle[k] = middle[k - 1] * Math.sqrt(k);
+            }
+        }
+
+        /** Σ v_k h_k, or h_k′, at 0, over one factor. */
+        double middle(double[] v, int parity) {
+            double a = 0;
+            double b = 0;
+            int k = parity;
+            for (; k + 2 < v.length; k += 4) {
+                a += v[k] * middle[k];
+                b += v[k + 2] * middle[k + 2];
+            }
+            if (k < v.length) {
+                a += v[k] * middle[k];
+            }
+            return a + b;
         }
 
         /** Σ v_k h_k(y) e^{y²/2}, h_k the oscillator functions: the factor does not change the sign. */

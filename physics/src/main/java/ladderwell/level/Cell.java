@@ -51,8 +51,9 @@ final class Cell {
      *
      * @param cell the cell, null where refused
      * @param shorter by what factor to shorten then
+     * @param misfit whether the polynomial did not follow the potential
      */
-    record Attempt(@Nullable Cell cell, double shorter) {}
+    record Attempt(@Nullable Cell cell, double shorter, boolean misfit) {}
 
     private Cell(
             double a,
@@ -128,7 +129,7 @@ final class Cell {
         double rounding = 2e-16 * Math.max(Math.abs(a), Math.abs(b)) * (most - least) / (2 * r);
         double eps = tolerance * size + Math.min(rounding, 1e-11 * size);
         if (!(Math.abs(t[d]) + Math.abs(t[d - 1]) <= eps)) {
-            return new Attempt(null, 0.75);
+            return new Attempt(null, 0.75, true);
         }
         int n = d;
         while (n > 0 && Math.abs(t[n]) <= 0.4 * eps) {
@@ -150,7 +151,8 @@ final class Cell {
         double fast = Math.sqrt(Math.max(0, r * r * (eLow - mean - theta)));
         theta *= r * r;
         if (!(theta <= Math.max(thetaMost, fast))) {
-            return new Attempt(null, Math.max(0.2, Math.min(0.9, 0.97 * Math.cbrt(Math.max(thetaMost, fast) / theta))));
+            double shorter = 0.97 * Math.cbrt(Math.max(thetaMost, fast) / theta);
+            return new Attempt(null, Math.max(0.2, Math.min(0.9, shorter)), false);
         }
         double[] q = Chebyshev.powers(t, n);
         for (double s : CHECKS) {
@@ -158,7 +160,7 @@ final class Cell {
             fit = Math.max(fit, Math.abs(mean + Chebyshev.value(q, s) - v.applyAsDouble(x)));
         }
         if (!(fit <= 4 * eps)) {
-            return new Attempt(null, 0.75);
+            return new Attempt(null, 0.75, true);
         }
         for (int j = 0; j <= n; j++) {
             q[j] *= r * r;
@@ -181,14 +183,14 @@ final class Cell {
             odd *= 2 * m + 3;
             power *= base;
             if (m + 2 >= TERMS) {
-                return new Attempt(null, 0.75);
+                return new Attempt(null, 0.75, false);
             }
             if (m > 1 && Math.max(bound(ofU[m + 1]), bound(ofV[m + 1])) < 2e-17 * Math.max(odd, power)) {
                 break;
             }
             m++;
         }
-        return new Attempt(new Cell(a, b, mean, theta, fit, size, ofU, ofV, m + 1), 1);
+        return new Attempt(new Cell(a, b, mean, theta, fit, size, ofU, ofV, m + 1), 1, false);
     }
 
     private static double[] next(double[] p, double[] q, int m) {
@@ -246,8 +248,8 @@ final class Cell {
         if (!slopes) {
             for (int i = 0; i <= terms; i++, at++) {
                 double here = g[i];
-                u += all[at] * here;
-                du += all[at + w] * here;
+                u = Math.fma(all[at], here, u);
+                du = Math.fma(all[at + w], here, du);
                 v += all[at + 2 * w] * here;
                 dv += all[at + 3 * w] * here;
             }
@@ -264,14 +266,14 @@ final class Cell {
                 double b = all[at + w];
                 double c = all[at + 2 * w];
                 double d = all[at + 3 * w];
-                u += a * here;
-                uz += a * next;
-                du += b * here;
-                duz += b * next;
-                v += c * here;
-                vz += c * next;
-                dv += d * here;
-                dvz += d * next;
+                u = Math.fma(a, here, u);
+                uz = Math.fma(a, next, uz);
+                du = Math.fma(b, here, du);
+                duz = Math.fma(b, next, duz);
+                v = Math.fma(c, here, v);
+                vz = Math.fma(c, next, vz);
+                dv = Math.fma(d, here, dv);
+                dvz = Math.fma(d, next, dvz);
                 here = next;
             }
             out[4] = 0.5 * uz;
@@ -301,6 +303,26 @@ final class Cell {
         }
         out[0] = exponent == 0 ? y : Math.scalb(y, exponent);
         out[1] = exponent == 0 ? d : Math.scalb(d, exponent);
+    }
+
+    /** C_m(s) s^(2m+1) of both solutions, for any number of {@link #value}s at s. */
+    void shapes(double s, double[] u, double[] v) {
+        double odd = s;
+        for (int m = 0; m < terms; m++) {
+            u[m] = odd * Chebyshev.value(ofU[m], s);
+            v[m] = odd * Chebyshev.value(ofV[m], s);
+            odd *= s * s;
+        }
+    }
+
+    /** y at s for the solution with value yc and slope dc at the centre, from the {@link #shapes} there. */
+    double value(double s, double z, double yc, double dc, double[] u, double[] v, double[] g) {
+        int exponent = EtaSeries.fill(z * s * s, terms, g);
+        double y = yc * g[0];
+        for (int m = 0; m < terms; m++) {
+            y += (yc * u[m] + dc * v[m]) * g[1 + m];
+        }
+        return exponent == 0 ? y : Math.scalb(y, exponent);
     }
 
     /** v at s by the polynomial. */

@@ -13,6 +13,9 @@ final class CurveSurvey {
     };
     private static final int PIECES = 256;
     private static final int MOST_WELLS = 256;
+    /** For a second look. */
+    private static final int FINER = 32;
+
     /** 32 places in each decade, from 1e-4 to 1e6. */
     private static final int DECADES = 321;
 
@@ -72,7 +75,11 @@ final class CurveSurvey {
                     + ": it has no lowest level");
         }
         singular = singularLeft();
-        double[] found = lowest();
+        double[] found = lowest(1);
+        if (!(found[1] < threshold)) {
+            // Before saying that there is no well: one may hide between the places looked at.
+            found = lowest(FINER);
+        }
         bottom = found[1];
         bottomAt = found[0];
         length = naturalLength(found[0], found[1]);
@@ -135,9 +142,10 @@ final class CurveSurvey {
         return !(near <= 100 * farther) && !(near <= 1e4);
     }
 
-    private double[] lowest() {
+    /** @param finer how many times as many places to look at as usual */
+    private double[] lowest(int finer) {
         double from = even ? 0 : left;
-        double[] points = points(from);
+        double[] points = points(from, finer);
         double least = Double.POSITIVE_INFINITY;
         double at = Double.NaN;
         int wells = 0;
@@ -212,17 +220,19 @@ final class CurveSurvey {
     }
 
     /** Where to look: every few per cent of the distance from the origin, or evenly between two walls; beside breaks and between them. */
-    private double[] points(double from) {
-        double[] points = new double[4 * PIECES + 2 * DECADES + 1 + 3 * breaks.length];
+    private double[] points(double from, int finer) {
+        int pieces = 4 * finer * PIECES;
+        double[] points = new double[pieces + 2 * finer * DECADES + 1 + 3 * breaks.length];
         int many = 0;
         if (!Double.isInfinite(from) && !Double.isInfinite(right)) {
-            for (int i = 1; i < 4 * PIECES; i++) {
-                points[many++] = from + (right - from) * i / (4 * PIECES);
+            for (int i = 1; i < pieces; i++) {
+                points[many++] = from + (right - from) * i / pieces;
             }
         } else {
             double origin = !Double.isInfinite(from) ? from : !Double.isInfinite(right) ? right : 0;
             double d = 1e-4;
-            for (int j = 0; j < DECADES; j++, d *= TENTH_OF_TENTH) {
+            double next = finer == 1 ? TENTH_OF_TENTH : Math.pow(TENTH_OF_TENTH, 1.0 / finer);
+            for (int j = 0; j < finer * DECADES; j++, d *= next) {
                 points[many++] = origin + d;
                 points[many++] = origin - d;
             }
@@ -267,6 +277,11 @@ final class CurveSurvey {
             }
         }
         return best;
+    }
+
+    /** The least places met, one in each well. */
+    double[] wells() {
+        return wellsAt;
     }
 
     /** Whether some well beyond x, that way, lies below e. */
@@ -330,7 +345,8 @@ final class CurveSurvey {
         return sum * (even ? 2 : 1) / Math.PI;
     }
 
-    private double turning(double e, int direction) {
+    /** The outermost place on one side where v reaches e, to 1e-4 of its distance; infinite where there is none. */
+    double turning(double e, int direction) {
         double d = Math.max(length, direction * (bottomAt - start));
         int above = 0;
         double last = d;

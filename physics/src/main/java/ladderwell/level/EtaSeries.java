@@ -69,13 +69,18 @@ final class EtaSeries {
         double before = 1;
         for (int q = (int) (6 + 1.76 * root); q > 0; q--) {
             double t = half * ONE_OVER[q];
-            sum = 1 + t * ONE_OVER[2 * (n + q) + 1] * sum;
-            before = 1 + t * ONE_OVER[2 * (n + q) - 1] * before;
+            sum = Math.fma(t * ONE_OVER[2 * (n + q) + 1], sum, 1);
+            before = Math.fma(t * ONE_OVER[2 * (n + q) - 1], before, 1);
         }
         g[n + 1] = sum / ODD[n];
         g[n] = before / ODD[n - 1];
+        double next = g[n + 1];
+        double here = g[n];
         for (int m = n - 1; m > 0; m--) {
-            g[m] = (2 * m + 1) * g[m + 1] + z * g[m + 2];
+            double lower = Math.fma(2 * m + 1, here, z * next);
+            g[m] = lower;
+            next = here;
+            here = lower;
         }
         g[0] = g[1] + z * g[2];
         return 0;

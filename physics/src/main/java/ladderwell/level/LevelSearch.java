@@ -22,8 +22,9 @@ final class LevelSearch {
      *
      * @param e energy
      * @param rounding what rounding leaves open, estimated
+     * @param fit error by the fit of the cells; NaN where the wave function has to tell
      */
-    record Found(double e, double rounding) {}
+    record Found(double e, double rounding, double fit) {}
 
     LevelSearch(CurveSurvey survey, double eLow, double eHigh) {
         this.survey = survey;
@@ -82,6 +83,8 @@ final class LevelSearch {
         double s = 0;
         double before = Double.NaN;
         int first = shot.count;
+        double width = Double.POSITIVE_INFINITY;
+        int since = 0;
         while (shot.count - first < MOST_SHOTS) {
             Interruption.check();
             e = below(e, a);
@@ -156,6 +159,14 @@ final class LevelSearch {
             } else if (Math.abs(f) > 1.5 && !Double.isInfinite(b)) {
                 best = Math.max(a + 0.1 * (b - a), Math.min(b - 0.1 * (b - a), best));
             }
+            // Newton's iteration can go to and fro about a step of the angle, each time hardly nearer.
+            if (b - a <= 0.5 * width) {
+                width = b - a;
+                since = 0;
+            } else if (++since > 4 && Math.abs(f) > 1e-3 && !Double.isInfinite(b)) {
+                best = a + 0.5 * (b - a);
+                since = 0;
+            }
             e = best;
         }
         double open = b - a;
@@ -172,7 +183,7 @@ final class LevelSearch {
      */
     private Found found(double e, double delta, double slope) {
         double rounding = 4e-16 * (4 + 2 * (shot.to - shot.from)) / slope + 5e-15 * Math.abs(e);
-        return new Found(e, Math.min(delta, rounding) + rounding);
+        return new Found(e, Math.min(delta, rounding) + rounding, Double.NaN);
     }
 
     /** Number of levels below e. */

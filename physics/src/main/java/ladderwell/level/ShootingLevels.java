@@ -11,36 +11,52 @@ import org.jspecify.annotations.Nullable;
 
 /**
  * Levels of any potential by shooting: single levels are found when asked for and kept. Levels 128, 256, … begin new meshes whose cells are
- * as long as the higher energies allow. Energies inside are e = 2E.
+ * as long as the higher energies allow; their energies come from phase functions where the well has them, and from a mesh otherwise. Energies
+ * inside are e = 2E.
  */
 final class ShootingLevels implements Levels {
     private static final long LAST = 50_000_000;
     private static final int FIRST_BAND = 7;
     private static final int SCANNED = 512;
     private static final int REMEMBERED = 20_000;
+    /** So many levels of a band asked for one by one are worth a table of it. */
+    private static final int SINGLE = 12;
+    /** Factors of 2 in a table. */
+    private static final int WIDE = 3;
+
 
     private final CurveSurvey survey;
     private final Map<Integer, LevelSearch> bands = new HashMap<>();
+    private final HighLevels high;
+    private final Map<Integer, Band> highBands = new HashMap<>();
     private final Map<Long, Solved> known = new HashMap<>();
     private long count = -1;
 
     /** A level; the wave and with it the error are added when asked for. */
     private static final class Solved {
-        final LevelSearch search;
         final LevelSearch.Found found;
 
         @Nullable Wave wave;
 
         double error;
 
-        Solved(LevelSearch search, LevelSearch.Found found) {
-            this.search = search;
+        Solved(LevelSearch.Found found) {
             this.found = found;
+            error = found.rounding() + found.fit();
         }
+    }
+
+    /** What is known by phase functions of levels 128 … 1023, 1024 … 8191 and so on. */
+    private static final class Band {
+        HighLevels.@Nullable Table table;
+
+        int asked;
+        boolean refused;
     }
 
     ShootingLevels(PotentialCurve curve) {
         survey = new CurveSurvey(curve);
+        high = new HighLevels(survey);
     }
 
     @Override
@@ -81,19 +97,8 @@ final class ShootingLevels implements Levels {
             throw new IllegalArgumentException(
                     "levels of a general potential are computed up to n = " + LAST + ", got " + n);
         }
-        LevelSearch search = search(n);
-        double guess = extrapolated(n);
-        Solved twin = known.get(n - 2);
-        double spacing = survey.even && twin != null ? guess - twin.found.e() : Double.NaN;
-        LevelSearch.Found found = Double.isNaN(guess)
-                ? search.solve(n, survey.energyOf(n + 0.5), Double.NaN)
-                : search.solve(n, guess, spacing);
-        if (found.e() < search.mesh.eLow()) {
-            // The band began too high for an unusual potential: the mesh for all energies serves.
-            found = search(0).solve(n, found.e(), Double.NaN);
-            search = search(0);
-        }
-        level = new Solved(search, found);
+        LevelSearch.Found found = byPhase(n);
+        level = new Solved(found == null ? shot(n) : found);
         if (known.size() >= REMEMBERED) {
             known.clear();
         }
@@ -101,17 +106,83 @@ final class ShootingLevels implements Levels {
         return level;
     }
 
-    /** From four neighbours below; NaN where they are not all known. */
-    private double extrapolated(long n) {
-        double[] e = new double[4];
-        for (int i = 0; i < 4; i++) {
-            Solved neighbour = known.get(n - 1 - i);
-            if (neighbour == null) {
-                return Double.NaN;
-            }
-            e[i] = neighbour.found.e();
+    private LevelSearch.Found shot(long n) {
+        LevelSearch search = search(n);
+        double guess = extrapolated(n);
+        Solved twin = known.get(n - 2);
+        double spacing = survey.even && twin != null ? guess - twin.found.e() : Double.NaN;
+        LevelSearch.Found found = Double.isNaN(guess)
+                ? search.solve(n, survey.energyOf(n + 0.5), Double.NaN)
+                : search.solve(n, guess, spacing);
+        // Where the band began too high for an unusual potential, the mesh for all energies serves.
+        return found.e() < search.mesh.eLow() ? search(0).solve(n, found.e(), Double.NaN) : found;
+    }
+
+    /** The search whose mesh serves a level found. */
+    private LevelSearch searchOf(long n, double e) {
+        LevelSearch search = search(n);
+        return e < search.mesh.eLow() ? search(0) : search;
+    }
+
+    /** Which table may hold level n; -1 for none. */
+    private static int tableOf(long n) {
+        return Math.floorDiv(63 - Long.numberOfLeadingZeros(Math.max(1, n)) - FIRST_BAND, WIDE);
+    }
+
+    private static long firstOf(long n) {
+        return 1L << FIRST_BAND + tableOf(n) * WIDE;
+    }
+
+    private Band highBand(long n) {
+        return highBands.computeIfAbsent(tableOf(n), k -> new Band());
+    }
+
+    private LevelSearch.@Nullable Found byPhase(long n) {
+        if (band(n) < FIRST_BAND) {
+            return null;
         }
-        double guess = 4 * e[0] - 6 * e[1] + 4 * e[2] - e[3];
+        Band band = highBand(n);
+        HighLevels.Table table = band.asked >= SINGLE ? table(band, n) : band.table;
+        if (table != null && table.holds(n, n)) {
+            return table.level(n);
+        }
+        LevelSearch.Found found = band.refused ? null : high.one(n);
+        band.refused |= found == null;
+        band.asked++;
+        return found;
+    }
+
+    /** The table of the band of level n, made when first asked for; null where it cannot be made. */
+    private HighLevels.@Nullable Table table(Band band, long n) {
+        if (band.table == null && !band.refused) {
+            long first = firstOf(n);
+            long last = (first << WIDE) - 1;
+            if (survey.threshold < Double.POSITIVE_INFINITY) {
+                last = Math.min(last, count() - 2);
+            }
+            band.table = n <= last ? high.table(first, last) : null;
+            band.refused = band.table == null;
+        }
+        return band.table;
+    }
+
+    /** From six neighbours below, or four; NaN where they are not all known. */
+    private double extrapolated(long n) {
+        double[] e = new double[6];
+        int many = 0;
+        while (many < e.length) {
+            Solved neighbour = known.get(n - 1 - many);
+            if (neighbour == null) {
+                break;
+            }
+            e[many++] = neighbour.found.e();
+        }
+        if (many < 4) {
+            return Double.NaN;
+        }
+        double guess = many < 6
+                ? 4 * e[0] - 6 * e[1] + 4 * e[2] - e[3]
+                : 6 * e[0] - 15 * e[1] + 20 * e[2] - 15 * e[3] + 6 * e[4] - e[5];
         return guess > e[0] ? guess : Double.NaN;
     }
 
@@ -120,9 +191,10 @@ final class ShootingLevels implements Levels {
         Wave wave = level.wave;
         if (wave == null) {
             Interruption.check();
-            wave = level.search.wave(n, level.found);
+            LevelSearch search = searchOf(n, level.found.e());
+            wave = search.wave(n, level.found);
             level.wave = wave;
-            level.error = level.found.rounding() + wave.fitError() + level.search.tailError(wave);
+            level.error = level.found.rounding() + wave.fitError() + search.tailError(wave);
             if (Double.isNaN(level.error)) {
                 level.wave = null;
                 throw new PhysicsException.NotConverged(
@@ -133,8 +205,11 @@ final class ShootingLevels implements Levels {
     }
 
     private double error(long n) {
-        wave(n);
-        return solved(n).error;
+        Solved level = solved(n);
+        if (Double.isNaN(level.error)) {
+            wave(n);
+        }
+        return level.error;
     }
 
     @Override
@@ -193,8 +268,24 @@ final class ShootingLevels implements Levels {
     public synchronized double[] energies(long first, int count) {
         Points.check(first, count, Long.MAX_VALUE, new double[0]);
         double[] energies = new double[count];
-        for (int i = 0; i < count; i++) {
-            energies[i] = energyHigh(first + i);
+        int i = 0;
+        while (i < count) {
+            long n = first + i;
+            long end = Math.min(first + count, tableOf(n) < 0 ? 1L << FIRST_BAND : firstOf(n) << WIDE);
+            HighLevels.Table table = null;
+            if (tableOf(n) >= 0 && n <= LAST && end - n > SINGLE) {
+                table = table(highBand(n), n);
+            }
+            if (table == null || !table.holds(n, n)) {
+                energies[i++] = energyHigh(n);
+                continue;
+            }
+            double[] room = new double[2];
+            while (first + i < end && table.holds(n, first + i)) {
+                energies[i] = table.energy(first + i, room) / 2;
+                i++;
+            }
+            Interruption.check();
         }
         return energies;
     }
@@ -210,6 +301,12 @@ final class ShootingLevels implements Levels {
             return count();
         }
         double about = survey.action(e);
+        if (about > 2 << FIRST_BAND) {
+            long below = high.below(e, about);
+            if (below >= 0) {
+                return below;
+            }
+        }
         return search(about > 200 ? (long) (0.4 * about) : 0).below(e);
     }
 
@@ -311,19 +408,46 @@ final class ShootingLevels implements Levels {
     public double[][] waveFunctions(long first, int count, double[] x) {
         Points.check(first, count, Long.MAX_VALUE, x);
         double[][] table = new double[count][x.length];
+        Wave[] waves = new Wave[count];
+        for (int row = 0; row < count; row++) {
+            waves[row] = wave(first + row);
+        }
         double[] g = EtaSeries.room();
         double[] out = new double[2];
+        double[] u = new double[Cell.TERMS];
+        double[] v = new double[Cell.TERMS];
+        int[] near = new int[count];
         double scale = survey.even ? Math.sqrt(0.5) : 1;
-        for (int row = 0; row < count; row++) {
-            Interruption.check();
-            Wave wave = wave(first + row);
-            boolean odd = ((first + row) & 1) == 1;
-            for (int i = 0; i < x.length; i++) {
-                if (x[i] <= survey.left || x[i] >= survey.right) {
-                    continue;
+        for (int i = 0; i < x.length; i++) {
+            if (x[i] <= survey.left || x[i] >= survey.right) {
+                continue;
+            }
+            if ((i & 63) == 0) {
+                Interruption.check();
+            }
+            double place = survey.even ? Math.abs(x[i]) : x[i];
+            // The polynomials of a cell serve all levels on the same mesh.
+            Cell known = null;
+            for (int row = 0; row < count; row++) {
+                Wave wave = waves[row];
+                double value;
+                if (place >= wave.left() && place < wave.right()) {
+                    int index = wave.cell(place, near[row]);
+                    near[row] = index;
+                    Cell cell = wave.cells()[index];
+                    double s = (place - cell.centre) / cell.r;
+                    if (cell != known) {
+                        cell.shapes(s, u, v);
+                        known = cell;
+                    }
+                    value = cell.value(
+                            s, cell.z(wave.e()), wave.values()[index], wave.slopes()[index], u, v, g);
+                } else {
+                    wave.at(place, g, out);
+                    value = out[0];
                 }
-                wave.at(survey.even ? Math.abs(x[i]) : x[i], g, out);
-                table[row][i] = survey.even && odd && x[i] < 0 ? -scale * out[0] : scale * out[0];
+                boolean odd = ((first + row) & 1) == 1;
+                table[row][i] = survey.even && odd && x[i] < 0 ? -scale * value : scale * value;
             }
         }
         return table;

@@ -15,6 +15,9 @@ final class ShootingMesh {
     static final double TAIL = 20;
 
     private static final double TOLERANCE = 1e-15;
+    /** Where nothing better can be had. */
+    private static final double ROUGH = 1e-13;
+
     private static final double THETA = 4;
     private static final int MOST_CELLS = 200_000;
 
@@ -23,6 +26,9 @@ final class ShootingMesh {
     private final List<Cell> rightward = new ArrayList<>();
     private final List<Cell> leftward = new ArrayList<>();
     private final double start;
+    /** 0 for both. */
+    private final int side;
+
     private final double leftEnd;
     final @Nullable SingularEdge edge;
     private double stepRight;
@@ -39,6 +45,7 @@ final class ShootingMesh {
     ShootingMesh(CurveSurvey survey, double eLow, double eHigh) {
         this.survey = survey;
         this.eLow = eLow;
+        side = 0;
         if (survey.singular) {
             edge = SingularEdge.at(survey, eHigh);
             start = survey.left + edge.width();
@@ -52,8 +59,25 @@ final class ShootingMesh {
         stepLeft = survey.length;
     }
 
+    /** A mesh on one side only, from a place inside the well outwards. */
+    ShootingMesh(CurveSurvey survey, double eLow, double start, int direction, double step) {
+        this.survey = survey;
+        this.eLow = eLow;
+        this.start = start;
+        edge = null;
+        side = direction;
+        leftEnd = survey.left;
+        stepRight = step;
+        stepLeft = step;
+    }
+
     double eLow() {
         return eLow;
+    }
+
+    /** The highest energy covered. */
+    double reached() {
+        return reached;
     }
 
     Cell[] cells() {
@@ -81,8 +105,8 @@ final class ShootingMesh {
         }
         reached = Math.max(e, reached);
         reachedDepth = Math.max(depth, reachedDepth);
-        boolean grown = extend(reached, 1, rightward, survey.right);
-        if (!survey.even && edge == null) {
+        boolean grown = side >= 0 && extend(reached, 1, rightward, survey.right);
+        if (side < 0 || side == 0 && !survey.even && edge == null) {
             grown |= extend(reached, -1, leftward, leftEnd);
         }
         if (grown) {
@@ -128,7 +152,10 @@ final class ShootingMesh {
     private double scale(double x, double size) {
         double usual = survey.length;
         boolean near = edge == null && Math.min(Math.abs(x - start), Math.abs(x - survey.bottomAt)) < 6 * usual;
-        return Math.max(near ? 1 / (usual * usual) : 0, Math.max(0.1 * size, smallest));
+        double least = near ? 1 / (usual * usual) : 0;
+        // High levels feel no error of the potential that is small beside their own height.
+        double high = eLow > survey.bottom ? 0.1 * (eLow - survey.bottom) : 0;
+        return Math.max(Math.max(least, high), Math.max(0.1 * size, smallest));
     }
 
     private static double fall(Cell cell, double e) {
@@ -146,6 +173,7 @@ final class ShootingMesh {
         double h = direction > 0 ? stepRight : stepLeft;
         double wanted = h;
         boolean refused = false;
+        boolean shortened = false;
         while (direction * (end - x) > 0
                 && Math.abs(x) < 1e15
                 && (depth < reachedDepth || !Double.isInfinite(end) || lower(x, direction, e))) {
@@ -175,6 +203,7 @@ final class ShootingMesh {
                     }
                 } else {
                     refused = true;
+                    shortened |= attempt.misfit();
                     continue;
                 }
             }
@@ -194,7 +223,9 @@ final class ShootingMesh {
             double grow = 0.97 * Math.cbrt(THETA / (cell.theta + 1e-3));
             h = cut ? Math.max(h, 2 * cell.r) * 1.2 : 2 * cell.r * Math.max(1.02, Math.min(2, grow));
             h = Math.max(trouble ? wanted : h, 1e-12 * Math.abs(x));
-            wanted = h;
+            // Cells that shrink one after the other approach a jump: the length in use before tells it from a steep place.
+            wanted = shortened && !trouble ? Math.max(h, wanted / 3) : h;
+            shortened = false;
             depth = cell.low > e ? depth + fall(cell, e) : 0;
         }
         if (direction > 0) {
@@ -246,6 +277,30 @@ final class ShootingMesh {
         return best;
     }
 
+    /** The short cell from x to a jump somewhere before x + reach, found by its values; null where there is none. */
+    private @Nullable Cell upToJump(double x, int direction, double reach, double size) {
+        double near = direction > 0 ? Math.nextUp(x) : Math.nextDown(x);
+        double far = x + direction * reach;
+        double before = survey.v(near);
+        double beyond = survey.v(far);
+        if (!(beyond <= Double.MAX_VALUE)) {
+            return null;
+        }
+        while (true) {
+            double middle = 0.5 * (near + far);
+            if (middle == near || middle == far) {
+                break;
+            }
+            double value = survey.v(middle);
+            if (Math.abs(value - before) < Math.abs(value - beyond)) {
+                near = middle;
+            } else {
+                far = middle;
+            }
+        }
+        return attempt(x, direction > 0 ? Math.max(near, far) : Math.min(near, far), size).cell();
+    }
+
     /** A cell from x that looks at the potential beyond a trouble at x itself: its first sliver continues the rest. */
     private Cell past(double x, int direction, double wanted, double size) {
         double least = 1e-13 * survey.length + 1e-15 * Math.abs(x);
@@ -255,6 +310,10 @@ final class ShootingMesh {
             double from = x + direction * sliver;
             double step = Math.abs(survey.v(from) - survey.v(direction > 0 ? Math.nextUp(x) : Math.nextDown(x)));
             if (sliver > least && !(step * sliver <= 1e-15 * (size + step) * survey.length)) {
+                Cell cell = upToJump(x, direction, sliver, size);
+                if (cell != null) {
+                    return cell;
+                }
                 break;
             }
             double value = survey.v(from);
@@ -276,6 +335,16 @@ final class ShootingMesh {
                     return cell;
                 }
                 h *= attempt.shorter();
+            }
+        }
+        // Values that are rough by the rounding of large terms that cancel: the cell's fit says by how much.
+        for (double h = wanted; h > 1e-3 * wanted; h *= 0.6) {
+            double to = x + direction * h;
+            Cell cell = Cell.build(
+                            survey::v, Math.min(x, to), Math.max(x, to), scale(x, size), ROUGH, THETA, eLow)
+                    .cell();
+            if (cell != null) {
+                return cell;
             }
         }
         throw new IllegalArgumentException("the potential cannot be followed at x = " + x

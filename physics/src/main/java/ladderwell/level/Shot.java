@@ -213,6 +213,32 @@ final class Shot {
     private int leftExponent;
     private int rightExponent;
 
+    /**
+     * Comes in from the far end of a mesh that lies on one side of the well, to where that mesh begins. Leaves the solution in {@link #rightY} and
+     * {@link #rightP}.
+     *
+     * @param direction of the mesh as seen from the well
+     * @return zeros on the way
+     */
+    int inwards(double e, int direction) {
+        count++;
+        range(e, ShootingMesh.TAIL, -1);
+        if (direction > 0) {
+            begin(rightEnd(), e, cells[to - 1].mean - e, -1);
+            for (int i = to - 1; i >= 0; i--) {
+                pass(i, -1, e, false, true);
+            }
+        } else {
+            begin(leftEnd(0), e, cells[from].mean - e, 1);
+            for (int i = from; i < cells.length; i++) {
+                pass(i, 1, e, false, true);
+            }
+        }
+        rightY = y;
+        rightP = p;
+        return zeros;
+    }
+
     private static double angle(double sy, double p) {
         double t = Math.atan2(sy, p);
         return t < 0 ? t + Math.PI : t == Math.PI ? 0 : t;
@@ -267,6 +293,21 @@ final class Shot {
             return y0 * y1 < 0 || y1 == 0 && y0 != 0 ? 1 : 0;
         }
         double w = Math.sqrt(square);
+        // The angle advances by w up to theta/w, the zeros are within one of that over pi, and even or odd as the signs say: most often one
+        // number is left.
+        double product = y0 * y1;
+        if (Math.abs(product) >= Double.MIN_NORMAL) {
+            double slack = theta / w;
+            double low = (w - slack) / Math.PI - 1 - 1e-9;
+            double high = (w + slack) / Math.PI + 1 + 1e-9;
+            int least = (int) Math.floor(low) + 1;
+            if ((least & 1) != (product < 0 ? 1 : 0)) {
+                least++;
+            }
+            if (least >= 0 && least + 2 > high) {
+                return least;
+            }
+        }
         double a = Math.atan2(w * y0, d0);
         double b = Math.atan2(w * y1, d1);
         double t = a + w + Math.IEEEremainder(b - a - w, 2 * Math.PI);

@@ -34,6 +34,19 @@ record Wave(
         return cells[x <= left() ? from : x >= right() ? to - 1 : cell(x)].mean;
     }
 
+    /** The cell at x, sought from a place near it. */
+    int cell(double x, int near) {
+        if (near >= from && near < to && cells[near].a <= x) {
+            if (near + 1 >= to || x < cells[near + 1].a) {
+                return near;
+            }
+            if (near + 2 >= to || x < cells[near + 2].a) {
+                return near + 1;
+            }
+        }
+        return cell(x);
+    }
+
     private int cell(double x) {
         int low = from;
         int high = to - 1;

@@ -18,6 +18,7 @@ import ladderwell.numeric.LegendreRule;
 final class ShapeState {
     private static final int NODES = 24;
     private static final int BLOCK = 16;
+    private static final int LOOK_AHEAD = 48;
 
     /** The transition elements of as many levels still fit and are quick. */
     private static final int MOST = 2000;
@@ -37,6 +38,8 @@ final class ShapeState {
     private final Deque<Block> blocks = new ArrayDeque<>();
     private final double allowed;
     private double difference;
+    /** As many levels kept ask for a look ahead. */
+    private long next = LOOK_AHEAD;
 
     /** Overlaps with consecutive levels. */
     private record Block(long first, double[] re, double[] im) {
@@ -78,7 +81,7 @@ final class ShapeState {
                 blocks.addLast(block(first, (int) Math.min(BLOCK, count - first)));
                 high = tail(false);
             }
-            if (kept() > MOST) {
+            if (kept() > MOST || kept() > next && Math.max(low, high) > allowed && tooWide(centre)) {
                 throw new PhysicsException.TooLarge(
                         "a state on more than " + MOST + " levels",
                         4.0 * Double.BYTES * 4 * MOST * MOST,
@@ -87,6 +90,47 @@ final class ShapeState {
             }
         }
         return amplitudes(low, high);
+    }
+
+    /**
+     * Whether the state still weighs too much at two places more than {@value #MOST} levels apart, one on each side of the centre. Looked for by
+     * halving; levels below 0 and above the last are none. Not being found, it is asked again when ten times as many levels are kept.
+     */
+    private boolean tooWide(long centre) {
+        next *= 10;
+        if (count <= MOST) {
+            return false;
+        }
+        long least = Math.max(0, MOST - (count - centre));
+        long most = Math.min(MOST, centre);
+        while (least <= most) {
+            long down = (least + most) / 2;
+            boolean below = weighs(centre - down);
+            boolean above = weighs(centre + MOST - down);
+            if (below && above) {
+                return true;
+            }
+            if (!below && !above) {
+                return false;
+            }
+            if (below) {
+                least = down + BLOCK;
+            } else {
+                most = down - BLOCK;
+            }
+        }
+        return false;
+    }
+
+    /** Whether the levels from this one on hold too much to be left out, beyond what the quadrature errs by. */
+    private boolean weighs(long first) {
+        if (first >= count) {
+            return false;
+        }
+        int size = (int) Math.min(BLOCK, count - first);
+        double[][] overlaps = overlaps(first, size, RADIANS);
+        double weight = new Block(first, overlaps[0], overlaps[1]).weight();
+        return weight > 4 * Math.max(allowed, 4 * size * difference * difference);
     }
 
     private long kept() {

@@ -78,6 +78,10 @@ final class Budget {
         rounding += more;
     }
 
+    double duration() {
+        return duration;
+    }
+
     double timeLeft(double time) {
         return duration - time;
     }

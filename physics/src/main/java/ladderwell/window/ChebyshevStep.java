@@ -136,7 +136,7 @@ final class ChebyshevStep {
     private double apply(Plane y, Plane out) {
         Interruption.check();
         input[0] = y;
-        equation.apply(input, 0, out);
+        equation.apply(input, 0, 0, out);
         applications++;
         return equation.rounding(y);
     }

@@ -93,12 +93,12 @@ final class DensityEquation extends Equation {
     }
 
     @Override
-    void apply(Plane[] c, int order, Plane out) {
+    void apply(Plane[] c, int order, int most, Plane out) {
         for (int m = low; m < levels + reach; m++) {
             int o = at(m, low);
             int length = m - low + 1;
             boolean inside = m >= 0 && m < levels;
-            for (int j = 0; j <= Math.min(order, drift.size() - 1); j++) {
+            for (int j = 0; j <= Math.min(Math.min(order, most), drift.size() - 1); j++) {
                 Plane y = c[order - j];
                 for (Bands.Band band : drift.get(j).all()) {
                     if (band.shift == 0) {
@@ -116,7 +116,7 @@ final class DensityEquation extends Equation {
                 }
             }
             for (List<Bands> g : jumps) {
-                jump(g, c, order, m, out, o, length);
+                jump(g, c, order, most, m, out, o, length);
             }
         }
     }
@@ -133,7 +133,7 @@ final class DensityEquation extends Equation {
         }
     }
 
-    private void jump(List<Bands> g, Plane[] c, int order, int m, Plane out, int o, int length) {
+    private void jump(List<Bands> g, Plane[] c, int order, int most, int m, Plane out, int o, int length) {
         if (g.size() == 1 && g.get(0).all().size() == 1) {
             Bands.Band band = g.get(0).all().get(0);
             int i = m - band.shift;
@@ -146,10 +146,10 @@ final class DensityEquation extends Equation {
             return;
         }
         // (G σ)_k row by row, then times G†
-        for (int k = Math.max(0, order - g.size() + 1); k <= order; k++) {
+        for (int k = Math.max(0, order - Math.min(most, g.size() - 1)); k <= order; k++) {
             int wide = Math.min(length + 2 * reach, stride);
             row.clear(0, wide);
-            for (int j = 0; j <= Math.min(k, g.size() - 1); j++) {
+            for (int j = 0; j <= Math.min(Math.min(k, most - (order - k)), g.size() - 1); j++) {
                 for (Bands.Band band : g.get(j).all()) {
                     left(band, c[k - j], m, row, 0, at(m - band.shift, low - reach), wide);
                 }
@@ -231,6 +231,59 @@ final class DensityEquation extends Equation {
         double twice = 2 * Math.sqrt(reach);
         belowAndAbove[0] = twice * Math.sqrt(below) + Math.sqrt(2.0 * reach * lower);
         belowAndAbove[1] = twice * Math.sqrt(above) + Math.sqrt(2.0 * reach * corner);
+    }
+
+    @Override
+    List<Outside> outside() {
+        double twice = 2 * Math.sqrt(reach);
+        double corner = Math.sqrt(2.0 * reach);
+        int above = reach * levels;
+        int square = reach * (reach + 1) / 2;
+        List<Outside> all = new ArrayList<>();
+        int at = 0;
+        all.add(new Outside(at, at += above, twice, false));
+        all.add(new Outside(at, at += square, corner, false));
+        if (low < 0) {
+            all.add(new Outside(at, at += above, twice, true));
+            all.add(new Outside(at, at += square, corner, true));
+            all.add(new Outside(at, at + reach * reach, corner, false));
+        }
+        return all;
+    }
+
+    @Override
+    void takeOutside(Plane y, double[] re, double[] im) {
+        int at = 0;
+        for (int m = levels; m < levels + reach; m++) {
+            at = take(y, at(m, 0), levels, 1, re, im, at);
+        }
+        for (int m = levels; m < levels + reach; m++) {
+            at = take(y, at(m, levels), m - levels + 1, Math.sqrt(2), re, im, at);
+        }
+        if (low < 0) {
+            for (int m = 0; m < levels; m++) {
+                at = take(y, at(m, low), reach, 1, re, im, at);
+            }
+            for (int m = low; m < 0; m++) {
+                at = take(y, at(m, low), m - low + 1, Math.sqrt(2), re, im, at);
+            }
+            for (int m = levels; m < levels + reach; m++) {
+                at = take(y, at(m, low), reach, Math.sqrt(2), re, im, at);
+            }
+        }
+    }
+
+    private static int take(Plane y, int from, int count, double grown, double[] re, double[] im, int at) {
+        for (int i = 0; i < count; i++) {
+            re[at + i] = grown * y.re[from + i];
+            im[at + i] = grown * y.im[from + i];
+        }
+        return at + count;
+    }
+
+    @Override
+    double roundings() {
+        return terms;
     }
 
     @Override

@@ -50,8 +50,24 @@ abstract sealed class Equation permits VectorEquation, DensityEquation {
     /** Zeros, with room for the window and its margin. */
     abstract Plane plane();
 
-    /** out += factor · Σ_j (L − c)_j c[order − j] inside the window and around it. */
-    abstract void apply(Plane[] c, int order, Plane out);
+    /**
+     * out += factor · Σ_j (L − c)_j c[order − j] inside the window and around it.
+     *
+     * @param most orders j of L above this are left out
+     */
+    abstract void apply(Plane[] c, int order, int most, Plane out);
+
+    /** One stretch of the elements outside the window: its part of the border is {@code weight} times its vector norm. */
+    record Outside(int from, int to, double weight, boolean below) {}
+
+    /** The stretches of {@link #takeOutside}. */
+    abstract List<Outside> outside();
+
+    /** Copies the elements outside the window, those that stand for two grown by √2. */
+    abstract void takeOutside(Plane y, double[] re, double[] im);
+
+    /** Unit of rounding times the roundings of one element, for any order of L. */
+    abstract double roundings();
 
     /** Wipes off what lies outside the window, and mirrors what needs it. */
     abstract void tidy(Plane y);

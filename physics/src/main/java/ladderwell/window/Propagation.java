@@ -3,17 +3,10 @@ package ladderwell.window;
 import java.util.function.IntConsumer;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.PhysicsException;
-import ladderwell.operator.LadderPolynomial;
 import ladderwell.quantity.Digits;
 
-/** Follows one state under a constant equation: window and step by what the bound says. */
-final class Propagation {
-    /** R h of one step: vectors are happy with long steps; the terms of a damped series grow along the damping and lose digits. */
-    private static final double VECTOR_STEP = 100;
-
-    private static final double DENSITY_STEP = 24;
-    private static final double DAMPED_STEP = 1.3;
-
+/** Follows one state: window and step by what the bound says. */
+abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation {
     /** One complex product and sum in a row, on a slow machine. */
     private static final double SECONDS_PER_ELEMENT = 2e-9;
 
@@ -21,44 +14,50 @@ final class Propagation {
 
     private static final int LEAST_LEVELS = 8;
 
-    /** Where rounding would take more than this share of the tolerance, steps are halved: the terms of the series stay smaller. */
-    private static final double ROUNDED = 0.2;
-
-    /** A series that grew is made again with R larger by this. */
-    private static final double WIDEN = 1.4;
-
-    private final Generator generator;
-    private final boolean pure;
+    final boolean pure;
+    final Budget budget;
     private final double allowedBytes;
-    private final Budget budget;
 
-    private Equation equation;
-    private ChebyshevStep stepper;
-    private Plane state;
+    Equation equation;
+    Plane state;
     private Plane reached;
-    private Spectrum spectrum;
-    private double rate;
-    private double widened = 1;
 
-    private double time;
-    private long steps;
-    private long redone;
-    private long applications;
+    double time;
+    long steps;
+    long redone;
+    long applications;
     private int mostLevels;
 
     /** @param start state on its own window, tidy */
-    Propagation(Generator generator, boolean pure, Equation start, Plane state, Budget budget, double allowedBytes) {
-        this.generator = generator;
+    Propagation(boolean pure, Equation start, Plane state, Budget budget, double allowedBytes) {
         this.pure = pure;
         this.allowedBytes = allowedBytes;
         this.budget = budget;
         equation = start;
         this.state = state;
         reached = state;
-        spectrum = new Spectrum(0, 0, 0);
-        stepper = new ChebyshevStep(start, 1);
-        resize(start.first, Math.max(LEAST_LEVELS, start.levels));
     }
+
+    /** The longest step from here. */
+    abstract double longestStep();
+
+    /** Takes a step to the last of some times, counted from here; false if it must be made again with what was changed. */
+    abstract boolean attempt(double[] times);
+
+    /** The state at one of the times of the last attempt. */
+    abstract Plane at(int i);
+
+    /** What the last attempt pushed out on a side. */
+    abstract double leaked(boolean below);
+
+    /** The step was kept. */
+    abstract void kept(double length);
+
+    /** The equation on another window. */
+    abstract Equation on(long first, int levels);
+
+    /** Planes that an attempt needs at once. */
+    abstract int planes();
 
     /** An equation on a window, to hold a state that is put in. */
     static Equation plain(Generator generator, boolean pure, long first, int levels) {
@@ -68,38 +67,27 @@ final class Propagation {
     }
 
     /** Another window, the state moved into it. */
-    private void resize(long first, int levels) {
-        double side = levels + 4.0 * generator.reach();
-        double bytes = 16 * 6 * (pure ? side : side * side);
+    final void resize(long first, int levels) {
+        double side = levels + 4.0 * equation.reach;
+        double bytes = 16.0 * planes() * (pure ? side : side * side);
         if (bytes > allowedBytes) {
             throw new PhysicsException.TooLarge(
-                    "a state that has spread over " + levels + " levels at time " + time,
+                    "a state that has spread over " + levels + " levels at time " + Digits.significant(time, 3),
                     bytes,
                     allowedBytes,
                     "ask for a shorter time, fewer quanta or a looser tolerance");
         }
-        LadderPolynomial drift = generator.drift().get(0);
-        spectrum = Spectrum.of(drift, first, levels);
-        double width = pure ? spectrum.width() / 2 : spectrum.width();
-        rate = widened * Math.max(Math.max(width, -spectrum.damping()), Double.MIN_NORMAL / Equation.U);
-        checkWork(levels);
-        Equation next = pure
-                ? new VectorEquation(generator, first, levels, 2 / rate, turning())
-                : new DensityEquation(generator, first, levels, 2 / rate, damping());
+        Equation next = on(first, Math.max(LEAST_LEVELS, levels));
         Plane moved = next.plane();
         equation.moveTo(state, next, moved);
         equation = next;
         state = moved;
-        stepper = new ChebyshevStep(equation, rate);
         mostLevels = Math.max(mostLevels, levels);
     }
 
-    /** Refuses what would take hours: a spectrum this wide for the time that is left. */
-    private void checkWork(int levels) {
-        double bands = 2.0 * generator.reach() + 1;
-        double elements = pure
-                ? levels * bands
-                : levels * (levels / 2.0) * (2 * bands + generator.jumps().size());
+    /** Refuses what would take hours: frequencies this large for the time that is left. */
+    final void checkWork(int levels, double rate, int bands, int jumps) {
+        double elements = pure ? (double) levels * bands : levels * (levels / 2.0) * (2 * bands + jumps);
         double seconds = 1.5 * rate * budget.timeLeft(time) * elements * SECONDS_PER_ELEMENT;
         if (seconds > LONGEST) {
             throw new PhysicsException.TooLong(
@@ -110,32 +98,13 @@ final class Propagation {
         }
     }
 
-    /** c, real part. */
-    private double damping() {
-        return pure ? 0 : spectrum.damping() / 2;
-    }
-
-    /** c, imaginary part: K = −iE turns by −E. */
-    private double turning() {
-        return pure ? -spectrum.centre() : 0;
-    }
-
-    private double longestStep() {
-        if (pure) {
-            return VECTOR_STEP / rate;
-        }
-        double share = budget.roundingToCome(time) > ROUNDED * budget.tolerance() ? 0.5 : 1;
-        double byWidth = share * DENSITY_STEP / rate;
-        return damping() < 0 ? Math.min(byWidth, share * DAMPED_STEP / -damping()) : byWidth;
-    }
-
     /**
      * Goes on to the last of some times.
      *
      * @param ahead ascending times from {@link #time} on
      * @param seen takes the index of a time that was reached
      */
-    void go(double[] ahead, IntConsumer seen) {
+    final void go(double[] ahead, IntConsumer seen) {
         int next = 0;
         reached = state;
         while (next < ahead.length && ahead[next] <= time) {
@@ -157,18 +126,20 @@ final class Propagation {
             }
             // the length that the rounded times are apart, so that no rounding of times adds up
             times[count - 1] = atLast ? left : time + length - time;
-            if (!step(times)) {
+            if (!attempt(times)) {
                 continue;
             }
             double began = time;
             for (int i = 0; i < count - 1; i++) {
-                reached = stepper.at(i);
+                reached = at(i);
                 time = began + times[i];
                 seen.accept(next + i);
             }
             time = atLast ? ahead[ahead.length - 1] : began + times[count - 1];
-            state.copyFrom(stepper.at(count - 1));
+            state.copyFrom(at(count - 1));
             reached = state;
+            kept(times[count - 1]);
+            steps++;
             next = inside;
             if (atLast) {
                 seen.accept(next++);
@@ -178,20 +149,11 @@ final class Propagation {
         }
     }
 
-    /** True if the step holds its share. */
-    private boolean step(double[] times) {
-        double length = times[times.length - 1];
-        stepper.take(state, times, damping(), turning(), budget.forSeries(length));
-        applications += stepper.applications();
-        if (stepper.grown()) {
-            widened *= WIDEN;
-            redone++;
-            resize(equation.first, equation.levels);
-            return false;
-        }
+    /** Books a step that holds its share of the border; else grows the window and says no. */
+    final boolean book(double length, double series, double rounding) {
         double share = budget.forBorder(length);
-        double below = stepper.edge(true);
-        double above = stepper.edge(false);
+        double below = leaked(true);
+        double above = leaked(false);
         if (below + above > share) {
             redone++;
             long down = below > 0.4 * share ? Math.min(more(below, share), equation.first) : 0;
@@ -199,17 +161,16 @@ final class Propagation {
             resize(equation.first - down, (int) (equation.levels + down + up));
             return false;
         }
-        budget.series(stepper.defect());
+        budget.series(series);
         budget.border(below + above);
-        budget.rounding(stepper.rounding());
+        budget.rounding(rounding);
         if (budget.spent() > budget.tolerance()) {
             throw new PhysicsException.NotConverged(
-                    "the state at time " + time + " (rounding and the start set this floor)",
+                    "the state at time " + Digits.significant(time, 3) + " (rounding and the start set this floor)",
                     steps,
                     budget.spent(),
                     budget.tolerance());
         }
-        steps++;
         return true;
     }
 
@@ -230,14 +191,14 @@ final class Propagation {
         if (levels < LEAST_LEVELS + 4) {
             return;
         }
-        if (stepper.edge(false) < quiet) {
+        if (leaked(false) < quiet) {
             double edge = equation.edge(state, false, count);
             if (edge < budget.forDrop(length)) {
                 budget.dropped(edge);
                 up = count;
             }
         }
-        if (first + count < first + levels - up && stepper.edge(true) < quiet) {
+        if (first + count < first + levels - up && leaked(true) < quiet) {
             double edge = equation.edge(state, true, count);
             if (edge < budget.forDrop(length)) {
                 budget.dropped(edge);
@@ -249,12 +210,8 @@ final class Propagation {
         }
     }
 
-    double time() {
-        return time;
-    }
-
     /** The state at the time just seen. */
-    WindowState seen(Bound error) {
+    final WindowState seen(Bound error) {
         if (pure) {
             double[] re = new double[equation.levels];
             double[] im = new double[equation.levels];
@@ -270,19 +227,19 @@ final class Propagation {
         return new MixedWindow(density.first, levels, re, im, error);
     }
 
-    long steps() {
+    final long steps() {
         return steps;
     }
 
-    long redone() {
+    final long redone() {
         return redone;
     }
 
-    long applications() {
+    final long applications() {
         return applications;
     }
 
-    int mostLevels() {
+    final int mostLevels() {
         return mostLevels;
     }
 }

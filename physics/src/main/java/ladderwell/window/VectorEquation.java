@@ -1,5 +1,7 @@
 package ladderwell.window;
 
+import java.util.List;
+
 /** dψ/ds = factor · (K − c) ψ. */
 final class VectorEquation extends Equation {
     private final double[] weights;
@@ -32,9 +34,9 @@ final class VectorEquation extends Equation {
     }
 
     @Override
-    void apply(Plane[] c, int order, Plane out) {
+    void apply(Plane[] c, int order, int most, Plane out) {
         int length = levels + 2 * reach;
-        for (int j = 0; j <= Math.min(order, drift.size() - 1); j++) {
+        for (int j = 0; j <= Math.min(Math.min(order, most), drift.size() - 1); j++) {
             Plane y = c[order - j];
             for (Bands.Band band : drift.get(j).all()) {
                 // row n of the output takes w_b(n − b) y(n − b)
@@ -97,6 +99,24 @@ final class VectorEquation extends Equation {
     void border(Plane y, double[] belowAndAbove) {
         belowAndAbove[0] = Math.sqrt(Rows.squares(y, margin() - reach, reach));
         belowAndAbove[1] = Math.sqrt(Rows.squares(y, margin() + levels, reach));
+    }
+
+    @Override
+    List<Outside> outside() {
+        return List.of(new Outside(0, reach, 1, true), new Outside(reach, 2 * reach, 1, false));
+    }
+
+    @Override
+    void takeOutside(Plane y, double[] re, double[] im) {
+        System.arraycopy(y.re, margin() - reach, re, 0, reach);
+        System.arraycopy(y.im, margin() - reach, im, 0, reach);
+        System.arraycopy(y.re, margin() + levels, re, reach, reach);
+        System.arraycopy(y.im, margin() + levels, im, reach, reach);
+    }
+
+    @Override
+    double roundings() {
+        return terms;
     }
 
     @Override

@@ -3,7 +3,9 @@ package ladderwell.window;
 import java.util.ArrayList;
 import java.util.List;
 import ladderwell.evidence.Bound;
+import ladderwell.evidence.Certainty;
 import ladderwell.operator.LadderPolynomial;
+import ladderwell.operator.OperatorFormula;
 import ladderwell.state.Amplitudes;
 import ladderwell.state.DensityOperator;
 
@@ -30,7 +32,7 @@ public final class WindowMotion {
     }
 
     /**
-     * A pure state under a Hamiltonian that does not vary, by a Chebyshev series in steps.
+     * A pure state under a Hamiltonian: by a Chebyshev series in steps where it does not vary, else by a Taylor series.
      *
      * @param hamiltonian H/ħ, Hermitian
      * @param start ψ(0); its error counts
@@ -39,11 +41,11 @@ public final class WindowMotion {
      * @param allowedBytes memory allowed
      */
     public static WindowMotion pure(
-            LadderPolynomial hamiltonian, Amplitudes start, double[] times, double tolerance, double allowedBytes) {
-        Generator generator = Generator.constant(hamiltonian, List.of());
+            OperatorFormula hamiltonian, Amplitudes start, double[] times, double tolerance, double allowedBytes) {
         int last = start.segments() - 1;
         long first = start.first(0);
         int levels = (int) (start.first(last) + start.length(last) - first);
+        Generator generator = Generator.constant(hamiltonian.at(0), List.of());
         Equation equation = Propagation.plain(generator, true, first, levels);
         Plane plane = equation.plane();
         for (int s = 0; s <= last; s++) {
@@ -51,11 +53,13 @@ public final class WindowMotion {
             System.arraycopy(start.reals(s), 0, plane.re, at, start.length(s));
             System.arraycopy(start.imaginaries(s), 0, plane.im, at, start.length(s));
         }
-        return run(generator, true, equation, plane, start.normError(), times, tolerance, allowedBytes);
+        double end = checked(times);
+        Budget budget = new Budget(tolerance, start.normError(), end);
+        return run(hamiltonian, List.of(), true, equation, plane, budget, times, allowedBytes);
     }
 
     /**
-     * A density operator under a Hamiltonian and jumps that do not vary, by a Chebyshev series in steps.
+     * A density operator under a Hamiltonian and jumps: by a Chebyshev series in steps where nothing varies, else by a Taylor series.
      *
      * @param hamiltonian H/ħ, Hermitian
      * @param jumps √γ L each
@@ -65,28 +69,23 @@ public final class WindowMotion {
      * @param allowedBytes memory allowed
      */
     public static WindowMotion mixed(
-            LadderPolynomial hamiltonian,
+            OperatorFormula hamiltonian,
             List<LadderPolynomial> jumps,
             DensityOperator start,
             double[] times,
             double tolerance,
             double allowedBytes) {
-        Generator generator = Generator.constant(hamiltonian, jumps);
+        Generator generator = Generator.constant(hamiltonian.at(0), jumps);
         DensityEquation equation = (DensityEquation) Propagation.plain(generator, false, start.first(), start.size());
         Plane plane = equation.plane();
         equation.load(start.lowerRe(), start.lowerIm(), plane);
-        return run(generator, false, equation, plane, start.traceNormError(), times, tolerance, allowedBytes);
+        double end = checked(times);
+        Budget budget = new Budget(tolerance, start.traceNormError(), end);
+        return run(hamiltonian, jumps, false, equation, plane, budget, times, allowedBytes);
     }
 
-    private static WindowMotion run(
-            Generator generator,
-            boolean pure,
-            Equation equation,
-            Plane plane,
-            double initial,
-            double[] times,
-            double tolerance,
-            double allowedBytes) {
+    /** The last time, once all are found in order. */
+    private static double checked(double[] times) {
         double before = 0;
         for (double t : times) {
             if (!(t >= before) || Double.isInfinite(t)) {
@@ -95,10 +94,31 @@ public final class WindowMotion {
             }
             before = t;
         }
-        Budget budget = new Budget(tolerance, initial, Math.max(before, Double.MIN_NORMAL));
-        Propagation propagation = new Propagation(generator, pure, equation, plane, budget, allowedBytes);
+        return Math.max(before, Double.MIN_NORMAL);
+    }
+
+    private static WindowMotion run(
+            OperatorFormula hamiltonian,
+            List<LadderPolynomial> jumps,
+            boolean pure,
+            Equation equation,
+            Plane plane,
+            Budget budget,
+            double[] times,
+            double allowedBytes) {
+        Certainty certainty = Certainty.GUARANTEED;
+        Propagation propagation;
+        if (hamiltonian.dependsOnTime()) {
+            Course course = new FormulaCourse(hamiltonian, jumps, budget.timeLeft(0));
+            certainty = course.certainty();
+            propagation = new VaryingPropagation(course, pure, equation, plane, budget, allowedBytes);
+        } else {
+            Generator generator = Generator.constant(hamiltonian.constant(), jumps);
+            propagation = new SteadyPropagation(generator, pure, equation, plane, budget, allowedBytes);
+        }
+        Certainty kind = certainty;
         List<WindowState> states = new ArrayList<>();
-        propagation.go(times, j -> states.add(propagation.seen(Bound.guaranteed(budget.spent()))));
+        propagation.go(times, j -> states.add(propagation.seen(new Bound(kind, budget.spent()))));
         return new WindowMotion(
                 times.clone(),
                 states,

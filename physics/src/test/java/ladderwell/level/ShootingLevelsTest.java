@@ -389,4 +389,30 @@ class ShootingLevelsTest {
                 Levels.of(open(x -> x < left || x >= right ? 36.62866713326563 : 22.92333193509699, left, right));
         assertEquals(1, levels.count());
     }
+
+    /** A jump met by ever shorter cells, a level about which Newton's iteration went to and fro, a well between the survey's places. */
+    @Test
+    void wellsWithUndeclaredJumpsAreSolvedAsThoseWithDeclaredOnes() {
+        double[][] edges = {
+            {-2.0456512948707646, -0.6392134682682731, 0.031075218373401436},
+            {-2.5280463241878524, -1.2012290076428862, 0.7684045912225206},
+            {-3.90849720836411, -3.690338437838754, -2.9258504795050255, -2.665428941407704}
+        };
+        double[][] heights = {
+            {51.72815644792082, 25.494682016115952, 25.8398787184041, 51.72815644792082},
+            {32.22972305746549, 16.542021678655278, 0.03808667312960821, 32.22972305746549},
+            {16.637855887228206, 1.9985690629034083, 20.469174469744296, 19.59620634929557, 16.637855887228206}
+        };
+        for (int i = 0; i < edges.length; i++) {
+            StepWells wells = new StepWells(edges[i], heights[i]);
+            Levels found = Levels.of(open(wells::value));
+            Levels declared = Levels.of(open(wells::value, edges[i]));
+            assertEquals(declared.count(), found.count());
+            for (long n = 0; n < found.count(); n++) {
+                double sum = found.energyError(n) + declared.energyError(n);
+                assertEquals(declared.energyHigh(n), found.energyHigh(n), sum, "wells " + i + ", level " + n);
+                assertTrue(sum < 1e-11);
+            }
+        }
+    }
 }

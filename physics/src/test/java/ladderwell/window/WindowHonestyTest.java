@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.SplittableRandom;
 import java.util.stream.IntStream;
 import ladderwell.operator.LadderPolynomial;
+import ladderwell.operator.OperatorFormula;
 import ladderwell.state.Amplitudes;
 import ladderwell.state.DensityOperator;
 import ladderwell.state.Mixture;
@@ -91,12 +92,13 @@ class WindowHonestyTest {
         double[] times = {0, 0.37 * time, time};
         WindowState state;
         if (pure) {
-            WindowMotion motion = WindowMotion.pure(polynomial(terms), start, times, tolerance, 1e9);
+            WindowMotion motion =
+                    WindowMotion.pure(OperatorFormula.of(polynomial(terms)), start, times, tolerance, 1e9);
             state = motion.state(2);
         } else {
             DensityOperator density = Mixture.pure(start).density(1e9);
             WindowMotion motion = WindowMotion.mixed(
-                    polynomial(terms),
+                    OperatorFormula.of(polynomial(terms)),
                     jumps.stream().map(WindowHonestyTest::polynomial).toList(),
                     density,
                     times,

@@ -6,8 +6,13 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import java.util.concurrent.CancellationException;
+import java.util.function.DoubleUnaryOperator;
+import ladderwell.evidence.Certainty;
 import ladderwell.evidence.PhysicsException;
+import ladderwell.formula.Formula;
+import ladderwell.formula.Parameters;
 import ladderwell.operator.LadderPolynomial;
+import ladderwell.operator.OperatorFormula;
 import ladderwell.state.Amplitudes;
 import ladderwell.state.HarmonicStates;
 import ladderwell.state.Mixture;
@@ -30,7 +35,8 @@ class WindowMotionTest {
 
     private static WindowState mixed(
             LadderPolynomial h, List<LadderPolynomial> jumps, Mixture start, double time, double tolerance) {
-        return WindowMotion.mixed(h, jumps, start.density(MEMORY), new double[] {time}, tolerance, MEMORY)
+        return WindowMotion.mixed(
+                        OperatorFormula.of(h), jumps, start.density(MEMORY), new double[] {time}, tolerance, MEMORY)
                 .state(0);
     }
 
@@ -39,7 +45,11 @@ class WindowMotionTest {
         // S-KER-01, S-KER-02: H = χ n², α = 2, χt = 0.1; Yurke and Stoler, Phys. Rev. Lett. 57 (1986) 13
         LadderPolynomial h = LadderPolynomial.number().power(2);
         WindowState state = WindowMotion.pure(
-                        h, Amplitudes.coherent(4, 0, TOLERANCE / 10), new double[] {0.1}, TOLERANCE, MEMORY)
+                        OperatorFormula.of(h),
+                        Amplitudes.coherent(4, 0, TOLERANCE / 10),
+                        new double[] {0.1},
+                        TOLERANCE,
+                        MEMORY)
                 .state(0);
         double[] a = state.mean(A);
         // ⟨a⟩ of an error ε in a window of N levels: below 2 ε √N and what was cut off, far below
@@ -131,13 +141,83 @@ class WindowMotionTest {
         assertEquals(1.2278223408365, pairs / (mean * mean), levels * levels * error + 1e-6);
     }
 
+    private static OperatorFormula driven(String envelope) {
+        return OperatorFormula.of(LadderPolynomial.number())
+                .plus(OperatorFormula.of(Formula.natural(envelope, Parameters.none()), drive(1)));
+    }
+
+    /** α(t) of H = n + f(t)(a + a†) with loss κ from vacuum: −i ∫ f(s) e^{−(i + κ/2)(t − s)} ds, by Simpson's rule on a stretch. */
+    private static double[] response(DoubleUnaryOperator f, double kappa, double from, double to, double t) {
+        int n = 40_000;
+        double h = (to - from) / n;
+        double re = 0;
+        double im = 0;
+        for (int i = 0; i <= n; i++) {
+            double s = from + i * h;
+            double weight = (i == 0 || i == n ? 1 : i % 2 == 1 ? 4 : 2) * h / 3 * f.applyAsDouble(s);
+            double decay = weight * Math.exp(-kappa / 2 * (t - s));
+            re += -decay * Math.sin(t - s);
+            im += -decay * Math.cos(t - s);
+        }
+        return new double[] {re, im};
+    }
+
+    @Test
+    void aForceThatVariesLeavesACoherentState() {
+        double[] alpha = response(s -> 0.4 * Math.sin(0.8 * s), 0, 0, 7, 7);
+        WindowState state = WindowMotion.pure(
+                        driven("0.4*sin(0.8*t)"), Amplitudes.level(0), new double[] {3, 7}, TOLERANCE, MEMORY)
+                .state(1);
+        assertPoissonian(state, alpha);
+        assertEquals(Certainty.ESTIMATED, state.error().kind());
+    }
+
+    @Test
+    void aPulseAndAStepAreMetUnderLossToo() {
+        double[] pulse = response(s -> Math.exp(-(s - 3) * (s - 3) / (2 * 0.04)), 0.3, 0, 6, 6);
+        assertPoissonian(lossy("exp(-(t - 3)^2/(2*0.04))", 6), pulse);
+        double[] step = response(s -> 0.5, 0.3, 2.3, 6, 6);
+        assertPoissonian(lossy("0.5*step(t - 2.3)", 6), step);
+    }
+
+    private static WindowState lossy(String envelope, double time) {
+        return WindowMotion.mixed(
+                        driven(envelope),
+                        List.of(A.times(Math.sqrt(0.3))),
+                        Mixture.pure(Amplitudes.level(0)).density(MEMORY),
+                        new double[] {time},
+                        1e-8,
+                        MEMORY)
+                .state(0);
+    }
+
+    private static void assertPoissonian(WindowState state, double[] alpha) {
+        double mean = alpha[0] * alpha[0] + alpha[1] * alpha[1];
+        double error = state.traceNormError().size();
+        double p = Math.exp(-mean);
+        for (int n = 0; n < state.levels(); n++) {
+            assertEquals(p, state.population(n), error, "level " + n);
+            p *= mean / (n + 1);
+        }
+        double[] a = state.mean(A);
+        double allowed = error * Math.sqrt(state.levels());
+        assertEquals(alpha[0], a[0], allowed);
+        assertEquals(alpha[1], a[1], allowed);
+    }
+
     @Test
     void normAndTraceAreKeptAndPurityStaysOneWithoutJumps() {
         LadderPolynomial h = kerr(0.2).plus(drive(1.5));
         double[] times = {0, 0.5, 1, 2};
-        WindowMotion vectors = WindowMotion.pure(h, Amplitudes.coherent(4, 0, 1e-10), times, TOLERANCE, MEMORY);
+        WindowMotion vectors =
+                WindowMotion.pure(OperatorFormula.of(h), Amplitudes.coherent(4, 0, 1e-10), times, TOLERANCE, MEMORY);
         WindowMotion operators = WindowMotion.mixed(
-                h, List.of(), Mixture.pure(Amplitudes.coherent(4, 0, 1e-10)).density(MEMORY), times, TOLERANCE, MEMORY);
+                OperatorFormula.of(h),
+                List.of(),
+                Mixture.pure(Amplitudes.coherent(4, 0, 1e-10)).density(MEMORY),
+                times,
+                TOLERANCE,
+                MEMORY);
         for (int j = 0; j < times.length; j++) {
             WindowState v = vectors.state(j);
             WindowState w = operators.state(j);
@@ -156,7 +236,7 @@ class WindowMotionTest {
     void farFromTheGroundLevelTheWindowFollowsTheState() {
         // 400 quanta that decay: the window moves down with the mean, 400 e^{−κt}
         WindowMotion motion = WindowMotion.mixed(
-                LadderPolynomial.zero(),
+                OperatorFormula.of(LadderPolynomial.zero()),
                 List.of(A),
                 Mixture.pure(Amplitudes.coherent(400, 0, 1e-7)).density(MEMORY),
                 new double[] {0, 0.4},
@@ -174,7 +254,8 @@ class WindowMotionTest {
         LadderPolynomial cubic = LadderPolynomial.position().power(3).times(0.1);
         PhysicsException refused = assertThrows(
                 PhysicsException.class,
-                () -> WindowMotion.pure(cubic, Amplitudes.level(0), new double[] {50}, TOLERANCE, MEMORY));
+                () -> WindowMotion.pure(
+                        OperatorFormula.of(cubic), Amplitudes.level(0), new double[] {50}, TOLERANCE, MEMORY));
         assertTrue(String.valueOf(refused.getMessage()).contains("levels"), refused.getMessage());
     }
 

@@ -38,8 +38,8 @@ record Modes(Sentence sentence) {
             "pair loss",
             "drive",
             "at",
-            "drive phase",
-            "pump",
+            "phase",
+            "parametric",
             "pump frequency",
             "pump phase",
             "frame");
@@ -73,9 +73,9 @@ record Modes(Sentence sentence) {
 
     private void refuseLoose() throws MisreadSentence {
         needs("at", "drive");
-        needs("drive phase", "drive");
-        needs("pump frequency", "pump");
-        needs("pump phase", "pump");
+        needs("phase", "drive");
+        needs("pump frequency", "parametric");
+        needs("pump phase", "parametric");
         excludes("quality", "loss");
         excludes("temperature", "thermal");
         boolean hot = sentence.has("thermal") || sentence.has("temperature");
@@ -96,7 +96,7 @@ record Modes(Sentence sentence) {
     private void needs(String key, String other) throws MisreadSentence {
         if (sentence.has(key) && !sentence.has(other)) {
             throw new MisreadSentence(
-                    "'" + key + "' goes with a " + other + ", and there is none; give '" + other + " 80 kHz'",
+                    "'" + key + "' goes with '" + other + "', and that is not given; give '" + other + " 80 kHz'",
                     sentence.placeOf(key));
         }
     }
@@ -144,10 +144,10 @@ record Modes(Sentence sentence) {
             Parameters f = Parameters.none()
                     .with("f", sentence.natural() ? Amount.number(strength) : new Amount(strength, Dimension.RATE));
             Formula envelope = sentence.natural() ? Formula.natural("f", f) : Formula.lab("f", f, Dimension.RATE);
-            driven = driven.with(new Part.Drive(envelope, driveFrequency(omega), angle("drive phase")));
+            driven = driven.with(new Part.Drive(envelope, driveFrequency(omega), angle("phase")));
         }
-        if (sentence.has("pump")) {
-            driven = driven.with(new Part.Pump(frequency("pump"), pumpFrequency(omega), angle("pump phase")));
+        if (sentence.has("parametric")) {
+            driven = driven.with(new Part.Pump(frequency("parametric"), pumpFrequency(omega), angle("pump phase")));
         }
         return driven;
     }
@@ -198,7 +198,7 @@ record Modes(Sentence sentence) {
         if (sentence.has("drive")) {
             return driveFrequency(omega);
         }
-        if (sentence.has("pump")) {
+        if (sentence.has("parametric")) {
             return pumpFrequency(omega) / 2;
         }
         return mode.jumps().isEmpty() || sentence.kind().equals("duffing") ? 0 : omega;

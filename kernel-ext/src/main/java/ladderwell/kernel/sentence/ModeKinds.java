@@ -27,8 +27,8 @@ final class ModeKinds {
         rate("pair loss", "rate at which pairs are lost", "L = a²"),
         Key.quantity("drive", "strength f of a drive", CYCLE_FREQUENCY, ANGULAR_FREQUENCY)
                 .formula("f cos(ω_d t + φ)(a + a†), seen in the frame at ω_d: (f/2)(a† + a)"),
-        Key.quantity("drive phase", "phase φ of the drive", ANGLE).standard("0 deg"),
-        Key.quantity("pump", "strength G of a two-quantum pump", CYCLE_FREQUENCY, ANGULAR_FREQUENCY)
+        Key.quantity("phase", "phase φ of the drive", ANGLE).standard("0 deg"),
+        Key.quantity("parametric", "strength G of a two-quantum (parametric) pump", CYCLE_FREQUENCY, ANGULAR_FREQUENCY)
                 .formula("G cos(ω_p t + φ)(a + a†)², seen in the frame at ω_p/2: (G/2)(a†² + a²)"),
         Key.quantity("pump frequency", "frequency ω_p of the pump", CYCLE_FREQUENCY, ANGULAR_FREQUENCY)
                 .standard("twice the mode's"),
@@ -75,7 +75,7 @@ final class ModeKinds {
     private static final NounKind HAMILTONIAN = kind(
                     NounKind.of(
                             "hamiltonian",
-                            "mode with a Hamiltonian of its own",
+                            "Hamiltonian of its own",
                             "any polynomial in a, a† (also ad), n, x and p; what varies with t stands as a factor",
                             "H/ħ as a frequency or an energy; x and p are quadratures, [x, p] = i"),
                     new String[] {},
@@ -106,9 +106,9 @@ final class ModeKinds {
             "dephasing",
             "pair loss",
             "drive",
-            "drive phase",
             "at",
-            "pump",
+            "phase",
+            "parametric",
             "pump frequency",
             "pump phase",
             "frame"

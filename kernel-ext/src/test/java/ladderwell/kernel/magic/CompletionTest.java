@@ -75,7 +75,10 @@ class CompletionTest {
                 "junction",
                 "linear with wall",
                 "lennard-jones",
-                "tabulated");
+                "tabulated",
+                "kerr",
+                "duffing",
+                "hamiltonian");
         assertEquals(kinds, offered("%oscillator x: |"));
         assertEquals(kinds, offered("%oscillator x:|"));
         assertEquals("%oscillator x: finite well", completed("%oscillator x: finite w|"));

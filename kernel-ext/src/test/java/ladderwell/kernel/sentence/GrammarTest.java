@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 
 /** The table agrees with itself: what it says of a sentence is what the reader reads. */
@@ -60,7 +61,9 @@ class GrammarTest {
                 StringBuilder head = new StringBuilder(noun.word() + " x: " + kind.word());
                 kind.argument().ifPresent(key -> head.append(' ').append(key.example()));
                 for (Key lead : noun.leads(Optional.of(kind))) {
-                    head.append(' ').append(lead.word()).append(' ').append(home);
+                    if (lead.form() == Form.REFERENCE) {
+                        head.append(' ').append(lead.word()).append(' ').append(home);
+                    }
                 }
                 for (Way way : kind.ways()) {
                     // In natural units the depth is a plain number, and its example has a unit.
@@ -69,11 +72,11 @@ class GrammarTest {
                     for (String word : List.of(way.required(), way.optional()).stream()
                             .flatMap(List::stream)
                             .toList()) {
-                        Key key = kind.keys().stream()
+                        Key key = Stream.concat(kind.keys().stream(), kind.links().stream())
                                 .filter(one -> one.word().equals(word))
                                 .findFirst()
                                 .orElseThrow(() -> new AssertionError(kind.word() + " has no key " + word));
-                        sentence.append(", ")
+                        sentence.append(kind.links().contains(key) ? " " : ", ")
                                 .append(natural && key.form() == Form.QUANTITY ? word + " 39.5" : key.typed());
                     }
                     Sentence read = check(sentence.toString());

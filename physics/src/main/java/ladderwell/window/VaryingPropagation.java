@@ -1,0 +1,133 @@
+package ladderwell.window;
+
+import ladderwell.evidence.PhysicsException;
+import ladderwell.quantity.Digits;
+
+/** Under an equation that varies with time, or in a frame that moves, by a Taylor series in each step. */
+final class VaryingPropagation extends Propagation {
+    /** Of the share for the series, what the course and the orders left out may take. */
+    private static final double COURSE = 0.3;
+
+    private static final double SHORTEN = 0.9;
+    /** Shortest step, as a share of the run. */
+    private static final double SHORTEST = 1e-10;
+
+    private final Course course;
+    private TaylorStep stepper;
+    private final double[] sides = new double[2];
+    private boolean ready;
+    private double planned;
+    private double longest;
+    private double uncut;
+
+    VaryingPropagation(Course course, boolean pure, Equation start, Plane state, Budget budget, double allowedBytes) {
+        super(pure, start, state, budget, allowedBytes);
+        this.course = course;
+        // a first guess, far too long: the first step finds its own
+        planned = Math.min(budget.timeLeft(0), course.nextBreak(0)) / 16;
+        stepper = new TaylorStep(start);
+        resize(start.first, start.levels);
+    }
+
+    @Override
+    Equation on(long first, int levels) {
+        Generator generator = course.generator(time, planned);
+        Spectrum spectrum = Spectrum.of(generator.drift().get(0), first, levels);
+        checkWork(
+                levels,
+                (pure ? 1 : 2) * spectrum.width(),
+                (2 * generator.reach() + 1) * generator.drift().size(),
+                generator.jumps().size());
+        Equation next = Propagation.plain(generator, pure, first, levels);
+        stepper = stepper.on(next);
+        ready = false;
+        return next;
+    }
+
+    @Override
+    int planes() {
+        return TaylorStep.ORDER + 4;
+    }
+
+    @Override
+    double longestStep() {
+        if (!ready) {
+            double end = course.nextBreak(time);
+            double room = Math.min(end - time, budget.timeLeft(time));
+            // a step that a break cuts short says nothing about the next one
+            uncut = Math.max(planned, uncut);
+            planned = Math.min(uncut, room);
+            // the course must be known well enough over what is planned
+            double least = SHORTEST * budget.duration();
+            resize(equation.first, equation.levels);
+            while (course.off(equation, planned) > COURSE * budget.forSeries(planned) && planned >= least) {
+                planned *= 0.5;
+                resize(equation.first, equation.levels);
+            }
+            if (planned < least && planned < room) {
+                throw new PhysicsException.NotConverged(
+                        "the Hamiltonian near time " + Digits.significant(time, 6)
+                                + " (it varies too fast to be followed at this tolerance)",
+                        steps,
+                        course.off(equation, planned),
+                        budget.forSeries(planned));
+            }
+            stepper.prepare(state, orders());
+            applications += TaylorStep.ORDER + 1;
+            longest = planned;
+            while (stepper.series(longest) + course.off(equation, longest) > budget.forSeries(longest)
+                    && longest > least) {
+                longest *= SHORTEN;
+            }
+            if (longest < room) {
+                uncut = 2 * longest;
+            }
+            ready = true;
+        }
+        return longest;
+    }
+
+    /** Orders of the generator that matter over the planned step. */
+    private int orders() {
+        int most = equation.norms.length - 1;
+        double left = 0;
+        double allowed = COURSE * budget.forSeries(planned) / equation.rank();
+        while (most > 0) {
+            left += equation.norms[most] * Math.pow(planned, most + 1.0) / (most + 1);
+            if (left > 0.1 * allowed) {
+                break;
+            }
+            most--;
+        }
+        return most;
+    }
+
+    @Override
+    boolean attempt(double[] times) {
+        double length = times[times.length - 1];
+        stepper.border(length, sides);
+        double off = course.off(equation, length) + course.atBreaks(equation);
+        if (!book(length, stepper.series(length) + off, stepper.rounding(length))) {
+            return false;
+        }
+        stepper.at(times);
+        return true;
+    }
+
+    @Override
+    Plane at(int i) {
+        return stepper.at(i);
+    }
+
+    @Override
+    double leaked(boolean below) {
+        return sides[below ? 0 : 1];
+    }
+
+    @Override
+    void kept(double length) {
+        course.advance(length);
+        planned = uncut;
+        ready = false;
+    }
+}
