@@ -61,6 +61,12 @@ final class LevelWaves {
             }
             return new NumberWave(first, re, im, error);
         }
+        if (state.oscillator() instanceof PotentialWell well
+                && well.potential().period().isPresent()) {
+            throw new IllegalArgumentException(
+                    "the positions of this oscillator go round, and a Wigner function of the "
+                            + "line has no meaning there; expected an oscillator on the line");
+        }
         if (!run.levels().hasWaveFunctions()) {
             throw new IllegalArgumentException("the levels of this oscillator have no real wave functions, so that "
                     + "there is no phase-space picture of them");

@@ -15,6 +15,7 @@ import ladderwell.mode.Part;
 import ladderwell.mode.Rate;
 import ladderwell.phasespace.PhaseField;
 import ladderwell.phasespace.PhaseGrid;
+import ladderwell.potential.Potential;
 import ladderwell.quantity.Quantity;
 import org.junit.jupiter.api.Test;
 
@@ -184,8 +185,24 @@ class PhaseSpaceTest {
                     .phaseSpace(0.25, PERIOD)
                     .negativity();
             assertEquals(published[n], reading.value(), reading.bound().size() + 5e-9);
-            assertTrue(reading.bound().size() < 0.01, "level " + n + ": " + reading.bound());
+            assertTrue(reading.bound().size() < 1e-5, "level " + n + ": " + reading.bound());
         }
+    }
+
+    @Test
+    void negativityOfAHighLevelAgreesWithItsGrid() {
+        PhaseSpace space = mode.number(40).evolve(1, PERIOD).run().phaseSpace(0.25, PERIOD);
+        PhaseField.Reading grid = space.wigner(PhaseGrid.square(11.5, 801)).negativity();
+        assertEquals(grid.value(), space.negativity().value(), grid.bound().size());
+        assertTrue(space.negativity().bound().size() < 1e-5);
+    }
+
+    @Test
+    void positionsThatGoRoundAreRefusedInWords() {
+        Oscillator pendulum = Oscillator.in(Potential.pendulum(UNIT, UNIT, number(3)));
+        Run run = pendulum.superposition(0, 1).evolve(1, ONE).frames(2).run();
+        IllegalArgumentException round = assertThrows(IllegalArgumentException.class, () -> run.phaseSpace(0.5, ONE));
+        assertTrue(round.getMessage().contains("go round"), round.getMessage());
     }
 
     @Test

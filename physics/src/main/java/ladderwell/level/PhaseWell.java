@@ -42,7 +42,13 @@ final class PhaseWell {
     double slope;
 
     private PhaseWell(
-            CurveSurvey survey, double eLow, double left, double right, PhaseCell[] cells, double[] steps, double allowed) {
+            CurveSurvey survey,
+            double eLow,
+            double left,
+            double right,
+            PhaseCell[] cells,
+            double[] steps,
+            double allowed) {
         this.survey = survey;
         this.eLow = eLow;
         this.left = left;
@@ -211,8 +217,7 @@ final class PhaseWell {
             leftMesh.cover(e, ShootingMesh.TAIL);
             int zeros = leftShot.inwards(e, -1);
             PhaseCell first = cells[0];
-            angle = zeros * Math.PI
-                    + half(first.wa * leftShot.rightY, leftShot.rightP + first.bendA * leftShot.rightY);
+            angle = zeros * Math.PI + half(first.wa * leftShot.rightY, leftShot.rightP + first.bendA * leftShot.rightY);
             steps += leftMesh.cells().length;
             worst = Math.max(worst, fit(leftMesh));
         }
@@ -229,7 +234,8 @@ final class PhaseWell {
         if (rightMesh != null && rightShot != null) {
             rightMesh.cover(e, ShootingMesh.TAIL);
             int zeros = rightShot.inwards(e, 1);
-            angle += zeros * Math.PI + half(last.wb * rightShot.rightY, -rightShot.rightP - last.bendB * rightShot.rightY);
+            angle += zeros * Math.PI
+                    + half(last.wb * rightShot.rightY, -rightShot.rightP - last.bendB * rightShot.rightY);
             steps += rightMesh.cells().length;
             worst = Math.max(worst, fit(rightMesh));
         }
@@ -258,8 +264,9 @@ final class PhaseWell {
 
     @Override
     public String toString() {
-        return cells.length + " phase cells from " + left + " to " + right + ", " + Arrays.toString(new int[] {
-            leftMesh == null ? 0 : leftMesh.cells().length, rightMesh == null ? 0 : rightMesh.cells().length
-        });
+        return cells.length + " phase cells from " + left + " to " + right + ", "
+                + Arrays.toString(new int[] {
+                    leftMesh == null ? 0 : leftMesh.cells().length, rightMesh == null ? 0 : rightMesh.cells().length
+                });
     }
 }

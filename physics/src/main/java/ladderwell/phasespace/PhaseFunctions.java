@@ -36,6 +36,19 @@ public final class PhaseFunctions {
                 : husimi((NumberMatrix) state, grid, width);
     }
 
+    /**
+     * ∫|W| dx dp − 1 of a state, from its Wigner function on a grid; of one harmonic level from its radial form, at any grid.
+     *
+     * @param grid one that covers the state and follows its fringes
+     */
+    public PhaseField.Reading negativity(PhaseState state, PhaseGrid grid) {
+        if (state instanceof NumberWave wave
+                && wave.singleLevel().orElse(Integer.MAX_VALUE) <= Negativity.HIGHEST_LEVEL) {
+            return Negativity.ofLevel(wave.singleLevel().getAsInt());
+        }
+        return wigner(state, grid).negativity();
+    }
+
     /** The Wigner function of a pure state. */
     public PhaseField wigner(WaveFunction wave, PhaseGrid grid) {
         if (wave instanceof GaussianWave away && !away.isAtOrigin()) {

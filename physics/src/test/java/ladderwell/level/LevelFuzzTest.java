@@ -165,7 +165,8 @@ class LevelFuzzTest {
                     x -> Math.min(left.applyAsDouble(x), right.applyAsDouble(x)),
                     declared ? new double[] {low} : new double[0]));
             for (int n = 0; n < 6; n++) {
-                // The barrier is above 20 and 10 wide: tunnelling is below any rounding, that of these numbers is 1e-13.
+                // The barrier is above 20 and 10 wide: tunnelling is below any rounding, that of these numbers is
+                // 1e-13.
                 assertEquals(
                         expected[n],
                         levels.energyHigh(n),
