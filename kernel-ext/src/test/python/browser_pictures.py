@@ -276,7 +276,7 @@ class PhasePage(unittest.TestCase):
             self.assertGreater(len(still.find_elements(By.CSS_SELECTOR, ".contour path")), 2)
             self.assertIn("negativity", still.find_element(By.CSS_SELECTOR, ".lw-verdict").text)
             self.assertIsNone(driver.execute_script("return window.hacked || null"))
-            image = "return arguments[0].querySelector('.heatmaplayer image').getAttribute('xlink:href')"
+            image = "return arguments[0].querySelector('.heatmaplayer image').href.baseVal"
             ring = ("return Array.from(arguments[0].querySelectorAll('.scatterlayer .points path'))"
                     ".map(function(p){return p.getAttribute('transform')}).join()")
             driver.execute_script("arguments[0].ladderwell.show(3)", film)
