@@ -1,5 +1,6 @@
 package ladderwell;
 
+import java.util.Optional;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.Record;
 import ladderwell.operator.OperatorFormula;
@@ -21,9 +22,11 @@ final class OnWindow implements Representation {
     private final WindowMotion motion;
     private final boolean pure;
     private final boolean varies;
+    private final String remark;
     private final WindowReadings readings;
 
-    private OnWindow(LadderMode mode, Amplitudes start, WindowMotion motion, boolean pure) {
+    private OnWindow(LadderMode mode, Amplitudes start, WindowMotion motion, boolean pure, String remark) {
+        this.remark = remark;
         varies = mode.moves();
         this.motion = motion;
         this.pure = pure;
@@ -32,14 +35,34 @@ final class OnWindow implements Representation {
 
     static OnWindow of(Evolution evolution, LadderMode mode, double[] times) {
         double tolerance = evolution.tolerance();
-        Amplitudes start = evolution.state().amplitudes(Math.max(1e-13, START * tolerance / 2));
         OperatorFormula h = mode.hamiltonian();
         boolean pure = mode.jumps().isEmpty();
         double memory = Memory.allowed();
+        Optional<FrameChoice> choice = FrameChoice.of(evolution, mode);
+        if (choice.isPresent()) {
+            Coherent coherent = (Coherent) evolution.state();
+            Optional<WindowMotion> framed = WindowMotion.framed(
+                    h,
+                    mode.jumps(),
+                    Math.sqrt(coherent.mean()) * Math.cos(coherent.phaseAngle()),
+                    Math.sqrt(coherent.mean()) * Math.sin(coherent.phaseAngle()),
+                    times,
+                    tolerance,
+                    choice.get().mostLevels(),
+                    memory);
+            if (framed.isPresent()) {
+                return new OnWindow(mode, Amplitudes.level(0), framed.get(), pure, "");
+            }
+        }
+        Amplitudes start = evolution.state().amplitudes(Math.max(1e-13, START * tolerance / 2));
         WindowMotion motion = pure
                 ? WindowMotion.pure(h, start, times, tolerance, memory)
                 : WindowMotion.mixed(h, mode.jumps(), Mixture.pure(start).density(memory), times, tolerance, memory);
-        return new OnWindow(mode, start, motion, pure);
+        return new OnWindow(mode, start, motion, pure, choice.isPresent() ? "; the state left a displaced frame" : "");
+    }
+
+    boolean isPure() {
+        return pure;
     }
 
     WindowMotion motion() {
@@ -63,6 +86,10 @@ final class OnWindow implements Representation {
 
     @Override
     public String method() {
+        if (motion.framed()) {
+            return "Taylor series of the " + (pure ? "vector" : "density operator")
+                    + " in a frame displaced along the mean-field path";
+        }
         return (varies ? "Taylor" : "Chebyshev") + " series of the " + (pure ? "vector" : "density operator")
                 + " in a window of number states";
     }
@@ -70,7 +97,8 @@ final class OnWindow implements Representation {
     @Override
     public String reason() {
         return (pure ? "nothing jumps" : "the mode jumps") + " and the Hamiltonian "
-                + (varies ? "varies with time" : "does not vary");
+                + (varies ? "varies with time" : "does not vary")
+                + (motion.framed() ? "; the fluctuation is small beside the displacement" : remark);
     }
 
     @Override
@@ -103,6 +131,10 @@ final class OnWindow implements Representation {
 
     @Override
     public PhaseState phaseState(State state, double time) {
+        if (motion.framed()) {
+            throw new IllegalArgumentException(
+                    "the phase space of a run in a displaced frame is not drawn yet; ask for a looser tolerance or fewer quanta");
+        }
         WindowState at = motion.state(Representation.nearest(this, time));
         return at instanceof PureWindow vector
                 ? new NumberWave(vector.first(), vector.reals(), vector.imaginaries(), vector.error())

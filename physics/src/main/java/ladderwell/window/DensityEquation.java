@@ -305,6 +305,18 @@ final class DensityEquation extends Equation {
     }
 
     @Override
+    double[] lowering(Plane y) {
+        double re = 0;
+        double im = 0;
+        for (int n = 0; n < levels - 1; n++) {
+            double root = Math.sqrt(first + n + 1.0);
+            re += root * y.re[at(n + 1, n)];
+            im += root * y.im[at(n + 1, n)];
+        }
+        return new double[] {re, im};
+    }
+
+    @Override
     void moveTo(Plane y, Equation other, Plane target) {
         DensityEquation there = (DensityEquation) other;
         long from = Math.max(first, there.first);

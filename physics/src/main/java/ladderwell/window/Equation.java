@@ -90,6 +90,9 @@ abstract sealed class Equation permits VectorEquation, DensityEquation {
     /** y · (re + i im) inside the window; density operators take re alone. */
     abstract void scale(Plane y, double re, double im);
 
+    /** ⟨a⟩: real part, imaginary part. */
+    abstract double[] lowering(Plane y);
+
     /** Copies what is in this window into another window. */
     abstract void moveTo(Plane y, Equation other, Plane target);
 

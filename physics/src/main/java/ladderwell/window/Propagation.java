@@ -23,6 +23,9 @@ abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation 
     private Plane reached;
 
     double time;
+    /** Time since the step began, at an instant inside it; 0 once the step is kept. */
+    double since;
+
     long steps;
     long redone;
     long applications;
@@ -133,11 +136,13 @@ abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation 
             for (int i = 0; i < count - 1; i++) {
                 reached = at(i);
                 time = began + times[i];
+                since = times[i];
                 seen.accept(next + i);
             }
             time = atLast ? ahead[ahead.length - 1] : began + times[count - 1];
             state.copyFrom(at(count - 1));
             reached = state;
+            since = 0;
             kept(times[count - 1]);
             steps++;
             next = inside;

@@ -1,6 +1,7 @@
 package ladderwell.window;
 
 import ladderwell.evidence.PhysicsException;
+import ladderwell.numeric.DoubleDouble;
 import ladderwell.quantity.Digits;
 
 /** Under an equation that varies with time, or in a frame that moves, by a Taylor series in each step. */
@@ -11,8 +12,16 @@ final class VaryingPropagation extends Propagation {
     private static final double SHORTEN = 0.9;
     /** Shortest step, as a share of the run. */
     private static final double SHORTEST = 1e-10;
+    /** Share of the mean of the fluctuation by which the frame goes after it in a step. */
+    private static final double PULL = 0.15;
+
+    /** The fluctuation has outgrown what pays in a frame. */
+    static final class LeftFrame extends RuntimeException {
+        private static final long serialVersionUID = 1L;
+    }
 
     private final Course course;
+    private int mostAllowed = Integer.MAX_VALUE;
     private TaylorStep stepper;
     private final double[] sides = new double[2];
     private boolean ready;
@@ -27,6 +36,16 @@ final class VaryingPropagation extends Propagation {
         planned = Math.min(budget.timeLeft(0), course.nextBreak(0)) / 16;
         stepper = new TaylorStep(start);
         resize(start.first, start.levels);
+    }
+
+    /** Gives up with {@link LeftFrame} when the window is larger than this. */
+    void allow(int levels) {
+        mostAllowed = levels;
+    }
+
+    /** Displacement of the frame at the instant just seen; empty for number windows. */
+    DoubleDouble[] displacement() {
+        return course instanceof FrameCourse frame ? frame.at(since) : new DoubleDouble[0];
     }
 
     @Override
@@ -127,6 +146,13 @@ final class VaryingPropagation extends Propagation {
     @Override
     void kept(double length) {
         course.advance(length);
+        if (course instanceof FrameCourse frame) {
+            double[] mean = equation.lowering(state);
+            frame.recentre(mean[0], mean[1], PULL / length);
+            if (equation.levels > mostAllowed) {
+                throw new LeftFrame();
+            }
+        }
         planned = uncut;
         ready = false;
     }

@@ -135,6 +135,18 @@ final class VectorEquation extends Equation {
     }
 
     @Override
+    double[] lowering(Plane y) {
+        double re = 0;
+        double im = 0;
+        for (int n = margin(); n < margin() + levels - 1; n++) {
+            double root = Math.sqrt(first + (n - margin()) + 1.0);
+            re += root * (y.re[n] * y.re[n + 1] + y.im[n] * y.im[n + 1]);
+            im += root * (y.re[n] * y.im[n + 1] - y.im[n] * y.re[n + 1]);
+        }
+        return new double[] {re, im};
+    }
+
+    @Override
     void moveTo(Plane y, Equation other, Plane target) {
         long from = Math.max(first, other.first);
         long to = Math.min(first + levels, other.first + other.levels);
