@@ -4,7 +4,7 @@ import ladderwell.evidence.Bound;
 import ladderwell.level.Levels;
 import ladderwell.motion.PhasedState;
 import ladderwell.numeric.HermiteFunctions;
-import ladderwell.phasespace.GaussianWave;
+import ladderwell.phasespace.Displaced;
 import ladderwell.phasespace.NumberWave;
 import ladderwell.phasespace.PhaseState;
 import ladderwell.phasespace.SampledWave;
@@ -36,7 +36,7 @@ final class LevelWaves {
             double swing = Math.sqrt(2 * coherent.mean());
             double angle = coherent.phaseAngle() - time;
             double off = swing * (4 * Math.ulp(1.0) + 2 * Math.ulp(Math.abs(time) + Math.abs(coherent.phaseAngle())));
-            return new GaussianWave(swing * Math.cos(angle), swing * Math.sin(angle), off);
+            return Displaced.coherent(swing * Math.cos(angle), swing * Math.sin(angle), off);
         }
         Amplitudes amplitudes = run.amplitudes();
         PhasedState now = PhasedState.of(run.levels(), amplitudes, new double[] {time});

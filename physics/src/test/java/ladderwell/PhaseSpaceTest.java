@@ -167,6 +167,21 @@ class PhaseSpaceTest {
     }
 
     @Test
+    void aRunInADisplacedFrameIsReadWhereItIs() {
+        // the same loss at a million quanta; damped so little that the packet is still far out
+        LadderMode lossy =
+                Oscillator.mode("hamiltonian", Mode.natural(1).with(Jump.loss(Rate.natural(0.01))), List.of());
+        Run run = lossy.coherent(1e6).evolve(2, ONE).frames(4).run();
+        assertTrue(run.method().contains("displaced"), run.method());
+        PhaseSpace space = run.phaseSpace(1.5, ONE);
+        double size = Math.sqrt(2e6) * Math.exp(-0.005 * 1.5);
+        isGaussianAt(space.wigner(), size * Math.cos(1.5), -size * Math.sin(1.5));
+        assertTrue(
+                space.wigner().bound().size() < 1e-6, "bound " + space.wigner().bound());
+        assertEquals(1, space.wigner().total(), 1e-6);
+    }
+
+    @Test
     void husimiIsNowhereNegativeAndWiderThanWigner() {
         PhaseSpace space = mode.number(3).evolve(1, PERIOD).run().phaseSpace(0.5, PERIOD);
         assertTrue(space.husimi().least() >= -space.husimi().bound().size());

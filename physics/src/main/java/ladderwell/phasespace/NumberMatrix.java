@@ -97,7 +97,7 @@ public final class NumberMatrix implements PhaseState {
             above += Math.abs(populations[m]);
             m--;
         }
-        double reach = Math.sqrt(2.0 * (first + m) + 1) + 2;
+        double reach = Math.sqrt(2.0 * (first + m) + 1) + 3;
         return new Support(-reach, reach, -reach, reach, Bound.estimated(Math.sqrt(share)));
     }
 }
