@@ -204,6 +204,18 @@ class PhaseFunctionsTest {
         assertTrue(field.bound().size() < 1e-9, "bound " + field.bound());
     }
 
+    @Test
+    void aMixedStateIsFramedWhereItLies() {
+        NumberMatrix displaced =
+                NumberMatrix.of(Mixture.displacedThermal(0.5, 16, 1, 1e-12).density(1e9));
+        Support box = displaced.visible(1e-6);
+        // Gaussian of variance 1 about √32 (cos 1, sin 1): a share of 1e-6 lies beyond 4.9 spreads
+        assertEquals(Math.sqrt(32) * Math.cos(1), (box.left() + box.right()) / 2, 0.2);
+        assertEquals(Math.sqrt(32) * Math.sin(1), (box.low() + box.high()) / 2, 0.2);
+        assertEquals(4.9, (box.right() - box.left()) / 2, 0.5);
+        assertEquals(4.9, (box.high() - box.low()) / 2, 0.5);
+    }
+
     /** ⟨n|D(−α)|ψ⟩ by the rows of D, on so many levels that nothing is lost; W = (1/π) Σ (−1)^n |⟨n|D(−α)|ψ⟩|². */
     private static double displacedParity(double[] re, double[] im, double x, double p) {
         int levels = 220;
