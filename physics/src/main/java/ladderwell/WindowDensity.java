@@ -34,7 +34,7 @@ final class WindowDensity {
         double error = 0;
         for (int j = 0; j < values.length; j++) {
             Interruption.check();
-            WindowState state = motion.state(j);
+            WindowState state = motion.displaced(j);
             double[][] functions = Levels.harmonic()
                     .waveFunctions(
                             state.first(),

@@ -57,15 +57,15 @@ final class WindowReadings {
             return along(o, Certainty.ESTIMATED, (s, j) -> linear(s, j, 1));
         }
         if (o.equals(Observable.SPREAD_OF_POSITION)) {
-            return along(o, Certainty.ESTIMATED, (s, j) -> variance(s, 0).root());
+            return along(o, Certainty.ESTIMATED, (s, j) -> variance(s, j, 0).root());
         }
         if (o.equals(Observable.SPREAD_OF_MOMENTUM)) {
-            return along(o, Certainty.ESTIMATED, (s, j) -> variance(s, 1).root());
+            return along(o, Certainty.ESTIMATED, (s, j) -> variance(s, j, 1).root());
         }
         if (o.equals(Observable.UNCERTAINTY_PRODUCT)) {
             return along(o, Certainty.ESTIMATED, (s, j) -> {
-                Reading x = variance(s, 0).root();
-                Reading p = variance(s, 1).root();
+                Reading x = variance(s, j, 0).root();
+                Reading p = variance(s, j, 1).root();
                 return new Reading(2 * x.value * p.value, 2 * ((x.value + x.error) * p.error + x.error * p.value));
             });
         }
@@ -152,7 +152,10 @@ final class WindowReadings {
         if (motion.framed()) {
             // ⟨n|D(α) σ D(α)†|n⟩ with D(α)†|n⟩ = D(−α)|n⟩
             Amplitudes seen = displaced(level, -re(j), -im(j));
-            return new Reading(s.fidelity(seen), error + 3 * seen.normError());
+            WindowState plain = motion.displaced(j);
+            return new Reading(
+                    plain.fidelity(seen),
+                    plain.traceNormError().size() + plain.levels() * Math.ulp(1.0) + 3 * seen.normError());
         }
         long i = level - s.first();
         return new Reading(i >= 0 && i < s.levels() ? s.population((int) i) : 0, error);
@@ -172,11 +175,14 @@ final class WindowReadings {
         // a coherent state seen from the frame is coherent about the difference
         double re = motion.displacementRe(0).minus(motion.displacementRe(j)).value();
         double im = motion.displacementIm(0).minus(motion.displacementIm(j)).value();
-        if (re * re + im * im > FAR * (s.levels() + 10.0)) {
+        if (re * re + im * im > FAR * (s.levels() + 100.0)) {
             return new Reading(0, error + Math.exp(-s.levels()));
         }
         Amplitudes seen = Amplitudes.coherent(re * re + im * im, Math.atan2(im, re), FRAME_TOLERANCE);
-        return new Reading(s.fidelity(seen), error + 3 * seen.normError());
+        WindowState plain = motion.displaced(j);
+        return new Reading(
+                plain.fidelity(seen),
+                plain.traceNormError().size() + plain.levels() * Math.ulp(1.0) + 3 * seen.normError());
     }
 
     private double re(int j) {
@@ -192,7 +198,7 @@ final class WindowReadings {
      * in full, since the exact trace is 1.
      */
     private Reading moment(WindowState state, int j, LadderPolynomial operator, int part) {
-        LadderPolynomial seen = operator.shifted(motion.displacementRe(j), motion.displacementIm(j));
+        LadderPolynomial seen = motion.seen(j, operator);
         LadderPolynomial constant = LadderPolynomial.term(0, 0, seen.fullRe(0, 0), seen.fullIm(0, 0));
         LadderPolynomial rest = seen.minus(constant);
         double still = part == 0 ? seen.re(0, 0) : seen.im(0, 0);
@@ -226,9 +232,10 @@ final class WindowReadings {
     }
 
     /** Variance of x (0) or p (1), taken about the mean: what is large drops out. */
-    private Reading variance(WindowState state, int part) {
-        double[] alpha = state.mean(A);
-        LadderPolynomial off = A.minus(LadderPolynomial.constant(alpha[0], alpha[1]));
+    private Reading variance(WindowState state, int j, int part) {
+        LadderPolynomial lowering = motion.fluctuation(j, A);
+        double[] alpha = state.mean(lowering);
+        LadderPolynomial off = lowering.minus(LadderPolynomial.constant(alpha[0], alpha[1]));
         LadderPolynomial quadrature =
                 part == 0 ? off.plus(off.adjoint()) : off.minus(off.adjoint()).times(0, -1);
         Reading reading = fluctuation(state, quadrature.power(2).times(0.5));
@@ -249,7 +256,7 @@ final class WindowReadings {
 
     private Reading quantaVariance(WindowState state, int j) {
         double[] frame = {re(j), im(j)};
-        LadderPolynomial n = QUANTA.shifted(motion.displacementRe(j), motion.displacementIm(j));
+        LadderPolynomial n = motion.seen(j, QUANTA);
         LadderPolynomial rest = n.minus(LadderPolynomial.term(0, 0, n.fullRe(0, 0), DoubleDouble.ZERO));
         double mean = state.mean(rest)[0] / state.trace();
         LadderPolynomial off = rest.minus(LadderPolynomial.constant(mean, 0));

@@ -103,7 +103,8 @@ class ModeRunTest {
             spreads[i] = spread.value(2);
             levels[i] = ((OnWindow) run.representation()).motion().work().mostLevels();
         }
-        assertEquals(levels[0], levels[1], 8);
+        assertEquals(levels[0], levels[1], 20);
+        assertTrue(levels[1] < 70, levels[1] + " levels");
         assertEquals(spreads[0], spreads[1], 1e-2);
     }
 

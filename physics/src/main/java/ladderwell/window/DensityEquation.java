@@ -305,15 +305,38 @@ final class DensityEquation extends Equation {
     }
 
     @Override
-    double[] lowering(Plane y) {
+    double[] lowering(Plane y, int k) {
         double re = 0;
         double im = 0;
-        for (int n = 0; n < levels - 1; n++) {
-            double root = Math.sqrt(first + n + 1.0);
-            re += root * y.re[at(n + 1, n)];
-            im += root * y.im[at(n + 1, n)];
+        for (int n = 0; n + k < levels; n++) {
+            re += root(n, k) * y.re[at(n + k, n)];
+            im += root(n, k) * y.im[at(n + k, n)];
         }
         return new double[] {re, im};
+    }
+
+    @Override
+    void turn(Plane y, double theta) {
+        for (int m = 0; m < levels; m++) {
+            for (int n = 0; n <= m; n++) {
+                double c = Math.cos(theta * (m - n));
+                double s = Math.sin(theta * (m - n));
+                int i = at(m, n);
+                double re = y.re[i];
+                y.re[i] = c * re - s * y.im[i];
+                y.im[i] = c * y.im[i] + s * re;
+            }
+        }
+        tidy(y);
+    }
+
+    @Override
+    double quanta(Plane y) {
+        double sum = 0;
+        for (int n = 0; n < levels; n++) {
+            sum += (first + n) * y.re[at(n, n)];
+        }
+        return sum;
     }
 
     @Override

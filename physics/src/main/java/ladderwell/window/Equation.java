@@ -90,8 +90,23 @@ abstract sealed class Equation permits VectorEquation, DensityEquation {
     /** y · (re + i im) inside the window; density operators take re alone. */
     abstract void scale(Plane y, double re, double im);
 
-    /** ⟨a⟩: real part, imaginary part. */
-    abstract double[] lowering(Plane y);
+    /** ⟨a^k⟩, k = 1 or 2: real part, imaginary part. */
+    abstract double[] lowering(Plane y, int k);
+
+    /** ⟨n⟩. */
+    abstract double quanta(Plane y);
+
+    /** e^{iθn} on a vector, from both sides on a density operator. */
+    abstract void turn(Plane y, double theta);
+
+    /** √((n + 1) … (n + k)) of the n-th level of the window. */
+    final double root(int n, int k) {
+        double product = 1;
+        for (int i = 1; i <= k; i++) {
+            product *= first + n + i;
+        }
+        return Math.sqrt(product);
+    }
 
     /** Copies what is in this window into another window. */
     abstract void moveTo(Plane y, Equation other, Plane target);

@@ -26,6 +26,7 @@ final class FrameCourse implements Course {
     private DoubleDouble re;
     private DoubleDouble im;
     private Series path = Series.zero(1);
+    private Squeeze squeeze = Squeeze.NONE;
     private double pullRe;
     private double pullIm;
     private double pull;
@@ -61,6 +62,23 @@ final class FrameCourse implements Course {
             sumIm = sumIm.times(s).plus(path.im()[k]);
         }
         return new DoubleDouble[] {sumRe.plus(re), sumIm.plus(im)};
+    }
+
+    Squeeze squeeze() {
+        return squeeze;
+    }
+
+    /** The state was changed from σ to R†σR. */
+    void squeezed(double r, double phi) {
+        squeeze = squeeze.after(r, phi);
+    }
+
+    /** ⟨a⟩ of the fluctuation as the frame without squeezing has it. */
+    double[] unsqueezed(double[] mean) {
+        return new double[] {
+            squeeze.uRe() * mean[0] - squeeze.uIm() * mean[1] + squeeze.vRe() * mean[0] + squeeze.vIm() * mean[1],
+            squeeze.uRe() * mean[1] + squeeze.uIm() * mean[0] + squeeze.vIm() * mean[0] - squeeze.vRe() * mean[1]
+        };
     }
 
     /** Lets the next steps bring the mean of the fluctuation back towards 0. */
@@ -99,7 +117,12 @@ final class FrameCourse implements Course {
         h.add(1, 0, slope.turned().times(-1));
         h.add(0, 1, slope.conjugate().turned());
         h.takeConstant();
-        return Generator.of(h.orders(), moved);
+        if (squeeze.isNone()) {
+            return Generator.of(h.orders(), moved);
+        }
+        return Generator.of(
+                h.orders().stream().map(squeeze::seen).toList(),
+                moved.stream().map(g -> g.stream().map(squeeze::seen).toList()).toList());
     }
 
     /** Taylor coefficients of the mean-field path from here, β(0) = 0. */

@@ -88,6 +88,18 @@ abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation 
         mostLevels = Math.max(mostLevels, levels);
     }
 
+    /** Takes a state on another window that was made elsewhere. */
+    final void take(Equation there, Plane theirs, int levels) {
+        equation = there;
+        state = theirs;
+        resize(there.first, levels);
+        reached = state;
+    }
+
+    final double allowedBytes() {
+        return allowedBytes;
+    }
+
     /** Refuses what would take hours: frequencies this large for the time that is left. */
     final void checkWork(int levels, double rate, int bands, int jumps) {
         double elements = pure ? (double) levels * bands : levels * (levels / 2.0) * (2 * bands + jumps);
@@ -217,6 +229,11 @@ abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation 
 
     /** The state at the time just seen. */
     final WindowState seen(Bound error) {
+        return state(pure, equation, reached, error);
+    }
+
+    /** A copy of what a plane holds. */
+    static WindowState state(boolean pure, Equation equation, Plane reached, Bound error) {
         if (pure) {
             double[] re = new double[equation.levels];
             double[] im = new double[equation.levels];

@@ -135,15 +135,37 @@ final class VectorEquation extends Equation {
     }
 
     @Override
-    double[] lowering(Plane y) {
+    double[] lowering(Plane y, int k) {
         double re = 0;
         double im = 0;
-        for (int n = margin(); n < margin() + levels - 1; n++) {
-            double root = Math.sqrt(first + (n - margin()) + 1.0);
-            re += root * (y.re[n] * y.re[n + 1] + y.im[n] * y.im[n + 1]);
-            im += root * (y.re[n] * y.im[n + 1] - y.im[n] * y.re[n + 1]);
+        for (int n = 0; n + k < levels; n++) {
+            int i = margin() + n;
+            re += root(n, k) * (y.re[i] * y.re[i + k] + y.im[i] * y.im[i + k]);
+            im += root(n, k) * (y.re[i] * y.im[i + k] - y.im[i] * y.re[i + k]);
         }
         return new double[] {re, im};
+    }
+
+    @Override
+    void turn(Plane y, double theta) {
+        for (int n = 0; n < levels; n++) {
+            double c = Math.cos(theta * (first + n));
+            double s = Math.sin(theta * (first + n));
+            int i = margin() + n;
+            double re = y.re[i];
+            y.re[i] = c * re - s * y.im[i];
+            y.im[i] = c * y.im[i] + s * re;
+        }
+    }
+
+    @Override
+    double quanta(Plane y) {
+        double sum = 0;
+        for (int n = 0; n < levels; n++) {
+            int i = margin() + n;
+            sum += (first + n) * (y.re[i] * y.re[i] + y.im[i] * y.im[i]);
+        }
+        return sum;
     }
 
     @Override

@@ -16,7 +16,9 @@ public final class WindowMotion {
     private final double[] times;
     private final List<WindowState> states;
     private final List<DoubleDouble[]> displacements;
+    private final List<Squeeze> squeezes;
     private final Work work;
+    private final double allowedBytes;
 
     /** Levels that a frame starts with. */
     private static final int FRAME_LEVELS = 8;
@@ -31,11 +33,19 @@ public final class WindowMotion {
      */
     public record Work(long steps, long redone, long applications, int mostLevels) {}
 
-    private WindowMotion(double[] times, List<WindowState> states, List<DoubleDouble[]> displacements, Work work) {
+    private WindowMotion(
+            double[] times,
+            List<WindowState> states,
+            List<DoubleDouble[]> displacements,
+            List<Squeeze> squeezes,
+            Work work,
+            double allowedBytes) {
         this.times = times;
         this.states = List.copyOf(states);
         this.displacements = List.copyOf(displacements);
+        this.squeezes = List.copyOf(squeezes);
         this.work = work;
+        this.allowedBytes = allowedBytes;
     }
 
     /**
@@ -79,15 +89,18 @@ public final class WindowMotion {
         propagation.allow(mostLevels);
         List<WindowState> states = new ArrayList<>();
         List<DoubleDouble[]> displacements = new ArrayList<>();
+        List<Squeeze> squeezes = new ArrayList<>();
         try {
             propagation.go(times, j -> {
                 states.add(propagation.seen(new Bound(course.certainty(), budget.spent())));
                 displacements.add(propagation.displacement());
+                squeezes.add(propagation.squeezing());
             });
         } catch (VaryingPropagation.LeftFrame left) {
             return Optional.empty();
         }
-        return Optional.of(new WindowMotion(times.clone(), states, displacements, work(propagation)));
+        return Optional.of(
+                new WindowMotion(times.clone(), states, displacements, squeezes, work(propagation), allowedBytes));
     }
 
     private static Work work(Propagation propagation) {
@@ -183,7 +196,7 @@ public final class WindowMotion {
         Certainty kind = certainty;
         List<WindowState> states = new ArrayList<>();
         propagation.go(times, j -> states.add(propagation.seen(new Bound(kind, budget.spent()))));
-        return new WindowMotion(times.clone(), states, List.of(), work(propagation));
+        return new WindowMotion(times.clone(), states, List.of(), List.of(), work(propagation), allowedBytes);
     }
 
     /** Number of times. */
@@ -196,7 +209,7 @@ public final class WindowMotion {
         return times[j];
     }
 
-    /** The state at the j-th time. */
+    /** The state at the j-th time; in a frame the fluctuation, see {@link #seen}. */
     public WindowState state(int j) {
         return states.get(j);
     }
@@ -206,7 +219,28 @@ public final class WindowMotion {
         return !displacements.isEmpty();
     }
 
-    /** Real part of α: the j-th state is D(α) σ D(α)† with σ given by {@link #state}; 0 without a frame. */
+    /** An operator as the j-th state has it: {@link #state} is what its mean is taken with. */
+    public LadderPolynomial seen(int j, LadderPolynomial operator) {
+        return framed() ? fluctuation(j, operator.shifted(displacementRe(j), displacementIm(j))) : operator;
+    }
+
+    /** An operator of the fluctuation about the displacement as the j-th state has it. */
+    public LadderPolynomial fluctuation(int j, LadderPolynomial operator) {
+        return framed() ? squeezes.get(j).seen(operator) : operator;
+    }
+
+    /**
+     * σ of D(α) σ D(α)† at the j-th time, the frame's squeezing taken out again; the state itself without a frame. Its error counts what that
+     * takes.
+     */
+    public WindowState displaced(int j) {
+        if (!framed() || squeezes.get(j).isNone()) {
+            return state(j);
+        }
+        return squeezes.get(j).takenOut(state(j), allowedBytes);
+    }
+
+    /** Real part of α: the j-th state is D(α) σ D(α)† with σ given by {@link #displaced}; 0 without a frame. */
     public DoubleDouble displacementRe(int j) {
         return framed() ? displacements.get(j)[0] : DoubleDouble.ZERO;
     }
