@@ -4,6 +4,7 @@ import java.util.Optional;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.Record;
 import ladderwell.operator.OperatorFormula;
+import ladderwell.phasespace.Displaced;
 import ladderwell.phasespace.NumberMatrix;
 import ladderwell.phasespace.NumberWave;
 import ladderwell.phasespace.PhaseState;
@@ -131,14 +132,17 @@ final class OnWindow implements Representation {
 
     @Override
     public PhaseState phaseState(State state, double time) {
-        if (motion.framed()) {
-            throw new IllegalArgumentException(
-                    "the phase space of a run in a displaced frame is not drawn yet; ask for a looser tolerance or fewer quanta");
-        }
-        WindowState at = motion.state(Representation.nearest(this, time));
-        return at instanceof PureWindow vector
+        int j = Representation.nearest(this, time);
+        WindowState at = motion.state(j);
+        PhaseState seen = at instanceof PureWindow vector
                 ? new NumberWave(vector.first(), vector.reals(), vector.imaginaries(), vector.error())
                 : mixed((MixedWindow) at);
+        if (!motion.framed()) {
+            return seen;
+        }
+        double x = Math.sqrt(2) * motion.displacementRe(j).value();
+        double p = Math.sqrt(2) * motion.displacementIm(j).value();
+        return new Displaced(seen, x, p, 2 * Math.ulp(Math.max(Math.abs(x), Math.abs(p))));
     }
 
     private static PhaseState mixed(MixedWindow at) {

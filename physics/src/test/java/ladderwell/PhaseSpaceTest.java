@@ -15,6 +15,7 @@ import ladderwell.mode.Part;
 import ladderwell.mode.Rate;
 import ladderwell.phasespace.PhaseField;
 import ladderwell.phasespace.PhaseGrid;
+import ladderwell.potential.Potential;
 import ladderwell.quantity.Quantity;
 import org.junit.jupiter.api.Test;
 
@@ -166,6 +167,21 @@ class PhaseSpaceTest {
     }
 
     @Test
+    void aRunInADisplacedFrameIsReadWhereItIs() {
+        // the same loss at a million quanta; damped so little that the packet is still far out
+        LadderMode lossy =
+                Oscillator.mode("hamiltonian", Mode.natural(1).with(Jump.loss(Rate.natural(0.01))), List.of());
+        Run run = lossy.coherent(1e6).evolve(2, ONE).frames(4).run();
+        assertTrue(run.method().contains("displaced"), run.method());
+        PhaseSpace space = run.phaseSpace(1.5, ONE);
+        double size = Math.sqrt(2e6) * Math.exp(-0.005 * 1.5);
+        isGaussianAt(space.wigner(), size * Math.cos(1.5), -size * Math.sin(1.5));
+        assertTrue(
+                space.wigner().bound().size() < 1e-6, "bound " + space.wigner().bound());
+        assertEquals(1, space.wigner().total(), 1e-6);
+    }
+
+    @Test
     void husimiIsNowhereNegativeAndWiderThanWigner() {
         PhaseSpace space = mode.number(3).evolve(1, PERIOD).run().phaseSpace(0.5, PERIOD);
         assertTrue(space.husimi().least() >= -space.husimi().bound().size());
@@ -184,8 +200,24 @@ class PhaseSpaceTest {
                     .phaseSpace(0.25, PERIOD)
                     .negativity();
             assertEquals(published[n], reading.value(), reading.bound().size() + 5e-9);
-            assertTrue(reading.bound().size() < 0.01, "level " + n + ": " + reading.bound());
+            assertTrue(reading.bound().size() < 1e-5, "level " + n + ": " + reading.bound());
         }
+    }
+
+    @Test
+    void negativityOfAHighLevelAgreesWithItsGrid() {
+        PhaseSpace space = mode.number(40).evolve(1, PERIOD).run().phaseSpace(0.25, PERIOD);
+        PhaseField.Reading grid = space.wigner(PhaseGrid.square(11.5, 801)).negativity();
+        assertEquals(grid.value(), space.negativity().value(), grid.bound().size());
+        assertTrue(space.negativity().bound().size() < 1e-5);
+    }
+
+    @Test
+    void positionsThatGoRoundAreRefusedInWords() {
+        Oscillator pendulum = Oscillator.in(Potential.pendulum(UNIT, UNIT, number(3)));
+        Run run = pendulum.superposition(0, 1).evolve(1, ONE).frames(2).run();
+        IllegalArgumentException round = assertThrows(IllegalArgumentException.class, () -> run.phaseSpace(0.5, ONE));
+        assertTrue(round.getMessage().contains("go round"), round.getMessage());
     }
 
     @Test

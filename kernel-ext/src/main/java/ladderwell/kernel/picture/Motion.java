@@ -42,11 +42,11 @@ final class Motion {
     private final double top;
     private final ClassicalOrbit orbit;
 
-    private Motion(String name, Run run, Density density) {
+    private Motion(String name, Run run, Density density, int mostFrames) {
         this.name = name;
         this.run = run;
         this.density = density;
-        this.stride = (density.times() - 2) / (MOST_FRAMES - 1) + 1;
+        this.stride = (density.times() - 2) / (mostFrames - 1) + 1;
         this.pointStride = (density.points() - 2) / (MOST_POINTS - 1) + 1;
         Oscillator oscillator = run.state().oscillator();
         Scale scale = oscillator.scale();
@@ -66,7 +66,12 @@ final class Motion {
 
     /** The motion of a run. @param density its frames, at the run's own times */
     static Motion of(String name, Run run, Density density) {
-        return new Motion(name, run, density);
+        return new Motion(name, run, density, MOST_FRAMES);
+    }
+
+    /** The same with no more frames than this. */
+    static Motion of(String name, Run run, Density density, int mostFrames) {
+        return new Motion(name, run, density, mostFrames);
     }
 
     private static OptionalDouble period(Run run) {
