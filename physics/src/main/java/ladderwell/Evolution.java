@@ -55,6 +55,15 @@ public record Evolution(State state, Quantity duration, long frames, double tole
     }
 
     /**
+     * How it would be computed, before it runs: method, size, memory and time.
+     *
+     * @throws PhysicsException if it is known already that it cannot be
+     */
+    public Plan plan() {
+        return Plan.of(this);
+    }
+
+    /**
      * Runs it.
      *
      * @throws PhysicsException.TooLarge before anything is allocated, if the run does not fit in memory
