@@ -80,17 +80,16 @@ final class PhaseWell {
         // What a level can be resolved to by its own rounding, in radians.
         double allowed = 2e-15 * levels + 2e-14;
         List<PhaseCell> cells = new ArrayList<>();
-        double[] more = survey.wells();
         double from = left;
         for (double b : survey.breaks) {
             if (b > left && b < right) {
-                if (!split(survey, eLow, from, b, allowed, more, cells)) {
+                if (!split(survey, eLow, from, b, allowed, cells)) {
                     return null;
                 }
                 from = b;
             }
         }
-        if (!split(survey, eLow, from, right, allowed, more, cells)) {
+        if (!split(survey, eLow, from, right, allowed, cells)) {
             return null;
         }
         return new PhaseWell(survey, eLow, left, right, cells.toArray(new PhaseCell[0]), steps, allowed);
@@ -138,20 +137,14 @@ final class PhaseWell {
 
     /** Adds cells for [from, to], halving until they fit. */
     private static boolean split(
-            CurveSurvey survey,
-            double e,
-            double from,
-            double to,
-            double allowed,
-            double[] more,
-            List<PhaseCell> cells) {
+            CurveSurvey survey, double e, double from, double to, double allowed, List<PhaseCell> cells) {
         double[][] room = PhaseCell.room();
         double a = from;
         double b = to;
         double size = e - survey.bottom;
         while (a < to) {
             Interruption.check();
-            PhaseCell cell = PhaseCell.build(survey, a, b, size, more);
+            PhaseCell cell = PhaseCell.build(survey, a, b, size);
             if (cell != null && cell.at(e, allowed, room)) {
                 cells.add(cell);
                 if (cells.size() > MOST_CELLS) {

@@ -238,7 +238,7 @@ final class ShootingMesh {
     }
 
     private Cell.Attempt attempt(double x, double y, double size) {
-        return Cell.build(survey::v, Math.min(x, y), Math.max(x, y), scale(x, size), TOLERANCE, THETA, eLow);
+        return Cell.build(survey::v, Math.min(x, y), Math.max(x, y), scale(x, size), TOLERANCE, THETA, eLow, survey);
     }
 
     /** The longest cell from x that fits: up to a jump or kink; null where there is none longer than rounding. */
@@ -331,7 +331,8 @@ final class ShootingMesh {
                         scale(x, size),
                         TOLERANCE,
                         THETA,
-                        eLow);
+                        eLow,
+                        survey);
                 Cell cell = attempt.cell();
                 if (cell != null) {
                     return cell;
@@ -342,7 +343,8 @@ final class ShootingMesh {
         // Values that are rough by the rounding of large terms that cancel: the cell's fit says by how much.
         for (double h = wanted; h > 1e-3 * wanted; h *= 0.6) {
             double to = x + direction * h;
-            Cell cell = Cell.build(survey::v, Math.min(x, to), Math.max(x, to), scale(x, size), ROUGH, THETA, eLow)
+            Cell cell = Cell.build(
+                            survey::v, Math.min(x, to), Math.max(x, to), scale(x, size), ROUGH, THETA, eLow, survey)
                     .cell();
             if (cell != null) {
                 return cell;
