@@ -185,9 +185,7 @@ class PhaseSpaceTest {
     void aShearedPacketHasTheSpreadsOfItsRun() {
         // a weak Kerr mode shears a packet of 10⁴ quanta: K n̄ t = 0.4 turns its circle into an ellipse
         LadderMode kerr = Oscillator.mode(
-                "kerr",
-                Mode.natural(1).with(new Part.Kerr(4e-5)).with(Jump.loss(Rate.natural(1e-3))),
-                List.of());
+                "kerr", Mode.natural(1).with(new Part.Kerr(4e-5)).with(Jump.loss(Rate.natural(1e-3))), List.of());
         Run run = kerr.coherent(1e4).evolve(1, ONE).frames(4).run();
         assertTrue(run.method().contains("displaced"), run.method());
         PhaseField field = run.phaseSpace(1, ONE).wigner();
