@@ -133,7 +133,7 @@ final class OnWindow implements Representation {
     @Override
     public PhaseState phaseState(State state, double time) {
         int j = Representation.nearest(this, time);
-        WindowState at = motion.state(j);
+        WindowState at = motion.displaced(j);
         PhaseState seen = at instanceof PureWindow vector
                 ? new NumberWave(vector.first(), vector.reals(), vector.imaginaries(), vector.error())
                 : mixed((MixedWindow) at);

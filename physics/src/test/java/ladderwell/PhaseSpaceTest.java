@@ -182,6 +182,30 @@ class PhaseSpaceTest {
     }
 
     @Test
+    void aShearedPacketHasTheSpreadsOfItsRun() {
+        // a weak Kerr mode shears a packet of 10⁴ quanta: K n̄ t = 0.4 turns its circle into an ellipse
+        LadderMode kerr = Oscillator.mode(
+                "kerr", Mode.natural(1).with(new Part.Kerr(4e-5)).with(Jump.loss(Rate.natural(1e-3))), List.of());
+        Run run = kerr.coherent(1e4).evolve(1, ONE).frames(4).run();
+        assertTrue(run.method().contains("displaced"), run.method());
+        PhaseField field = run.phaseSpace(1, ONE).wigner();
+        double[] density = field.overMomenta();
+        double mean = 0;
+        double square = 0;
+        for (int i = 0; i < density.length; i++) {
+            mean += density[i] * field.grid().position(i) * field.grid().stepX();
+        }
+        for (int i = 0; i < density.length; i++) {
+            double d = field.grid().position(i) - mean;
+            square += density[i] * d * d * field.grid().stepX();
+        }
+        // the grid leaves a ten-millionth of the state out, at five spreads
+        assertEquals(run.series(Observable.POSITION).value(4), mean, 1e-4);
+        assertEquals(run.series(Observable.SPREAD_OF_POSITION).value(4), Math.sqrt(square), 1e-4);
+        assertTrue(Math.abs(Math.sqrt(square) - Math.sqrt(0.5)) > 0.02, "no shear: " + Math.sqrt(square));
+    }
+
+    @Test
     void husimiIsNowhereNegativeAndWiderThanWigner() {
         PhaseSpace space = mode.number(3).evolve(1, PERIOD).run().phaseSpace(0.5, PERIOD);
         assertTrue(space.husimi().least() >= -space.husimi().bound().size());
