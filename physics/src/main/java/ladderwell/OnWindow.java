@@ -2,6 +2,7 @@ package ladderwell;
 
 import java.util.Optional;
 import ladderwell.evidence.Bound;
+import ladderwell.evidence.PhysicsException;
 import ladderwell.evidence.Record;
 import ladderwell.operator.OperatorFormula;
 import ladderwell.phasespace.Displaced;
@@ -19,6 +20,8 @@ import ladderwell.window.WindowState;
 final class OnWindow implements Representation {
     /** Share of the tolerance that the start may take. */
     private static final double START = 0.1;
+    /** A density operator of so many quanta fits in a number window. */
+    private static final double WINDOW_QUANTA = 1e4;
 
     private final WindowMotion motion;
     private final boolean pure;
@@ -41,16 +44,12 @@ final class OnWindow implements Representation {
         double memory = Memory.allowed();
         Optional<FrameChoice> choice = FrameChoice.of(evolution, mode);
         if (choice.isPresent()) {
-            Coherent coherent = (Coherent) evolution.state();
-            Optional<WindowMotion> framed = WindowMotion.framed(
-                    h,
-                    mode.jumps(),
-                    Math.sqrt(coherent.mean()) * Math.cos(coherent.phaseAngle()),
-                    Math.sqrt(coherent.mean()) * Math.sin(coherent.phaseAngle()),
+            Optional<WindowMotion> framed = framed(
+                    mode,
+                    (Coherent) evolution.state(),
                     times,
                     tolerance,
-                    choice.get().mostLevels(),
-                    memory);
+                    choice.get().mostLevels());
             if (framed.isPresent()) {
                 return new OnWindow(mode, Amplitudes.level(0), framed.get(), pure, "");
             }
@@ -60,6 +59,28 @@ final class OnWindow implements Representation {
                 ? WindowMotion.pure(h, start, times, tolerance, memory)
                 : WindowMotion.mixed(h, mode.jumps(), Mixture.pure(start).density(memory), times, tolerance, memory);
         return new OnWindow(mode, start, motion, pure, choice.isPresent() ? "; the state left a displaced frame" : "");
+    }
+
+    /** Empty if the fluctuation outgrew the frame, or the frame's own bound did not hold: the number window may do better. */
+    private static Optional<WindowMotion> framed(
+            LadderMode mode, Coherent start, double[] times, double tolerance, int mostLevels) {
+        double swing = Math.sqrt(start.mean());
+        try {
+            return WindowMotion.framed(
+                    mode.hamiltonian(),
+                    mode.jumps(),
+                    swing * Math.cos(start.phaseAngle()),
+                    swing * Math.sin(start.phaseAngle()),
+                    times,
+                    tolerance,
+                    mostLevels,
+                    Memory.allowed());
+        } catch (PhysicsException failed) {
+            if (start.mean() > WINDOW_QUANTA) {
+                throw failed;
+            }
+            return Optional.empty();
+        }
     }
 
     boolean isPure() {

@@ -158,7 +158,8 @@ class PhaseSpaceTest {
         // α e^{−(i ω + κ/2) t}: a coherent state stays coherent under loss at zero temperature
         LadderMode lossy =
                 Oscillator.mode("hamiltonian", Mode.natural(1).with(Jump.loss(Rate.natural(0.3))), List.of());
-        PhaseSpace space = lossy.coherent(4).evolve(2, ONE).frames(4).run().phaseSpace(1.6, ONE);
+        PhaseSpace space =
+                lossy.coherent(4).evolve(2, ONE).frames(4).tolerance(1e-9).run().phaseSpace(1.6, ONE);
         assertEquals(1.5, space.time(), 1e-12);
         double size = Math.sqrt(8) * Math.exp(-0.15 * 1.5);
         isGaussianAt(space.wigner(), size * Math.cos(1.5), -size * Math.sin(1.5));

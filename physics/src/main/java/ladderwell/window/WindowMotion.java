@@ -1,7 +1,9 @@
 package ladderwell.window;
 
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.Certainty;
@@ -19,6 +21,7 @@ public final class WindowMotion {
     private final List<Squeeze> squeezes;
     private final Work work;
     private final double allowedBytes;
+    private final Map<Integer, WindowState> plain = new HashMap<>();
 
     /** Levels that a frame starts with. */
     private static final int FRAME_LEVELS = 8;
@@ -237,7 +240,9 @@ public final class WindowMotion {
         if (!framed() || squeezes.get(j).isNone()) {
             return state(j);
         }
-        return squeezes.get(j).takenOut(state(j), allowedBytes);
+        synchronized (plain) {
+            return plain.computeIfAbsent(j, i -> squeezes.get(i).takenOut(state(i), allowedBytes));
+        }
     }
 
     /** Real part of α: the j-th state is D(α) σ D(α)† with σ given by {@link #displaced}; 0 without a frame. */

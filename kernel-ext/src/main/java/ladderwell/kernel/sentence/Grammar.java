@@ -65,8 +65,8 @@ public record Grammar(List<Noun> nouns) {
                                                 Form.NUMBER,
                                                 "1e-9",
                                                 "largest error of the state, between 1e-13 and 0.1")
-                                        .formula("‖ψ − ψ̃‖ at every time")
-                                        .standard("1e-9")),
+                                        .formula("‖ψ − ψ̃‖ of a vector, ‖ρ − ρ̃‖₁ of a density operator, at every time")
+                                        .standard("1e-9; 1e-6 for a mode that jumps")),
                 Noun.of(
                                 "plan",
                                 "plan STATE for DURATION, KEY VALUE, …",
@@ -83,7 +83,7 @@ public record Grammar(List<Noun> nouns) {
                                                 Form.NUMBER,
                                                 "1e-9",
                                                 "largest error of the state, between 1e-13 and 0.1")
-                                        .standard("1e-9")),
+                                        .standard("as in evolve")),
                 Noun.of(
                                 "table",
                                 "table RUN: OBSERVABLE, OBSERVABLE, …, every N, as NAME",
