@@ -137,12 +137,7 @@ final class PhaseWell {
 
     /** Adds cells for [from, to], halving until they fit. */
     private static boolean split(
-            CurveSurvey survey,
-            double e,
-            double from,
-            double to,
-            double allowed,
-            List<PhaseCell> cells) {
+            CurveSurvey survey, double e, double from, double to, double allowed, List<PhaseCell> cells) {
         double[][] room = PhaseCell.room();
         double a = from;
         double b = to;

@@ -343,7 +343,8 @@ final class ShootingMesh {
         // Values that are rough by the rounding of large terms that cancel: the cell's fit says by how much.
         for (double h = wanted; h > 1e-3 * wanted; h *= 0.6) {
             double to = x + direction * h;
-            Cell cell = Cell.build(survey::v, Math.min(x, to), Math.max(x, to), scale(x, size), ROUGH, THETA, eLow, survey)
+            Cell cell = Cell.build(
+                            survey::v, Math.min(x, to), Math.max(x, to), scale(x, size), ROUGH, THETA, eLow, survey)
                     .cell();
             if (cell != null) {
                 return cell;

@@ -192,11 +192,12 @@ class LevelFuzzTest {
             String name = "seed " + SEED + ", trial " + trial;
             double charge = Math.pow(10, -1 + 2 * random.nextDouble());
             int l = random.nextInt(4);
-            Levels coulomb = Levels.of(
-                    Curves.between(0, open, x -> -charge / x + (l == 0 ? 0 : l * (l + 1) / (2 * x * x))));
+            Levels coulomb =
+                    Levels.of(Curves.between(0, open, x -> -charge / x + (l == 0 ? 0 : l * (l + 1) / (2 * x * x))));
             for (int n : new int[] {0, 1, 5, 20}) {
                 double whole = n + l + 1;
-                assertClosed(-charge * charge / (2 * whole * whole), coulomb, n, name + ", Coulomb " + charge + ", l " + l);
+                assertClosed(
+                        -charge * charge / (2 * whole * whole), coulomb, n, name + ", Coulomb " + charge + ", l " + l);
             }
 
             double g = 1.2 + random.nextDouble() * 6;
@@ -212,15 +213,14 @@ class LevelFuzzTest {
                 Levels morse = Levels.of(Curves.morse(depth, a));
                 assertEquals((long) Math.floor(top) + 1, morse.count(), name + ", Morse " + depth + ", " + a);
                 for (long n = 0; n <= top; n += 1 + n / 3) {
-                    assertClosed(
-                            Curves.morseLevel(depth, a, (int) n), morse, n, name + ", Morse " + depth + ", " + a);
+                    assertClosed(Curves.morseLevel(depth, a, (int) n), morse, n, name + ", Morse " + depth + ", " + a);
                 }
             }
 
             double lambda = 0.3 + random.nextDouble() * 8;
             double shift = random.nextGaussian();
-            Levels hole = Levels.of(Curves.open(
-                    x -> -lambda * (lambda + 1) / 2 * Curves.sech(x - shift) * Curves.sech(x - shift)));
+            Levels hole = Levels.of(
+                    Curves.open(x -> -lambda * (lambda + 1) / 2 * Curves.sech(x - shift) * Curves.sech(x - shift)));
             if (Math.abs(lambda - Math.rint(lambda)) > 0.02) {
                 assertEquals((long) Math.ceil(lambda), hole.count(), name + ", sech² " + lambda);
                 for (int n = 0; n < lambda; n++) {
