@@ -75,11 +75,14 @@ abstract sealed class Equation permits VectorEquation, DensityEquation {
     /** Norm that stands behind bounds ≤ this · {@link #size}. */
     abstract double rank();
 
-    /** Frobenius or vector norm of what lies in the window. */
+    /** Frobenius or vector norm of what lies in the window; {@link #rounding} then speaks of the same plane. */
     abstract double size(Plane y);
 
-    /** Bound of a rounding error of one application of order 0 to y, in the norm of {@link #size}. */
-    abstract double rounding(Plane y);
+    /** Bound of a rounding error of one application of order 0 to the plane last measured, in the norm of {@link #size}. */
+    abstract double rounding();
+
+    /** Copies what lies in the window and its mirrored elements. */
+    abstract void copy(Plane from, Plane to);
 
     /** Bounds of the norm of what sticks out: below the window, and above it. */
     abstract void border(Plane y, double[] belowAndAbove);

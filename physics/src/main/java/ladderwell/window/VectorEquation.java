@@ -6,6 +6,7 @@ import java.util.List;
 final class VectorEquation extends Equation {
     private final double[] weights;
     private final double terms;
+    private double weighted;
 
     /** @param shift c = i · shift, subtracted from K */
     VectorEquation(Generator generator, long first, int levels, double factor, double shift) {
@@ -81,18 +82,27 @@ final class VectorEquation extends Equation {
 
     @Override
     double size(Plane y) {
-        return Math.sqrt(Rows.squares(y, margin(), levels));
+        double sum = 0;
+        double heavy = 0;
+        for (int n = 0; n < levels; n++) {
+            double re = y.re[margin() + n];
+            double im = y.im[margin() + n];
+            double square = re * re + im * im;
+            sum += square;
+            heavy += weights[n] * square;
+        }
+        weighted = heavy;
+        return Math.sqrt(sum);
     }
 
     @Override
-    double rounding(Plane y) {
-        double sum = 0;
-        for (int n = 0; n < levels; n++) {
-            double a = y.re[margin() + n];
-            double b = y.im[margin() + n];
-            sum += weights[n] * (a * a + b * b);
-        }
-        return terms * Math.sqrt(sum);
+    double rounding() {
+        return terms * Math.sqrt(weighted);
+    }
+
+    @Override
+    void copy(Plane from, Plane to) {
+        to.copyFrom(from);
     }
 
     @Override
