@@ -263,6 +263,40 @@ class DarkPage(unittest.TestCase):
             browser.close()
 
 
+class PhasePage(unittest.TestCase):
+    """A Wigner function at an instant, and one that moves below its density."""
+
+    def test_fields_are_drawn_with_orbit_and_dashed_negative_parts_and_move(self):
+        browser = Browser()
+        try:
+            driver = browser.open("phase.html")
+            drawn(driver, 2)
+            still, film = driver.find_elements(By.CSS_SELECTOR, ".lw")
+            self.assertEqual(1, len(still.find_elements(By.CSS_SELECTOR, ".heatmaplayer image")))
+            self.assertGreater(len(still.find_elements(By.CSS_SELECTOR, ".contour path")), 2)
+            self.assertIn("negativity", still.find_element(By.CSS_SELECTOR, ".lw-verdict").text)
+            self.assertIsNone(driver.execute_script("return window.hacked || null"))
+            image = "return arguments[0].querySelector('.heatmaplayer image').href.baseVal"
+            ring = ("return Array.from(arguments[0].querySelectorAll('.scatterlayer .points path'))"
+                    ".map(function(p){return p.getAttribute('transform')}).join()")
+            driver.execute_script("arguments[0].ladderwell.show(3)", film)
+            time.sleep(0.5)
+            before, there, line = driver.execute_script(image, film), driver.execute_script(ring, film), curve(driver, film)
+            driver.execute_script("arguments[0].ladderwell.show(20)", film)
+            until("another field", lambda: driver.execute_script(image, film) != before)
+            until("a ring elsewhere", lambda: driver.execute_script(ring, film) != there)
+            until("another density", lambda: curve(driver, film) != line)
+            # the same positions stand below one another: both drawings share their scale
+            ranges = driver.execute_script(
+                "return Array.from(arguments[0].querySelectorAll('.js-plotly-plot')).map(function(e){"
+                "return e.layout.xaxis.range.join()})", film)
+            self.assertEqual(2, len(ranges))
+            self.assertEqual(ranges[0], ranges[1])
+            self.assertEqual([], browser.complaints())
+        finally:
+            browser.close()
+
+
 class PageWithoutScripts(unittest.TestCase):
     def test_stills_stand_in(self):
         browser = Browser(scripts=False)

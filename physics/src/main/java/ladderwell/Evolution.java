@@ -11,7 +11,7 @@ import ladderwell.quantity.Quantity;
  * @param state the state at time 0
  * @param duration how long, in lab units (natural units: a plain number) or in classical periods at the mean energy
  * @param frames number of equal time steps; results have one row more, time 0
- * @param tolerance largest error ‖ψ − ψ̃‖ of the state
+ * @param tolerance largest error of the state: ‖ψ − ψ̃‖ of a vector, ‖ρ − ρ̃‖₁ of a density operator
  */
 public record Evolution(State state, Quantity duration, long frames, double tolerance) {
 
@@ -20,6 +20,9 @@ public record Evolution(State state, Quantity duration, long frames, double tole
 
     /** Tolerance where none is asked for. */
     public static final double DEFAULT_TOLERANCE = 1e-9;
+
+    /** The same for density operators: the bound of their rounding grows with the run, and is far from 1e-9 after many decays. */
+    public static final double DENSITY_TOLERANCE = 1e-6;
 
     public Evolution {
         boolean natural = state.oscillator().scale().isNatural();
@@ -34,7 +37,9 @@ public record Evolution(State state, Quantity duration, long frames, double tole
     }
 
     static Evolution of(State state, Quantity duration) {
-        return new Evolution(state, duration, DEFAULT_FRAMES, DEFAULT_TOLERANCE);
+        boolean jumps =
+                state.oscillator() instanceof LadderMode mode && !mode.jumps().isEmpty();
+        return new Evolution(state, duration, DEFAULT_FRAMES, jumps ? DENSITY_TOLERANCE : DEFAULT_TOLERANCE);
     }
 
     /** The same with this many equal time steps. */
@@ -52,6 +57,15 @@ public record Evolution(State state, Quantity duration, long frames, double tole
         return duration.kind() == Kind.PERIODS
                 ? duration.value() * state.period()
                 : duration.si() / state.oscillator().scale().time();
+    }
+
+    /**
+     * How it would be computed, before it runs: method, size, memory and time.
+     *
+     * @throws PhysicsException if it is known already that it cannot be
+     */
+    public Plan plan() {
+        return Plan.of(this);
     }
 
     /**

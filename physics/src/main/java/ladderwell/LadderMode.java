@@ -197,6 +197,8 @@ public record LadderMode(String kind, Mode mode, Scale scale, List<Fact> given) 
         if (scale.isNatural()) {
             return List.copyOf(facts);
         }
+        // shown with its ω below
+        facts.removeIf(fact -> fact.name().equals("frequency"));
         Shown shown = new Shown(scale);
         double omega = Math.abs(mode.omega());
         if (omega > 0) {

@@ -4,7 +4,7 @@ import ladderwell.evidence.Bound;
 import ladderwell.level.Levels;
 import ladderwell.motion.PhasedState;
 import ladderwell.numeric.HermiteFunctions;
-import ladderwell.phasespace.GaussianWave;
+import ladderwell.phasespace.Displaced;
 import ladderwell.phasespace.NumberWave;
 import ladderwell.phasespace.PhaseState;
 import ladderwell.phasespace.SampledWave;
@@ -36,7 +36,7 @@ final class LevelWaves {
             double swing = Math.sqrt(2 * coherent.mean());
             double angle = coherent.phaseAngle() - time;
             double off = swing * (4 * Math.ulp(1.0) + 2 * Math.ulp(Math.abs(time) + Math.abs(coherent.phaseAngle())));
-            return new GaussianWave(swing * Math.cos(angle), swing * Math.sin(angle), off);
+            return Displaced.coherent(swing * Math.cos(angle), swing * Math.sin(angle), off);
         }
         Amplitudes amplitudes = run.amplitudes();
         PhasedState now = PhasedState.of(run.levels(), amplitudes, new double[] {time});
@@ -60,6 +60,12 @@ final class LevelWaves {
                         + " are summed");
             }
             return new NumberWave(first, re, im, error);
+        }
+        if (state.oscillator() instanceof PotentialWell well
+                && well.potential().period().isPresent()) {
+            throw new IllegalArgumentException(
+                    "the positions of this oscillator go round, and a Wigner function of the "
+                            + "line has no meaning there; expected an oscillator on the line");
         }
         if (!run.levels().hasWaveFunctions()) {
             throw new IllegalArgumentException("the levels of this oscillator have no real wave functions, so that "

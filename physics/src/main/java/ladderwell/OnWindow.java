@@ -1,8 +1,11 @@
 package ladderwell;
 
+import java.util.Optional;
 import ladderwell.evidence.Bound;
+import ladderwell.evidence.PhysicsException;
 import ladderwell.evidence.Record;
 import ladderwell.operator.OperatorFormula;
+import ladderwell.phasespace.Displaced;
 import ladderwell.phasespace.NumberMatrix;
 import ladderwell.phasespace.NumberWave;
 import ladderwell.phasespace.PhaseState;
@@ -17,13 +20,17 @@ import ladderwell.window.WindowState;
 final class OnWindow implements Representation {
     /** Share of the tolerance that the start may take. */
     private static final double START = 0.1;
+    /** A density operator of so many quanta fits in a number window. */
+    private static final double WINDOW_QUANTA = 1e4;
 
     private final WindowMotion motion;
     private final boolean pure;
     private final boolean varies;
+    private final String remark;
     private final WindowReadings readings;
 
-    private OnWindow(LadderMode mode, Amplitudes start, WindowMotion motion, boolean pure) {
+    private OnWindow(LadderMode mode, Amplitudes start, WindowMotion motion, boolean pure, String remark) {
+        this.remark = remark;
         varies = mode.moves();
         this.motion = motion;
         this.pure = pure;
@@ -32,14 +39,52 @@ final class OnWindow implements Representation {
 
     static OnWindow of(Evolution evolution, LadderMode mode, double[] times) {
         double tolerance = evolution.tolerance();
-        Amplitudes start = evolution.state().amplitudes(Math.max(1e-13, START * tolerance / 2));
         OperatorFormula h = mode.hamiltonian();
         boolean pure = mode.jumps().isEmpty();
         double memory = Memory.allowed();
+        Optional<FrameChoice> choice = FrameChoice.of(evolution, mode);
+        if (choice.isPresent()) {
+            Optional<WindowMotion> framed = framed(
+                    mode,
+                    (Coherent) evolution.state(),
+                    times,
+                    tolerance,
+                    choice.get().mostLevels());
+            if (framed.isPresent()) {
+                return new OnWindow(mode, Amplitudes.level(0), framed.get(), pure, "");
+            }
+        }
+        Amplitudes start = evolution.state().amplitudes(Math.max(1e-13, START * tolerance / 2));
         WindowMotion motion = pure
                 ? WindowMotion.pure(h, start, times, tolerance, memory)
                 : WindowMotion.mixed(h, mode.jumps(), Mixture.pure(start).density(memory), times, tolerance, memory);
-        return new OnWindow(mode, start, motion, pure);
+        return new OnWindow(mode, start, motion, pure, choice.isPresent() ? "; the state left a displaced frame" : "");
+    }
+
+    /** Empty if the fluctuation outgrew the frame, or the frame's own bound did not hold: the number window may do better. */
+    private static Optional<WindowMotion> framed(
+            LadderMode mode, Coherent start, double[] times, double tolerance, int mostLevels) {
+        double swing = Math.sqrt(start.mean());
+        try {
+            return WindowMotion.framed(
+                    mode.hamiltonian(),
+                    mode.jumps(),
+                    swing * Math.cos(start.phaseAngle()),
+                    swing * Math.sin(start.phaseAngle()),
+                    times,
+                    tolerance,
+                    mostLevels,
+                    Memory.allowed());
+        } catch (PhysicsException failed) {
+            if (start.mean() > WINDOW_QUANTA) {
+                throw failed;
+            }
+            return Optional.empty();
+        }
+    }
+
+    boolean isPure() {
+        return pure;
     }
 
     WindowMotion motion() {
@@ -63,6 +108,10 @@ final class OnWindow implements Representation {
 
     @Override
     public String method() {
+        if (motion.framed()) {
+            return "Taylor series of the " + (pure ? "vector" : "density operator")
+                    + " in a frame displaced along the mean-field path";
+        }
         return (varies ? "Taylor" : "Chebyshev") + " series of the " + (pure ? "vector" : "density operator")
                 + " in a window of number states";
     }
@@ -70,7 +119,8 @@ final class OnWindow implements Representation {
     @Override
     public String reason() {
         return (pure ? "nothing jumps" : "the mode jumps") + " and the Hamiltonian "
-                + (varies ? "varies with time" : "does not vary");
+                + (varies ? "varies with time" : "does not vary")
+                + (motion.framed() ? "; the fluctuation is small beside the displacement" : remark);
     }
 
     @Override
@@ -103,10 +153,17 @@ final class OnWindow implements Representation {
 
     @Override
     public PhaseState phaseState(State state, double time) {
-        WindowState at = motion.state(Representation.nearest(this, time));
-        return at instanceof PureWindow vector
+        int j = Representation.nearest(this, time);
+        WindowState at = motion.displaced(j);
+        PhaseState seen = at instanceof PureWindow vector
                 ? new NumberWave(vector.first(), vector.reals(), vector.imaginaries(), vector.error())
                 : mixed((MixedWindow) at);
+        if (!motion.framed()) {
+            return seen;
+        }
+        double x = Math.sqrt(2) * motion.displacementRe(j).value();
+        double p = Math.sqrt(2) * motion.displacementIm(j).value();
+        return new Displaced(seen, x, p, 2 * Math.ulp(Math.max(Math.abs(x), Math.abs(p))));
     }
 
     private static PhaseState mixed(MixedWindow at) {

@@ -179,7 +179,7 @@ public final class PhaseSpace {
         PhaseField.Reading reading = negativity;
         if (reading == null) {
             PhaseGrid fine = PhaseGrid.covering(box, 2 * LEAST_POINTS, MOST_FOR_INTEGRALS);
-            reading = new PhaseFunctions().wigner(state, fine).negativity();
+            reading = new PhaseFunctions().negativity(state, fine);
             negativity = reading;
         }
         return reading;

@@ -80,6 +80,11 @@ public final class Run {
         return representation.stateError();
     }
 
+    /** What {@link #stateError} is the size of: the error of a vector, or that of a density operator in trace norm. */
+    public String errorSymbol() {
+        return representation instanceof OnWindow window && !window.isPure() ? "‖ρ − ρ̃‖₁" : "‖ψ − ψ̃‖";
+    }
+
     /** The method in a few words. */
     public String method() {
         return representation.method();

@@ -34,8 +34,12 @@ final class WindowDensity {
         double error = 0;
         for (int j = 0; j < values.length; j++) {
             Interruption.check();
-            WindowState state = motion.state(j);
-            double[][] functions = Levels.harmonic().waveFunctions(state.first(), state.levels(), x);
+            WindowState state = motion.displaced(j);
+            double[][] functions = Levels.harmonic()
+                    .waveFunctions(
+                            state.first(),
+                            state.levels(),
+                            seen(x, motion.displacementRe(j).value()));
             values[j] = frame(state, functions, points);
             double off = state.traceNormError().size();
             // inside the window |⟨x|δ|x⟩| ≤ Σ φ² ‖δ‖; what lies above adds as much again
@@ -46,6 +50,15 @@ final class WindowDensity {
                             + 2 * levels * Levels.harmonic().waveFunctionError(state.first() + state.levels() - 1));
         }
         return new Density(run, x, values, Bound.estimated(error), "sum over number states");
+    }
+
+    /** The same places in the frame of the window. */
+    private static double[] seen(double[] x, double displacement) {
+        double[] seen = new double[x.length];
+        for (int i = 0; i < x.length; i++) {
+            seen[i] = x[i] - Math.sqrt(2) * displacement;
+        }
+        return seen;
     }
 
     private static double[] grid(Run run, int times, int points) {

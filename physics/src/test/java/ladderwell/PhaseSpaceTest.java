@@ -15,6 +15,7 @@ import ladderwell.mode.Part;
 import ladderwell.mode.Rate;
 import ladderwell.phasespace.PhaseField;
 import ladderwell.phasespace.PhaseGrid;
+import ladderwell.potential.Potential;
 import ladderwell.quantity.Quantity;
 import org.junit.jupiter.api.Test;
 
@@ -157,12 +158,52 @@ class PhaseSpaceTest {
         // α e^{−(i ω + κ/2) t}: a coherent state stays coherent under loss at zero temperature
         LadderMode lossy =
                 Oscillator.mode("hamiltonian", Mode.natural(1).with(Jump.loss(Rate.natural(0.3))), List.of());
-        PhaseSpace space = lossy.coherent(4).evolve(2, ONE).frames(4).run().phaseSpace(1.6, ONE);
+        PhaseSpace space =
+                lossy.coherent(4).evolve(2, ONE).frames(4).tolerance(1e-9).run().phaseSpace(1.6, ONE);
         assertEquals(1.5, space.time(), 1e-12);
         double size = Math.sqrt(8) * Math.exp(-0.15 * 1.5);
         isGaussianAt(space.wigner(), size * Math.cos(1.5), -size * Math.sin(1.5));
         assertTrue(
                 space.wigner().bound().size() < 1e-7, "bound " + space.wigner().bound());
+    }
+
+    @Test
+    void aRunInADisplacedFrameIsReadWhereItIs() {
+        // the same loss at a million quanta; damped so little that the packet is still far out
+        LadderMode lossy =
+                Oscillator.mode("hamiltonian", Mode.natural(1).with(Jump.loss(Rate.natural(0.01))), List.of());
+        Run run = lossy.coherent(1e6).evolve(2, ONE).frames(4).run();
+        assertTrue(run.method().contains("displaced"), run.method());
+        PhaseSpace space = run.phaseSpace(1.5, ONE);
+        double size = Math.sqrt(2e6) * Math.exp(-0.005 * 1.5);
+        isGaussianAt(space.wigner(), size * Math.cos(1.5), -size * Math.sin(1.5));
+        assertTrue(
+                space.wigner().bound().size() < 1e-6, "bound " + space.wigner().bound());
+        assertEquals(1, space.wigner().total(), 1e-6);
+    }
+
+    @Test
+    void aShearedPacketHasTheSpreadsOfItsRun() {
+        // a weak Kerr mode shears a packet of 10⁴ quanta: K n̄ t = 0.4 turns its circle into an ellipse
+        LadderMode kerr = Oscillator.mode(
+                "kerr", Mode.natural(1).with(new Part.Kerr(4e-5)).with(Jump.loss(Rate.natural(1e-3))), List.of());
+        Run run = kerr.coherent(1e4).evolve(1, ONE).frames(4).run();
+        assertTrue(run.method().contains("displaced"), run.method());
+        PhaseField field = run.phaseSpace(1, ONE).wigner();
+        double[] density = field.overMomenta();
+        double mean = 0;
+        double square = 0;
+        for (int i = 0; i < density.length; i++) {
+            mean += density[i] * field.grid().position(i) * field.grid().stepX();
+        }
+        for (int i = 0; i < density.length; i++) {
+            double d = field.grid().position(i) - mean;
+            square += density[i] * d * d * field.grid().stepX();
+        }
+        // the grid leaves a ten-millionth of the state out, at five spreads
+        assertEquals(run.series(Observable.POSITION).value(4), mean, 1e-4);
+        assertEquals(run.series(Observable.SPREAD_OF_POSITION).value(4), Math.sqrt(square), 1e-4);
+        assertTrue(Math.abs(Math.sqrt(square) - Math.sqrt(0.5)) > 0.02, "no shear: " + Math.sqrt(square));
     }
 
     @Test
@@ -184,8 +225,24 @@ class PhaseSpaceTest {
                     .phaseSpace(0.25, PERIOD)
                     .negativity();
             assertEquals(published[n], reading.value(), reading.bound().size() + 5e-9);
-            assertTrue(reading.bound().size() < 0.01, "level " + n + ": " + reading.bound());
+            assertTrue(reading.bound().size() < 1e-5, "level " + n + ": " + reading.bound());
         }
+    }
+
+    @Test
+    void negativityOfAHighLevelAgreesWithItsGrid() {
+        PhaseSpace space = mode.number(40).evolve(1, PERIOD).run().phaseSpace(0.25, PERIOD);
+        PhaseField.Reading grid = space.wigner(PhaseGrid.square(11.5, 801)).negativity();
+        assertEquals(grid.value(), space.negativity().value(), grid.bound().size());
+        assertTrue(space.negativity().bound().size() < 1e-5);
+    }
+
+    @Test
+    void positionsThatGoRoundAreRefusedInWords() {
+        Oscillator pendulum = Oscillator.in(Potential.pendulum(UNIT, UNIT, number(3)));
+        Run run = pendulum.superposition(0, 1).evolve(1, ONE).frames(2).run();
+        IllegalArgumentException round = assertThrows(IllegalArgumentException.class, () -> run.phaseSpace(0.5, ONE));
+        assertTrue(round.getMessage().contains("go round"), round.getMessage());
     }
 
     @Test

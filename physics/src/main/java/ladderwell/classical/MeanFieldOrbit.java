@@ -2,6 +2,7 @@ package ladderwell.classical;
 
 import java.util.ArrayList;
 import java.util.List;
+import ladderwell.numeric.Interruption;
 import org.apache.commons.math3.ode.ContinuousOutputModel;
 import org.apache.commons.math3.ode.FirstOrderDifferentialEquations;
 import org.apache.commons.math3.ode.nonstiff.DormandPrince853Integrator;
@@ -57,6 +58,7 @@ final class MeanFieldOrbit implements ClassicalOrbit {
 
                     @Override
                     public void computeDerivatives(double t, double[] y, double[] out) {
+                        Interruption.check();
                         velocity.at(t, y[0], y[1], out);
                     }
                 },

@@ -24,6 +24,9 @@ final class Cell {
         }
     }
 
+    /** Rounding of v may exceed the tolerance by so much. */
+    private static final double ROUGHEST = 64;
+
     private static final double[] CHECKS = {-1, -0.97, -0.31, 0.55, 0.93, 1};
 
     final double a;
@@ -108,9 +111,17 @@ final class Cell {
      * @param tolerance fit over that size
      * @param thetaMost largest r² max|v − mean| in any case
      * @param eLow the mesh serves energies above this: a cell may be longer if the phase outruns theta
+     * @param survey whose places the cell is held against as well
      */
     static Attempt build(
-            DoubleUnaryOperator v, double a, double b, double scale, double tolerance, double thetaMost, double eLow) {
+            DoubleUnaryOperator v,
+            double a,
+            double b,
+            double scale,
+            double tolerance,
+            double thetaMost,
+            double eLow,
+            CurveSurvey survey) {
         int d = Chebyshev.DEGREE;
         double c = (a + b) / 2;
         double r = (b - a) / 2;
@@ -128,7 +139,12 @@ final class Cell {
         // The second part is the rounding of x itself; a cell so short that a jump would hide in it is none.
         double rounding = 2e-16 * Math.max(Math.abs(a), Math.abs(b)) * (most - least) / (2 * r);
         double eps = tolerance * size + Math.min(rounding, 1e-11 * size);
-        if (!(Math.abs(t[d]) + Math.abs(t[d - 1]) <= eps)) {
+        double misfit = Math.abs(t[d]) + Math.abs(t[d - 1]);
+        if (misfit > eps && misfit <= ROUGHEST * eps) {
+            // Large terms that cancel leave a roughness that no shorter cell would lose; the fit measures it below.
+            eps = Math.max(eps, Math.min(ROUGHEST * eps, 4 * roughness(v, c, r)));
+        }
+        if (!(misfit <= eps)) {
             return new Attempt(null, 0.75, true);
         }
         int n = d;
@@ -159,7 +175,8 @@ final class Cell {
             double x = s == -1 ? Math.nextUp(a) : s == 1 ? Math.nextDown(b) : c + r * s;
             fit = Math.max(fit, Math.abs(mean + Chebyshev.value(q, s) - v.applyAsDouble(x)));
         }
-        if (!(fit <= 4 * eps)) {
+        double level = mean;
+        if (!(fit <= 4 * eps && survey.agrees(a, b, 4 * eps, x -> level + Chebyshev.value(q, (x - c) / r)))) {
             return new Attempt(null, 0.75, true);
         }
         for (int j = 0; j <= n; j++) {
@@ -191,6 +208,22 @@ final class Cell {
             m++;
         }
         return new Attempt(new Cell(a, b, mean, theta, fit, size, ofU, ofV, m + 1), 1, false);
+    }
+
+    /** Rounding of the values of v around c, from fourth differences so close together that a smooth function has none. */
+    private static double roughness(DoubleUnaryOperator v, double c, double r) {
+        double step = r * 0x1p-16;
+        double[] f = new double[12];
+        for (int i = 0; i < f.length; i++) {
+            f[i] = v.applyAsDouble(c + (i - 6) * step);
+        }
+        double square = 0;
+        for (int i = 0; i + 4 < f.length; i++) {
+            double difference = (f[i] + f[i + 4]) - 4 * (f[i + 1] + f[i + 3]) + 6 * f[i + 2];
+            square += difference * difference;
+        }
+        // 70 is the sum of the squares of 1, 4, 6, 4, 1.
+        return Math.sqrt(square / (f.length - 4) / 70);
     }
 
     private static double[] next(double[] p, double[] q, int m) {

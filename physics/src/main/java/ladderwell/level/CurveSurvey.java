@@ -2,6 +2,7 @@ package ladderwell.level;
 
 import java.util.Arrays;
 import java.util.TreeSet;
+import java.util.function.DoubleUnaryOperator;
 
 /**
  * What has to be known of a potential before it can be solved: where its well is, how wide, where the continuum begins, whether it is bounded
@@ -40,6 +41,8 @@ final class CurveSurvey {
     final boolean singular;
 
     private final PotentialCurve curve;
+    private double[] seenAt = {};
+    private double[] seen2V = {};
     private double[] wellsAt = {};
     private double[] wells2V = {};
 
@@ -83,7 +86,7 @@ final class CurveSurvey {
         bottom = found[1];
         bottomAt = found[0];
         length = naturalLength(found[0], found[1]);
-        start = even ? 0 : singular ? left : awayFromWalls(found[0]);
+        start = even ? 0 : singular ? left : awayFromWalls(onBreak(found[0]));
         if (!(bottom < threshold)) {
             throw new IllegalArgumentException(
                     "the potential has no well: nowhere does it lie below its value far out, " + threshold / 2);
@@ -170,6 +173,11 @@ final class CurveSurvey {
                 at = point;
             }
             many++;
+        }
+        seenAt = Arrays.copyOf(x, many);
+        seen2V = new double[many];
+        for (int i = 0; i < many; i++) {
+            seen2V[i] = 2 * value[i];
         }
         wellsAt = new double[MOST_WELLS];
         wells2V = new double[MOST_WELLS];
@@ -279,9 +287,25 @@ final class CurveSurvey {
         return best;
     }
 
-    /** The least places met, one in each well. */
-    double[] wells() {
-        return wellsAt;
+    /** Whether a function agrees with v within so much at all places between a and b that were looked at: what a coarse cell would miss. */
+    boolean agrees(double a, double b, double within, DoubleUnaryOperator function) {
+        int i = Arrays.binarySearch(seenAt, a);
+        for (i = i < 0 ? -i - 1 : i + 1; i < seenAt.length && seenAt[i] < b; i++) {
+            if (!(Math.abs(function.applyAsDouble(seenAt[i]) - seen2V[i]) <= within)) {
+                return false;
+            }
+        }
+        return true;
+    }
+
+    /** The break within rounding of x, else x: an edge next to a break would leave no room between them. */
+    private double onBreak(double x) {
+        for (double b : breaks) {
+            if (Math.abs(b - x) < 1e-6 * length) {
+                return b;
+            }
+        }
+        return x;
     }
 
     /** Whether some well beyond x, that way, lies below e. */

@@ -59,7 +59,8 @@ final class HighLevels {
                 double best = e + step;
                 // The count itself must change here.
                 if (well.excess(best - delta, n) <= 0 && well.excess(best + delta, n) >= 0) {
-                    return found(best, Math.min(delta, rounding(well.noise / slope, best)), well.noise / slope, well.fit);
+                    return found(
+                            best, Math.min(delta, rounding(well.noise / slope, best)), well.noise / slope, well.fit);
                 }
                 return null;
             }
@@ -110,8 +111,7 @@ final class HighLevels {
     }
 
     /** A table for levels first … last; null where the excess is not smooth there. */
-    @Nullable
-    Table table(long first, long last) {
+    @Nullable Table table(long first, long last) {
         double low = near(first);
         double height = low - survey.bottom;
         low -= 4e-3 * height;
@@ -120,7 +120,8 @@ final class HighLevels {
         if (!(high < survey.threshold && high > low)) {
             return null;
         }
-        // Higher up the meshes that lead from one turning point to the next grow long: a well for each energy is quicker.
+        // Higher up the meshes that lead from one turning point to the next grow long: a well for each energy is
+        // quicker.
         PhaseWell well = first < FAR ? PhaseWell.of(survey, low, first) : null;
         if (well == null && first < FAR) {
             return null;
@@ -149,6 +150,7 @@ final class HighLevels {
         private final double[] series;
         /** Of n over n + ½. */
         private final double noise;
+
         private final double fit;
         private final double from;
         private final double to;

@@ -87,9 +87,8 @@ final class PhaseCell {
      * The cell on [a, b] where v follows a polynomial there; otherwise null.
      *
      * @param size of v that the fit may refer to besides the values in the cell
-     * @param more further places where v is looked at, in any order
      */
-    static @Nullable PhaseCell build(CurveSurvey survey, double a, double b, double size, double[] more) {
+    static @Nullable PhaseCell build(CurveSurvey survey, double a, double b, double size) {
         double c = (a + b) / 2;
         double r = (b - a) / 2;
         double[] v = new double[N + 1];
@@ -108,12 +107,9 @@ final class PhaseCell {
         for (double s : CHECKS) {
             fit = Math.max(fit, Math.abs(between(v, s) - survey.v(c + r * s)));
         }
-        for (double x : more) {
-            if (x > a && x < b) {
-                fit = Math.max(fit, Math.abs(between(v, (x - c) / r) - survey.v(x)));
-            }
-        }
-        return fit <= 4 * allowed ? new PhaseCell(a, b, v, fit) : null;
+        return fit <= 4 * allowed && survey.agrees(a, b, 4 * allowed, x -> between(v, (x - c) / r))
+                ? new PhaseCell(a, b, v, fit)
+                : null;
     }
 
     /** Coefficient N − 1 or N of the Chebyshev series. */

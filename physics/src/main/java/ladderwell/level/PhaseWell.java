@@ -42,7 +42,13 @@ final class PhaseWell {
     double slope;
 
     private PhaseWell(
-            CurveSurvey survey, double eLow, double left, double right, PhaseCell[] cells, double[] steps, double allowed) {
+            CurveSurvey survey,
+            double eLow,
+            double left,
+            double right,
+            PhaseCell[] cells,
+            double[] steps,
+            double allowed) {
         this.survey = survey;
         this.eLow = eLow;
         this.left = left;
@@ -74,17 +80,16 @@ final class PhaseWell {
         // What a level can be resolved to by its own rounding, in radians.
         double allowed = 2e-15 * levels + 2e-14;
         List<PhaseCell> cells = new ArrayList<>();
-        double[] more = survey.wells();
         double from = left;
         for (double b : survey.breaks) {
             if (b > left && b < right) {
-                if (!split(survey, eLow, from, b, allowed, more, cells)) {
+                if (!split(survey, eLow, from, b, allowed, cells)) {
                     return null;
                 }
                 from = b;
             }
         }
-        if (!split(survey, eLow, from, right, allowed, more, cells)) {
+        if (!split(survey, eLow, from, right, allowed, cells)) {
             return null;
         }
         return new PhaseWell(survey, eLow, left, right, cells.toArray(new PhaseCell[0]), steps, allowed);
@@ -132,20 +137,14 @@ final class PhaseWell {
 
     /** Adds cells for [from, to], halving until they fit. */
     private static boolean split(
-            CurveSurvey survey,
-            double e,
-            double from,
-            double to,
-            double allowed,
-            double[] more,
-            List<PhaseCell> cells) {
+            CurveSurvey survey, double e, double from, double to, double allowed, List<PhaseCell> cells) {
         double[][] room = PhaseCell.room();
         double a = from;
         double b = to;
         double size = e - survey.bottom;
         while (a < to) {
             Interruption.check();
-            PhaseCell cell = PhaseCell.build(survey, a, b, size, more);
+            PhaseCell cell = PhaseCell.build(survey, a, b, size);
             if (cell != null && cell.at(e, allowed, room)) {
                 cells.add(cell);
                 if (cells.size() > MOST_CELLS) {
@@ -211,8 +210,7 @@ final class PhaseWell {
             leftMesh.cover(e, ShootingMesh.TAIL);
             int zeros = leftShot.inwards(e, -1);
             PhaseCell first = cells[0];
-            angle = zeros * Math.PI
-                    + half(first.wa * leftShot.rightY, leftShot.rightP + first.bendA * leftShot.rightY);
+            angle = zeros * Math.PI + half(first.wa * leftShot.rightY, leftShot.rightP + first.bendA * leftShot.rightY);
             steps += leftMesh.cells().length;
             worst = Math.max(worst, fit(leftMesh));
         }
@@ -229,7 +227,8 @@ final class PhaseWell {
         if (rightMesh != null && rightShot != null) {
             rightMesh.cover(e, ShootingMesh.TAIL);
             int zeros = rightShot.inwards(e, 1);
-            angle += zeros * Math.PI + half(last.wb * rightShot.rightY, -rightShot.rightP - last.bendB * rightShot.rightY);
+            angle += zeros * Math.PI
+                    + half(last.wb * rightShot.rightY, -rightShot.rightP - last.bendB * rightShot.rightY);
             steps += rightMesh.cells().length;
             worst = Math.max(worst, fit(rightMesh));
         }
@@ -258,8 +257,9 @@ final class PhaseWell {
 
     @Override
     public String toString() {
-        return cells.length + " phase cells from " + left + " to " + right + ", " + Arrays.toString(new int[] {
-            leftMesh == null ? 0 : leftMesh.cells().length, rightMesh == null ? 0 : rightMesh.cells().length
-        });
+        return cells.length + " phase cells from " + left + " to " + right + ", "
+                + Arrays.toString(new int[] {
+                    leftMesh == null ? 0 : leftMesh.cells().length, rightMesh == null ? 0 : rightMesh.cells().length
+                });
     }
 }

@@ -24,7 +24,6 @@ final class ShootingLevels implements Levels {
     /** Factors of 2 in a table. */
     private static final int WIDE = 3;
 
-
     private final CurveSurvey survey;
     private final Map<Integer, LevelSearch> bands = new HashMap<>();
     private final HighLevels high;
@@ -440,8 +439,7 @@ final class ShootingLevels implements Levels {
                         cell.shapes(s, u, v);
                         known = cell;
                     }
-                    value = cell.value(
-                            s, cell.z(wave.e()), wave.values()[index], wave.slopes()[index], u, v, g);
+                    value = cell.value(s, cell.z(wave.e()), wave.values()[index], wave.slopes()[index], u, v, g);
                 } else {
                     wave.at(place, g, out);
                     value = out[0];

@@ -223,7 +223,8 @@ final class ShootingMesh {
             double grow = 0.97 * Math.cbrt(THETA / (cell.theta + 1e-3));
             h = cut ? Math.max(h, 2 * cell.r) * 1.2 : 2 * cell.r * Math.max(1.02, Math.min(2, grow));
             h = Math.max(trouble ? wanted : h, 1e-12 * Math.abs(x));
-            // Cells that shrink one after the other approach a jump: the length in use before tells it from a steep place.
+            // Cells that shrink one after the other approach a jump: the length in use before tells it from a steep
+            // place.
             wanted = shortened && !trouble ? Math.max(h, wanted / 3) : h;
             shortened = false;
             depth = cell.low > e ? depth + fall(cell, e) : 0;
@@ -237,7 +238,7 @@ final class ShootingMesh {
     }
 
     private Cell.Attempt attempt(double x, double y, double size) {
-        return Cell.build(survey::v, Math.min(x, y), Math.max(x, y), scale(x, size), TOLERANCE, THETA, eLow);
+        return Cell.build(survey::v, Math.min(x, y), Math.max(x, y), scale(x, size), TOLERANCE, THETA, eLow, survey);
     }
 
     /** The longest cell from x that fits: up to a jump or kink; null where there is none longer than rounding. */
@@ -298,7 +299,8 @@ final class ShootingMesh {
                 far = middle;
             }
         }
-        return attempt(x, direction > 0 ? Math.max(near, far) : Math.min(near, far), size).cell();
+        return attempt(x, direction > 0 ? Math.max(near, far) : Math.min(near, far), size)
+                .cell();
     }
 
     /** A cell from x that looks at the potential beyond a trouble at x itself: its first sliver continues the rest. */
@@ -329,7 +331,8 @@ final class ShootingMesh {
                         scale(x, size),
                         TOLERANCE,
                         THETA,
-                        eLow);
+                        eLow,
+                        survey);
                 Cell cell = attempt.cell();
                 if (cell != null) {
                     return cell;
@@ -341,7 +344,7 @@ final class ShootingMesh {
         for (double h = wanted; h > 1e-3 * wanted; h *= 0.6) {
             double to = x + direction * h;
             Cell cell = Cell.build(
-                            survey::v, Math.min(x, to), Math.max(x, to), scale(x, size), ROUGH, THETA, eLow)
+                            survey::v, Math.min(x, to), Math.max(x, to), scale(x, size), ROUGH, THETA, eLow, survey)
                     .cell();
             if (cell != null) {
                 return cell;

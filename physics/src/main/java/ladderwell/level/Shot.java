@@ -293,7 +293,8 @@ final class Shot {
             return y0 * y1 < 0 || y1 == 0 && y0 != 0 ? 1 : 0;
         }
         double w = Math.sqrt(square);
-        // The angle advances by w up to theta/w, the zeros are within one of that over pi, and even or odd as the signs say: most often one
+        // The angle advances by w up to theta/w, the zeros are within one of that over pi, and even or odd as the signs
+        // say: most often one
         // number is left.
         double product = y0 * y1;
         if (Math.abs(product) >= Double.MIN_NORMAL) {

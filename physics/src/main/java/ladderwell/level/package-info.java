@@ -9,7 +9,7 @@
  * <p>Read {@link ladderwell.level.Levels} first, then {@link ladderwell.level.Elements}, then the closed kinds of levels; {@code
  * WellEquation} holds the one equation of the finite well. Polynomials: {@code Polynomial}, {@code OscillatorBasis}, {@code BandSpectrum},
  * {@code BasisProof}, {@code LevelCount}, {@code BasisBlock}. Anything else: {@link ladderwell.level.PotentialCurve}, {@code CurveSurvey},
- * {@code Cell}, {@code ShootingMesh}, {@code Shot}, {@code LevelSearch}, {@code Wave}. What repeats:
+ * {@code Cell}, {@code ShootingMesh}, {@code Shot}, {@code LevelSearch}, {@code Wave}; far up {@code PhaseCell}, {@code PhaseWell}, {@code HighLevels}. What repeats:
  * {@link ladderwell.level.PeriodicLevels}.
  */
 @NullMarked

@@ -18,8 +18,8 @@ public final class HermitianTransform {
     /** Rows of the tables of cosines and sines; longer sums are cut into pieces of this length. */
     private static final int PIECE = 1024;
 
-    /** Table rows that stay in the first-level cache while all rows are multiplied with them. */
-    private static final int BLOCK = 192;
+    /** Entries of a table that stay in the first-level cache while all rows are multiplied with them: 28 kB. */
+    private static final int BLOCK = 3584;
 
     private static final int ROWS = Loops.ROWS;
     private static final double U = 0x1p-53;
@@ -33,7 +33,7 @@ public final class HermitianTransform {
     private final int width;
     private final int panels;
 
-    /** Rows of the tables made so far: always a power of two. */
+    /** Rows of the tables made so far. */
     private int tabled;
 
     private double[][] cosine;
@@ -47,6 +47,9 @@ public final class HermitianTransform {
     private double[] sumsOfSines = {};
     private double[][] rowRe = new double[ROWS][0];
     private double[][] rowIm = new double[ROWS][0];
+    private int steppedBy = -1;
+    private final double[] stepCosine;
+    private final double[] stepSine;
     private double[] turnRe = {};
     private double[] turnIm = {};
 
@@ -89,6 +92,8 @@ public final class HermitianTransform {
         panels = (half + width - 1) / width;
         cosine = new double[panels][0];
         sine = new double[panels][0];
+        stepCosine = new double[width];
+        stepSine = new double[width];
     }
 
     /** Whether this transform is the one for these angles. */
@@ -98,10 +103,10 @@ public final class HermitianTransform {
 
     /**
      * |error| of any sum is at most this times Σ_k |f_k| over all k of both signs, for rows up to this length: rounding of the sum, and of the
-     * cosines and sines (at most eleven factors, each within 5, and ten products, each within 3 units of rounding).
+     * cosines and sines (at most 22 factors, each within 5, and 21 products, each within 3 units of rounding).
      */
     public static double errorFactor(int longest) {
-        return 1.5 * (longest + 96.0) * U;
+        return 1.5 * (longest + 176.0) * U;
     }
 
     /**
@@ -145,9 +150,10 @@ public final class HermitianTransform {
 
     private void multiply(
             double[] packed, double[] table, int piece, int groups, int[] depth, int[] at, double[] sums, int sumAt) {
-        for (int block = 0; block < piece; block += BLOCK) {
+        int rows = Math.max(64, BLOCK / width);
+        for (int block = 0; block < piece; block += rows) {
             for (int g = 0; g < groups; g++) {
-                int count = Math.min(depth[g] - block, BLOCK);
+                int count = Math.min(depth[g] - block, rows);
                 if (count > 0) {
                     loops.product(
                             packed,
@@ -281,28 +287,43 @@ public final class HermitianTransform {
 
     /** Rows 2^b by themselves, each row between as the product of two. */
     private void base(int piece) {
-        tabled = piece == 1 ? 1 : Integer.highestOneBit(piece - 1) << 1;
+        tabled = piece;
         for (int panel = 0; panel < panels; panel++) {
-            double[] c = new double[tabled * width];
-            double[] s = new double[tabled * width];
-            Arrays.fill(c, 0, width, 1);
-            for (int k = 1; k < tabled; k *= 2) {
+            cosine[panel] = new double[tabled * width];
+            sine[panel] = new double[tabled * width];
+            Arrays.fill(cosine[panel], 0, width, 1);
+        }
+        for (int k = 1; k < tabled; k *= 2) {
+            for (int panel = 0; panel < panels; panel++) {
+                double[] c = cosine[panel];
+                double[] s = sine[panel];
                 units(panel, k, c, s, k);
-                loops.turn(c, s, 1, c, s, k, c, s, k + 1, k - 1);
+                loops.turn(c, s, 1, c, s, k, c, s, k + 1, Math.min(k, piece - k) - 1);
             }
-            cosine[panel] = c;
-            sine[panel] = s;
         }
     }
 
-    /** Cosine and sine of k times the angles of one panel, to the row of a table. */
+    /** Cosine and sine of k times the angles of one panel, to the row of a table: of its first angle times those from it to the others. */
     private void units(int panel, int k, double[] c, double[] s, int row) {
-        double first = columns % 2 == 0 ? 0.5 : 0;
         DoubleDouble unit = DoubleDouble.product(2 * step, spacing);
-        for (int j = 0; j < width && panel * width + j < half; j++) {
-            double angle = reduced(unit.times(k * (first + panel * width + j)));
-            c[row * width + j] = Math.cos(angle);
-            s[row * width + j] = Math.sin(angle);
+        double first = columns % 2 == 0 ? 0.5 : 0;
+        double base = reduced(unit.times(k * (first + panel * width)));
+        double u = Math.cos(base);
+        double v = Math.sin(base);
+        if (steppedBy != k) {
+            steppedBy = k;
+            for (int j = 0; j < width; j++) {
+                double angle = reduced(unit.times((double) k * j));
+                stepCosine[j] = Math.cos(angle);
+                stepSine[j] = Math.sin(angle);
+            }
+        }
+        int at = row * width;
+        for (int j = 0; j < width; j++) {
+            double x = stepCosine[j];
+            double y = stepSine[j];
+            c[at + j] = Math.fma(u, x, -(v * y));
+            s[at + j] = Math.fma(v, x, u * y);
         }
     }
 

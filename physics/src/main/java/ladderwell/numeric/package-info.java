@@ -9,7 +9,8 @@
  *
  * <p>Reading order: {@link ladderwell.numeric.ExactPhases}, {@link ladderwell.numeric.LadderSums},
  * {@link ladderwell.numeric.MatrixProduct}, {@link ladderwell.numeric.DensityFrames}, {@link ladderwell.numeric.Workers},
- * {@link ladderwell.numeric.HermiteFunctions} (wave functions of any index), {@link ladderwell.numeric.DoubleDouble}.
+ * {@link ladderwell.numeric.HermiteFunctions} (wave functions of any index), {@link ladderwell.numeric.DoubleDouble}; {@link ladderwell.numeric.HermitianTransform} and {@link
+ * ladderwell.numeric.HermitianForm} (Fourier sums of rows and forms at mirrored places).
  */
 @NullMarked
 package ladderwell.numeric;

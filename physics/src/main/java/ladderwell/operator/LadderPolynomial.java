@@ -57,7 +57,8 @@ public final class LadderPolynomial {
         return term(j, k, DoubleDouble.of(re), DoubleDouble.of(im));
     }
 
-    private static LadderPolynomial term(int j, int k, DoubleDouble re, DoubleDouble im) {
+    /** The same with all digits; see {@link #term(int, int, double, double)}. */
+    public static LadderPolynomial term(int j, int k, DoubleDouble re, DoubleDouble im) {
         if (j < 0 || k < 0) {
             throw new IllegalArgumentException("exponents of a† and a must be 0 or more, got " + j + " and " + k);
         }

@@ -1,5 +1,6 @@
 package ladderwell.phasespace;
 
+import java.util.OptionalInt;
 import ladderwell.evidence.Bound;
 import ladderwell.numeric.HermiteFunctions;
 import ladderwell.numeric.Interruption;
@@ -13,6 +14,8 @@ import ladderwell.state.Amplitudes;
 public final class NumberWave implements WaveFunction {
     /** Points taken together: their table of functions stays in the second-level cache. */
     private static final int BLOCK = 128;
+
+    private static final double ROUNDING = 1e-12;
 
     private final int[] first;
     private final double[][] re;
@@ -87,6 +90,13 @@ public final class NumberWave implements WaveFunction {
         this.stateError = stateError;
         // Each function is off by the error of its table and below 1; the sum rounds once a level.
         sampleError = Bound.estimated(sum * (HermiteFunctions.errorBound(last) + (count + 2) * 0x1p-53));
+    }
+
+    /** The level, where the state is one level and nothing else but rounding. */
+    public OptionalInt singleLevel() {
+        return re.length == 1 && re[0].length == 1 && stateError.size() < ROUNDING
+                ? OptionalInt.of(first[0])
+                : OptionalInt.empty();
     }
 
     @Override

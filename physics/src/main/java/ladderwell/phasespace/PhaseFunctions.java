@@ -22,6 +22,9 @@ public final class PhaseFunctions {
 
     /** The Wigner function of a state. */
     public PhaseField wigner(PhaseState state, PhaseGrid grid) {
+        if (state instanceof Displaced away) {
+            return moved(wigner(away.state(), away.back(grid)), away, grid);
+        }
         return state instanceof WaveFunction wave ? wigner(wave, grid) : wigner((NumberMatrix) state, grid);
     }
 
@@ -31,16 +34,32 @@ public final class PhaseFunctions {
      * @param width that of the coherent states it is a mean over: |⟨x|α⟩|² ∝ e^{−(x−x₀)²/width²}; 1 for those of the harmonic oscillator
      */
     public PhaseField husimi(PhaseState state, PhaseGrid grid, double width) {
+        if (state instanceof Displaced away) {
+            return moved(husimi(away.state(), away.back(grid), width), away, grid);
+        }
         return state instanceof WaveFunction wave
                 ? husimi(wave, grid, width)
                 : husimi((NumberMatrix) state, grid, width);
     }
 
+    /**
+     * ∫|W| dx dp − 1 of a state, from its Wigner function on a grid; of one harmonic level from its radial form, at any grid.
+     *
+     * @param grid one that covers the state and follows its fringes
+     */
+    public PhaseField.Reading negativity(PhaseState state, PhaseGrid grid) {
+        if (state instanceof Displaced away) {
+            return negativity(away.state(), away.back(grid));
+        }
+        if (state instanceof NumberWave wave
+                && wave.singleLevel().orElse(Integer.MAX_VALUE) <= Negativity.HIGHEST_LEVEL) {
+            return Negativity.ofLevel(wave.singleLevel().getAsInt());
+        }
+        return wigner(state, grid).negativity();
+    }
+
     /** The Wigner function of a pure state. */
     public PhaseField wigner(WaveFunction wave, PhaseGrid grid) {
-        if (wave instanceof GaussianWave away && !away.isAtOrigin()) {
-            return moved(wigner(away.atOrigin(), from(away, grid)), away, grid);
-        }
         Correlations correlations = new PureCorrelations(wave, lattice(grid, wave.support()));
         return wigner(correlations, grid, wave.sampleError(), missed(wave, grid));
     }
@@ -57,9 +76,6 @@ public final class PhaseFunctions {
      * @param width that of the coherent states it is a mean over: |⟨x|α⟩|² ∝ e^{−(x−x₀)²/width²}; 1 for those of the harmonic oscillator
      */
     public PhaseField husimi(WaveFunction wave, PhaseGrid grid, double width) {
-        if (wave instanceof GaussianWave away && !away.isAtOrigin()) {
-            return moved(husimi(away.atOrigin(), from(away, grid), width), away, grid);
-        }
         checkWidth(width);
         Support support = wave.support();
         Lattice lattice = Lattice.of(grid, support, 0, grid.stepX(), 2 * Math.PI, CoherentOverlaps.REACH / width);
@@ -97,20 +113,13 @@ public final class PhaseFunctions {
         return husimi(correlations, grid, width, Bound.estimated(0), missed(state, grid));
     }
 
-    /** The grid as seen from the middle of a coherent state, where far from the origin no phase is rounded. */
-    private static PhaseGrid from(GaussianWave away, PhaseGrid grid) {
-        return new PhaseGrid(
-                grid.x() - away.position(),
-                grid.p() - away.momentum(),
-                grid.halfX(),
-                grid.halfP(),
-                grid.nx(),
-                grid.np());
-    }
-
-    private static PhaseField moved(PhaseField field, GaussianWave away, PhaseGrid grid) {
-        Bound bound = field.bound().plus(misplaced(grid, away.support()) / Math.PI);
-        return field.on(grid, bound);
+    /** Values found at the points seen from a displaced state, put back where they belong. */
+    private static PhaseField moved(PhaseField field, Displaced away, PhaseGrid grid) {
+        Support box = away.support();
+        // D(δ) moves a state by at most |δx| √⟨p²⟩ + |δp| √⟨x²⟩, seen from the state itself.
+        double reach = box.right() - box.left() + box.high() - box.low();
+        double off = 2 * away.uncertainty() * reach + misplaced(grid, box);
+        return field.on(grid, field.bound().plus(off / Math.PI));
     }
 
     private static Lattice lattice(PhaseGrid grid, Support support) {

@@ -1,7 +1,7 @@
 package ladderwell.phasespace;
 
-/** A state that this room makes phase-space functions of: pure, or mixed. */
-public sealed interface PhaseState permits WaveFunction, NumberMatrix {
+/** A state that this room makes phase-space functions of: pure, or mixed, or either of them displaced. */
+public sealed interface PhaseState permits WaveFunction, NumberMatrix, Displaced {
     /** Where it lives. */
     Support support();
 

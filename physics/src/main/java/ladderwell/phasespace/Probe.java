@@ -70,7 +70,7 @@ final class Probe {
         return squares;
     }
 
-    private static double[] share(double[] weights) {
+    static double[] share(double[] weights) {
         double sum = 0;
         for (double weight : weights) {
             sum += weight;
@@ -98,7 +98,7 @@ final class Probe {
     }
 
     /** Places between which all but the share lies, half of it left out on each side. */
-    private static int[] ends(double[] weights, double share) {
+    static int[] ends(double[] weights, double share) {
         int from = 0;
         int to = weights.length - 1;
         double before = weights[from];

@@ -7,7 +7,8 @@
  * lattices of positions so fine that no image of the state in momentum falls on the grid: sums of terms of the size of the result, at any number of quanta.
  *
  * <p>Read {@link ladderwell.phasespace.WaveFunction} with {@link ladderwell.phasespace.Support} (what a pure state is here) and {@link
- * ladderwell.phasespace.NumberWave}, {@link ladderwell.phasespace.SampledWave}; {@link ladderwell.phasespace.NumberMatrix} (a mixed one);
+ * ladderwell.phasespace.NumberWave}, {@link ladderwell.phasespace.SampledWave}; {@link ladderwell.phasespace.NumberMatrix} (a mixed one)
+ * and {@link ladderwell.phasespace.Displaced} (either of them far from the origin);
  * {@link ladderwell.phasespace.PhaseGrid}; {@link ladderwell.phasespace.PhaseFunctions}, which makes a {@link
  * ladderwell.phasespace.PhaseField}; then {@code Lattice}, {@code PureCorrelations}, {@code MixedCorrelations}, {@code Smoothed}
  * and {@code CoherentOverlaps}.

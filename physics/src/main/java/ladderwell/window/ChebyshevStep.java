@@ -58,22 +58,25 @@ final class ChebyshevStep {
         Plane before = recent[0];
         Plane here = recent[1];
         Plane next = recent[2];
-        before.copyFrom(start);
+        equation.copy(start, before);
         here.clear();
         double startSize = equation.size(before);
+        double rounded = equation.rounding();
         edges[0] = 0;
         edges[1] = 0;
         applications = 0;
         grown = false;
         double lostDigits = 0;
         // P_1 = Y P_0
-        double error = apply(before, here);
+        apply(before, here);
         equation.border(here, sides);
         add(0.5 * last.weight(0));
         equation.tidy(here);
         equation.scale(here, 0.5, 0);
         equation.tidy(here);
         double size = equation.size(here);
+        double error = rounded;
+        rounded = equation.rounding();
         lostDigits += last.weight(0) * (0.5 * error + Equation.U * size);
         double sizes = startSize + size;
         double squares = startSize * startSize / 2 + size * size;
@@ -84,12 +87,14 @@ final class ChebyshevStep {
         double sizeBefore = startSize;
         int k = 1;
         while (true) {
-            next.copyFrom(before);
-            error = apply(here, next);
+            equation.copy(before, next);
+            apply(here, next);
+            error = rounded;
             equation.border(next, sides);
             add(last.weight(k));
             equation.tidy(next);
             double nextSize = equation.size(next);
+            rounded = equation.rounding();
             lostDigits += last.weight(k) * (error + Equation.U * (sizeBefore + nextSize));
             // the sum up to k leaves J_{k+1} P_k + J_k P_{k+1}
             if (k > z) {
@@ -133,12 +138,11 @@ final class ChebyshevStep {
         }
     }
 
-    private double apply(Plane y, Plane out) {
+    private void apply(Plane y, Plane out) {
         Interruption.check();
         input[0] = y;
         equation.apply(input, 0, 0, out);
         applications++;
-        return equation.rounding(y);
     }
 
     /** The border of 2 (L − c)/R P_k, times ∫ |J_k| dz: 2/R and R dz/2 · 2 J_k cancel. */

@@ -17,6 +17,7 @@ final class DensityEquation extends Equation {
     private final Plane row;
     private final double[] weights;
     private final double terms;
+    private double weighted;
 
     /** @param shift c, real, subtracted from L */
     DensityEquation(Generator generator, long first, int levels, double factor, double shift) {
@@ -185,10 +186,23 @@ final class DensityEquation extends Equation {
     @Override
     double size(Plane y) {
         double sum = 0;
+        double heavy = 0;
         for (int m = 0; m < levels; m++) {
-            sum += row(y, m);
+            double squares = row(y, m);
+            sum += squares;
+            heavy += weights[m] * squares;
         }
+        weighted = heavy;
         return Math.sqrt(sum);
+    }
+
+    @Override
+    void copy(Plane from, Plane to) {
+        for (int m = 0; m < levels; m++) {
+            int length = Math.min(m + 1 + mirrored, levels);
+            System.arraycopy(from.re, at(m, 0), to.re, at(m, 0), length);
+            System.arraycopy(from.im, at(m, 0), to.im, at(m, 0), length);
+        }
     }
 
     /** Squares of row m and of its mirror image, the element on the diagonal once. */
@@ -198,12 +212,8 @@ final class DensityEquation extends Equation {
     }
 
     @Override
-    double rounding(Plane y) {
-        double sum = 0;
-        for (int m = 0; m < levels; m++) {
-            sum += weights[m] * row(y, m);
-        }
-        return terms * Math.sqrt(sum);
+    double rounding() {
+        return terms * Math.sqrt(weighted);
     }
 
     @Override
@@ -302,6 +312,41 @@ final class DensityEquation extends Equation {
                 y.im[i] *= re;
             }
         }
+    }
+
+    @Override
+    double[] lowering(Plane y, int k) {
+        double re = 0;
+        double im = 0;
+        for (int n = 0; n + k < levels; n++) {
+            re += root(n, k) * y.re[at(n + k, n)];
+            im += root(n, k) * y.im[at(n + k, n)];
+        }
+        return new double[] {re, im};
+    }
+
+    @Override
+    void turn(Plane y, double theta) {
+        for (int m = 0; m < levels; m++) {
+            for (int n = 0; n <= m; n++) {
+                double c = Math.cos(theta * (m - n));
+                double s = Math.sin(theta * (m - n));
+                int i = at(m, n);
+                double re = y.re[i];
+                y.re[i] = c * re - s * y.im[i];
+                y.im[i] = c * y.im[i] + s * re;
+            }
+        }
+        tidy(y);
+    }
+
+    @Override
+    double quanta(Plane y) {
+        double sum = 0;
+        for (int n = 0; n < levels; n++) {
+            sum += (first + n) * y.re[at(n, n)];
+        }
+        return sum;
     }
 
     @Override

@@ -75,11 +75,14 @@ abstract sealed class Equation permits VectorEquation, DensityEquation {
     /** Norm that stands behind bounds ≤ this · {@link #size}. */
     abstract double rank();
 
-    /** Frobenius or vector norm of what lies in the window. */
+    /** Frobenius or vector norm of what lies in the window; {@link #rounding} then speaks of the same plane. */
     abstract double size(Plane y);
 
-    /** Bound of a rounding error of one application of order 0 to y, in the norm of {@link #size}. */
-    abstract double rounding(Plane y);
+    /** Bound of a rounding error of one application of order 0 to the plane last measured, in the norm of {@link #size}. */
+    abstract double rounding();
+
+    /** Copies what lies in the window and its mirrored elements. */
+    abstract void copy(Plane from, Plane to);
 
     /** Bounds of the norm of what sticks out: below the window, and above it. */
     abstract void border(Plane y, double[] belowAndAbove);
@@ -89,6 +92,24 @@ abstract sealed class Equation permits VectorEquation, DensityEquation {
 
     /** y · (re + i im) inside the window; density operators take re alone. */
     abstract void scale(Plane y, double re, double im);
+
+    /** ⟨a^k⟩, k = 1 or 2: real part, imaginary part. */
+    abstract double[] lowering(Plane y, int k);
+
+    /** ⟨n⟩. */
+    abstract double quanta(Plane y);
+
+    /** e^{iθn} on a vector, from both sides on a density operator. */
+    abstract void turn(Plane y, double theta);
+
+    /** √((n + 1) … (n + k)) of the n-th level of the window. */
+    final double root(int n, int k) {
+        double product = 1;
+        for (int i = 1; i <= k; i++) {
+            product *= first + n + i;
+        }
+        return Math.sqrt(product);
+    }
 
     /** Copies what is in this window into another window. */
     abstract void moveTo(Plane y, Equation other, Plane target);

@@ -44,9 +44,14 @@ final class FormulaCourse implements Course {
 
     @Override
     public Generator generator(double time, double length) {
+        return Generator.of(orders(time, length), jumps.stream().map(List::of).toList());
+    }
+
+    /** The Hamiltonian by orders of the time since a step began. */
+    List<LadderPolynomial> orders(double time, double length) {
         List<LadderPolynomial> orders = new ArrayList<>();
         orders.add(hamiltonian.constant());
-        for (int j = 1; j <= DEGREE; j++) {
+        for (int j = 1; j <= DEGREE && off.length > 0; j++) {
             orders.add(LadderPolynomial.zero());
         }
         for (int i = 0; i < off.length; i++) {
@@ -58,7 +63,7 @@ final class FormulaCourse implements Course {
                 }
             }
         }
-        return Generator.of(orders, jumps.stream().map(List::of).toList());
+        return orders;
     }
 
     /** Coefficients of 1, s, s² …; puts down what the polynomial is off. */
@@ -144,11 +149,25 @@ final class FormulaCourse implements Course {
 
     @Override
     public double off(Equation equation, double length) {
-        if (sizedFirst != equation.first || sizedLevels != equation.levels) {
+        return off(equation, length, DoubleDouble.ZERO, DoubleDouble.ZERO);
+    }
+
+    /** The same for operators displaced by α. */
+    double off(Equation equation, double length, DoubleDouble re, DoubleDouble im) {
+        if (off.length == 0) {
+            return 0;
+        }
+        boolean displaced = re.hi() != 0 || im.hi() != 0;
+        if (displaced || sizedFirst != equation.first || sizedLevels != equation.levels) {
             sizedFirst = equation.first;
             sizedLevels = equation.levels;
             for (int i = 0; i < sizes.length; i++) {
-                sizes[i] = Bands.of(hamiltonian.terms().get(i).operator(), 1, equation.first, equation.levels, 0)
+                sizes[i] = Bands.of(
+                                hamiltonian.terms().get(i).operator().shifted(re, im),
+                                1,
+                                equation.first,
+                                equation.levels,
+                                0)
                         .norm();
             }
         }
@@ -187,6 +206,6 @@ final class FormulaCourse implements Course {
 
     @Override
     public Certainty certainty() {
-        return Certainty.ESTIMATED;
+        return off.length == 0 ? Certainty.GUARANTEED : Certainty.ESTIMATED;
     }
 }

@@ -23,6 +23,9 @@ abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation 
     private Plane reached;
 
     double time;
+    /** Time since the step began, at an instant inside it; 0 once the step is kept. */
+    double since;
+
     long steps;
     long redone;
     long applications;
@@ -85,6 +88,18 @@ abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation 
         mostLevels = Math.max(mostLevels, levels);
     }
 
+    /** Takes a state on another window that was made elsewhere. */
+    final void take(Equation there, Plane theirs, int levels) {
+        equation = there;
+        state = theirs;
+        resize(there.first, levels);
+        reached = state;
+    }
+
+    final double allowedBytes() {
+        return allowedBytes;
+    }
+
     /** Refuses what would take hours: frequencies this large for the time that is left. */
     final void checkWork(int levels, double rate, int bands, int jumps) {
         double elements = pure ? (double) levels * bands : levels * (levels / 2.0) * (2 * bands + jumps);
@@ -133,11 +148,13 @@ abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation 
             for (int i = 0; i < count - 1; i++) {
                 reached = at(i);
                 time = began + times[i];
+                since = times[i];
                 seen.accept(next + i);
             }
             time = atLast ? ahead[ahead.length - 1] : began + times[count - 1];
             state.copyFrom(at(count - 1));
             reached = state;
+            since = 0;
             kept(times[count - 1]);
             steps++;
             next = inside;
@@ -212,6 +229,11 @@ abstract sealed class Propagation permits SteadyPropagation, VaryingPropagation 
 
     /** The state at the time just seen. */
     final WindowState seen(Bound error) {
+        return state(pure, equation, reached, error);
+    }
+
+    /** A copy of what a plane holds. */
+    static WindowState state(boolean pure, Equation equation, Plane reached, Bound error) {
         if (pure) {
             double[] re = new double[equation.levels];
             double[] im = new double[equation.levels];

@@ -60,7 +60,7 @@ final class TaylorStep {
         for (int k = 0; k <= ORDER; k++) {
             Interruption.check();
             sizes[k] = equation.size(c[k]);
-            double off = equation.rounding(c[k]);
+            double off = equation.rounding();
             for (int j = 1; j <= Math.min(k, orders); j++) {
                 off += equation.roundings() * equation.norms[j] * sizes[k - j];
             }

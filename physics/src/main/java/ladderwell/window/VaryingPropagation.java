@@ -1,6 +1,7 @@
 package ladderwell.window;
 
 import ladderwell.evidence.PhysicsException;
+import ladderwell.numeric.DoubleDouble;
 import ladderwell.quantity.Digits;
 
 /** Under an equation that varies with time, or in a frame that moves, by a Taylor series in each step. */
@@ -11,14 +12,30 @@ final class VaryingPropagation extends Propagation {
     private static final double SHORTEN = 0.9;
     /** Shortest step, as a share of the run. */
     private static final double SHORTEST = 1e-10;
+    /** Share of the mean of the fluctuation by which the frame goes after it in a step. */
+    private static final double PULL = 0.15;
+    /** Squeezing r of the fluctuation from which on the frame takes it over. */
+    private static final double WORTH = 0.12;
+    /** Steps before it is tried again where it gained nothing. */
+    private static final int WAIT = 2;
+
+    /** Share of what is left of the tolerance that one such change may take. */
+    private static final double SQUEEZING = 0.01;
+
+    /** The fluctuation has outgrown what pays in a frame. */
+    static final class LeftFrame extends RuntimeException {
+        private static final long serialVersionUID = 1L;
+    }
 
     private final Course course;
+    private int mostAllowed = Integer.MAX_VALUE;
     private TaylorStep stepper;
     private final double[] sides = new double[2];
     private boolean ready;
     private double planned;
     private double longest;
     private double uncut;
+    private int waits;
 
     VaryingPropagation(Course course, boolean pure, Equation start, Plane state, Budget budget, double allowedBytes) {
         super(pure, start, state, budget, allowedBytes);
@@ -27,6 +44,66 @@ final class VaryingPropagation extends Propagation {
         planned = Math.min(budget.timeLeft(0), course.nextBreak(0)) / 16;
         stepper = new TaylorStep(start);
         resize(start.first, start.levels);
+    }
+
+    /** Gives up with {@link LeftFrame} when the window is larger than this. */
+    void allow(int levels) {
+        mostAllowed = levels;
+    }
+
+    /** Displacement of the frame at the instant just seen; empty for number windows. */
+    DoubleDouble[] displacement() {
+        return course instanceof FrameCourse frame ? frame.at(since) : new DoubleDouble[0];
+    }
+
+    /** Squeezing of the frame at the instant just seen. */
+    Squeeze squeezing() {
+        return course instanceof FrameCourse frame ? frame.squeeze() : Squeeze.NONE;
+    }
+
+    /** Takes squeezing of the fluctuation into the frame once it is worth it. */
+    private void squeeze(FrameCourse frame, double[] mean) {
+        double[] pair = equation.lowering(state, 2);
+        double re = pair[0] - (mean[0] * mean[0] - mean[1] * mean[1]);
+        double im = pair[1] - 2 * mean[0] * mean[1];
+        double quanta = equation.quanta(state) - mean[0] * mean[0] - mean[1] * mean[1];
+        double ratio = 2 * Math.hypot(re, im) / (2 * quanta + 1);
+        if (!(ratio > 0 && ratio < 1)) {
+            return;
+        }
+        // ⟨(a cosh r + a† e^{iφ} sinh r)²⟩ = 0
+        double r = 0.5 * Math.log((1 + ratio) / (1 - ratio)) / 2;
+        if (r < WORTH || waits-- > 0) {
+            return;
+        }
+        double phi = Math.atan2(im, re) + Math.PI;
+        double allowed = SQUEEZING * (budget.tolerance() - budget.spent());
+        Squeeze.Changed changed;
+        try {
+            changed = Squeeze.turn(pure, equation, state, r, phi, allowed, allowedBytes());
+        } catch (PhysicsException.NotConverged tooFine) {
+            return; // the frame stays as it is
+        }
+        int before = needed(equation, state, allowed);
+        int after = needed(changed.equation(), changed.state(), allowed);
+        if (after >= before) {
+            waits = WAIT; // a bent fluctuation gains nothing
+            return;
+        }
+        Equation wide = changed.equation();
+        budget.dropped(changed.spent() + wide.edge(changed.state(), false, Math.max(0, wide.levels - after)));
+        frame.squeezed(r, phi);
+        take(wide, changed.state(), after + equation.reach + Math.max(3, after / 5));
+    }
+
+    /** How many levels hold all but so much. */
+    private static int needed(Equation equation, Plane state, double allowed) {
+        int levels = equation.levels;
+        int drop = 0;
+        while (drop < levels - 2 && equation.edge(state, false, drop + 1) <= allowed) {
+            drop++;
+        }
+        return levels - drop;
     }
 
     @Override
@@ -127,6 +204,15 @@ final class VaryingPropagation extends Propagation {
     @Override
     void kept(double length) {
         course.advance(length);
+        if (course instanceof FrameCourse frame) {
+            double[] mean = equation.lowering(state, 1);
+            double[] seen = frame.unsqueezed(mean);
+            frame.recentre(seen[0], seen[1], PULL / length);
+            squeeze(frame, mean);
+            if (equation.levels > mostAllowed) {
+                throw new LeftFrame();
+            }
+        }
         planned = uncut;
         ready = false;
     }

@@ -6,6 +6,7 @@ import java.util.List;
 final class VectorEquation extends Equation {
     private final double[] weights;
     private final double terms;
+    private double weighted;
 
     /** @param shift c = i · shift, subtracted from K */
     VectorEquation(Generator generator, long first, int levels, double factor, double shift) {
@@ -81,18 +82,27 @@ final class VectorEquation extends Equation {
 
     @Override
     double size(Plane y) {
-        return Math.sqrt(Rows.squares(y, margin(), levels));
+        double sum = 0;
+        double heavy = 0;
+        for (int n = 0; n < levels; n++) {
+            double re = y.re[margin() + n];
+            double im = y.im[margin() + n];
+            double square = re * re + im * im;
+            sum += square;
+            heavy += weights[n] * square;
+        }
+        weighted = heavy;
+        return Math.sqrt(sum);
     }
 
     @Override
-    double rounding(Plane y) {
-        double sum = 0;
-        for (int n = 0; n < levels; n++) {
-            double a = y.re[margin() + n];
-            double b = y.im[margin() + n];
-            sum += weights[n] * (a * a + b * b);
-        }
-        return terms * Math.sqrt(sum);
+    double rounding() {
+        return terms * Math.sqrt(weighted);
+    }
+
+    @Override
+    void copy(Plane from, Plane to) {
+        to.copyFrom(from);
     }
 
     @Override
@@ -132,6 +142,40 @@ final class VectorEquation extends Equation {
             y.re[n] = re * a - im * b;
             y.im[n] = re * b + im * a;
         }
+    }
+
+    @Override
+    double[] lowering(Plane y, int k) {
+        double re = 0;
+        double im = 0;
+        for (int n = 0; n + k < levels; n++) {
+            int i = margin() + n;
+            re += root(n, k) * (y.re[i] * y.re[i + k] + y.im[i] * y.im[i + k]);
+            im += root(n, k) * (y.re[i] * y.im[i + k] - y.im[i] * y.re[i + k]);
+        }
+        return new double[] {re, im};
+    }
+
+    @Override
+    void turn(Plane y, double theta) {
+        for (int n = 0; n < levels; n++) {
+            double c = Math.cos(theta * (first + n));
+            double s = Math.sin(theta * (first + n));
+            int i = margin() + n;
+            double re = y.re[i];
+            y.re[i] = c * re - s * y.im[i];
+            y.im[i] = c * y.im[i] + s * re;
+        }
+    }
+
+    @Override
+    double quanta(Plane y) {
+        double sum = 0;
+        for (int n = 0; n < levels; n++) {
+            int i = margin() + n;
+            sum += (first + n) * (y.re[i] * y.re[i] + y.im[i] * y.im[i]);
+        }
+        return sum;
     }
 
     @Override

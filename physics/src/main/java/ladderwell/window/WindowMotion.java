@@ -1,9 +1,13 @@
 package ladderwell.window;
 
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
 import ladderwell.evidence.Bound;
 import ladderwell.evidence.Certainty;
+import ladderwell.numeric.DoubleDouble;
 import ladderwell.operator.LadderPolynomial;
 import ladderwell.operator.OperatorFormula;
 import ladderwell.state.Amplitudes;
@@ -13,7 +17,14 @@ import ladderwell.state.DensityOperator;
 public final class WindowMotion {
     private final double[] times;
     private final List<WindowState> states;
+    private final List<DoubleDouble[]> displacements;
+    private final List<Squeeze> squeezes;
     private final Work work;
+    private final double allowedBytes;
+    private final Map<Integer, WindowState> plain = new HashMap<>();
+
+    /** Levels that a frame starts with. */
+    private static final int FRAME_LEVELS = 8;
 
     /**
      * What it took.
@@ -25,10 +36,79 @@ public final class WindowMotion {
      */
     public record Work(long steps, long redone, long applications, int mostLevels) {}
 
-    private WindowMotion(double[] times, List<WindowState> states, Work work) {
+    private WindowMotion(
+            double[] times,
+            List<WindowState> states,
+            List<DoubleDouble[]> displacements,
+            List<Squeeze> squeezes,
+            Work work,
+            double allowedBytes) {
         this.times = times;
         this.states = List.copyOf(states);
+        this.displacements = List.copyOf(displacements);
+        this.squeezes = List.copyOf(squeezes);
         this.work = work;
+        this.allowedBytes = allowedBytes;
+    }
+
+    /**
+     * A coherent state, followed in a frame displaced along its mean-field path: what is carried is the fluctuation about α(t), however many quanta α
+     * stands for.
+     *
+     * @param hamiltonian H/ħ, Hermitian
+     * @param jumps √γ L each; a vector is carried where there are none
+     * @param alphaRe real part of α at time 0
+     * @param alphaIm imaginary part of α at time 0
+     * @param times 0 or more, ascending
+     * @param tolerance largest error of the vector, or of the density operator in trace norm
+     * @param mostLevels the frame is given up where the fluctuation needs more levels
+     * @param allowedBytes memory allowed
+     * @return empty if the fluctuation outgrew the frame
+     */
+    public static Optional<WindowMotion> framed(
+            OperatorFormula hamiltonian,
+            List<LadderPolynomial> jumps,
+            double alphaRe,
+            double alphaIm,
+            double[] times,
+            double tolerance,
+            int mostLevels,
+            double allowedBytes) {
+        boolean pure = jumps.isEmpty();
+        double end = checked(times);
+        FormulaCourse formula = new FormulaCourse(hamiltonian, jumps, end);
+        FrameCourse course = new FrameCourse(formula, jumps, alphaRe, alphaIm);
+        Equation equation = Propagation.plain(Generator.constant(hamiltonian.at(0), jumps), pure, 0, FRAME_LEVELS);
+        Plane plane = equation.plane();
+        if (equation instanceof DensityEquation density) {
+            double[] ground = new double[FRAME_LEVELS * (FRAME_LEVELS + 1) / 2];
+            ground[0] = 1;
+            density.load(ground, new double[ground.length], plane);
+        } else {
+            plane.re[equation.margin()] = 1;
+        }
+        Budget budget = new Budget(tolerance, 0, end);
+        VaryingPropagation propagation = new VaryingPropagation(course, pure, equation, plane, budget, allowedBytes);
+        propagation.allow(mostLevels);
+        List<WindowState> states = new ArrayList<>();
+        List<DoubleDouble[]> displacements = new ArrayList<>();
+        List<Squeeze> squeezes = new ArrayList<>();
+        try {
+            propagation.go(times, j -> {
+                states.add(propagation.seen(new Bound(course.certainty(), budget.spent())));
+                displacements.add(propagation.displacement());
+                squeezes.add(propagation.squeezing());
+            });
+        } catch (VaryingPropagation.LeftFrame left) {
+            return Optional.empty();
+        }
+        return Optional.of(
+                new WindowMotion(times.clone(), states, displacements, squeezes, work(propagation), allowedBytes));
+    }
+
+    private static Work work(Propagation propagation) {
+        return new Work(
+                propagation.steps(), propagation.redone(), propagation.applications(), propagation.mostLevels());
     }
 
     /**
@@ -119,14 +199,7 @@ public final class WindowMotion {
         Certainty kind = certainty;
         List<WindowState> states = new ArrayList<>();
         propagation.go(times, j -> states.add(propagation.seen(new Bound(kind, budget.spent()))));
-        return new WindowMotion(
-                times.clone(),
-                states,
-                new Work(
-                        propagation.steps(),
-                        propagation.redone(),
-                        propagation.applications(),
-                        propagation.mostLevels()));
+        return new WindowMotion(times.clone(), states, List.of(), List.of(), work(propagation), allowedBytes);
     }
 
     /** Number of times. */
@@ -139,9 +212,47 @@ public final class WindowMotion {
         return times[j];
     }
 
-    /** The state at the j-th time. */
+    /** The state at the j-th time; in a frame the fluctuation, see {@link #seen}. */
     public WindowState state(int j) {
         return states.get(j);
+    }
+
+    /** Whether states are fluctuations about a displacement. */
+    public boolean framed() {
+        return !displacements.isEmpty();
+    }
+
+    /** An operator as the j-th state has it: {@link #state} is what its mean is taken with. */
+    public LadderPolynomial seen(int j, LadderPolynomial operator) {
+        return framed() ? fluctuation(j, operator.shifted(displacementRe(j), displacementIm(j))) : operator;
+    }
+
+    /** An operator of the fluctuation about the displacement as the j-th state has it. */
+    public LadderPolynomial fluctuation(int j, LadderPolynomial operator) {
+        return framed() ? squeezes.get(j).seen(operator) : operator;
+    }
+
+    /**
+     * σ of D(α) σ D(α)† at the j-th time, the frame's squeezing taken out again; the state itself without a frame. Its error counts what that
+     * takes.
+     */
+    public WindowState displaced(int j) {
+        if (!framed() || squeezes.get(j).isNone()) {
+            return state(j);
+        }
+        synchronized (plain) {
+            return plain.computeIfAbsent(j, i -> squeezes.get(i).takenOut(state(i), allowedBytes));
+        }
+    }
+
+    /** Real part of α: the j-th state is D(α) σ D(α)† with σ given by {@link #displaced}; 0 without a frame. */
+    public DoubleDouble displacementRe(int j) {
+        return framed() ? displacements.get(j)[0] : DoubleDouble.ZERO;
+    }
+
+    /** Imaginary part of α; see {@link #displacementRe}. */
+    public DoubleDouble displacementIm(int j) {
+        return framed() ? displacements.get(j)[1] : DoubleDouble.ZERO;
     }
 
     /** What it took. */

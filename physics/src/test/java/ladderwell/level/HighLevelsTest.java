@@ -25,7 +25,8 @@ class HighLevelsTest {
         assertNotNull(table, "level " + n + " from a table");
         for (LevelSearch.Found found : new LevelSearch.Found[] {alone, table.level(n)}) {
             assertEquals(expected, found.e(), error(found), "level " + n);
-            assertTrue(error(found) <= 1e-13 * Math.abs(expected), "level " + n + " has the wide error " + error(found));
+            assertTrue(
+                    error(found) <= 1e-13 * Math.abs(expected), "level " + n + " has the wide error " + error(found));
         }
         assertEquals(n, levels.below(expected * (1 - 1e-10), n));
         assertEquals(n + 1, levels.below(expected * (1 + 1e-10), n));
@@ -60,7 +61,8 @@ class HighLevelsTest {
 
     @Test
     void theQuarticGoesOverIntoItsSemiclassicalSeries() {
-        // E = c (n + ½)^(4/3) (1 + 1/(9π (n + ½)²) + …), c from level 1000 of our own recomputation with 64-bit mantissas.
+        // E = c (n + ½)^(4/3) (1 + 1/(9π (n + ½)²) + …), c from level 1000 of our own recomputation with 64-bit
+        // mantissas.
         double scale = 13774.252002055304 / (Math.pow(1000.5, 4.0 / 3) * (1 + 1 / (9 * Math.PI * 1000.5 * 1000.5)));
         for (long n : new long[] {20_000, 1_000_000}) {
             HighLevels levels = new HighLevels(new CurveSurvey(Curves.even(x -> x * x * x * x)));

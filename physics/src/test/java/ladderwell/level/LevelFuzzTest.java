@@ -165,12 +165,67 @@ class LevelFuzzTest {
                     x -> Math.min(left.applyAsDouble(x), right.applyAsDouble(x)),
                     declared ? new double[] {low} : new double[0]));
             for (int n = 0; n < 6; n++) {
-                // The barrier is above 20 and 10 wide: tunnelling is below any rounding, that of these numbers is 1e-13.
+                // The barrier is above 20 and 10 wide: tunnelling is below any rounding, that of these numbers is
+                // 1e-13.
                 assertEquals(
                         expected[n],
                         levels.energyHigh(n),
                         levels.energyError(n) + 1e-13,
                         "seed " + SEED + ", trial " + trial + ", level " + n + (declared ? "" : ", kink undeclared"));
+            }
+        }
+    }
+
+    private static void assertClosed(double expected, Levels levels, long n, String name) {
+        double error = levels.energyError(n);
+        // The closed form itself is rounded.
+        assertEquals(expected, levels.energyHigh(n), error + 4e-16 * Math.abs(expected), name + ", level " + n);
+        assertTrue(error <= 1e-9 * Math.abs(expected) + 1e-12, name + ", level " + n + " has the wide error " + error);
+    }
+
+    /** Morse 1929; Pöschl and Teller 1933; Kratzer, Z. Phys. 3 (1920) 289; the oscillator with a centrifugal term; all textbook forms. */
+    @Test
+    void singularEndsAndTailsHaveTheLevelsOfClosedForms() {
+        Random random = new Random(SEED + 3);
+        double open = Double.POSITIVE_INFINITY;
+        for (int trial = 0; trial < 12 * TIMES; trial++) {
+            String name = "seed " + SEED + ", trial " + trial;
+            double charge = Math.pow(10, -1 + 2 * random.nextDouble());
+            int l = random.nextInt(4);
+            Levels coulomb =
+                    Levels.of(Curves.between(0, open, x -> -charge / x + (l == 0 ? 0 : l * (l + 1) / (2 * x * x))));
+            for (int n : new int[] {0, 1, 5, 20}) {
+                double whole = n + l + 1;
+                assertClosed(
+                        -charge * charge / (2 * whole * whole), coulomb, n, name + ", Coulomb " + charge + ", l " + l);
+            }
+
+            double g = 1.2 + random.nextDouble() * 6;
+            Levels ring = Levels.of(Curves.between(0, open, x -> g * (g - 1) / (2 * x * x) + x * x / 2));
+            for (int n : new int[] {0, 1, 7, 40}) {
+                assertClosed(2 * n + g + 0.5, ring, n, name + ", centrifugal " + g);
+            }
+
+            double depth = Math.pow(10, -1 + 4 * random.nextDouble());
+            double a = Math.pow(10, -1 + 1.5 * random.nextDouble());
+            double top = Math.sqrt(2 * depth) / a - 0.5;
+            if (top > 0.05 && Math.abs(top - Math.rint(top)) > 0.02) {
+                Levels morse = Levels.of(Curves.morse(depth, a));
+                assertEquals((long) Math.floor(top) + 1, morse.count(), name + ", Morse " + depth + ", " + a);
+                for (long n = 0; n <= top; n += 1 + n / 3) {
+                    assertClosed(Curves.morseLevel(depth, a, (int) n), morse, n, name + ", Morse " + depth + ", " + a);
+                }
+            }
+
+            double lambda = 0.3 + random.nextDouble() * 8;
+            double shift = random.nextGaussian();
+            Levels hole = Levels.of(
+                    Curves.open(x -> -lambda * (lambda + 1) / 2 * Curves.sech(x - shift) * Curves.sech(x - shift)));
+            if (Math.abs(lambda - Math.rint(lambda)) > 0.02) {
+                assertEquals((long) Math.ceil(lambda), hole.count(), name + ", sech² " + lambda);
+                for (int n = 0; n < lambda; n++) {
+                    assertClosed(-(lambda - n) * (lambda - n) / 2, hole, n, name + ", sech² " + lambda);
+                }
             }
         }
     }

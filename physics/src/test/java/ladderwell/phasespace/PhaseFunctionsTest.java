@@ -4,12 +4,17 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.List;
 import java.util.Random;
 import java.util.function.DoubleBinaryOperator;
 import ladderwell.evidence.Bound;
+import ladderwell.operator.LadderPolynomial;
+import ladderwell.operator.OperatorFormula;
 import ladderwell.state.Amplitudes;
 import ladderwell.state.HarmonicStates;
 import ladderwell.state.Mixture;
+import ladderwell.window.MixedWindow;
+import ladderwell.window.WindowMotion;
 import org.junit.jupiter.api.Test;
 
 class PhaseFunctionsTest {
@@ -174,6 +179,109 @@ class PhaseFunctionsTest {
                 functions.wigner(displaced, new PhaseGrid(1, 2, 5, 6, 31, 36)),
                 (x, p) -> Math.exp(-((x - x0) * (x - x0) + (p - p0) * (p - p0)) / 2) / (Math.PI * 2),
                 1e-10);
+    }
+
+    @Test
+    void aDampedCatHasThePublishedParityAtTheOrigin() {
+        // S-DC-01a: even cat, alpha = 2, zero temperature, kappa t = 0.1; Walls and Milburn, Phys. Rev. A 31 (1985)
+        // 2403
+        Mixture start = Mixture.pure(HarmonicStates.cat(4, 0, 2, 0, 1e-13));
+        MixedWindow end = (MixedWindow) WindowMotion.mixed(
+                        OperatorFormula.of(LadderPolynomial.number().times(0.5)),
+                        List.of(LadderPolynomial.a()),
+                        start.density(1e9),
+                        new double[] {0, 0.1},
+                        1e-10,
+                        1e9)
+                .state(1);
+        NumberMatrix state =
+                new NumberMatrix(end.first(), end.levels(), end.lowerRe(), end.lowerIm(), end.traceNormError());
+        PhaseField field = functions.wigner(state, PhaseGrid.square(1, 3));
+        assertEquals(
+                0.46761992573919,
+                Math.PI * field.value(1, 1),
+                Math.PI * field.bound().size());
+        assertTrue(field.bound().size() < 1e-9, "bound " + field.bound());
+    }
+
+    @Test
+    void aMixedStateIsFramedWhereItLies() {
+        NumberMatrix displaced =
+                NumberMatrix.of(Mixture.displacedThermal(0.5, 16, 1, 1e-12).density(1e9));
+        Support box = displaced.visible(1e-6);
+        // Gaussian of variance 1 about √32 (cos 1, sin 1): a share of 1e-6 lies beyond 4.9 spreads
+        assertEquals(Math.sqrt(32) * Math.cos(1), (box.left() + box.right()) / 2, 0.2);
+        assertEquals(Math.sqrt(32) * Math.sin(1), (box.low() + box.high()) / 2, 0.2);
+        assertEquals(4.9, (box.right() - box.left()) / 2, 0.5);
+        assertEquals(4.9, (box.high() - box.low()) / 2, 0.5);
+    }
+
+    /** ⟨n|D(−α)|ψ⟩ by the rows of D, on so many levels that nothing is lost; W = (1/π) Σ (−1)^n |⟨n|D(−α)|ψ⟩|². */
+    private static double displacedParity(double[] re, double[] im, double x, double p) {
+        int levels = 220;
+        double bRe = -x / Math.sqrt(2);
+        double bIm = -p / Math.sqrt(2);
+        double[][][] d = new double[levels][re.length][2];
+        d[0][0][0] = Math.exp(-(bRe * bRe + bIm * bIm) / 2);
+        for (int n = 1; n < re.length; n++) {
+            // D_0n = (−β*)^n e^{−|β|²/2}/√n!
+            double[] before = d[0][n - 1];
+            d[0][n][0] = (-bRe * before[0] - bIm * before[1]) / Math.sqrt(n);
+            d[0][n][1] = (-bRe * before[1] + bIm * before[0]) / Math.sqrt(n);
+        }
+        double sum = 0;
+        for (int m = 0; m < levels; m++) {
+            double a = 0;
+            double b = 0;
+            for (int n = 0; n < re.length; n++) {
+                double[] here = d[m][n];
+                a += here[0] * re[n] - here[1] * im[n];
+                b += here[0] * im[n] + here[1] * re[n];
+                if (m + 1 < levels) {
+                    double left = n > 0 ? Math.sqrt(n) : 0;
+                    double[] beside = n > 0 ? d[m][n - 1] : here;
+                    d[m + 1][n][0] = (bRe * here[0] - bIm * here[1] + left * beside[0]) / Math.sqrt(m + 1);
+                    d[m + 1][n][1] = (bRe * here[1] + bIm * here[0] + left * beside[1]) / Math.sqrt(m + 1);
+                }
+            }
+            sum += (m % 2 == 0 ? 1 : -1) * (a * a + b * b);
+        }
+        return sum / Math.PI;
+    }
+
+    @Test
+    void randomStatesAreTheParitiesOfTheirDisplacements() {
+        Random random = new Random(21);
+        for (int trial = 0; trial < 8; trial++) {
+            int size = 1 + random.nextInt(40);
+            double[] re = new double[size];
+            double[] im = new double[size];
+            double norm = 0;
+            for (int n = 0; n < size; n++) {
+                re[n] = random.nextGaussian();
+                im[n] = random.nextGaussian();
+                norm = Math.hypot(norm, Math.hypot(re[n], im[n]));
+            }
+            for (int n = 0; n < size; n++) {
+                re[n] /= norm;
+                im[n] /= norm;
+            }
+            // the rows of D lose some units of rounding a level
+            double rounding = 1e-13;
+            PhaseField field =
+                    functions.wigner(new NumberWave(0, re, im, Bound.exact()), new PhaseGrid(0.4, -0.3, 6, 5, 13, 12));
+            for (int i = 0; i < 13; i++) {
+                for (int j = 0; j < 12; j++) {
+                    double x = field.grid().position(i);
+                    double p = field.grid().momentum(j);
+                    assertEquals(
+                            displacedParity(re, im, x, p),
+                            field.value(i, j),
+                            field.bound().size() + rounding,
+                            "trial " + trial + " at " + x + ", " + p);
+                }
+            }
+        }
     }
 
     @Test

@@ -244,8 +244,24 @@ class WindowMotionTest {
                 MEMORY);
         WindowState end = motion.state(1);
         assertTrue(end.first() > 120 && end.first() + end.levels() < 420, end.first() + "+" + end.levels());
+        // the state stays coherent: its Frobenius distance, below the trace norm, must lie below the bound
+        Amplitudes exact = Amplitudes.coherent(400 * Math.exp(-0.4), 0, 1e-12);
+        double squares = 0;
+        for (int m = 0; m < end.levels(); m++) {
+            for (int n = 0; n < end.levels(); n++) {
+                double re = amplitude(exact, end.first() + m) * amplitude(exact, end.first() + n);
+                squares += Math.pow(end.re(m, n) - re, 2) + Math.pow(end.im(m, n), 2);
+            }
+        }
+        double bound = end.traceNormError().size();
+        assertTrue(Math.sqrt(squares) <= bound, Math.sqrt(squares) + " against " + bound);
         double mean = 400 * Math.exp(-0.4);
         assertEquals(mean, end.diagonalMean(n -> n), mean * end.traceNormError().size());
+    }
+
+    private static double amplitude(Amplitudes state, long n) {
+        long i = n - state.first(0);
+        return i >= 0 && i < state.length(0) ? state.re(0, (int) i) : 0;
     }
 
     @Test

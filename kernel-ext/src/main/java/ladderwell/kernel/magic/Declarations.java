@@ -34,6 +34,7 @@ public final class Declarations implements Sentences {
             "oscillator", new OscillatorMagic(),
             "state", new StateMagic(),
             "evolve", new EvolveMagic(),
+            "plan", new PlanMagic(),
             "table", new TableMagic(),
             "animate", new AnimateMagic(),
             "phasespace", new PhaseSpaceMagic(),

@@ -3,6 +3,7 @@ package ladderwell.kernel.magic;
 import java.util.Optional;
 import ladderwell.Evolution;
 import ladderwell.Run;
+import ladderwell.State;
 import ladderwell.kernel.sentence.MisreadSentence;
 import ladderwell.kernel.sentence.Sentence;
 import ladderwell.quantity.Quantity;
@@ -17,8 +18,14 @@ final class EvolveMagic implements Magic {
 
     @Override
     public Outcome carryOut(Sentence sentence, Things things) throws MisreadSentence {
+        Run run = evolution(sentence, things.state(sentence.reference("state"))).run();
+        return new Outcome(new Declared(sentence.name(), "evolve", run), run);
+    }
+
+    /** What a sentence asks of a state. */
+    static Evolution evolution(Sentence sentence, State state) throws MisreadSentence {
         Quantity duration = sentence.quantity("for");
-        Evolution evolution = things.state(sentence.reference("state")).evolve(duration.value(), duration.unit());
+        Evolution evolution = state.evolve(duration.value(), duration.unit());
         if (sentence.has("frames")) {
             evolution = evolution.frames(sentence.count("frames"));
         }
@@ -31,7 +38,6 @@ final class EvolveMagic implements Magic {
                             + " is too long to count in the oscillator's own time; expected a shorter one",
                     sentence.placeOf("for"));
         }
-        Run run = evolution.run();
-        return new Outcome(new Declared(sentence.name(), "evolve", run), run);
+        return evolution;
     }
 }

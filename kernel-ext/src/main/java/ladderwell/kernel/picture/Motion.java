@@ -4,6 +4,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
 import ladderwell.Density;
+import ladderwell.LadderMode;
+import ladderwell.Observable;
 import ladderwell.Oscillator;
 import ladderwell.Run;
 import ladderwell.classical.ClassicalOrbit;
@@ -42,15 +44,15 @@ final class Motion {
     private final double top;
     private final ClassicalOrbit orbit;
 
-    private Motion(String name, Run run, Density density) {
+    private Motion(String name, Run run, Density density, int mostFrames) {
         this.name = name;
         this.run = run;
         this.density = density;
-        this.stride = (density.times() - 2) / (MOST_FRAMES - 1) + 1;
+        this.stride = (density.times() - 2) / (mostFrames - 1) + 1;
         this.pointStride = (density.points() - 2) / (MOST_POINTS - 1) + 1;
         Oscillator oscillator = run.state().oscillator();
         Scale scale = oscillator.scale();
-        this.meanEnergy = run.state().meanEnergy();
+        this.meanEnergy = drawnEnergy(run);
         this.floor = floor(oscillator, density);
         this.top = floor + height(oscillator, meanEnergy - floor, density);
         double last = Math.abs(density.position(density.points() - 1));
@@ -66,7 +68,12 @@ final class Motion {
 
     /** The motion of a run. @param density its frames, at the run's own times */
     static Motion of(String name, Run run, Density density) {
-        return new Motion(name, run, density);
+        return new Motion(name, run, density, MOST_FRAMES);
+    }
+
+    /** The same with no more frames than this. */
+    static Motion of(String name, Run run, Density density, int mostFrames) {
+        return new Motion(name, run, density, mostFrames);
     }
 
     private static OptionalDouble period(Run run) {
@@ -75,6 +82,16 @@ final class Motion {
         } catch (IllegalArgumentException e) {
             return OptionalDouble.empty(); // no classical particle is bound at this energy
         }
+    }
+
+    /** The mean energy; of a mode, whose Hamiltonian stands in a frame, that of the swing in the parabola that is drawn. */
+    private static double drawnEnergy(Run run) {
+        if (!(run.state().oscillator() instanceof LadderMode)) {
+            return run.state().meanEnergy();
+        }
+        double x = run.series(Observable.POSITION).value(0);
+        double p = run.series(Observable.MOMENTUM).value(0);
+        return (x * x + p * p + 1) / 2;
     }
 
     /** The least of the potential in the picture: the energy scale begins there. */

@@ -22,7 +22,7 @@ public final class MotionPicture {
 
     private final Motion motion;
 
-    private MotionPicture(Motion motion) {
+    MotionPicture(Motion motion) {
         this.motion = motion;
     }
 
@@ -55,7 +55,7 @@ public final class MotionPicture {
                 Markup.text(run.errorLine() + thinned));
     }
 
-    private static String thinned(int stride, String what) {
+    static String thinned(int stride, String what) {
         return stride == 1 ? "" : " · every " + ordinal(stride) + " " + what + " is shown";
     }
 

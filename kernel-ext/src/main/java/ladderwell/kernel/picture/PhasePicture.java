@@ -147,8 +147,8 @@ public final class PhasePicture {
                         .build()
                         .asJavascript(0)),
                 isWigner() ? "signed" : "field"));
-        traces.add(contour("above", "solid", 1));
-        traces.add(contour("below", "dash", -1));
+        traces.add(contour("above", "solid", 1, peak));
+        traces.add(contour("below", "dash", -1, peak));
         double[][] orbit = scale.orbit();
         traces.add(Drawing.with(Drawing.trace(Drawing.line("classical", 1.3)), orbit[0], orbit[1]));
         traces.add(Drawing.with(
@@ -212,13 +212,14 @@ public final class PhasePicture {
         return trace;
     }
 
-    private JsonObject contour(String name, String dash, int sign) {
+    /** Contours on one side of zero at a tenth, four and seven tenths of the peak. */
+    static JsonObject contour(String name, String dash, int sign, double peak) {
         JsonObject line = new JsonObject();
         line.addProperty("width", 0.8);
         line.addProperty("dash", dash);
         JsonObject contours = new JsonObject();
         double near = sign * FIRST_CONTOUR * peak;
-        double far = sign * (FIRST_CONTOUR + 3 * CONTOUR_STEP) * peak;
+        double far = sign * (FIRST_CONTOUR + 2 * CONTOUR_STEP) * peak;
         contours.addProperty("start", Math.min(near, far));
         contours.addProperty("end", Math.max(near, far));
         contours.addProperty("size", CONTOUR_STEP * peak);

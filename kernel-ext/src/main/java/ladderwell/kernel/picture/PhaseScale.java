@@ -35,9 +35,9 @@ final class PhaseScale {
         double farX = Math.max(Math.abs(grid.position(0)), Math.abs(grid.position(grid.nx() - 1)));
         double farP = Math.max(Math.abs(grid.momentum(0)), Math.abs(grid.momentum(grid.np() - 1)));
         length = scale.display(Kind.LENGTH, farX * scale.length());
-        momentum = scale.display(Kind.MOMENTUM, farP * scale.momentum());
+        momentum = scale.display(Kind.MOMENTUM, farP * scale.of(Kind.MOMENTUM));
         lengthScale = length.fromSi(scale.length());
-        momentumScale = momentum.fromSi(scale.momentum());
+        momentumScale = momentum.fromSi(scale.of(Kind.MOMENTUM));
         orbit = run.classical();
         resting = orbit.turningPoint() - orbit.leftTurningPoint() < REST && Math.abs(orbit.momentum(0)) < REST;
     }

@@ -55,7 +55,7 @@ final class CardRendering {
         String size = "≤ " + (error.isKnown() ? Digits.pretty(Digits.upward(error.size(), 2)) : "unknown");
         lines.add(new Line(
                 "error of the state",
-                "‖ψ − ψ̃‖",
+                run.errorSymbol(),
                 Markup.text(size) + SupportedDigits.letter(error),
                 size + " " + error.kind().letter()));
         MimeBundle card =

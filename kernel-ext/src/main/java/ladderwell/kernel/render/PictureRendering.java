@@ -6,11 +6,13 @@ import ladderwell.Run;
 import ladderwell.kernel.cell.MimeBundle;
 import ladderwell.kernel.magic.Animation;
 import ladderwell.kernel.magic.LevelTable;
+import ladderwell.kernel.magic.PhaseAnimation;
 import ladderwell.kernel.magic.PhasePortrait;
 import ladderwell.kernel.picture.Easel;
 import ladderwell.kernel.picture.FigurePicture;
 import ladderwell.kernel.picture.LevelPicture;
 import ladderwell.kernel.picture.MotionPicture;
+import ladderwell.kernel.picture.PhaseMotionPicture;
 import ladderwell.kernel.picture.PhasePicture;
 import ladderwell.quantity.Digits;
 import tech.tablesaw.plotly.components.Figure;
@@ -46,6 +48,19 @@ final class PictureRendering {
         return new MimeBundle(
                 bundle.data(),
                 Map.of("ladderwell", CardRendering.record(portrait.space().run())));
+    }
+
+    static MimeBundle film(PhaseAnimation film, Easel easel) {
+        Run run = film.run();
+        PhaseMotionPicture picture = PhaseMotionPicture.of(film.name(), run, film.density(), film.film());
+        String text = "phasespace " + film.name() + ": " + run.verdict() + "\n" + picture.description() + "\n"
+                + film.film().frames() + " frames, ħW off by at most "
+                + Digits.pretty(Digits.upward(film.film().bound().size(), 2)) + " ("
+                + film.film().bound().kind().word() + ")\n" + run.errorLine();
+        MimeBundle bundle = MimeBundle.plain(text)
+                .with(MimeBundle.HTML, picture.html(easel))
+                .with(SVG, picture.still());
+        return new MimeBundle(bundle.data(), Map.of("ladderwell", CardRendering.record(run)));
     }
 
     static MimeBundle levels(LevelTable levels, Easel easel) {

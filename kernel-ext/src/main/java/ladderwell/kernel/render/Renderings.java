@@ -9,6 +9,7 @@ import ladderwell.kernel.cell.Renderer;
 import ladderwell.kernel.magic.Animation;
 import ladderwell.kernel.magic.Declared;
 import ladderwell.kernel.magic.LevelTable;
+import ladderwell.kernel.magic.PhaseAnimation;
 import ladderwell.kernel.magic.PhasePortrait;
 import ladderwell.kernel.magic.TableRead;
 import ladderwell.kernel.picture.Easel;
@@ -60,6 +61,9 @@ public final class Renderings implements Renderer {
         }
         if (value instanceof PhasePortrait portrait) {
             return PictureRendering.portrait(portrait, easel);
+        }
+        if (value instanceof PhaseAnimation film) {
+            return PictureRendering.film(film, easel);
         }
         if (value instanceof PhaseSpace space) {
             return PictureRendering.portrait(new PhasePortrait("run", space, false), easel);

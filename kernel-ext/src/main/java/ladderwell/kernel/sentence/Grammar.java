@@ -65,8 +65,25 @@ public record Grammar(List<Noun> nouns) {
                                                 Form.NUMBER,
                                                 "1e-9",
                                                 "largest error of the state, between 1e-13 and 0.1")
-                                        .formula("‖ψ − ψ̃‖ at every time")
-                                        .standard("1e-9")),
+                                        .formula("‖ψ − ψ̃‖ of a vector, ‖ρ − ρ̃‖₁ of a density operator, at every time")
+                                        .standard("1e-9; 1e-6 for a mode that jumps")),
+                Noun.of(
+                                "plan",
+                                "plan STATE for DURATION, KEY VALUE, …",
+                                "plan psi for 3 periods",
+                                "says how an evolution would be computed, how large and how long, before it runs")
+                        .about("state")
+                        .lead(Key.quantity("for", "how long, as in evolve", PERIODS, TIME)
+                                .called("duration"))
+                        .keys(
+                                Key.count("frames", 1, Long.MAX_VALUE, "120", "number of equal time steps to look at")
+                                        .standard("120"),
+                                Key.of(
+                                                "tolerance",
+                                                Form.NUMBER,
+                                                "1e-9",
+                                                "largest error of the state, between 1e-13 and 0.1")
+                                        .standard("as in evolve")),
                 Noun.of(
                                 "table",
                                 "table RUN: OBSERVABLE, OBSERVABLE, …, every N, as NAME",

@@ -108,7 +108,7 @@ function motion(root, p) {
   var ring = decode(m.ring), ringHeight = decode(m.ringHeight), mean = decode(m.mean);
   var time = even(m.time[0], m.time[1], last + 1), clock = even(0, m.clock.end, last + 1);
   var box = stage(root), now = element(box, 'div', 'lw-now'), strip = element(box, 'div', 'lw-strip');
-  var cursor = element(strip, 'div', 'lw-cursor');
+  var cursor = p.strip && element(strip, 'div', 'lw-cursor'), field = p.wigner && wigner(p, last);
   var bar = element(box.parentNode, 'div', 'lw-controls'), button = element(bar, 'button', 'lw-play');
   box.parentNode.insertBefore(bar, box.nextSibling);
   bar.setAttribute('data-lm-suppress-shortcuts', 'true');
@@ -121,28 +121,22 @@ function motion(root, p) {
   slider.value = 0;
   slider.setAttribute('aria-label', 'time');
 
-  var ink = inks(root), top = p.now, below = p.strip, k = 0, playing = false, drawing = false;
+  var ink = inks(root), top = p.now, below = p.strip || p.phase, k = 0, playing = false, drawing = false;
   top.traces[0].x = x;
   top.traces[0].y = frames[0];
   top.traces[1].x = m.potential.x;
   top.traces[1].y = m.potential.v;
   var rail = m.rail;
-  below.traces[0].x = x;
-  below.traces[0].y = time;
-  below.traces[0].z = frames;
-  below.traces[0].zmin = 0;
-  below.traces[0].zmax = m.frames.high;
-  below.traces[0].zsmooth = 'best';
-  below.traces[0].showscale = false;
-  if (below.traces[1]) {
+  if (!field) Object.assign(below.traces[0], {x: x, y: time, z: frames, zmin: 0, zmax: m.frames.high, zsmooth: 'best', showscale: false});
+  if (below.traces[1] && !field) {
     below.traces[1].x = decode(m.orbit);
     below.traces[1].y = even(m.time[0], m.time[1], below.traces[1].x.length);
   }
   top.traces.forEach(function (t) { t.hoverinfo = 'skip'; });
   top.traces[0].hoverinfo = undefined;
   top.traces[0].hovertemplate = m.words.hover;
-  below.traces[0].hovertemplate = m.words.stripHover;
-  if (below.traces[1]) below.traces[1].hoverinfo = 'skip';
+  below.traces[0].hovertemplate = field ? p.wigner.words.hover : m.words.stripHover;
+  below.traces.slice(1).forEach(function (t) { t.hoverinfo = 'skip'; });
 
   function moving(i) {
     return [{y: frames[i]}, {x: [mean[i], mean[i]]}, {x: [ring[i]], y: [ringHeight[i]]}];
@@ -159,11 +153,12 @@ function motion(root, p) {
       word(m.words.potential, ink.grey, {xref: 'paper', x: 1, xanchor: 'left', yref: 'paper', y: 1, yanchor: 'top', xshift: 5, align: 'left'}),
       word('\u27e8x\u27e9', ink.teal, {xref: 'paper', x: 0, xanchor: 'right', xshift: -6, yref: 'y', y: -rail * 0.66})
     ];
-    below.layout.annotations = [word(below.traces[1] ? '\u25cb\u2009\u2014<br>classical' : '\u25cb<br>classical', ink.red,
+    below.layout.annotations = field ? field.words(ink) : [word(below.traces[1] ? '\u25cb\u2009\u2014<br>classical' : '\u25cb<br>classical', ink.red,
       {xref: 'paper', x: 1, xanchor: 'left', xshift: 12, yref: 'paper', y: 1, yanchor: 'top', align: 'left'})];
     top.layout.width = below.layout.width = width(root);
   }
   function place() {
+    if (field) return;
     var size = strip._fullLayout._size;
     cursor.style.top = (size.t + size.h * k / last) + 'px';
     cursor.style.left = size.l + 'px';
@@ -180,6 +175,7 @@ function motion(root, p) {
     said.textContent = text(i);
     slider.setAttribute('aria-valuetext', said.textContent);
     place();
+    if (field) field.show(strip, below, i, ring[i]);
     var all = moving(i);
     return Plotly.animate(now, {data: all, traces: [0, 4, 5]},
       {mode: 'immediate', transition: {duration: 0}, frame: {duration: 0, redraw: false}}).catch(function () {});
@@ -221,12 +217,13 @@ function motion(root, p) {
   });
   bar.addEventListener('keyup', function (e) { if (e.key === ' ') e.preventDefault(); });
   /* Clicks and drags on the strip belong to us, not to the plot's own zoom. */
+  if (field) strip.classList.remove('lw-strip');
   function at(e) {
     var size = strip._fullLayout._size, y = e.clientY - strip.getBoundingClientRect().top - size.t;
     go(Math.round(last * y / size.h));
   }
   strip.addEventListener('pointerdown', function (e) {
-    if (e.button !== 0) return;
+    if (e.button !== 0 || field) return;
     drawing = e.pointerType !== 'touch';
     if (drawing) strip.setPointerCapture(e.pointerId);
     at(e);
@@ -250,6 +247,7 @@ function motion(root, p) {
         dress();
         var all = moving(k);
         [0, 4, 5].forEach(function (t, j) { Object.assign(top.traces[t], all[j]); });
+        if (field) field.put(below, k, ring[k]);
         Plotly.react(now, top.traces, top.layout, quiet);
         Plotly.react(strip, below.traces, below.layout, quiet).then(place);
       }
@@ -257,9 +255,36 @@ function motion(root, p) {
     });
 }
 
+/* The Wigner function below the density: its frames, the ring on the orbit, and its words. */
+function wigner(p) {
+  var g = p.wigner, n = g.x[2] * g.y[2], momentum = decode(g.momentum), raw = w.atob(g.frames), kept = {};
+  Object.assign(p.phase.traces[0], {x: even(g.x[0], g.x[1], g.x[2]), y: even(g.y[0], g.y[1], g.y[2]), zmin: -g.peak, zmax: g.peak, zsmooth: 'best', showscale: false});
+  Object.assign(p.phase.traces[1], {x: p.phase.traces[0].x, y: p.phase.traces[0].y});
+  p.phase.traces[0].z = p.phase.traces[1].z = frame(0);
+  function frame(i) { return kept[i] || (kept[i] = signed(raw.slice(i * n, i * n + n), g.peak, g.x[2])); }
+  return {
+    put: function (below, i, x) {
+      below.traces[0].z = below.traces[1].z = frame(i);
+      Object.assign(below.traces[3], {x: [x], y: [momentum[i]]});
+    },
+    show: function (node, below, i, x) {
+      if (!node.data) return;
+      this.put(below, i, x);
+      Plotly.react(node, below.traces, below.layout, quiet);
+    },
+    words: function (ink) {
+      var place = {xref: 'paper', x: 1, xanchor: 'left', xshift: 8, yref: 'paper', y: 1, yanchor: 'top', align: 'left'};
+      var all = [word(g.words.above, ink.teal, place)];
+      if (g.words.below) all.push(word(g.words.below, ink.red, Object.assign({yshift: -36}, place)));
+      all.push(word('\u25cb\u2009\u2014<br>classical', ink.red, Object.assign({yshift: -96}, place)));
+      return all;
+    }
+  };
+}
+
 /* ---- a Wigner or Husimi function at one instant, with its marginals ---- */
-function signed(text, peak, across) {
-  var raw = w.atob(text), out = [];
+function signed(raw, peak, across) {
+  var out = [];
   for (var at = 0; at < raw.length; at += across) {
     var row = new Float32Array(across);
     for (var i = 0; i < across; i++) row[i] = peak * (raw.charCodeAt(at + i) - 128) / 127;
@@ -269,7 +294,7 @@ function signed(text, peak, across) {
 }
 function phase(root, p) {
   var m = p.data, box = element(stageOf(root), 'div', 'lw-phase');
-  var x = even(m.x[0], m.x[1], m.x[2]), y = even(m.y[0], m.y[1], m.y[2]), field = signed(m.field, m.peak, m.x[2]);
+  var x = even(m.x[0], m.x[1], m.x[2]), y = even(m.y[0], m.y[1], m.y[2]), field = signed(w.atob(m.field), m.peak, m.x[2]);
   p.traces.slice(0, 3).forEach(function (t) { t.x = x; t.y = y; t.z = field; t.hoverinfo = 'skip'; });
   var map = p.traces[0];
   map.hoverinfo = undefined;

@@ -49,7 +49,16 @@ class CompletionTest {
     @Test
     void nounsFollowThePercentSign() {
         assertEquals(
-                List.of("oscillator", "state", "evolve", "table", "animate", "phasespace", "levels", "elements"),
+                List.of(
+                        "oscillator",
+                        "state",
+                        "evolve",
+                        "plan",
+                        "table",
+                        "animate",
+                        "phasespace",
+                        "levels",
+                        "elements"),
                 offered("%|"));
         assertEquals(List.of("oscillator"), offered("%os|"));
         assertEquals("%oscillator", completed("%OSC|"));
@@ -157,6 +166,6 @@ class CompletionTest {
     void aSentenceThatGoesOnInTheNextLineIsStillTheSame() {
         assertEquals(List.of("frequency"), offered("%%declare\noscillator x: harmonic,\n  mass 4 u,\n  fr|"));
         assertEquals(List.of("mass", "width", "natural"), offered("%%declare\noscillator x: box,\n  |"));
-        assertEquals(8, offered("%%declare\noscillator x: box,\n|").size());
+        assertEquals(9, offered("%%declare\noscillator x: box,\n|").size());
     }
 }

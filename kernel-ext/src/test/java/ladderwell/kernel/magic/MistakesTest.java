@@ -37,8 +37,8 @@ class MistakesTest {
             quoteCharacter = '`',
             value = {
                 // nouns and names
-                "%«oscilator» x: box, natural | 'oscilator' is no noun; sentences start with oscillator, state, evolve, table, animate, levels or elements; did you mean 'oscillator'?",
-                "%«xyz» x: box, natural | 'xyz' is no noun; sentences start with oscillator, state, evolve, table, animate, levels or elements",
+                "%«oscilator» x: box, natural | 'oscilator' is no noun; sentences start with oscillator, state, evolve, plan, table, animate, phasespace, levels or elements; did you mean 'oscillator'?",
+                "%«xyz» x: box, natural | 'xyz' is no noun; sentences start with oscillator, state, evolve, plan, table, animate, phasespace, levels or elements",
                 "%oscillator«» | a name is missing after 'oscillator', as in 'oscillator trap: harmonic, mass 40 u, frequency 1.2 MHz'",
                 "%oscillator«» : box, natural | a name is missing after 'oscillator', as in 'oscillator trap: harmonic, mass 40 u, frequency 1.2 MHz'",
                 "%oscillator my «trap»: box, natural | a name is one word; 'trap' is too much before the colon",

@@ -1,13 +1,17 @@
 package ladderwell.kernel.render;
 
+import static ladderwell.quantity.Units.PERIOD;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
+import ladderwell.Run;
 import ladderwell.kernel.magic.Animation;
 import ladderwell.kernel.magic.Declared;
+import ladderwell.kernel.magic.PhaseAnimation;
+import ladderwell.kernel.magic.PhasePortrait;
 import ladderwell.kernel.picture.PageLibrary;
 import ladderwell.kernel.real.RealPrograms;
 import org.junit.jupiter.api.Test;
@@ -42,6 +46,14 @@ class BrowserPictureTest {
                 LinePlot.create("squares </script>", line, "it's <b>x</b>", "y"));
         Files.writeString(pages.resolve("light.html"), LOADER + PictureGallery.page(PictureGallery.LIGHT, values));
         Files.writeString(pages.resolve("dark.html"), PictureGallery.page(PictureGallery.DARK, values));
+        Run moving = Scenarios.natural();
+        Files.writeString(
+                pages.resolve("phase.html"),
+                PictureGallery.page(
+                        PictureGallery.LIGHT,
+                        List.of(
+                                new PhasePortrait(HOSTILE, moving.phaseSpace(0.3, PERIOD), false),
+                                new PhaseAnimation("run", moving, moving.density(), moving.phaseFilm(41)))));
         Animation animation = Scenarios.animation("run", Scenarios.ion());
         String library = PageLibrary.javascript();
         Renderings bare = new Renderings(PageLibrary.inPage());

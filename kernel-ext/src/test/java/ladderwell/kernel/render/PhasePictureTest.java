@@ -10,6 +10,7 @@ import java.util.regex.Pattern;
 import ladderwell.PhaseSpace;
 import ladderwell.Run;
 import ladderwell.kernel.cell.MimeBundle;
+import ladderwell.kernel.magic.PhaseAnimation;
 import ladderwell.kernel.magic.PhasePortrait;
 import ladderwell.kernel.picture.PageLibrary;
 import ladderwell.phasespace.PhaseField;
@@ -101,5 +102,23 @@ class PhasePictureTest {
         Document page = WellFormed.html(html(bundle));
         assertEquals(1, page.getElementsByTagName("img").getLength());
         assertEquals(1, page.getElementsByTagName("script").getLength());
+    }
+
+    @Test
+    void theFilmMovesBelowTheDensityOnTheSameScale() throws Exception {
+        Run run = Scenarios.natural();
+        MimeBundle bundle = new Renderings(PageLibrary.inPage())
+                .render(new PhaseAnimation("run", run, run.density(), run.phaseFilm(41)));
+        String text = bundle.plainText();
+        assertTrue(text.startsWith("phasespace run: " + run.verdict()), text);
+        assertTrue(text.contains("below it the Wigner function moving"), text);
+        Document still = WellFormed.xml(bundle.data().get("image/svg+xml"));
+        assertEquals(5, still.getElementsByTagName("image").getLength(), "five moments");
+        assertEquals(7 + 5, still.getElementsByTagName("circle").getLength(), "the ring in each");
+        Document page = WellFormed.html(html(bundle));
+        assertEquals(1, page.getElementsByTagName("script").getLength());
+        assertTrue(
+                html(bundle).length() < 600_000,
+                "the film weighs " + html(bundle).length());
     }
 }
