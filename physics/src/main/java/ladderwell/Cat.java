@@ -107,8 +107,8 @@ public record Cat(
 
     private Cat parity(int remaining) {
         if (components != 2) {
-            throw new IllegalArgumentException("parity, even or odd, is that of a cat of 2 components; with " + components
-                    + " give the residue of its levels, 0 to " + (components - 1));
+            throw new IllegalArgumentException("parity, even or odd, is that of a cat of 2 components; with "
+                    + components + " give the residue of its levels, 0 to " + (components - 1));
         }
         return as(OptionalInt.of(remaining), 0, Fact.exact("parity", "⟨(−1)ⁿ⟩", 1 - 2 * remaining, ONE));
     }

@@ -62,8 +62,7 @@ public record Coherent(Ladder oscillator, double mean, double phaseAngle, List<F
     /** The same state with α turned to this phase: it starts later on the same orbit, clockwise in phase space. */
     public Coherent phase(double value, Unit unit) {
         Quantity phase = Checks.kind("phase", Quantity.of(value, unit), Kind.ANGLE);
-        return new Coherent(
-                oscillator, mean, phase.si(), Fact.with(given, Fact.exact("phase", "φ", phase)));
+        return new Coherent(oscillator, mean, phase.si(), Fact.with(given, Fact.exact("phase", "φ", phase)));
     }
 
     /** ⟨x⟩ at time 0, scaled. */

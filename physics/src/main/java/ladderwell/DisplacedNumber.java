@@ -123,11 +123,21 @@ public record DisplacedNumber(Ladder oscillator, long level, double mean, double
         }
         Bound rounding = Bound.guaranteed(8 * Math.ulp(Math.sqrt(level + 0.5)));
         facts.add(shown.scaled(
-                "swing", "√2|α|·ℓ", Kind.LENGTH, Math.sqrt(2 * mean), Bound.guaranteed(8 * Math.ulp(Math.sqrt(2 * mean))), uncertainty));
+                "swing",
+                "√2|α|·ℓ",
+                Kind.LENGTH,
+                Math.sqrt(2 * mean),
+                Bound.guaranteed(8 * Math.ulp(Math.sqrt(2 * mean))),
+                uncertainty));
         facts.add(shown.scaled(
                 "spread of position", "Δx = √(n + ½)·ℓ", Kind.LENGTH, Math.sqrt(level + 0.5), rounding, uncertainty));
         facts.add(shown.scaled(
-                "spread of momentum", "Δp = √(n + ½)·ħ/ℓ", Kind.MOMENTUM, Math.sqrt(level + 0.5), rounding, uncertainty));
+                "spread of momentum",
+                "Δp = √(n + ½)·ħ/ℓ",
+                Kind.MOMENTUM,
+                Math.sqrt(level + 0.5),
+                rounding,
+                uncertainty));
         double[] energy = energy();
         facts.add(shown.ladderEnergy(
                 oscillator instanceof Harmonic ? "(|α|² + n + ½)ħω" : "⟨H⟩", energy[0], energy[1], oscillator));

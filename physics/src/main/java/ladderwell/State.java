@@ -6,7 +6,8 @@ import ladderwell.quantity.Unit;
 import ladderwell.state.Amplitudes;
 
 /** What the motion starts in: a pure state of one oscillator. */
-public sealed interface State permits NumberState, Coherent, Squeezed, Cat, DisplacedNumber, Superposition, Packet, LevelOf {
+public sealed interface State
+        permits NumberState, Coherent, Squeezed, Cat, DisplacedNumber, Superposition, Packet, LevelOf {
 
     /** The oscillator it is prepared in. */
     Oscillator oscillator();

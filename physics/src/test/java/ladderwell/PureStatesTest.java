@@ -44,9 +44,7 @@ class PureStatesTest {
                     .angle(360 * random.nextDouble(), DEGREE)
                     .mean(mean)
                     .phase(turn, DEGREE));
-            all.add(oscillator
-                    .displacedNumber(random.nextInt(8), mean)
-                    .phase(turn, DEGREE));
+            all.add(oscillator.displacedNumber(random.nextInt(8), mean).phase(turn, DEGREE));
             int components = 2 + random.nextInt(4);
             Cat cat = oscillator.cat(0.1 + mean).components(components).phase(turn, DEGREE);
             all.add(cat.residue(random.nextInt(components)));
@@ -110,11 +108,11 @@ class PureStatesTest {
                 assertTrue(
                         Math.abs(series.value(0) - fact.value().value())
                                 <= series.error(0) + fact.bound().size(),
-                        state + " " + o.name() + ": " + fact + " against " + series.value(0) + " ± "
-                                + series.error(0));
+                        state + " " + o.name() + ": " + fact + " against " + series.value(0) + " ± " + series.error(0));
             }
             Series energy = run.series(Observable.ENERGY);
-            assertEquals(energy.value(0), state.meanEnergy(), energy.error(0) + 1e-13 * state.meanEnergy(), state::toString);
+            assertEquals(
+                    energy.value(0), state.meanEnergy(), energy.error(0) + 1e-13 * state.meanEnergy(), state::toString);
         }
     }
 
@@ -184,7 +182,8 @@ class PureStatesTest {
         assertEquals(1, value(unit.squeezed(6, DECIBEL), "parity"), 1e-15);
         // |α⟩ + e^{iχ}|−α⟩ at χ = 90 deg: the parity is that of |α⟩ alone, e^{−2μ}
         assertEquals(Math.exp(-4), value(unit.cat(2).relativePhase(90, DEGREE), "parity"), 1e-15);
-        // squeezing leaves the Wigner function at the origin of a state displaced along its wide axis e^{−2|α|² e^{−2r}}
+        // squeezing leaves the Wigner function at the origin of a state displaced along its wide axis e^{−2|α|²
+        // e^{−2r}}
         Squeezed moved = unit.squeezed(1, ONE).mean(3).phase(90, DEGREE);
         assertEquals(Math.exp(-6 * Math.exp(-2)), value(moved, "parity"), 1e-15);
     }
@@ -212,7 +211,9 @@ class PureStatesTest {
                 .evolve(1, PERIOD)
                 .frames(1)
                 .run();
-        assertTrue(run.record().toString().contains("squeezing"), () -> run.record().toString());
+        assertTrue(
+                run.record().toString().contains("squeezing"),
+                () -> run.record().toString());
     }
 
     @Test

@@ -51,8 +51,9 @@ public final class CatMoments {
         }
         norm = sum;
         if (!(norm > 1e-280)) {
-            throw new IllegalArgumentException("at a mean of " + mean
-                    + " quanta per component almost nothing is left of this cat; give it more quanta or another parity");
+            throw new IllegalArgumentException(
+                    "at a mean of " + mean
+                            + " quanta per component almost nothing is left of this cat; give it more quanta or another parity");
         }
     }
 

@@ -82,9 +82,8 @@ final class StateMagic implements Magic {
     }
 
     private static Squeezed squeezed(Sentence sentence, Ladder oscillator) throws MisreadSentence {
-        Quantity squeezing = sentence.has("r")
-                ? Quantity.of(sentence.number("r"), Units.ONE)
-                : sentence.quantity("squeezing");
+        Quantity squeezing =
+                sentence.has("r") ? Quantity.of(sentence.number("r"), Units.ONE) : sentence.quantity("squeezing");
         if (squeezing.kind() == Kind.NUMBER && !sentence.has("r")) {
             throw new MisreadSentence(
                     "squeezing is given in dB, such as 6 dB; the squeezing parameter is given as r",

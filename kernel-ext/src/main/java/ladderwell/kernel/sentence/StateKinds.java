@@ -61,7 +61,9 @@ final class StateKinds {
                             .standard("0, the squeezed vacuum"),
                     Key.quantity("phase", "phase of the displacement α; 0 displaces to the +x side", ANGLE)
                             .standard("0 deg"))
-            .ways(Way.of("squeezing").with("angle", "mean", "phase"), Way.of("r").with("angle", "mean", "phase"));
+            .ways(
+                    Way.of("squeezing").with("angle", "mean", "phase"),
+                    Way.of("r").with("angle", "mean", "phase"));
 
     private static final NounKind CAT = NounKind.of(
                     "cat",
@@ -165,7 +167,7 @@ final class StateKinds {
     private StateKinds() {}
 
     static NounKind[] all() {
-        return new NounKind[] {
-            COHERENT, NUMBER, SQUEEZED, CAT, DISPLACED_NUMBER, SUPERPOSITION, GAUSSIAN, GROUND, LEVEL};
+        return new NounKind[] {COHERENT, NUMBER, SQUEEZED, CAT, DISPLACED_NUMBER, SUPERPOSITION, GAUSSIAN, GROUND, LEVEL
+        };
     }
 }

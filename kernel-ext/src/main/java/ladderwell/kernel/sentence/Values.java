@@ -217,8 +217,8 @@ final class Values {
         if (term.isUnknown()) {
             return key.choices().get(0);
         }
-        String typed =
-                Words.plain(term.result().map(String::valueOf).orElse(term.text())).strip();
+        String typed = Words.plain(term.result().map(String::valueOf).orElse(term.text()))
+                .strip();
         if (!key.choices().contains(typed)) {
             throw new MisreadSentence(
                     key.word() + " takes " + key.expected() + ", not " + Words.quoted(term.text())
