@@ -6,6 +6,7 @@ import java.util.Optional;
 import ladderwell.classical.ClassicalOrbit;
 import ladderwell.evidence.PhysicsException;
 import ladderwell.quantity.Digits;
+import ladderwell.state.Amplitudes;
 import ladderwell.window.Forecast;
 import tech.tablesaw.api.StringColumn;
 import tech.tablesaw.api.Table;
@@ -24,6 +25,8 @@ public record Plan(String method, String reason, String size, double bytes, doub
     private static final double SECONDS_PER_PHASE = 2e-8;
 
     private static final int LOOKS = 400;
+    /** Norm error of a look at which levels a state fills. */
+    private static final double ROUGH = 1e-3;
     /** Levels of a fluctuation in a frame, mostly fewer. */
     private static final int FRAME_LEVELS = 40;
     /** A number window reaches so many spreads of a coherent state beyond the mean quanta on each side. */
@@ -115,10 +118,10 @@ public record Plan(String method, String reason, String size, double bytes, doub
         if (state instanceof Coherent coherent) {
             x = coherent.position();
             p = coherent.momentum();
-        } else if (state instanceof NumberState number) {
-            more = number.n();
-        } else if (state instanceof Superposition sum) {
-            more = sum.levels().stream().mapToLong(Long::longValue).max().orElse(0);
+        } else {
+            Amplitudes rough = state.amplitudes(ROUGH);
+            int last = rough.segments() - 1;
+            more = rough.first(last) + rough.length(last) - 1.0;
         }
         ClassicalOrbit orbit = mode.orbit(x, p, 0);
         double least = Double.POSITIVE_INFINITY;
